@@ -1,0 +1,28 @@
+const path = require('node:path');
+
+/** Packages that exist only as ES modules and so must be transformed for jest's CommonJS runtime. */
+const esmOnly = ['/node_modules/(?!(p-queue|p-timeout|eventemitter3)/)'];
+
+const node = (name, testMatch, more = {}) => ({
+  displayName: name,
+  rootDir: __dirname,
+  testEnvironment: 'node',
+  testMatch,
+  transform: { '^.+\\.[cm]?[tj]s$': ['ts-jest', { tsconfig: path.join(__dirname, 'tsconfig.jest.json'), diagnostics: false }] },
+  transformIgnorePatterns: esmOnly,
+  modulePathIgnorePatterns: ['<rootDir>/dist/', '<rootDir>/.data', '<rootDir>/.cache/'],
+  cacheDirectory: path.join(__dirname, '.cache/jest'),
+  ...more,
+});
+
+module.exports = {
+  projects: [
+    node('shared', ['<rootDir>/shared/**/*.spec.ts']),
+    node('server', ['<rootDir>/server/**/*.spec.ts']),
+    node('architecture', ['<rootDir>/test/architecture/**/*.spec.ts']),
+    node('reference', ['<rootDir>/test/reference/**/*.spec.ts']),
+    node('api', ['<rootDir>/test/api/**/*.spec.ts']),
+    node('e2e', ['<rootDir>/test/e2e/**/*.spec.ts']),
+    require('./jest.client.cjs'),
+  ],
+};

@@ -1,0 +1,138 @@
+import './zod-jitless';
+import * as z from 'zod';
+
+/**
+ * The design document: what a draft holds and a revision freezes.
+ * Angles in degrees, lengths in millimetres, frequencies in GHz: here alone. Unknown fields are refused.
+ */
+
+/** More cells than this are refused before any memory is taken. */
+export const MAX_CELL_COUNT = 1_000_000;
+
+const LARGEST_LENGTH_MM = 100_000;
+const lengthMm = z.number().gt(0).max(LARGEST_LENGTH_MM);
+const coordinateMm = z.number().min(-LARGEST_LENGTH_MM).max(LARGEST_LENGTH_MM);
+const pointMm = z.tuple([coordinateMm, coordinateMm]);
+const positionMm = z.tuple([coordinateMm, coordinateMm, coordinateMm]);
+const frequencyGHz = z.number().min(1).max(1000);
+const thetaDeg = z.number().min(0).max(89.9);
+const phiDeg = z.number().min(-360).max(360);
+const exponent = z.number().min(0).max(200);
+
+export const linearPolarisation = z.enum(['x', 'y']);
+export const polarisation = z.enum(['x', 'y', 'rhcp', 'lhcp']);
+
+export const beam = z.strictObject({
+  thetaDeg,
+  phiDeg,
+  levelDb: z.number().min(-60).max(60).optional(),
+  phaseDeg: z.number().min(-360).max(360).optional(),
+});
+
+export const mask = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('published'), id: z.string().min(1).max(64) }),
+  z.strictObject({
+    kind: z.literal('custom'),
+    /** Pairs of angle off the wanted beam (degrees, rising) and highest allowed level (dBi), joined by straight lines. */
+    points: z.array(z.tuple([z.number().min(0).max(180), z.number().min(-200).max(200)])).min(2).max(500),
+  }),
+]);
+
+export const requirement = z.strictObject({
+  designFrequencyGHz: frequencyGHz,
+  bandGHz: z.tuple([frequencyGHz, frequencyGHz]).optional(),
+  beams: z.array(beam).min(1).max(32),
+  polarisation,
+  minGainDbi: z.number().min(-100).max(120).optional(),
+  minCrossPolarDiscriminationDb: z.number().min(0).max(100).optional(),
+  pointingToleranceDeg: z.number().gt(0).max(90).optional(),
+  maxSidelobeDb: z.number().min(-100).max(0).optional(),
+  mask: mask.optional(),
+});
+
+const rectangle = z.strictObject({ kind: z.literal('rectangle'), widthMm: lengthMm, heightMm: lengthMm });
+const ellipse = z.strictObject({ kind: z.literal('ellipse'), widthMm: lengthMm, heightMm: lengthMm });
+const polygon = z.strictObject({ kind: z.literal('polygon'), pointsMm: z.array(pointMm).min(3).max(1000) });
+
+export const outline = z.discriminatedUnion('kind', [rectangle, ellipse, polygon]);
+
+export const keepOut = z.discriminatedUnion('kind', [
+  rectangle.extend({ centreMm: pointMm }),
+  ellipse.extend({ centreMm: pointMm }),
+  polygon.extend({ centreMm: pointMm }),
+]);
+
+export const lattice = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('rectangular'), periodXMm: lengthMm, periodYMm: lengthMm }),
+  z.strictObject({ kind: z.literal('triangular'), periodXMm: lengthMm, rowSpacingMm: lengthMm }),
+]);
+
+export const panel = z.strictObject({
+  operation: z.enum(['reflect', 'transmit']),
+  outline,
+  lattice,
+  keepOuts: z.array(keepOut).max(200),
+});
+
+export const illumination = z.discriminatedUnion('kind', [
+  z.strictObject({
+    kind: z.literal('horn'),
+    positionMm,
+    aimMm: positionMm,
+    exponentE: exponent,
+    exponentH: exponent,
+    polarisation,
+  }),
+  z.strictObject({ kind: z.literal('plane-wave'), thetaDeg, phiDeg, polarisation }),
+]);
+
+export const synthesis = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('direct') }),
+  z.strictObject({ kind: z.literal('focus'), pointMm: positionMm }),
+]);
+
+export const cells = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('ideal'), levels: z.number().int().min(2).max(4096).nullable() }),
+  z.strictObject({
+    kind: z.literal('edition'),
+    editionId: z.uuid(),
+    rule: z.enum(['nearest-phase', 'least-error']),
+    excludedCells: z.array(z.string().min(1).max(200)).max(10_000),
+  }),
+  z.strictObject({
+    kind: z.literal('inline'),
+    cells: z
+      .array(z.strictObject({ phaseDeg: z.number().min(-36_000).max(36_000), magnitude: z.number().min(0).max(1) }))
+      .min(1)
+      .max(10_000),
+  }),
+]);
+
+export const prediction = z.strictObject({
+  receiveExponent: z.number().min(0).max(10),
+  radiateExponent: z.number().min(0).max(10),
+});
+
+export const designDocument = z.strictObject({
+  schemaVersion: z.literal(1),
+  requirement,
+  panel,
+  illumination,
+  synthesis,
+  cells,
+  referencePhaseDeg: z.union([z.number().min(-360).max(360), z.literal('search')]),
+  prediction,
+});
+
+export type DesignDocument = z.infer<typeof designDocument>;
+export type Beam = z.infer<typeof beam>;
+export type Mask = z.infer<typeof mask>;
+export type Requirement = z.infer<typeof requirement>;
+export type Outline = z.infer<typeof outline>;
+export type KeepOut = z.infer<typeof keepOut>;
+export type Lattice = z.infer<typeof lattice>;
+export type Panel = z.infer<typeof panel>;
+export type Illumination = z.infer<typeof illumination>;
+export type Synthesis = z.infer<typeof synthesis>;
+export type Cells = z.infer<typeof cells>;
+export type Polarisation = z.infer<typeof polarisation>;
