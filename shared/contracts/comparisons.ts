@@ -1,0 +1,101 @@
+import '../model/zod-jitless';
+import * as z from 'zod';
+import { figure, noFigure, verdictWord } from '../model/figures';
+import { cutRequest } from './predictions';
+import { revisionHeader } from './projects';
+import { id, sha256 } from './common';
+
+/** What two states of panels have different: parameters, cells, cuts, map, figures. */
+
+const numbers = z.array(z.number());
+const value = z.union([z.number(), z.string(), z.boolean(), z.null()]);
+
+export const side = z.strictObject({
+  reference: z.string(),
+  panelId: id,
+  panelName: z.string(),
+  projectName: z.string(),
+  hash: sha256,
+  /** Absent for a draft. */
+  revision: revisionHeader.optional(),
+  editionName: z.string().nullable(),
+  requirement: z.strictObject({ met: z.number().int(), short: z.number().int(), open: z.number().int() }),
+});
+
+export const parameterDifference = z.strictObject({
+  pointer: z.string(),
+  label: z.string(),
+  unit: z.string(),
+  before: value,
+  after: value,
+});
+
+export const cellDifference = z.strictObject({
+  kind: z.literal('compared'),
+  total: z.number().int(),
+  changed: z.number().int(),
+  /** By the first parameter of the family, when both stand on one family; otherwise absent. */
+  parameter: z
+    .strictObject({ label: z.string(), larger: z.number().int(), smaller: z.number().int(), meanChangeMm: z.number() })
+    .optional(),
+  errorOver15Before: z.number().int(),
+  errorOver15After: z.number().int(),
+  rmsErrorBeforeDeg: z.number(),
+  rmsErrorAfterDeg: z.number(),
+  /** Arrays per cell of the common lattice, in its order. */
+  arrays: z.strictObject({
+    xMm: numbers,
+    yMm: numbers,
+    changed: numbers,
+    parameterChangeMm: numbers,
+    phaseChangeDeg: numbers,
+    errorChangeDeg: numbers,
+  }),
+});
+
+export const cutDifference = z.strictObject({
+  request: cutRequest,
+  angleDeg: numbers,
+  beforeDbi: numbers,
+  afterDbi: numbers,
+  /** After minus before once `before` is shifted by shiftU so that the beams coincide; null where either is below the floor. */
+  differenceDb: z.array(z.number().nullable()),
+  shiftU: z.number(),
+  floorDbi: z.number(),
+});
+
+export const figureDifference = z.strictObject({
+  id: z.string(),
+  label: z.string(),
+  unit: z.string(),
+  before: figure,
+  after: figure,
+  change: figure,
+  /** Text of the limit, e.g. ">= 34.0", or null. */
+  limit: z.string().nullable(),
+  verdictBefore: verdictWord.nullable(),
+  verdictAfter: verdictWord.nullable(),
+});
+
+export const comparison = z.strictObject({
+  before: side,
+  after: side,
+  parameterCount: z.number().int(),
+  parameters: z.array(parameterDifference),
+  cells: z.union([cellDifference, noFigure]),
+  cuts: z.array(cutDifference),
+  /** After minus before in dB, row by row from v = -1; 0 outside the visible circle and below the floor. */
+  uv: z.strictObject({ size: z.number().int(), differenceDb: numbers }),
+  figures: z.array(figureDifference),
+  /** Id of the figure that decides between the two, if one verdict changed. */
+  deciding: z.string().nullable(),
+});
+
+export const comparisonQuery = z.strictObject({ before: z.string().max(80), after: z.string().max(80) });
+
+export type Side = z.infer<typeof side>;
+export type ParameterDifference = z.infer<typeof parameterDifference>;
+export type CellDifference = z.infer<typeof cellDifference>;
+export type CutDifference = z.infer<typeof cutDifference>;
+export type FigureDifference = z.infer<typeof figureDifference>;
+export type Comparison = z.infer<typeof comparison>;
