@@ -1,13 +1,13 @@
 import '../model/zod-jitless';
 import * as z from 'zod';
-import { cellEntry, familyDescription, qualityReport, qualityVerdict } from '../model/cell-family';
+import { cellEntry, familyDescription, portMeaning, provenanceKind, qualityReport, qualityVerdict } from '../model/cell-family';
 import { id, isoTime, page, personName, sha256 } from './common';
 
 /**
  * GET  /api/library/families                 familyList      ?text=&frequencyGHz=&periodMm=&thetaDeg=  (each optional)
  * GET  /api/library/families/:id             familyDetail
- * POST /api/library/inspections              multipart: `files` (one or many, a zip among them) and optional field `mapping`
- *                                            (JSON, importMapping) -> inspection. Nothing is stored.                    lab
+ * POST /api/library/inspections              multipart: `files` (one or many, a zip among them) and optional field `inspection`
+ *                                            (JSON, inspectionRequest) -> inspection. Nothing is stored.                lab
  * POST /api/library/families                 multipart: `files`, field `import` (JSON, importRequest)
  *                                            -> 201 editionDetail (edition 1, state `accepted`); Idempotency-Key       lab
  * POST /api/library/families/:id/editions    the same for the next edition of a family                                lab
@@ -22,66 +22,111 @@ import { id, isoTime, page, personName, sha256 } from './common';
 
 const text = z.string();
 
-/** How the columns and gaps of the files are to be read; every field optional, detection fills the rest. */
+const parameterUnit = z.enum(['m', 'mm', 'um', 'in', 'mil']);
+const angleUnit = z.enum(['deg', 'rad']);
+const term = z.enum(['S11', 'S21', 'S12', 'S22']);
+
+/** What one column of a CSV table of responses holds. */
+export const tableColumnRole = z.union([
+  z.strictObject({ role: z.literal('cell') }),
+  z.strictObject({ role: z.literal('parameter'), name: text.min(1).max(40), unit: parameterUnit }),
+  z.strictObject({ role: z.literal('frequency'), unit: z.enum(['Hz', 'kHz', 'MHz', 'GHz']) }),
+  z.strictObject({ role: z.literal('theta'), unit: angleUnit }),
+  z.strictObject({ role: z.literal('phi'), unit: angleUnit }),
+  z.strictObject({ role: z.literal('response'), term, part: z.enum(['dB', 'magnitude', 'real', 'imaginary']) }),
+  z.strictObject({ role: z.literal('response'), term, part: z.literal('phase'), unit: angleUnit }),
+]);
+
+const fileName = text.min(1).max(400);
+const named = <T extends z.ZodRawShape>(shape: T) => z.array(z.strictObject({ file: fileName, ...shape })).max(10_000);
+
+/** A person's decisions about an import; every part is optional, detection fills the rest. */
 export const importMapping = z.strictObject({
-  /** Cell parameters by file name when they cannot be read from the files. */
-  parametersMm: z.record(text, z.array(z.number())).optional(),
-  thetaDeg: z.record(text, z.number()).optional(),
-  phiDeg: z.record(text, z.number()).optional(),
-  parameterNames: z.array(text.max(40)).max(4).optional(),
-  ports: z.enum(['either', 'x', 'y', 'x-and-y', 'te-and-tm']).optional(),
+  ignoredFiles: z.array(fileName).max(10_000).optional(),
+  /** Option lines for files that have none, such as `# GHz S RI R 50`. */
+  optionLines: named({ optionLine: text.max(200) }).optional(),
+  /** Cut-off files of which only the first complete records are kept: a recorded choice. */
+  keepFirstRecords: named({ records: z.number().int().min(1) }).optional(),
+  corrections: named({
+    cellId: text.min(1).max(200).optional(),
+    parametersMm: z.array(z.strictObject({ name: text.min(1).max(40), value: z.number() })).max(4).optional(),
+    thetaDeg: z.number().min(0).max(90).optional(),
+    phiDeg: z.number().min(-360).max(360).optional(),
+  }).optional(),
+  tables: named({
+    mapping: z.strictObject({
+      columns: z.array(z.strictObject({ column: z.number().int().min(0), holds: tableColumnRole })).max(200),
+      headerRow: z.number().int().min(0),
+      blanks: z.enum(['refuse', 'missing']),
+    }),
+  }).optional(),
+  parameterNames: z.array(text.min(1).max(40)).max(4).optional(),
   timeConvention: z.enum(['exp(+jwt)', 'exp(-jwt)']).optional(),
-  /** Keep the complete records of files that are cut off: an explicit, recorded choice. */
-  keepCompleteRecords: z.boolean().optional(),
-  /** Files of the upload to leave out, by name. */
-  leaveOut: z.array(text).max(10_000).optional(),
-  /** Columns of a CSV table by meaning. */
-  columns: z.record(text, text).optional(),
 });
 
 export const fileMessage = z.strictObject({
-  severity: z.enum(['note', 'warn', 'fault']),
-  file: text,
-  line: z.number().int().optional(),
+  severity: z.enum(['error', 'warning', 'notice']),
+  file: text.optional(),
+  line: z.number().int(),
   column: z.number().int().optional(),
   text,
   suggestion: text.optional(),
 });
 
+const detectedNumber = z.strictObject({ value: z.number(), from: z.enum(['mapping', 'comment', 'index', 'file-name', 'table']) });
+
 export const inspectedFile = z.strictObject({
   name: text,
-  bytes: z.number().int(),
-  sha256,
-  kind: z.enum(['touchstone', 'table', 'index', 'description', 'ignored', 'refused']),
-  cellId: text.optional(),
-  parametersMm: z.array(z.number()).optional(),
-  thetaDeg: z.number().optional(),
-  phiDeg: z.number().optional(),
+  kind: z.enum(['touchstone', 'table', 'index', 'family', 'other']),
+  status: z.enum(['read', 'refused', 'ignored']),
+  byteCount: z.number().int(),
+  sha256: sha256.optional(),
+  version: text.optional(),
   portCount: z.number().int().optional(),
   pointCount: z.number().int().optional(),
   fromGHz: z.number().optional(),
   toGHz: z.number().optional(),
+  referenceOhm: z.array(z.number()).optional(),
+  cellId: text.optional(),
+  parameters: z.array(detectedNumber.extend({ name: text })),
+  thetaDeg: detectedNumber.optional(),
+  phiDeg: detectedNumber.optional(),
+  polarisation: text.optional(),
+  provenance: text.optional(),
+  timeConvention: z.enum(['exp(+jwt)', 'exp(-jwt)']).optional(),
+  /** A decision a refused file waits for; the answer goes into the mapping. */
+  question: z
+    .union([
+      z.strictObject({ kind: z.literal('keep-complete-records'), completeRecords: z.number().int() }),
+      z.strictObject({ kind: z.literal('option-line') }),
+    ])
+    .optional(),
+  messages: z.array(fileMessage),
 });
 
 export const inspection = z.strictObject({
   files: z.array(inspectedFile),
-  cells: z.array(cellEntry),
   detected: z.strictObject({
-    portCount: z.number().int().nullable(),
+    portCount: z.number().int(),
     parameterNames: z.array(text),
-    cellCount: z.number().int(),
     thetasDeg: z.array(z.number()),
     phisDeg: z.array(z.number()),
-    fromGHz: z.number().nullable(),
-    toGHz: z.number().nullable(),
-    pointCount: z.number().int(),
+    frequencyRangeGHz: z.strictObject({ from: z.number(), to: z.number() }).nullable(),
+    frequencyCount: z.number().int(),
+    cellCount: z.number().int(),
+    portsHint: portMeaning.nullable(),
+    provenanceHint: provenanceKind.nullable(),
+    timeConventionHint: z.enum(['exp(+jwt)', 'exp(-jwt)']).nullable(),
+    /** What the files say of the family, to fill the form. Fields they do not say are absent. */
+    descriptionHint: familyDescription.partial(),
   }),
-  /** What the files say of the family, to fill the form. Fields they do not say are absent. */
-  description: familyDescription.partial(),
+  /** Messages about the set as a whole; those about one file stand on that file. */
   messages: z.array(fileMessage),
-  /** Present once the files make a full table; judged with the description found or given. */
+  /** Present once the description is complete and the files make a table. */
   quality: qualityReport.nullable(),
-  /** The responses for preview, thinned: unwrapped phase and magnitude of each cell against frequency. */
+  /** What keeps the table from being made, when a description was given. */
+  refusals: z.array(fileMessage),
+  /** The first response of each cell (smallest angles): unwrapped phase and magnitude against frequency. */
   preview: z
     .strictObject({
       frequenciesGHz: z.array(z.number()),
@@ -91,6 +136,9 @@ export const inspection = z.strictObject({
   /** True when nothing but the acceptance is missing. */
   acceptable: z.boolean(),
 });
+
+/** Field `inspection` of the multipart form of an inspection. */
+export const inspectionRequest = z.strictObject({ mapping: importMapping.optional(), description: familyDescription.optional() });
 
 export const importRequest = z.strictObject({
   description: familyDescription,
