@@ -1,15 +1,4 @@
-import type { Logger } from 'pino';
-import type { Config } from './config';
-import type { TransactionRunner } from './database/transaction-runner';
-
-/** What the services of every feature stand on. */
-export interface Ground {
-  readonly config: Config;
-  readonly logger: Logger;
-  readonly transactions: TransactionRunner;
-  /** Time comes from here, so that tests can move it. */
-  readonly now: () => Date;
-}
+import type { Ground } from './database/ground';
 
 /** The services of all features, made once per process. A feature reaches another one only through these. */
 export interface House extends Ground {

@@ -17,7 +17,7 @@ export function readCursor(after: string | undefined): Cursor | null {
   try {
     const [sort, id] = cursorShape.parse(JSON.parse(Buffer.from(after, 'base64url').toString('utf8')));
     return { sort, id };
-  } catch (error) {
+  } catch {
     throw new InvalidInput([{ pointer: 'after', detail: 'is not the "next" of a page of this list' }]);
   }
 }

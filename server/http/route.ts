@@ -9,19 +9,20 @@ import type { BytesReply, Reply } from './reply';
  * 1. Put the request and reply schemas into shared/contracts.
  * 2. In `<feature>/<feature>-routes.ts`:
  *
- *      export const projectRoutes = (house: House): readonly Route[] => [
+ *      export const projectRoutes = ({ projects }: { projects: ProjectService }): readonly Route[] => [
  *        defineRoute({
  *          method: 'patch', path: '/api/projects/:id', summary: 'Rename a project',
  *          policy: { kind: 'signed-in', roles: ['designer'], scope: 'design' },
  *          params: idParams, body: projectChange, reply: project, versioned: true,
  *          handler: async ({ caller, params, body, ifMatch }) => {
- *            const changed = await house.projects.change(caller, params.id, { ...body, ifMatch });
+ *            const changed = await projects.change(caller, params.id, { ...body, ifMatch });
  *            return new Reply(changed, { etag: versionTag(changed.version) });
  *          },
  *        }),
  *      ];
  *
- * 3. Add one line to server/features.ts, and one to server/house.ts for the service.
+ * 3. Add one line to server/features.ts, and to server/house.ts the service: its constructor takes what it needs of
+ *    `Ground` (server/database/ground.ts) and other services. Routes and services never import the house itself.
  *
  * What comes before the handler, in this order: rate limit, sign-in (401), role and scope (403), forgery check (403),
  * If-Match (428), type and size of the body (415, 413), schemas of params, query and body with every fault named (422).
