@@ -1,6 +1,6 @@
 import angular from 'angular-eslint';
 import tseslint from 'typescript-eslint';
-import { wallElements, wallRules } from './scripts/walls.mjs';
+import { wallConfig } from './scripts/walls.mjs';
 
 const sizeBudget = {
   'max-lines': ['error', { max: 400, skipBlankLines: false, skipComments: false }],
@@ -18,7 +18,8 @@ const named = {
       selector: "ImportDeclaration[source.value='zod'] > ImportSpecifier",
       message: "Write `import * as z from 'zod'`: the named import puts the whole package into the client.",
     },
-    { selector: "ExportNamedDeclaration[source.value='zod']", message: 'Do not re-export zod: it defeats tree shaking.' },
+    { selector: "ExportSpecifier[exported.name='z']", message: 'Do not re-export zod: it defeats tree shaking.' },
+    { selector: ":matches(ExportNamedDeclaration, ExportAllDeclaration)[source.value='zod']", message: 'Do not re-export zod: it defeats tree shaking.' },
   ],
 };
 
@@ -37,6 +38,11 @@ export default tseslint.config(
       eqeqeq: 'error',
       'prefer-const': 'error',
     },
+  },
+  {
+    files: ['**/*.{mjs,cjs}'],
+    extends: [...tseslint.configs.recommended],
+    rules: { ...sizeBudget, '@typescript-eslint/no-require-imports': 'off', eqeqeq: 'error', 'prefer-const': 'error' },
   },
   {
     files: ['server/**/*.ts'],
@@ -61,12 +67,5 @@ export default tseslint.config(
     },
   },
   { files: ['src/**/*.html'], extends: [...angular.configs.templateRecommended, ...angular.configs.templateAccessibility] },
-  {
-    files: ['shared/**/*.ts', 'server/**/*.ts', 'src/**/*.ts'],
-
-    settings: {
-      'import/resolver': { node: { extensions: ['.ts', '.js', '.mjs'] } },
-    },
-    rules: wallRules,
-  },
+  wallConfig(import.meta.dirname),
 );
