@@ -58,6 +58,20 @@ export class TransactionRunner {
     }
   }
 
+  /**
+   * Reads without a transaction around them: each query sees what is committed at its moment. For single reads on the
+   * path of every request; whatever decides or writes uses `run`.
+   */
+  async read<T>(work: (transaction: Transaction) => Promise<T>): Promise<T> {
+    const transaction = Object.freeze({}) as Transaction;
+    running.set(transaction, { manager: this.dataSource.manager, afterCommit: [] });
+    try {
+      return await work(transaction);
+    } finally {
+      running.delete(transaction);
+    }
+  }
+
   private async attempt<T>(work: (transaction: Transaction) => Promise<T>, isolation: Isolation): Promise<T> {
     const transaction = Object.freeze({}) as Transaction;
     const waiting: (() => void)[] = [];

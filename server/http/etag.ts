@@ -20,6 +20,6 @@ export function requireIfMatch(header: string | undefined): string {
 }
 
 /** Call it in the transaction that writes, with the row locked. @throws StaleVersion */
-export function refuseStale(ifMatch: string, current: string): void {
-  if (ifMatch !== current) throw new StaleVersion(current);
+export function refuseStale(ifMatch: string, current: string, body?: unknown): void {
+  if (ifMatch !== current) throw new StaleVersion(current, body);
 }

@@ -75,7 +75,7 @@ function addHeaders(response: Response, problem: Problem): void {
   if (problem instanceof MethodNotAllowed) response.setHeader('Allow', problem.allowed.join(', '));
 }
 
-function problemBody(problem: Problem, instance: string, requestId: string): ProblemBody {
+function problemBody(problem: Problem, instance: string, requestId: string): ProblemBody & { current?: unknown } {
   const { status, title } = answers[problem.kind];
   return {
     type: `/problems/${problem.kind}`,
@@ -84,6 +84,7 @@ function problemBody(problem: Problem, instance: string, requestId: string): Pro
     detail: problem.message,
     instance,
     requestId,
+    ...(problem instanceof StaleVersion && problem.body !== undefined ? { current: problem.body } : {}),
     ...(problem instanceof InvalidInput ? { errors: problem.faults.map((fault) => ({ ...fault })) } : {}),
   };
 }

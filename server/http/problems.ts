@@ -82,8 +82,14 @@ export class Conflict extends Problem {
 /** If-Match named a version that is no longer the current one. */
 export class StaleVersion extends Problem {
   readonly kind = 'stale-version';
-  /** @param current strong entity tag of the stored version, with its quotes */
-  constructor(readonly current: string) {
+  /**
+   * @param current strong entity tag of the stored version, with its quotes
+   * @param body the stored version itself, where the caller may want to compare: `current` of the answer
+   */
+  constructor(
+    readonly current: string,
+    readonly body?: unknown,
+  ) {
     super('Someone changed it since you read it. Read it again, then decide.');
   }
 }

@@ -14,6 +14,7 @@ export interface RateLimit {
 export const rateLimits: Readonly<Record<RateClass, RateLimit>> = {
   general: { windowSeconds: 60, count: 3000 },
   'sign-in': { windowSeconds: 300, count: 40, failuresOnly: true },
+  letter: { windowSeconds: 300, count: 40 },
   upload: { windowSeconds: 60, count: 60 },
   compute: { windowSeconds: 60, count: 1200 },
   export: { windowSeconds: 60, count: 120 },
@@ -38,6 +39,7 @@ export function rateLimiters(keyOf: RateKey, limits: Readonly<Record<RateClass, 
     general: limiter(limits.general),
     // By address even for someone who holds a session: guesses are of other people's passwords.
     'sign-in': limiter(limits['sign-in'], byAddress),
+    letter: limiter(limits.letter, byAddress),
     upload: limiter(limits.upload),
     compute: limiter(limits.compute),
     export: limiter(limits.export),

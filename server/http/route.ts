@@ -40,7 +40,7 @@ export type Policy =
   | { readonly kind: 'signed-in'; readonly roles?: readonly Role[]; readonly scope: Scope; readonly sessionOnly?: true };
 
 export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
-export type RateClass = 'general' | 'sign-in' | 'upload' | 'compute' | 'export';
+export type RateClass = 'general' | 'sign-in' | 'letter' | 'upload' | 'compute' | 'export';
 
 /** Multipart form: the files come as bytes in memory, text fields as `body` through its schema. */
 export interface UploadRule {
