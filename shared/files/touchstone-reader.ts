@@ -8,7 +8,7 @@ import type { TouchstoneHeader } from './touchstone-header';
 import { readKeywordHeader } from './touchstone-keywords';
 import { splitTouchstoneLines } from './touchstone-lines';
 import { readNoise } from './touchstone-noise';
-import { noiseStart, portCountOfFirstRecord, splitRecords, tokenLines } from './touchstone-records';
+import { noiseStart, portCountOfFirstRecord, reportComma, splitRecords, tokenLines } from './touchstone-records';
 import type { TokenLine, TouchstoneRecord } from './touchstone-records';
 import { readValues, recordSize } from './touchstone-values';
 import type { ValueLayout } from './touchstone-values';
@@ -60,8 +60,10 @@ function readBody(reading: Reading): TouchstoneResult {
   const size = recordSize(portCount, layout.matrixFormat);
   // A kept beginning is judged by itself: what is wrong further down is no longer part of the file.
   const sizeFaults = choices.keepFirstRecords === undefined ? faults : new FileFaults();
-  const { records, firstBad } = splitRecords(lines.slice(0, noiseAt), size, sizeFaults);
+  const { records, firstBad, firstWrapped } = splitRecords(lines.slice(0, noiseAt), size, sizeFaults);
   if (exceedsLimits(records, reading)) return { kind: 'refused', messages: faults.messages() };
+  if (firstWrapped !== null && header.keywordVersion === null && portCount <= 2)
+    faults.warn(firstWrapped, `A record goes on over several lines; ${portCount} port(s) take one line per frequency`);
   const kept = keepFirst(records, firstBad, reading);
   const read = readValues(kept, layout, faults);
   const completeRecords = Math.min(firstBad, read.firstBad, records.length);
@@ -98,7 +100,7 @@ function decidePortCount(lines: readonly TokenLine[], { header, fileName, faults
   const named = portsInName(fileName);
   const shown = header.matrixFormat === 'full' ? portCountOfFirstRecord(lines) : (announced?.count ?? null);
   if (shown === null) {
-    faults.error(first.number, `The first record holds ${first.tokens.length} number(s) on its line; no port count has such a record`, 'One port takes 3 numbers, two ports 9, n ports 1 + 2 n^2');
+    if (!reportComma(first, faults)) faults.error(first.number, `The first record holds ${first.tokens.length} number(s) on its line; no port count has such a record`, 'One port takes 3 numbers, two ports 9, n ports 1 + 2 n^2');
     return null;
   }
   if (named !== null && named !== shown) faults.error(first.number, `The name says ${named} port(s); the first record shows ${shown}`, 'Rename the file or export it again');

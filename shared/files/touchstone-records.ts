@@ -40,9 +40,18 @@ function portsFor(numbers: number): number | null {
   return ports >= 1 && 1 + 2 * ports * ports === numbers ? ports : null;
 }
 
+export interface RecordSplit {
+  readonly records: readonly TouchstoneRecord[];
+  /** Index of the first record of another size, or infinity. */
+  readonly firstBad: number;
+  /** Line of the first record that goes on over further lines, or null. */
+  readonly firstWrapped: number | null;
+}
+
 /** Groups lines into records of `size` numbers, and reports each record that has more or fewer. */
-export function splitRecords(lines: readonly TokenLine[], size: number, faults: FileFaults): { records: TouchstoneRecord[]; firstBad: number } {
+export function splitRecords(lines: readonly TokenLine[], size: number, faults: FileFaults): RecordSplit {
   const records: TouchstoneRecord[] = [];
+  let firstWrapped: number | null = null;
   let firstBad = Number.POSITIVE_INFINITY;
   let at = 0;
   while (at < lines.length) {
@@ -51,6 +60,7 @@ export function splitRecords(lines: readonly TokenLine[], size: number, faults: 
     at += 1;
     while (at < lines.length && tokens.length < size && lines[at].tokens.length % 2 === 0) {
       for (const token of lines[at].tokens) tokens.push(token);
+      firstWrapped ??= start.number;
       at += 1;
     }
     if (tokens.length !== size) {
@@ -59,17 +69,20 @@ export function splitRecords(lines: readonly TokenLine[], size: number, faults: 
     }
     records.push({ line: start.number, tokens });
   }
-  return { records, firstBad };
+  return { records, firstBad, firstWrapped };
 }
 
 function reportSize(line: TokenLine, { got, size, isLast }: { got: number; size: number; isLast: boolean }, faults: FileFaults): void {
-  const comma = line.tokens.find((token) => token.includes(','));
-  if (comma !== undefined) {
-    reportToken(comma, line.number, faults);
-    return;
-  }
+  if (reportComma(line, faults)) return;
   const cut = isLast && got < size ? 'The last record is cut off: it' : 'The record';
   faults.error(line.number, `${cut} holds ${got} number(s) where ${size} belong`);
+}
+
+/** Reports the first token with a comma, the usual cause of a record of the wrong size. */
+export function reportComma(line: TokenLine, faults: FileFaults): boolean {
+  const comma = line.tokens.find((token) => token.includes(','));
+  if (comma !== undefined) reportToken(comma, line.number, faults);
+  return comma !== undefined;
 }
 
 /** Where the noise of a version 1 two-port begins: five numbers at a frequency below the one before. */
