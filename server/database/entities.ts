@@ -1,3 +1,26 @@
+import { AuditRow } from '../audit/audit-row-entity';
+import { PasswordReset } from '../accounts/password-reset-entity';
+import { Person } from '../accounts/person-entity';
+import { PersonalToken } from '../accounts/personal-token-entity';
+import { RefreshToken } from '../accounts/refresh-token-entity';
+import { Session } from '../accounts/session-entity';
+import { SignInAttempt } from '../accounts/sign-in-attempt-entity';
+import { OutboxLetter } from '../notices/letter-entity';
+import { Invitation } from '../teams/invitation-entity';
+import { Membership } from '../teams/membership-entity';
+import { Team } from '../teams/team-entity';
+
 /** Every entity, one line each. Entities must equal what the migrations make; a test compares them. */
 export const entities: readonly (new () => object)[] = [
+  Team,
+  Person,
+  Membership,
+  Invitation,
+  Session,
+  RefreshToken,
+  PersonalToken,
+  PasswordReset,
+  SignInAttempt,
+  OutboxLetter,
+  AuditRow,
 ];

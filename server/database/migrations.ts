@@ -1,8 +1,13 @@
 import type { MigrationInterface } from 'typeorm';
+import { PeopleAndTeams1764590400000 } from './migrations/1764590400000-people-and-teams';
+import { Audit1764590500000 } from './migrations/1764590500000-audit';
 
 /**
  * Every migration, one line each, oldest first. One file per feature and change: `migrations/<timestamp>-<what>.ts`
- * with a class `<What><timestamp>`. Never edit one that has been released; add another.
+ * with a class `<What><timestamp>`. Append-only tables get a trigger with `refuse_change()`, made in the audit migration.
+ * Never edit a migration that has been released; add another.
  */
 export const migrations: readonly (new () => MigrationInterface)[] = [
+  PeopleAndTeams1764590400000,
+  Audit1764590500000,
 ];

@@ -1,0 +1,124 @@
+import { randomUUID } from 'node:crypto';
+import { createTransport, type Transporter } from 'nodemailer';
+import type { Letter } from '../../shared/contracts/session';
+import type { Ground } from '../database/ground';
+import { afterCommit, type Transaction } from '../database/transaction-runner';
+import { LetterBox } from './letter-box';
+import { LetterRepository } from './letter-repository';
+import { seal, unseal } from './seal';
+
+export interface NewLetter {
+  readonly to: string;
+  readonly subject: string;
+  readonly text: string;
+}
+
+const POLL_MS = 15_000;
+const MAX_ATTEMPTS = 10;
+/** 5 s, 10 s, 20 s ... about 40 minutes before the last one. */
+const retryDelayMs = (attempts: number): number => 5000 * 2 ** (attempts - 1);
+
+/** One line and no control characters: a name in a subject must not start another header. */
+const oneLine = (text: string): string => [...text].map((mark) => (mark < ' ' ? ' ' : mark)).join('').trim();
+
+/** Letters go through an outbox row in the transaction of their cause, and are sent after it is committed. */
+export class LetterService {
+  private readonly rows = new LetterRepository();
+  private timer: NodeJS.Timeout | null = null;
+  private sending: Promise<void> = Promise.resolve();
+
+  private constructor(
+    private readonly ground: Ground,
+    private readonly transport: Transporter,
+    private readonly box: LetterBox | null,
+  ) {}
+
+  /** Without an SMTP address a letter box on loopback receives everything. */
+  static async open(ground: Ground): Promise<LetterService> {
+    const box = ground.config.smtpUrl === null ? await LetterBox.open(ground.now) : null;
+    if (box !== null) ground.logger.warn('SMTP_URL is not set: letters go to the letter box of this server');
+    const transport = createTransport(ground.config.smtpUrl ?? box?.url ?? '', { from: ground.config.mailFrom });
+    return new LetterService(ground, transport, box);
+  }
+
+  get usesLetterBox(): boolean {
+    return this.box !== null;
+  }
+
+  /** What the letter box received for these addresses, newest first. */
+  received(addresses: ReadonlySet<string>): Letter[] {
+    return (this.box?.received() ?? []).filter((letter) => addresses.has(letter.to));
+  }
+
+  async post(transaction: Transaction, letter: NewLetter): Promise<void> {
+    const now = this.ground.now();
+    await this.rows.insert(transaction, {
+      id: randomUUID(),
+      recipient: letter.to,
+      subject: oneLine(letter.subject),
+      sealedText: seal(this.ground.config.secret, letter.text),
+      createdAt: now,
+      attempts: 0,
+      nextAttemptAt: now,
+      sentAt: null,
+      lastError: null,
+    });
+    afterCommit(transaction, () => this.sendDue());
+  }
+
+  /** Looks for due letters now and then, for those another process left behind. */
+  start(): void {
+    this.timer ??= setInterval(() => this.sendDue(), POLL_MS).unref();
+    this.sendDue();
+  }
+
+  /** Resolves when everything that is due has been tried. */
+  async settled(): Promise<void> {
+    await this.sending;
+  }
+
+  async close(): Promise<void> {
+    if (this.timer !== null) clearInterval(this.timer);
+    await this.sending;
+    this.transport.close();
+    await this.box?.close();
+  }
+
+  private sendDue(): void {
+    this.sending = this.sending
+      .then(() => this.sendAll())
+      .catch((error: unknown) => this.ground.logger.error({ err: error }, 'letters could not be looked up'));
+  }
+
+  private async sendAll(): Promise<void> {
+    while (await this.sendOne());
+  }
+
+  /** The row stays locked while the mail server answers, so that no other process sends the same letter. */
+  private async sendOne(): Promise<boolean> {
+    const { transactions, config, logger, now } = this.ground;
+    return transactions.run(async (transaction) => {
+      const letter = await this.rows.nextDue(transaction, now());
+      if (letter === null) return false;
+      try {
+        await this.transport.sendMail({
+          to: letter.recipient,
+          subject: letter.subject,
+          text: unseal(config.secret, letter.sealedText),
+          messageId: `<${letter.id}@slantwise>`,
+          disableFileAccess: true,
+          disableUrlAccess: true,
+        });
+        const sent = { sentAt: now(), nextAttemptAt: null, sealedText: Buffer.alloc(0), attempts: letter.attempts + 1 };
+        await this.rows.change(transaction, letter.id, sent);
+      } catch (error) {
+        const attempts = letter.attempts + 1;
+        const nextAttemptAt = attempts >= MAX_ATTEMPTS ? null : new Date(now().getTime() + retryDelayMs(attempts));
+        const lastError = error instanceof Error ? error.message : String(error);
+        logger.warn({ letterId: letter.id, attempts, givenUp: nextAttemptAt === null, lastError }, 'letter not sent');
+        await this.rows.change(transaction, letter.id, { attempts, nextAttemptAt, lastError });
+      }
+      return true;
+    });
+  }
+}
