@@ -1,5 +1,6 @@
 import { randomBytes, scrypt, timingSafeEqual } from 'node:crypto';
 import type PQueue from 'p-queue';
+import { Unavailable } from '../http/problems';
 
 /** Cost of scrypt as OWASP's password storage cheat sheet gives it (from memory): N = 2^17, r = 8, p = 1; about 0.4 s. */
 export interface ScryptCost {
@@ -15,13 +16,6 @@ const KEY_BYTES = 32;
 const CONCURRENT = 2;
 /** More than this many waiting would keep the last one longer than a browser waits. */
 const MAX_WAITING = 60;
-
-export class PasswordQueueFull extends Error {
-  constructor() {
-    super('too many passwords are being checked');
-    this.name = 'PasswordQueueFull';
-  }
-}
 
 function derive(password: string, salt: Buffer, { logN, r, p }: ScryptCost): Promise<Buffer> {
   const N = 2 ** logN;
@@ -83,7 +77,7 @@ export class PasswordHasher {
     // p-queue is an ES module and this is CommonJS: only a dynamic import works in every runtime we use.
     this.queue ??= import('p-queue').then(({ default: Queue }) => new Queue({ concurrency: CONCURRENT }));
     const queue = await this.queue;
-    if (queue.size >= MAX_WAITING) throw new PasswordQueueFull();
+    if (queue.size >= MAX_WAITING) throw new Unavailable('Too many people are signing in at the moment.', 10);
     return queue.add(work);
   }
 }

@@ -2,20 +2,15 @@ import type { Request } from 'express';
 import { Passport } from 'passport';
 import { Strategy } from 'passport-jwt';
 import * as z from 'zod';
+import { ACCESS_AUDIENCE, CLOCK_SKEW_SECONDS, TOKEN_ALGORITHM, TOKEN_ISSUER } from './access-token';
 import type { Caller } from './caller';
 import { cookieNames, type CookieNames } from './session-cookies';
 
 /** How the accounts look up who speaks. Null: nobody we know, or no longer. */
 export interface Callers {
-  bySession(sessionId: string, personId: string, address: string): Promise<Caller | null>;
+  bySession(sessionId: string, personId: string): Promise<Caller | null>;
   byToken(secret: string): Promise<Caller | null>;
 }
-
-export const TOKEN_ISSUER = 'slantwise';
-export const ACCESS_AUDIENCE = 'slantwise-session';
-/** The one algorithm we sign and accept. */
-export const TOKEN_ALGORITHM = 'HS256';
-const CLOCK_SKEW_SECONDS = 30;
 
 const accessClaims = z.object({ sub: z.uuid(), sid: z.uuid(), typ: z.literal('access'), exp: z.number() });
 
@@ -32,15 +27,14 @@ function accessStrategy(secret: string, names: CookieNames, callers: Callers): S
       audience: ACCESS_AUDIENCE,
       jsonWebTokenOptions: { clockTolerance: CLOCK_SKEW_SECONDS },
       jwtFromRequest: (request: Request) => (request.cookies as Record<string, string | undefined>)[names.access] ?? null,
-      passReqToCallback: true,
     },
-    (request: Request, payload: unknown, done: (error: unknown, caller: Caller | false) => void) => {
+    (payload: unknown, done: (error: unknown, caller: Caller | false) => void) => {
       const claims = accessClaims.safeParse(payload);
       if (!claims.success) {
         done(null, false);
         return;
       }
-      callers.bySession(claims.data.sid, claims.data.sub, request.ip ?? '').then(
+      callers.bySession(claims.data.sid, claims.data.sub).then(
         (caller) => done(null, caller ?? false),
         (error: unknown) => done(error, false),
       );

@@ -1,14 +1,8 @@
-import { createHmac, timingSafeEqual } from 'node:crypto';
+import { timingSafeEqual } from 'node:crypto';
 import type { Request } from 'express';
 import { bearerOf } from './authentication';
 import { NotAllowed } from './problems';
-import { cookieNames } from './session-cookies';
-
-/** The forgery token of a session: `<session id>.<HMAC>`. Only someone who can read our cookies can send it back. */
-export function forgeryToken(secret: string, sessionId: string): string {
-  const mac = createHmac('sha256', secret).update(`forgery:${sessionId}`).digest('base64url');
-  return `${sessionId}.${mac}`;
-}
+import { cookieNames, forgeryToken } from './session-cookies';
 
 export function equalText(left: string, right: string): boolean {
   const a = Buffer.from(left);

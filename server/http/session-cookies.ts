@@ -1,3 +1,4 @@
+import { createHmac } from 'node:crypto';
 import type { CookieChange } from './reply';
 
 export interface CookieNames {
@@ -37,3 +38,9 @@ export function sessionCookies(secrets: SessionSecrets, secure: boolean, maxAgeS
 
 export const clearedCookies = (secure: boolean): CookieChange[] =>
   sessionCookies({ accessToken: '', refreshToken: '', forgeryToken: '' }, secure, 0).map((cookie) => ({ ...cookie, value: null }));
+
+/** The forgery token of a session: `<session id>.<HMAC>`. Only someone who can read our cookies can send it back. */
+export function forgeryToken(secret: string, sessionId: string): string {
+  const mac = createHmac('sha256', secret).update(`forgery:${sessionId}`).digest('base64url');
+  return `${sessionId}.${mac}`;
+}

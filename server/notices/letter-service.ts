@@ -21,6 +21,13 @@ const retryDelayMs = (attempts: number): number => 5000 * 2 ** (attempts - 1);
 /** One line and no control characters: a name in a subject must not start another header. */
 const oneLine = (text: string): string => [...text].map((mark) => (mark < ' ' ? ' ' : mark)).join('').trim();
 
+/** A row stays locked while its letter is sent, so a silent mail server must not hold it long. */
+function withTimeouts(smtpUrl: string): string {
+  const url = new URL(smtpUrl);
+  for (const name of ['connectionTimeout', 'greetingTimeout', 'socketTimeout']) url.searchParams.set(name, '10000');
+  return url.href;
+}
+
 /** Letters go through an outbox row in the transaction of their cause, and are sent after it is committed. */
 export class LetterService {
   private readonly rows = new LetterRepository();
@@ -37,7 +44,7 @@ export class LetterService {
   static async open(ground: Ground): Promise<LetterService> {
     const box = ground.config.smtpUrl === null ? await LetterBox.open(ground.now) : null;
     if (box !== null) ground.logger.warn('SMTP_URL is not set: letters go to the letter box of this server');
-    const transport = createTransport(ground.config.smtpUrl ?? box?.url ?? '', { from: ground.config.mailFrom });
+    const transport = createTransport(withTimeouts(ground.config.smtpUrl ?? box?.url ?? ''), { from: ground.config.mailFrom });
     return new LetterService(ground, transport, box);
   }
 
