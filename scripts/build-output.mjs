@@ -74,6 +74,9 @@ function isCurrent(name) {
   return existsSync(stamp) && existsSync(parts[name].product) && readFileSync(stamp, 'utf8') === fingerprint(parts[name]);
 }
 
+/** Makes the next `provideBuild` build this part whatever its sources, since something else is about to write its output. */
+export const forgetBuild = (name) => rmSync(stampFile(name), { force: true });
+
 /** Builds what is out of date; says so, since a person waits for it. */
 export async function provideBuild(...names) {
   const stale = () => names.filter((name) => !isCurrent(name));
@@ -82,7 +85,7 @@ export async function provideBuild(...names) {
     for (const name of stale()) {
       console.error(`Building the ${name} ...`);
       const stamp = fingerprint(parts[name]); // taken before: a change made during the build counts as new
-      rmSync(stampFile(name), { force: true });
+      forgetBuild(name);
       await parts[name].make();
       mkdirSync(dirname(stampFile(name)), { recursive: true });
       writeFileSync(stampFile(name), stamp);
