@@ -1,0 +1,25 @@
+import { loadChecks, loadPending, type CheckTable } from './published-check';
+import { arrayChecks } from './tables/array-checks';
+import { conventionsChecks } from './tables/conventions-checks';
+import { refractionChecks } from './tables/refraction-checks';
+
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks };
+const checks = loadChecks();
+const pending = loadPending();
+
+describe('published checks', () => {
+  it('holds every published check: it runs, or says what it waits for, never both', () => {
+    const runs = new Set(Object.keys(tables));
+    const unaccounted = checks.filter(({ id }) => runs.has(id) === pending.has(id)).map(({ id }) => id);
+    const known = new Set(checks.map(({ id }) => id));
+    const strangers = [...runs, ...pending.keys()].filter((id) => !known.has(id));
+    expect({ unaccounted, strangers, total: checks.length }).toEqual({ unaccounted: [], strangers: [], total: 143 });
+  });
+
+  for (const check of checks) {
+    const run = tables[check.id];
+    const waitsFor = pending.get(check.id);
+    if (run !== undefined) it(`${check.id}: ${check.what} [${check.source}]`, () => run(check));
+    else it.todo(`${check.id}: ${check.what} - waits for ${waitsFor ?? 'nobody'}`);
+  }
+});
