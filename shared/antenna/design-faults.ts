@@ -1,0 +1,69 @@
+import type { DesignDocument, Outline } from '../model/design-document';
+import { cellCountFault } from './cell-count';
+import { InvalidDesign, type DesignFault } from './invalid-design';
+import { polygonFault } from './polygon-fault';
+
+/** A horn nearer than this to the plane of the panel lights it at grazing incidence everywhere. */
+const LEAST_HORN_HEIGHT_MM = 1e-3;
+
+/** Throws InvalidDesign naming every fault between fields at once; returns where there is none. */
+export function checkDesign(design: DesignDocument): void {
+  const faults = designFaults(design);
+  if (faults.length > 0) throw new InvalidDesign(faults);
+}
+
+/** Faults that no single field shows, of a document whose fields are each valid. */
+export function designFaults(design: DesignDocument): DesignFault[] {
+  const shape = shapeFaults(design);
+  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? countFaults(design) : []), ...sourceFaults(design)];
+}
+
+function requirementFaults({ requirement }: DesignDocument): DesignFault[] {
+  const faults: DesignFault[] = [];
+  const band = requirement.bandGHz;
+  if (band && band[0] > band[1]) faults.push({ pointer: '#/requirement/bandGHz', detail: `must rise; got ${band[0]} to ${band[1]} GHz` });
+  if (requirement.mask?.kind === 'custom') {
+    requirement.mask.points.forEach(([angle], i, points) => {
+      if (i > 0 && angle <= points[i - 1][0]) {
+        faults.push({ pointer: `#/requirement/mask/points/${i}/0`, detail: `angles must rise; got ${angle} after ${points[i - 1][0]} deg` });
+      }
+    });
+  }
+  return faults;
+}
+
+function shapeFaults({ panel }: DesignDocument): DesignFault[] {
+  const outlines: [string, Outline][] = [
+    ['#/panel/outline', panel.outline],
+    ...panel.keepOuts.map((keepOut, i): [string, Outline] => [`#/panel/keepOuts/${i}`, keepOut]),
+  ];
+  return outlines.flatMap(([pointer, outline]) => {
+    const detail = outline.kind === 'polygon' ? polygonFault(outline.pointsMm) : undefined;
+    return detail ? [{ pointer: `${pointer}/pointsMm`, detail }] : [];
+  });
+}
+
+function countFaults({ panel }: DesignDocument): DesignFault[] {
+  const detail = cellCountFault(panel);
+  return detail ? [{ pointer: '#/panel', detail }] : [];
+}
+
+function sourceFaults({ illumination, synthesis, cells }: DesignDocument): DesignFault[] {
+  const faults: DesignFault[] = [];
+  if (illumination.kind === 'horn') {
+    const { positionMm, aimMm } = illumination;
+    if (Math.abs(positionMm[2]) < LEAST_HORN_HEIGHT_MM) {
+      faults.push({ pointer: '#/illumination/positionMm/2', detail: `the horn must stand off the plane of the panel; got z = ${positionMm[2]} mm` });
+    }
+    if (Math.hypot(...positionMm.map((p, i) => p - aimMm[i])) < LEAST_HORN_HEIGHT_MM) {
+      faults.push({ pointer: '#/illumination/aimMm', detail: 'the horn must be aimed at a point other than its own position' });
+    }
+  }
+  if (synthesis.kind === 'focus' && synthesis.pointMm[2] <= 0) {
+    faults.push({ pointer: '#/synthesis/pointMm/2', detail: `the focus must lie in front of the panel, z > 0; got z = ${synthesis.pointMm[2]} mm` });
+  }
+  if (cells.kind === 'inline' && cells.cells.every((cell) => cell.magnitude === 0)) {
+    faults.push({ pointer: '#/cells/cells', detail: 'at least one cell must have a magnitude above 0' });
+  }
+  return faults;
+}

@@ -1,0 +1,96 @@
+import type { Figure, Figures } from '../model/figures';
+import { degFromRad } from '../units/angles';
+import { dbToPowerRatio } from '../units/decibels';
+import { edgeTaperDb, maxIncidenceRad } from './aperture-figures';
+import { gratingLobes } from './grating-lobes';
+import type { IlluminatedState } from './illuminated-state';
+import { isNumber, noFigure, nothingLit } from './no-figure';
+import { patternFigures, type PatternFigures } from './pattern-figures';
+import { evanescentCellCount } from './target-phase';
+
+export interface DesignFigures {
+  readonly figures: Figures;
+  /** All grating lobes; the list in the figures stops at the nearest. */
+  readonly gratingLobeCount: number;
+  readonly maxIncidence: number;
+}
+
+/** Collects every figure of one state. A figure that does not exist holds its reason. */
+export function designFigures(state: IlluminatedState): DesignFigures {
+  const { placed, frequencyHz, wavelengthM, pattern, losses } = state;
+  const { si, lattice, light, law, designWavenumber } = placed;
+  const beams = si.beams.map((beam) => beam.direction);
+  const orders = beams.map((beam) => gratingLobes(si.panel.lattice, beam, wavelengthM));
+  const maxIncidence = maxIncidenceRad(light);
+  const { mask } = placed.design.requirement;
+  const radiates = pattern.radiatedPower > 0;
+  const { peakUncertaintyDeg, ...read } = radiates ? patternFigures({ pattern, beams, mask, gainOffsetDb: state.gainOffsetDb }) : darkFigures(state);
+  const figures: Figures = {
+    frequencyGHz: frequencyHz / 1e9,
+    wavelengthMm: wavelengthM * 1000,
+    cellCount: lattice.count,
+    maxIncidenceDeg: degFromRad(maxIncidence),
+    evanescentCells: evanescentCellCount({ law, lattice, light, designWavenumber, wavenumber: state.wavenumber }),
+    gratingLobes: orders.flatMap((order) => order.lobes),
+    edgeTaperDb: edgeTaperDb(si.illumination, si.panel, lattice),
+    ...read,
+    spilloverDb: state.spilloverDb,
+    ...losses,
+    apertureEfficiency: apertureEfficiency(read.gainDbi, lattice.count * lattice.cellAreaM2, wavelengthM),
+    referencePhaseDeg: degFromRad(placed.referencePhaseRad),
+    uncertainty: radiates ? uncertainties(state, peakUncertaintyDeg) : {},
+  };
+  return { figures, gratingLobeCount: orders.reduce((sum, order) => sum + order.count, 0), maxIncidence };
+}
+
+/** Gain at the peak against 4 pi area / lambda^2, area being cells times the area of one. */
+function apertureEfficiency(gainDbi: Figure, areaM2: number, wavelengthM: number): Figure {
+  return isNumber(gainDbi) ? (dbToPowerRatio(gainDbi) * wavelengthM * wavelengthM) / (4 * Math.PI * areaM2) : gainDbi;
+}
+
+/**
+ * Numerical uncertainties of this computation, not of the model. Directivity: rounding of the transforms. Beamwidths and
+ * cut sidelobes: the tolerances of the bisection and of the golden-section search.
+ */
+function uncertainties(state: IlluminatedState, peakUncertaintyDeg: number): Record<string, number> {
+  const directivityDb = 1e-9 * Math.log2(Math.max(2, state.placed.lattice.count));
+  return {
+    directivityDbi: directivityDb,
+    directivityAtBeamDbi: directivityDb,
+    peakThetaDeg: peakUncertaintyDeg,
+    peakPhiDeg: peakUncertaintyDeg,
+    pointingErrorDeg: peakUncertaintyDeg,
+    gainDbi: directivityDb + state.spilloverUncertaintyDb,
+    gainAtBeamDbi: directivityDb + state.spilloverUncertaintyDb,
+    spilloverDb: state.spilloverUncertaintyDb,
+    halfPowerBeamwidthDeg: 1e-7,
+    sidelobeDb: 1e-6,
+  };
+}
+
+function darkFigures(state: IlluminatedState): PatternFigures {
+  const reason = state.litCount === 0 ? nothingLit() : noFigure('nothing-reflected', 'no lit cell returns anything, so nothing is radiated');
+  return {
+    directivityDbi: reason,
+    peakThetaDeg: reason,
+    peakPhiDeg: reason,
+    directivityAtBeamDbi: reason,
+    gainDbi: reason,
+    gainAtBeamDbi: reason,
+    pointingErrorDeg: reason,
+    halfPowerBeamwidthDeg: { along: reason, across: reason },
+    sidelobeDb: { along: reason, across: reason, hemisphere: reason },
+    maskMargin: reason,
+    highestLobes: [],
+    beams: state.placed.design.requirement.beams.map(({ thetaDeg, phiDeg }) => ({
+      thetaDeg,
+      phiDeg,
+      directivityDbi: reason,
+      gainDbi: reason,
+      foundThetaDeg: reason,
+      foundPhiDeg: reason,
+      pointingErrorDeg: reason,
+    })),
+    peakUncertaintyDeg: 0,
+  };
+}

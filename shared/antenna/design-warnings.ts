@@ -1,0 +1,52 @@
+import type { DesignDocument } from '../model/design-document';
+import type { Figures, Warning } from '../model/figures';
+import { illuminationWarnings } from './illumination-warnings';
+import { latticeWarnings, type LatticeFacts } from './lattice-warnings';
+
+export interface DesignFacts extends LatticeFacts {
+  readonly design: DesignDocument;
+  readonly litCount: number;
+  /** Remarks of the cells in use on what their data cover. */
+  readonly cellWarnings: readonly Warning[];
+}
+
+const RANK: Readonly<Record<Warning['severity'], number>> = { serious: 0, warn: 1, note: 2 };
+
+/** All remarks on a design with their reasons and numbers, the serious ones first. */
+export function designWarnings(facts: DesignFacts): Warning[] {
+  const warnings = [
+    ...illuminationWarnings(facts.si, facts.litCount),
+    ...facts.cellWarnings,
+    ...latticeWarnings(facts),
+    ...imageLobeWarning(facts.figures),
+    ...tableWarning(facts.design),
+  ];
+  return warnings.sort((a, b) => RANK[a.severity] - RANK[b.severity]);
+}
+
+function imageLobeWarning({ sidelobeDb: { hemisphere } }: Figures): Warning[] {
+  if (!('levelDb' in hemisphere) || typeof hemisphere.levelDb !== 'number' || hemisphere.levelDb <= 0) return [];
+  const { levelDb, thetaDeg, phiDeg } = hemisphere as { levelDb: number; thetaDeg: number; phiDeg: number };
+  return [
+    {
+      code: 'image-lobe',
+      pointer: '#/requirement/beams/0',
+      severity: 'serious',
+      message: `A lobe at theta ${thetaDeg.toFixed(1)}, phi ${phiDeg.toFixed(1)} deg is ${levelDb.toFixed(2)} dB stronger than the wanted beam.`,
+      numbers: { levelDb, thetaDeg, phiDeg },
+    },
+  ];
+}
+
+function tableWarning({ cells }: DesignDocument): Warning[] {
+  if (cells.kind !== 'inline') return [];
+  return [
+    {
+      code: 'provenance',
+      pointer: '#/cells',
+      severity: 'note',
+      message: `The ${cells.cells.length} cells are a what-if table: the same at every frequency and angle, and nobody has measured them.`,
+      numbers: { cells: cells.cells.length },
+    },
+  ];
+}

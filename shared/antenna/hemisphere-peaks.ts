@@ -1,0 +1,89 @@
+import { spectrumPower } from './aperture-spectrum';
+import { elementPower, type RadiationPattern } from './radiation-pattern';
+
+/** A local maximum on the samples of the hemisphere; its power is relative, element factor included. */
+export interface SampledPeak {
+  readonly u: number;
+  readonly v: number;
+  readonly power: number;
+}
+
+/** More samples than this in the visible circle are not searched: the panel is too many wavelengths across. */
+export const MOST_SAMPLES = 24_000_000;
+
+export interface SampleGrid {
+  readonly uStep: number;
+  readonly vStep: number;
+  /** Largest sample index along u and v inside the visible circle. */
+  readonly uReach: number;
+  readonly vReach: number;
+}
+
+/** Natural samples of the pattern that fall into the visible circle. */
+export function sampleGrid(pattern: RadiationPattern): SampleGrid {
+  const { grid, columns, rows } = pattern.spectrum;
+  const uStep = (2 * Math.PI) / (pattern.wavenumber * grid.stepXM * columns);
+  const vStep = (2 * Math.PI) / (pattern.wavenumber * grid.stepYM * rows);
+  return { uStep, vStep, uReach: Math.floor(1 / uStep), vReach: Math.floor(1 / vStep) };
+}
+
+export function sampleCount({ uReach, vReach }: SampleGrid): number {
+  return (2 * uReach + 1) * (2 * vReach + 1);
+}
+
+/** Power times element factor along one line of samples of constant u, v rising; -1 outside the circle. */
+export function sampleLine(pattern: RadiationPattern, samples: SampleGrid, m: number, line: Float64Array): void {
+  const { vReach, uStep, vStep } = samples;
+  const uSquared = m * uStep * (m * uStep);
+  for (let n = -vReach; n <= vReach; n++) {
+    const wSquared = 1 - uSquared - n * vStep * (n * vStep);
+    line[n + vReach] = wSquared < 0 ? -1 : spectrumPower(pattern.spectrum, m, n) * elementPower(Math.sqrt(wSquared), pattern.radiateExponent);
+  }
+}
+
+/**
+ * The highest local maxima among the samples of the whole hemisphere, strongest first. The samples are two to three
+ * times as fine as the pattern needs, so every lobe has one; refinePeak then finds its true top.
+ */
+export function hemispherePeaks(pattern: RadiationPattern, count: number): SampledPeak[] {
+  const samples = sampleGrid(pattern);
+  const { uReach, vReach, uStep, vStep } = samples;
+  const length = 2 * vReach + 1;
+  let before: Float64Array = new Float64Array(length).fill(-1);
+  let here: Float64Array = new Float64Array(length);
+  let after: Float64Array = new Float64Array(length);
+  sampleLine(pattern, samples, -uReach, here);
+  const found: SampledPeak[] = [];
+  let least = 0;
+  for (let m = -uReach; m <= uReach; m++) {
+    if (m < uReach) sampleLine(pattern, samples, m + 1, after);
+    else after.fill(-1);
+    for (let i = 0; i < length; i++) {
+      const value = here[i];
+      if (value <= least || !isLocalMaximum(value, i, { before, here, after })) continue;
+      insertPeak(found, { u: m * uStep, v: (i - vReach) * vStep, power: value }, count);
+      if (found.length === count) least = found[count - 1].power;
+    }
+    [before, here, after] = [here, after, before];
+  }
+  return found;
+}
+
+interface Lines {
+  readonly before: Float64Array;
+  readonly here: Float64Array;
+  readonly after: Float64Array;
+}
+
+/** Above or equal to all eight neighbours; of an equal pair the one that comes first counts. */
+function isLocalMaximum(value: number, i: number, { before, here, after }: Lines): boolean {
+  if (here[i - 1] >= value || here[i + 1] > value || before[i] >= value || after[i] > value) return false;
+  return !(before[i - 1] >= value || before[i + 1] >= value || after[i - 1] > value || after[i + 1] > value);
+}
+
+function insertPeak(found: SampledPeak[], peak: SampledPeak, count: number): void {
+  let at = found.length;
+  while (at > 0 && found[at - 1].power < peak.power) at -= 1;
+  found.splice(at, 0, peak);
+  if (found.length > count) found.pop();
+}

@@ -1,0 +1,33 @@
+import { hornIllumination } from './horn-illumination';
+import type { PanelLattice } from './panel-lattice';
+import { planeWaveIllumination } from './plane-wave-illumination';
+import type { SiIllumination } from './si-design';
+
+/**
+ * What lights each cell, at every frequency: the incident phase is -k pathM. The azimuth is that of the direction of
+ * travel, so (incidence, azimuth) give the tangential cosines sin(incidence) (cos, sin)(azimuth).
+ */
+export interface CellIllumination {
+  readonly amplitude: Float64Array;
+  readonly pathM: Float64Array;
+  readonly incidenceRad: Float64Array;
+  readonly azimuthRad: Float64Array;
+}
+
+type Illuminator<Kind extends SiIllumination['kind']> = (
+  illumination: Extract<SiIllumination, { kind: Kind }>,
+  lattice: PanelLattice,
+  receiveExponent: number,
+) => CellIllumination;
+
+/** One line for each way of lighting a panel. */
+const illuminators: { readonly [Kind in SiIllumination['kind']]: Illuminator<Kind> } = {
+  horn: hornIllumination,
+  'plane-wave': planeWaveIllumination,
+};
+
+/** Amplitude, path and incidence at every cell. */
+export function illuminateCells(illumination: SiIllumination, lattice: PanelLattice, receiveExponent: number): CellIllumination {
+  const illuminate = illuminators[illumination.kind] as (i: SiIllumination, l: PanelLattice, a: number) => CellIllumination;
+  return illuminate(illumination, lattice, receiveExponent);
+}

@@ -1,0 +1,75 @@
+import type { Figures, Warning } from '../model/figures';
+import { degFromRad } from '../units/angles';
+import { shortestReciprocalPerM } from './grating-lobes';
+import type { SiDesign } from './si-design';
+
+export interface LatticeFacts {
+  readonly si: SiDesign;
+  readonly wavelengthM: number;
+  readonly gratingLobeCount: number;
+  readonly maxIncidenceRad: number;
+  readonly figures: Figures;
+}
+
+const mm = (metres: number): number => metres * 1000;
+
+/** Remarks that follow from periods and angles alone. */
+export function latticeWarnings(facts: LatticeFacts): Warning[] {
+  return [...gratingLobeWarning(facts), ...cellPeriodWarning(facts), ...evanescentWarning(facts)];
+}
+
+function gratingLobeWarning({ si, wavelengthM, gratingLobeCount, figures }: LatticeFacts): Warning[] {
+  if (gratingLobeCount === 0) return [];
+  const sine = Math.max(...si.beams.map(({ direction }) => Math.hypot(direction.u, direction.v)));
+  // Keeps the first grating lobe out of visible space: d < lambda / (1 + sin theta), d = 1 over the shortest reciprocal vector.
+  const limitMm = mm(wavelengthM / (1 + sine));
+  const spacingMm = mm(1 / shortestReciprocalPerM(si.panel.lattice));
+  const [lobe] = figures.gratingLobes;
+  const where = `theta ${lobe.thetaDeg.toFixed(1)}, phi ${lobe.phiDeg.toFixed(1)} deg`;
+  return [
+    {
+      code: 'grating-lobe',
+      pointer: '#/panel/lattice',
+      severity: 'warn',
+      message:
+        `The lattice repeats every ${spacingMm.toFixed(3)} mm; a beam at ${degFromRad(Math.asin(Math.min(1, sine))).toFixed(1)} deg has no grating lobe only below ` +
+        `lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm. ${gratingLobeCount === 1 ? 'One stands' : `${gratingLobeCount} stand, the first`} at ${where}.`,
+      numbers: { count: gratingLobeCount, spacingMm, limitMm, thetaDeg: lobe.thetaDeg, phiDeg: lobe.phiDeg },
+    },
+  ];
+}
+
+function cellPeriodWarning({ si, wavelengthM, maxIncidenceRad }: LatticeFacts): Warning[] {
+  // The cell itself must send back one order only at the steepest incidence: d < lambda / (1 + sin theta_inc).
+  const limitMm = mm(wavelengthM / (1 + Math.sin(maxIncidenceRad)));
+  const spacingMm = mm(1 / shortestReciprocalPerM(si.panel.lattice));
+  if (spacingMm <= limitMm) return [];
+  const maxIncidenceDeg = degFromRad(maxIncidenceRad);
+  return [
+    {
+      code: 'cell-period',
+      pointer: '#/panel/lattice',
+      severity: 'warn',
+      message:
+        `At the largest angle of incidence, ${maxIncidenceDeg.toFixed(1)} deg, cells ${spacingMm.toFixed(3)} mm apart scatter into a second order; ` +
+        `below lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm they do not.`,
+      numbers: { spacingMm, limitMm, maxIncidenceDeg },
+    },
+  ];
+}
+
+function evanescentWarning({ si, figures }: LatticeFacts): Warning[] {
+  const count = figures.evanescentCells;
+  if (count === 0) return [];
+  const share = count / figures.cellCount;
+  const several = si.beams.length > 1 ? ' Where several beams nearly cancel, the phase of their sum changes faster than any travelling wave.' : '';
+  return [
+    {
+      code: 'evanescent-beam',
+      pointer: '#/requirement/beams',
+      severity: share > 0.5 ? 'serious' : share > 0.05 ? 'warn' : 'note',
+      message: `At ${count} of ${figures.cellCount} cells the wanted tangential wavenumber exceeds that of free space, so no wave leaves there as wanted.${several}`,
+      numbers: { count, cellCount: figures.cellCount },
+    },
+  ];
+}

@@ -1,0 +1,91 @@
+import type { BeamFigures, Figure, Figures } from '../model/figures';
+import type { Mask } from '../model/design-document';
+import { degFromRad, radFromDeg } from '../units/angles';
+import { powerRatioToDb } from '../units/decibels';
+import { angleBetweenRad, anglesOf, outwardDirection, type Direction } from '../waves/conventions';
+import { cutMetrics, type CutMetrics } from './cut-metrics';
+import { greatCircle, visibleArcRad, type CutPlane } from './great-circle';
+import { maskMargin } from './mask-margin';
+import { isNumber, noFigure, sumFigures } from './no-figure';
+import { lobeRelativeTo, patternLobes, peakAnglesDeg, type PatternLobes } from './pattern-lobes';
+import { directivityRatio, type RadiationPattern } from './radiation-pattern';
+
+type FromPattern =
+  | 'directivityDbi' | 'peakThetaDeg' | 'peakPhiDeg' | 'directivityAtBeamDbi' | 'gainDbi' | 'gainAtBeamDbi' | 'pointingErrorDeg'
+  | 'halfPowerBeamwidthDeg' | 'sidelobeDb' | 'maskMargin' | 'highestLobes' | 'beams';
+
+export type PatternFigures = Pick<Figures, FromPattern> & { readonly peakUncertaintyDeg: number };
+
+const LISTED_LOBES = 6;
+const FEWEST_CUT_SAMPLES = 720;
+const MOST_CUT_SAMPLES = 60_000;
+
+export interface PatternQuery {
+  readonly pattern: RadiationPattern;
+  readonly beams: readonly Direction[];
+  readonly mask: Mask | undefined;
+  /** Gain less directivity: spillover and cell loss. */
+  readonly gainOffsetDb: Figure;
+}
+
+/** Every figure that is read off the pattern. */
+export function patternFigures({ pattern, beams, mask, gainOffsetDb }: PatternQuery): PatternFigures {
+  const lobes = patternLobes(pattern, beams);
+  const directivityDbi = powerRatioToDb(lobes.highest.directivityRatio);
+  const perBeam = beams.map((beam, i) => beamFigures(pattern, beam, lobes.ofBeams[i], gainOffsetDb));
+  const [first] = perBeam;
+  const [along, across] = (['along', 'across'] as const).map((plane) => planeMetrics(pattern, beams[0], plane));
+  const { thetaDeg, phiDeg } = peakAnglesDeg(lobes.highest);
+  return {
+    directivityDbi,
+    peakThetaDeg: thetaDeg,
+    peakPhiDeg: phiDeg,
+    directivityAtBeamDbi: first.directivityDbi,
+    gainDbi: sumFigures(directivityDbi, gainOffsetDb),
+    gainAtBeamDbi: first.gainDbi,
+    pointingErrorDeg: first.pointingErrorDeg,
+    halfPowerBeamwidthDeg: { along: along.halfPowerBeamwidthDeg, across: across.halfPowerBeamwidthDeg },
+    sidelobeDb: { along: along.sidelobeDb, across: across.sidelobeDb, hemisphere: hemisphereSidelobe(lobes) },
+    maskMargin: isNumber(gainOffsetDb) ? maskMargin(pattern, mask, beams, gainOffsetDb) : gainOffsetDb,
+    highestLobes: lobes.others.slice(0, LISTED_LOBES).map((lobe) => lobeRelativeTo(lobe, lobes.ofBeams[0])),
+    beams: perBeam,
+    peakUncertaintyDeg: Math.max(1e-8, degFromRad(lobes.highest.lastStep / Math.max(1e-3, Math.cos(radFromDeg(thetaDeg))))),
+  };
+}
+
+function beamFigures(pattern: RadiationPattern, beam: Direction, found: PatternLobes['highest'], gainOffsetDb: Figure): BeamFigures {
+  const { thetaRad, phiRad } = anglesOf(beam);
+  const ratio = directivityRatio(pattern, beam);
+  const directivityDbi: Figure = ratio > 0 ? powerRatioToDb(ratio) : noFigure('null', 'the pattern is zero in the wanted direction');
+  const { thetaDeg, phiDeg } = peakAnglesDeg(found);
+  return {
+    thetaDeg: degFromRad(thetaRad),
+    phiDeg: degFromRad(phiRad),
+    directivityDbi,
+    gainDbi: sumFigures(directivityDbi, gainOffsetDb),
+    foundThetaDeg: thetaDeg,
+    foundPhiDeg: phiDeg,
+    pointingErrorDeg: degFromRad(angleBetweenRad(beam, outwardDirection(found.u, found.v))),
+  };
+}
+
+/** Beamwidth and sidelobes on a great circle through the wanted direction; at least eight samples to the narrowest lobe. */
+function planeMetrics(pattern: RadiationPattern, beam: Direction, plane: CutPlane): CutMetrics {
+  const { grid } = pattern.spectrum;
+  const [fromRad, toRad] = visibleArcRad(beam, plane);
+  const diagonalM = Math.hypot(grid.columnCount * grid.stepXM, grid.rowCount * grid.stepYM);
+  const lobes = (pattern.wavenumber * diagonalM) / 2;
+  if (lobes * 4 > MOST_CUT_SAMPLES) {
+    const reason = noFigure('too-many-wavelengths', 'the panel is too many wavelengths across to follow every lobe of the cut');
+    return { halfPowerBeamwidthDeg: reason, sidelobeDb: reason };
+  }
+  const at = greatCircle(beam, plane);
+  const samples = Math.max(FEWEST_CUT_SAMPLES, Math.ceil(lobes * 8));
+  return cutMetrics({ power: (angleRad) => directivityRatio(pattern, at(angleRad)), fromRad, toRad, samples });
+}
+
+function hemisphereSidelobe(lobes: PatternLobes): Figures['sidelobeDb']['hemisphere'] {
+  if (!lobes.searched) return noFigure('too-many-wavelengths', 'the panel is too many wavelengths across to search the hemisphere');
+  const [highest] = lobes.others;
+  return highest ? lobeRelativeTo(highest, lobes.ofBeams[0]) : noFigure('no-sidelobe', 'the pattern has no lobe besides that of the wanted beam');
+}

@@ -1,0 +1,64 @@
+import type { DesignDocument } from '../model/design-document';
+import { wavenumberRadPerM } from '../waves/conventions';
+import { apertureLaw, type ApertureLaw } from './aperture-law';
+import { cellStock, type CellAssignment, type CellStock } from './cell-stock';
+import { checkDesign } from './design-faults';
+import { illuminateCells, type CellIllumination } from './illumination';
+import { panelLattice, type PanelLattice } from './panel-lattice';
+import type { PreparedEdition } from './prepare-edition';
+import { siDesign, type SiDesign } from './si-design';
+import { targetPhasesRad } from './target-phase';
+
+/** A design with its cells placed: everything that does not depend on the frequency of use. */
+export interface PlacedDesign {
+  readonly design: DesignDocument;
+  readonly si: SiDesign;
+  readonly designWavenumber: number;
+  readonly lattice: PanelLattice;
+  readonly light: CellIllumination;
+  readonly law: ApertureLaw;
+  readonly stock: CellStock;
+  /** The number given, or the one that the search found. */
+  readonly referencePhaseRad: number;
+  /** At the design frequency, reference phase included. */
+  readonly targetRad: Float64Array;
+  readonly assignment: CellAssignment;
+}
+
+/** Places the cells of a design, at its design frequency. Throws InvalidDesign. */
+export function placeCells(design: DesignDocument, edition?: PreparedEdition): PlacedDesign {
+  checkDesign(design);
+  const si = siDesign(design);
+  const designWavenumber = wavenumberRadPerM(si.designFrequencyHz);
+  const lattice = panelLattice(si.panel);
+  const light = illuminateCells(si.illumination, lattice, si.receiveExponent);
+  const law = apertureLaw(si);
+  const bareTargetRad = targetPhasesRad(law, lattice, light, designWavenumber);
+  const stock = cellStock(design.cells, { light, designFrequencyHz: si.designFrequencyHz, si, edition });
+  const referencePhaseRad =
+    si.referencePhaseRad === 'search'
+      ? stock.searchReferenceRad({ targetRad: bareTargetRad, ...beamWeights({ si, lattice, light, wavenumber: designWavenumber }) })
+      : si.referencePhaseRad;
+  const targetRad = bareTargetRad.map((rad) => rad + referencePhaseRad);
+  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad) };
+}
+
+interface WeightQuery {
+  readonly si: SiDesign;
+  readonly lattice: PanelLattice;
+  readonly light: CellIllumination;
+  readonly wavenumber: number;
+}
+
+/** What a cell of unit response adds to the field at the first wanted beam: A exp(j(-k path + k r.b)). */
+function beamWeights({ si, lattice, light, wavenumber }: WeightQuery): { weightRe: Float64Array; weightIm: Float64Array } {
+  const { u, v } = si.beams[0].direction;
+  const weightRe = new Float64Array(lattice.count);
+  const weightIm = new Float64Array(lattice.count);
+  for (let n = 0; n < lattice.count; n++) {
+    const phase = wavenumber * (lattice.xM[n] * u + lattice.yM[n] * v - light.pathM[n]);
+    weightRe[n] = light.amplitude[n] * Math.cos(phase);
+    weightIm[n] = light.amplitude[n] * Math.sin(phase);
+  }
+  return { weightRe, weightIm };
+}

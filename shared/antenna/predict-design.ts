@@ -1,0 +1,64 @@
+import type { DesignDocument } from '../model/design-document';
+import type { Figures, Verdict, Warning } from '../model/figures';
+import { cellArrays, type CellArrays } from './cell-arrays';
+import { designFigures } from './design-figures';
+import { designWarnings } from './design-warnings';
+import { patternCut, type Cut, type CutRequest } from './pattern-cut';
+import { placeCells } from './place-cells';
+import type { PreparedEdition } from './prepare-edition';
+import { requirementVerdicts } from './requirement-verdicts';
+import { illuminatedState } from './illuminated-state';
+import { uvMap, type UvMap } from './uv-map';
+import { isNumber } from './no-figure';
+
+export interface PredictionOptions {
+  /** The edition that the design names; needed where its cells are of kind "edition". */
+  readonly edition?: PreparedEdition;
+  /** Where to predict; the design frequency when absent. The cells stay those chosen at the design frequency. */
+  readonly frequencyGHz?: number;
+  readonly include: {
+    readonly cells?: boolean;
+    readonly cuts?: readonly CutRequest[];
+    readonly uv?: { readonly size: number };
+  };
+}
+
+export interface Prediction {
+  readonly figures: Figures;
+  readonly verdicts: Verdict[];
+  readonly warnings: Warning[];
+  readonly cells?: CellArrays;
+  readonly cuts?: Cut[];
+  readonly uv?: UvMap;
+}
+
+/**
+ * Predicts what a design radiates by the scalar model of the design document: design -> lattice -> illumination ->
+ * target phase -> assignment -> aperture field -> pattern -> figures, verdicts and warnings.
+ * Throws InvalidDesign, naming every fault, where the fields do not go together.
+ */
+export function predictDesign(design: DesignDocument, options: PredictionOptions): Prediction {
+  const placed = placeCells(design, options.edition);
+  const state = illuminatedState(placed, options.frequencyGHz);
+  const { figures, gratingLobeCount, maxIncidence } = designFigures(state);
+  const { include } = options;
+  const gainOffsetDb = isNumber(state.gainOffsetDb) ? state.gainOffsetDb : 0;
+  const beam = placed.si.beams[0].direction;
+  return {
+    figures,
+    verdicts: requirementVerdicts(design.requirement, figures),
+    warnings: designWarnings({
+      design,
+      si: placed.si,
+      wavelengthM: state.wavelengthM,
+      gratingLobeCount,
+      maxIncidenceRad: maxIncidence,
+      figures,
+      litCount: state.litCount,
+      cellWarnings: placed.stock.warnings(placed.assignment, state.frequencyHz),
+    }),
+    ...(include.cells ? { cells: cellArrays({ ...placed, responses: state.responses }) } : {}),
+    ...(include.cuts ? { cuts: include.cuts.map((request) => patternCut(state.pattern, request, beam, gainOffsetDb)) } : {}),
+    ...(include.uv ? { uv: uvMap(state.pattern, include.uv.size, gainOffsetDb) } : {}),
+  };
+}
