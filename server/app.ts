@@ -3,10 +3,9 @@ import compression from 'compression';
 import cookieParser from 'cookie-parser';
 import express, { type Express, type RequestHandler } from 'express';
 import { pinoHttp } from 'pino-http';
-import { isHttps } from './config';
 import { features } from './features';
 import type { House } from './house';
-import { authentication, type Callers } from './http/authentication';
+import { authentication } from './http/authentication';
 import { callerOf, mountRoutes } from './http/mount-routes';
 import { openApiRoute } from './http/open-api-route';
 import { problemReply, unknownAddress } from './http/problem-reply';
@@ -19,7 +18,6 @@ import { version } from './version';
 
 export interface AppOptions {
   readonly house: House;
-  readonly callers: Callers;
   readonly checkReplies?: boolean;
   readonly rateLimits?: Readonly<Record<RateClass, RateLimit>>;
   /** Routes besides those of the features: for tests of the frame itself. */
@@ -37,7 +35,7 @@ const giveRequestId: RequestHandler = (_request, response, next) => {
 
 function requestLog(house: House): RequestHandler {
   return pinoHttp({
-    logger: house.logger,
+    logger: house.ground.logger,
     genReqId: (_request, response) => String(response.getHeader('X-Request-Id')),
     // Neither headers nor the query string are logged: they can hold cookies, tokens and names.
     serializers: {
@@ -59,14 +57,14 @@ function requestLog(house: House): RequestHandler {
 /** All routes of this house, with the document that describes them. */
 export function allRoutes(house: House, moreRoutes: readonly Route[] = []): readonly Route[] {
   const routes = [...features.flatMap((feature) => feature(house)), ...moreRoutes];
-  return [...routes, openApiRoute(routes, version, cookieNames(isHttps(house.config)).access)];
+  return [...routes, openApiRoute(routes, version, cookieNames(house.secure).access)];
 }
 
 /** The whole application without a port, so that tests can drive it. */
 export function createApp(options: AppOptions): Express {
   const { house } = options;
-  const { config } = house;
-  const secure = isHttps(config);
+  const { secure } = house;
+  const { config, logger } = house.ground;
   const app = express();
   app.disable('x-powered-by');
   app.set('query parser', 'simple');
@@ -76,7 +74,7 @@ export function createApp(options: AppOptions): Express {
   app.use(giveRequestId, requestLog(house), securityHeaders({ secure, styleHashes }), compression());
   app.use('/api', noStore, cookieParser());
   mountRoutes(app, allRoutes(house, options.moreRoutes), {
-    authenticate: authentication({ secret: config.secret, secure, callers: options.callers }),
+    authenticate: authentication({ secret: config.secret, secure, callers: house.callers }),
     secret: config.secret,
     secure,
     publicOrigin: new URL(config.publicUrl).origin,
@@ -85,7 +83,7 @@ export function createApp(options: AppOptions): Express {
   });
   app.use('/api', unknownAddress);
   app.use(staticClient(config.clientFolder));
-  app.use(problemReply(house.logger));
+  app.use(problemReply(logger));
   return app;
 }
 

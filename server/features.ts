@@ -1,6 +1,20 @@
+import { accountRoutes } from './accounts/account-routes';
+import { sessionListRoutes, sessionRoutes } from './accounts/session-routes';
+import { auditRoutes } from './audit/audit-routes';
+import { healthRoutes } from './health/health-routes';
 import type { House } from './house';
 import type { Route } from './http/route';
+import { letterRoutes } from './notices/letter-routes';
+import { invitationRoutes, teamRoutes } from './teams/team-routes';
 
 /** Every feature's routes, one line each. */
 export const features: readonly ((house: House) => readonly Route[])[] = [
+  healthRoutes,
+  sessionRoutes,
+  sessionListRoutes,
+  accountRoutes,
+  teamRoutes,
+  invitationRoutes,
+  auditRoutes,
+  letterRoutes,
 ];

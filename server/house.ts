@@ -1,17 +1,94 @@
+import type { About } from '../shared/contracts/session';
+import { AccountService } from './accounts/account-service';
+import { demoAccounts } from './accounts/demo-accounts';
+import { PasswordHasher } from './accounts/password-hash';
+import { PasswordService } from './accounts/password-service';
+import { PersonService } from './accounts/person-service';
+import { SessionService } from './accounts/session-service';
+import { SignInService } from './accounts/sign-in-service';
+import { TokenService } from './accounts/token-service';
+import { AuditService } from './audit/audit-service';
+import { isHttps } from './config';
 import type { Ground } from './database/ground';
+import type { Callers } from './http/authentication';
+import { LetterService } from './notices/letter-service';
+import { InvitationService } from './teams/invitation-service';
+import { MembershipService } from './teams/membership-service';
+import { TeamService } from './teams/team-service';
+import { version } from './version';
 
-/** The services of all features, made once per process. A feature reaches another one only through these. */
-export interface House extends Ground {
-  /** Stops what a service keeps running: pools, timers, servers. Last made, first closed. */
+/** What the house needs from whoever opens it. */
+export interface HouseOptions {
+  readonly ground: Ground;
+  readonly isSchemaReady: () => Promise<boolean>;
+  /** Cheaper hashing for tests that sign in often. */
+  readonly hasher?: PasswordHasher;
+}
+
+/** The services of all features, made once per process, one line each. A feature reaches another one only through these. */
+function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions) {
+  const memberships = new MembershipService(ground);
+  const people = new PersonService(ground, hasher);
+  const audit = new AuditService(ground, (transaction, ids) => people.names(transaction, ids));
+  const letters = new LetterService(ground);
+  const sessions = new SessionService({ ground, memberships, letters });
+  const signIn = new SignInService({ ground, people, hasher });
+  const passwords = new PasswordService({ ground, people, hasher, signIn, sessions, memberships, letters, audit });
+  const tokens = new TokenService({ ground, memberships, audit });
+  const account = new AccountService({ ground, people, audit });
+  const teams = new TeamService({ ground, people, sessions, audit });
+  const invitations = new InvitationService({ ground, people, sessions, signIn, memberships, letters, audit });
+  return { hasher, memberships, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+}
+
+const SWEEP_MS = 6 * 3600 * 1000;
+
+export interface House extends ReturnType<typeof createServices> {
+  readonly ground: Ground;
+  readonly secure: boolean;
+  readonly callers: Callers;
+  readonly describe: () => About;
+  readonly isReady: () => Promise<boolean>;
+  /** Begins what runs in the background: only the program that serves does. */
+  start(): Promise<void>;
+  /** From now on `isReady` says no, so that nobody sends new work here. */
+  drain(): void;
+  /** Stops what the services keep running: pools, timers, servers. */
   close(): Promise<void>;
 }
 
-export function createHouse(ground: Ground): House {
-  const closers: (() => Promise<void>)[] = [];
+export function createHouse(options: HouseOptions): House {
+  const { ground } = options;
+  const services = createServices(options);
+  const { letters, passwords, sessions, tokens } = services;
+  let draining = false;
+  let sweeper: NodeJS.Timeout | undefined;
   return {
-    ...ground,
+    ...services,
+    ground,
+    secure: isHttps(ground.config),
+    callers: { bySession: (sessionId, personId) => sessions.callerOf(sessionId, personId), byToken: (secret) => tokens.callerOf(secret) },
+    describe: () => ({
+      name: 'Slantwise',
+      version,
+      demoMode: ground.config.demoMode,
+      letterBox: letters.usesLetterBox,
+      demoAccounts: ground.config.demoMode ? demoAccounts.map(({ email, role }) => ({ email, role })) : [],
+    }),
+    isReady: async () => !draining && (await options.isSchemaReady()),
+    start: async () => {
+      await letters.start();
+      sweeper = setInterval(() => {
+        sessions.sweep().catch((error: unknown) => ground.logger.error({ err: error }, 'old sessions could not be swept'));
+      }, SWEEP_MS).unref();
+    },
+    drain: () => {
+      draining = true;
+    },
     close: async () => {
-      for (const closer of closers.reverse()) await closer();
+      clearInterval(sweeper);
+      await passwords.settled();
+      await letters.close();
     },
   };
 }

@@ -69,6 +69,18 @@ export class SessionService {
     return { session: this.described({ session, person, teams }), cookies: await this.secretsFor(transaction, session) };
   }
 
+  /** Opens a session after a sign-in, and ends the one the browser had before. */
+  async openFor(person: Pick<Person, 'id' | 'name' | 'email'>, options: { browser: Browser; replaces: Caller | null }): Promise<OpenedSession> {
+    const { transactions, now } = this.parts.ground;
+    const { replaces, browser } = options;
+    return transactions.run(async (transaction) => {
+      if (replaces !== null && replaces.sessionId !== null) {
+        await this.sessions.revoke(transaction, replaces.person.id, now(), { id: replaces.sessionId });
+      }
+      return this.open(transaction, person, { browser });
+    });
+  }
+
   /** The caller behind an access token, as things are now; null when the session is over or the member shut out. */
   async callerOf(sessionId: string, personId: string): Promise<Caller | null> {
     const { transactions, now } = this.parts.ground;

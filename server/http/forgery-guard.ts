@@ -38,9 +38,12 @@ export function requireForgeryToken(request: Request, options: { secret: string;
   if (readMethods.has(request.method) || bearerOf(request) !== null) return;
   const sent = String(request.headers['x-xsrf-token'] ?? '');
   const cookie = (request.cookies as Record<string, string | undefined>)[cookieNames(options.secure).forgery] ?? '';
-  const sessionId = options.sessionId ?? sent.split('.')[0] ?? '';
+  const sessionId = options.sessionId ?? forgerySession(sent);
   const expected = forgeryToken(options.secret, sessionId);
   if (sent === '' || !equalText(sent, expected) || (options.sessionId === null && !equalText(sent, cookie))) {
     throw new NotAllowed('The X-XSRF-TOKEN header does not belong to this session.');
   }
 }
+
+/** The session a forgery token names; whether it is ours, `requireForgeryToken` has checked. */
+export const forgerySession = (sent: string | undefined): string => sent?.split('.')[0] ?? '';

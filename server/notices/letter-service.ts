@@ -13,6 +13,12 @@ export interface NewLetter {
   readonly text: string;
 }
 
+interface Carrier {
+  readonly transport: Transporter;
+  readonly box: LetterBox | null;
+  readonly timer: NodeJS.Timeout;
+}
+
 const POLL_MS = 15_000;
 const MAX_ATTEMPTS = 10;
 /** 5 s, 10 s, 20 s ... about 40 minutes before the last one. */
@@ -31,30 +37,31 @@ function withTimeouts(smtpUrl: string): string {
 /** Letters go through an outbox row in the transaction of their cause, and are sent after it is committed. */
 export class LetterService {
   private readonly rows = new LetterRepository();
-  private timer: NodeJS.Timeout | null = null;
+  private carrier: Carrier | null = null;
   private sending: Promise<void> = Promise.resolve();
 
-  private constructor(
-    private readonly ground: Ground,
-    private readonly transport: Transporter,
-    private readonly box: LetterBox | null,
-  ) {}
+  constructor(private readonly ground: Ground) {}
 
-  /** Without an SMTP address a letter box on loopback receives everything. */
-  static async open(ground: Ground): Promise<LetterService> {
-    const box = ground.config.smtpUrl === null ? await LetterBox.open(ground.now) : null;
-    if (box !== null) ground.logger.warn('SMTP_URL is not set: letters go to the letter box of this server');
-    const transport = createTransport(withTimeouts(ground.config.smtpUrl ?? box?.url ?? ''), { from: ground.config.mailFrom });
-    return new LetterService(ground, transport, box);
+  /** Without an address of a mail server, this server's own letter box receives everything. */
+  get usesLetterBox(): boolean {
+    return this.ground.config.smtpUrl === null;
   }
 
-  get usesLetterBox(): boolean {
-    return this.box !== null;
+  /** Begins to send. Programs that only write letters never call this; the server finds their letters. */
+  async start(): Promise<void> {
+    const { config, logger, now } = this.ground;
+    const box = config.smtpUrl === null ? await LetterBox.open(now) : null;
+    if (box !== null) logger.warn('SMTP_URL is not set: letters go to the letter box of this server');
+    const transport = createTransport(withTimeouts(config.smtpUrl ?? box?.url ?? ''), { from: config.mailFrom });
+    // Now and then, for letters whose mail server failed and those another process left behind.
+    const timer = setInterval(() => this.sendDue(), POLL_MS).unref();
+    this.carrier = { transport, box, timer };
+    this.sendDue();
   }
 
   /** What the letter box received for these addresses, newest first. */
   received(addresses: ReadonlySet<string>): Letter[] {
-    return (this.box?.received() ?? []).filter((letter) => addresses.has(letter.to));
+    return (this.carrier?.box?.received() ?? []).filter((letter) => addresses.has(letter.to));
   }
 
   async post(transaction: Transaction, letter: NewLetter): Promise<void> {
@@ -73,42 +80,39 @@ export class LetterService {
     afterCommit(transaction, () => this.sendDue());
   }
 
-  /** Looks for due letters now and then, for those another process left behind. */
-  start(): void {
-    this.timer ??= setInterval(() => this.sendDue(), POLL_MS).unref();
-    this.sendDue();
-  }
-
   /** Resolves when everything that is due has been tried. */
   async settled(): Promise<void> {
     await this.sending;
   }
 
   async close(): Promise<void> {
-    if (this.timer !== null) clearInterval(this.timer);
+    clearInterval(this.carrier?.timer);
     await this.sending;
-    this.transport.close();
-    await this.box?.close();
+    this.carrier?.transport.close();
+    await this.carrier?.box?.close();
+    this.carrier = null;
   }
 
   private sendDue(): void {
+    const { carrier } = this;
+    if (carrier === null) return;
     this.sending = this.sending
-      .then(() => this.sendAll())
+      .then(() => this.sendAll(carrier.transport))
       .catch((error: unknown) => this.ground.logger.error({ err: error }, 'letters could not be looked up'));
   }
 
-  private async sendAll(): Promise<void> {
-    while (await this.sendOne());
+  private async sendAll(transport: Transporter): Promise<void> {
+    while (await this.sendOne(transport));
   }
 
   /** The row stays locked while the mail server answers, so that no other process sends the same letter. */
-  private async sendOne(): Promise<boolean> {
+  private async sendOne(transport: Transporter): Promise<boolean> {
     const { transactions, config, logger, now } = this.ground;
     return transactions.run(async (transaction) => {
       const letter = await this.rows.nextDue(transaction, now());
       if (letter === null) return false;
       try {
-        await this.transport.sendMail({
+        await transport.sendMail({
           to: letter.recipient,
           subject: letter.subject,
           text: unseal(config.secret, letter.sealedText),

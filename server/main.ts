@@ -1,0 +1,36 @@
+import { once } from 'node:events';
+import { createServer, type Server } from 'node:http';
+import { createApp } from './app';
+import { openHouse, runProgram } from './opened-house';
+
+const HEADERS_TIMEOUT_MS = 10_000;
+/** Uploads need longer than the minute that is enough for anything else. */
+const REQUEST_TIMEOUT_MS = 600_000;
+const DRAIN_MS = 30_000;
+
+/** Stops accepting, lets what runs finish for up to half a minute, then cuts the rest. */
+async function drain(server: Server): Promise<void> {
+  const closed = once(server, 'close');
+  server.close();
+  server.closeIdleConnections();
+  const cut = setTimeout(() => server.closeAllConnections(), DRAIN_MS).unref();
+  await closed;
+  clearTimeout(cut);
+}
+
+void runProgram(async () => {
+  const { house, config, close } = await openHouse(process.env);
+  const { logger } = house.ground;
+  const server = createServer({ headersTimeout: HEADERS_TIMEOUT_MS, requestTimeout: REQUEST_TIMEOUT_MS, connectionsCheckingInterval: 2000 }, createApp({ house }));
+  const asked = Promise.race(['SIGTERM', 'SIGINT'].map((signal) => once(process, signal).then(() => signal)));
+  await house.start();
+  server.listen(config.port, config.host);
+  await once(server, 'listening');
+  logger.info({ host: config.host, port: config.port }, 'listening');
+  const signal = await asked;
+  logger.info({ signal }, 'stopping');
+  house.drain();
+  await drain(server);
+  await close();
+  logger.info('stopped');
+});
