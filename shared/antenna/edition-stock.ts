@@ -1,7 +1,143 @@
 import type { Cells } from '../model/design-document';
-import type { CellStock, StockSite } from './cell-stock';
+import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
+import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
+import { editionChooser } from './edition-choice';
+import { editionWarnings } from './edition-warnings';
+import { regionFilter, type RegionFilter } from './excluded-regions';
 import { InvalidDesign } from './invalid-design';
+import { nearestPhaseTable } from './nearest-phase-table';
+import type { PreparedEdition } from './prepare-edition';
+import { searchStateReferenceRad, type CellRule, type CellStates } from './reference-search';
 
-export function editionStock(_cells: Extract<Cells, { kind: 'edition' }>, _site: StockSite): CellStock {
-  throw new InvalidDesign([{ pointer: '#/cells/editionId', detail: 'the engine predicts ideal and inline cells only' }]);
+type EditionCells = Extract<Cells, { kind: 'edition' }>;
+
+/** An edition's cells at the site of one design. */
+export interface EditionSite extends StockSite {
+  readonly edition: PreparedEdition;
+  readonly rule: CellRule;
+  /** Indices of cells that may be used at the design frequency, rising; regions by angle come on top. */
+  readonly allowed: Int32Array;
+  readonly regions: RegionFilter;
+}
+
+/** Cells of a published edition, each at its own angle of incidence and with the illumination's polarisation. */
+export function editionStock(cells: EditionCells, site: StockSite): CellStock {
+  const own = editionSite(cells, site);
+  return {
+    assign: (targetRad) => assignCells(own, targetRad),
+    respond: (assignment, frequencyHz) => (frequencyHz === own.designFrequencyHz ? assignment : respondAt(own, assignment, frequencyHz)),
+    searchReferenceRad: (query) => searchReferenceRad(own, query),
+    warnings: (assignment, frequencyHz) => editionWarnings(own, assignment, frequencyHz),
+  };
+}
+
+/** Checks that the edition is at hand, fits the panel and leaves cells to choose from. */
+export function editionSite(cells: EditionCells, site: StockSite): EditionSite {
+  const { edition } = site;
+  if (!edition) throw new InvalidDesign([{ pointer: '#/cells/editionId', detail: `edition ${cells.editionId} is not at hand` }]);
+  const { description } = edition.edition;
+  if (description.operation !== site.si.operation) {
+    const detail = `the cells of ${description.name} ${description.operation}, the panel is to ${site.si.operation}`;
+    throw new InvalidDesign([{ pointer: '#/cells/editionId', detail }]);
+  }
+  const excluded = new Set(cells.excludedCells);
+  const { usable } = edition.atFrequency(site.designFrequencyHz);
+  const allowed = Int32Array.from(edition.edition.cells.keys()).filter((k) => usable[k] === 1 && !excluded.has(edition.edition.cells[k].id));
+  if (allowed.length === 0) {
+    const detail = `no cell of ${description.name} is left at ${site.designFrequencyHz / 1e9} GHz: ${excluded.size} are excluded, the others have missing points`;
+    throw new InvalidDesign([{ pointer: '#/cells/excludedCells', detail }]);
+  }
+  const regions = regionFilter(edition.edition, edition.azimuths, site.designFrequencyHz);
+  return { ...site, edition, rule: cells.rule, allowed, regions };
+}
+
+/** Lists the cells allowed at one angle. The same array every time where no region applies. */
+export function allowedLister(site: EditionSite): (incidenceRad: number, azimuthRad: number) => Int32Array {
+  const { allowed, regions, edition } = site;
+  if (regions.isEmpty) return () => allowed;
+  const barred = new Uint8Array(edition.edition.cells.length);
+  return (incidenceRad, azimuthRad) => {
+    barred.fill(0);
+    return regions.mark(incidenceRad, azimuthRad, barred) ? allowed.filter((k) => barred[k] === 0) : allowed;
+  };
+}
+
+function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment {
+  const { light, edition, rule } = site;
+  const at = edition.atFrequency(site.designFrequencyHz);
+  const weigh = incidenceWeigher(edition, site.si.illumination.polarisation);
+  const allowedAt = allowedLister(site);
+  const choose = edition.sineSquaredNodes.length === 1 && at.nodeCount === 1 && at.entryCount === 1 && rule === 'nearest-phase' ? tableChooser(site) : editionChooser(at, rule);
+  const assignment: CellAssignment = emptyAssignment(targetRad.length);
+  const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  for (let n = 0; n < targetRad.length; n++) {
+    const weights = weigh(light.incidenceRad[n], light.azimuthRad[n]);
+    const chosen = choose(targetRad[n], weights, allowedAt(light.incidenceRad[n], light.azimuthRad[n]));
+    assignment.cellIndex[n] = chosen;
+    if (chosen < 0) continue;
+    coPolarResponse(at, chosen, weights, response);
+    assignment.magnitude[n] = response.magnitude;
+    assignment.phaseRad[n] = response.phaseRad;
+  }
+  return assignment;
+}
+
+function emptyAssignment(count: number): CellAssignment {
+  return { cellIndex: new Int32Array(count), phaseRad: new Float64Array(count), magnitude: new Float64Array(count) };
+}
+
+/** With one response per cell, whatever the angle, the phases are sorted once. Valid while no region takes cells away. */
+function tableChooser(site: EditionSite): (targetRad: number, weights: unknown, allowed: Int32Array) => number {
+  const { phaseRad } = site.edition.atFrequency(site.designFrequencyHz);
+  const tables = new Map<Int32Array, (targetRad: number) => number>();
+  return (targetRad, _weights, allowed) => {
+    if (allowed.length === 0) return -1;
+    let table = tables.get(allowed);
+    if (!table) {
+      table = nearestPhaseTable(Float64Array.from(allowed, (k) => phaseRad[k]));
+      if (tables.size < 2) tables.set(allowed, table);
+    }
+    return allowed[table(targetRad)];
+  };
+}
+
+function respondAt(site: EditionSite, assignment: CellAssignment, frequencyHz: number): CellResponses {
+  const at = site.edition.atFrequency(frequencyHz);
+  const weigh = incidenceWeigher(site.edition, site.si.illumination.polarisation);
+  const { cellIndex } = assignment;
+  const phaseRad = new Float64Array(cellIndex.length);
+  const magnitude = new Float64Array(cellIndex.length);
+  const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  for (let n = 0; n < cellIndex.length; n++) {
+    if (cellIndex[n] < 0) continue;
+    coPolarResponse(at, cellIndex[n], weigh(site.light.incidenceRad[n], site.light.azimuthRad[n]), response);
+    phaseRad[n] = response.phaseRad;
+    magnitude[n] = response.magnitude;
+  }
+  return { phaseRad, magnitude };
+}
+
+function searchReferenceRad(site: EditionSite, query: ReferenceQuery): number {
+  const at = site.edition.atFrequency(site.designFrequencyHz);
+  return searchStateReferenceRad({ query, rule: site.rule, capacity: site.edition.edition.cells.length, statesAt: stateFiller(site, at) });
+}
+
+/** Fills in the responses of all allowed cells at a position. */
+export function stateFiller(site: EditionSite, at: ReturnType<PreparedEdition['atFrequency']>): (n: number, states: CellStates) => void {
+  const weigh = incidenceWeigher(site.edition, site.si.illumination.polarisation);
+  const allowedAt = allowedLister(site);
+  const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  return (n, states) => {
+    const incidenceRad = site.light.incidenceRad[n];
+    const azimuthRad = site.light.azimuthRad[n];
+    const weights = weigh(incidenceRad, azimuthRad);
+    const allowed = allowedAt(incidenceRad, azimuthRad);
+    states.count = allowed.length;
+    for (let i = 0; i < allowed.length; i++) {
+      coPolarResponse(at, allowed[i], weights, response);
+      states.index[i] = allowed[i];
+      states.phaseRad[i] = response.phaseRad;
+      states.magnitude[i] = response.magnitude;
+    }
+  };
 }

@@ -1,0 +1,124 @@
+import type { Polarisation } from '../model/design-document';
+import { lagrangeWeights } from '../math/interpolate';
+import type { EditionAtFrequency } from './edition-at-frequency';
+import type { PreparedEdition } from './prepare-edition';
+
+/** Interpolation weights of one angle of incidence, for all cells of an edition. Reused between positions. */
+export interface IncidenceWeights {
+  /** Weight of each node, [theta][azimuth]. */
+  readonly nodes: Float64Array;
+  /** Share of each entry in the co-polar response: TE and TM, or the ports x and y; 1 where there is one entry. */
+  readonly shares: Float64Array;
+}
+
+/** Polynomials through more points than this swing between them; nearer nodes are taken. */
+const MOST_THETA_NODES = 5;
+const MOST_AZIMUTH_NODES = 3;
+
+/**
+ * Gives the weights of an angle of incidence: Lagrange's polynomial in sin^2 theta, and in cos 4 phi (or cos 2 phi) of
+ * azimuth. Beyond the angles given the nearest one stands in; whoever asks counts those.
+ *
+ * The co-polar response of a TE and TM description is S_TM cos^2 + S_TE sin^2 of the angle between the linear E and
+ * the plane of incidence: cos^2 phi for x, sin^2 phi for y. For circular polarisation both shares are one half, which is the
+ * part of either sense that an unrotated cell turns into the beam.
+ */
+export function incidenceWeigher(prepared: PreparedEdition, polarisation: Polarisation): (incidenceRad: number, azimuthRad: number) => IncidenceWeights {
+  const { sineSquaredNodes, smallestThetaRad, largestThetaRad, azimuths } = prepared;
+  const thetaWeights = new Float64Array(sineSquaredNodes.length);
+  const azimuthWeights = new Float64Array(azimuths.cosines.length);
+  const nodes = new Float64Array(thetaWeights.length * azimuthWeights.length);
+  const shares = new Float64Array(prepared.ports.entries.length);
+  const weights = { nodes, shares };
+  const lowest = azimuths.cosines[0];
+  const highest = azimuths.cosines[azimuths.cosines.length - 1];
+  return (incidenceRad, azimuthRad) => {
+    const sine = Math.sin(Math.min(largestThetaRad, Math.max(smallestThetaRad, incidenceRad)));
+    windowedWeights(sineSquaredNodes, sine * sine, MOST_THETA_NODES, thetaWeights);
+    const cosine = Math.min(highest, Math.max(lowest, Math.cos(azimuths.fold * azimuthRad)));
+    windowedWeights(azimuths.cosines, cosine, MOST_AZIMUTH_NODES, azimuthWeights);
+    for (let t = 0; t < thetaWeights.length; t++) {
+      for (let a = 0; a < azimuthWeights.length; a++) nodes[t * azimuthWeights.length + a] = thetaWeights[t] * azimuthWeights[a];
+    }
+    fillShares(shares, prepared.ports.kind, polarisation, azimuthRad);
+    return weights;
+  };
+}
+
+function fillShares(shares: Float64Array, kind: PreparedEdition['ports']['kind'], polarisation: Polarisation, azimuthRad: number): void {
+  if (kind === 'one') {
+    shares[0] = 1;
+    return;
+  }
+  const linear = polarisation === 'x' || polarisation === 'y';
+  if (!linear) {
+    shares.fill(0.5);
+    return;
+  }
+  const alongX = polarisation === 'x';
+  if (kind === 'x-and-y') {
+    shares[0] = alongX ? 1 : 0;
+    shares[1] = alongX ? 0 : 1;
+    return;
+  }
+  const cosine = Math.cos(azimuthRad);
+  const inPlane = alongX ? cosine * cosine : 1 - cosine * cosine;
+  shares[0] = 1 - inPlane;
+  shares[1] = inPlane;
+}
+
+/** Lagrange weights through the `most` nodes about `x`, zero for the others. */
+function windowedWeights(nodes: Float64Array, x: number, most: number, weights: Float64Array): void {
+  if (nodes.length <= most) {
+    lagrangeWeights(nodes, x, weights);
+    return;
+  }
+  let first = 0;
+  while (first + most < nodes.length && Math.abs(nodes[first + most] - x) < Math.abs(nodes[first] - x)) first += 1;
+  weights.fill(0);
+  lagrangeWeights(nodes.subarray(first, first + most), x, weights.subarray(first, first + most));
+}
+
+/** Interpolated phase of one entry of one cell, rad, on the edition's own branch. */
+export function entryPhaseRad(at: EditionAtFrequency, cell: number, entry: number, nodes: Float64Array): number {
+  return weightedSum(at.phaseRad, (cell * at.entryCount + entry) * at.nodeCount, nodes);
+}
+
+/** Interpolated natural logarithm of the magnitude of one entry of one cell. */
+export function entryLogMagnitude(at: EditionAtFrequency, cell: number, entry: number, nodes: Float64Array): number {
+  return weightedSum(at.logMagnitude, (cell * at.entryCount + entry) * at.nodeCount, nodes);
+}
+
+function weightedSum(values: Float64Array, from: number, weights: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < weights.length; i++) sum += weights[i] * values[from + i];
+  return sum;
+}
+
+/** A complex response in polar form. */
+export interface PolarResponse {
+  magnitude: number;
+  phaseRad: number;
+}
+
+/** Co-polar response of a cell at weighed angles: the shares of its entries, added as complex numbers. Written into `out`. */
+export function coPolarResponse(at: EditionAtFrequency, cell: number, weights: IncidenceWeights, out: PolarResponse): PolarResponse {
+  const { nodes, shares } = weights;
+  if (shares.length === 1) {
+    out.magnitude = Math.exp(entryLogMagnitude(at, cell, 0, nodes));
+    out.phaseRad = entryPhaseRad(at, cell, 0, nodes);
+    return out;
+  }
+  let re = 0;
+  let im = 0;
+  for (let e = 0; e < shares.length; e++) {
+    if (shares[e] === 0) continue;
+    const size = shares[e] * Math.exp(entryLogMagnitude(at, cell, e, nodes));
+    const phase = entryPhaseRad(at, cell, e, nodes);
+    re += size * Math.cos(phase);
+    im += size * Math.sin(phase);
+  }
+  out.magnitude = Math.hypot(re, im);
+  out.phaseRad = Math.atan2(im, re);
+  return out;
+}
