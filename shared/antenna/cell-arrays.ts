@@ -50,8 +50,8 @@ export function cellArrays({ lattice, light, targetRad, assignment, responses }:
     incidenceAzimuthDeg: new Float32Array(count),
   };
   for (let n = 0; n < count; n++) {
-    arrays.targetPhaseDeg[n] = phaseInTurn(targetRad[n]);
-    arrays.phaseDeg[n] = phaseInTurn(responses.phaseRad[n]);
+    arrays.targetPhaseDeg[n] = phaseInTurnDeg(targetRad[n]);
+    arrays.phaseDeg[n] = phaseInTurnDeg(responses.phaseRad[n]);
     arrays.errorDeg[n] = degFromRad(wrapRad(responses.phaseRad[n] - targetRad[n]));
     const magnitude = responses.magnitude[n];
     arrays.responseDb[n] = magnitude > 0 ? Math.max(FLOOR_DBI, amplitudeRatioToDb(magnitude)) : FLOOR_DBI;
@@ -61,8 +61,8 @@ export function cellArrays({ lattice, light, targetRad, assignment, responses }:
   return arrays;
 }
 
-/** In [0, 360) even after rounding to single precision. */
-function phaseInTurn(rad: number): number {
+/** A phase in degrees, in [0, 360) even after rounding to single precision. */
+export function phaseInTurnDeg(rad: number): number {
   const deg = Math.fround(positiveDeg(degFromRad(rad)));
   return deg >= 360 ? 0 : deg;
 }
