@@ -2,8 +2,8 @@ import type { DraftSaved, PanelDetail } from '../../../shared/contracts/projects
 import type { DesignDocument } from '../../../shared/model/design-document';
 import { replacedAt } from '../../../shared/model/design-pointer';
 import { STARTING_DESIGN } from '../../../shared/model/starting-design';
+import type { SaveOutcome } from '../api/draft-client';
 import { DraftAutosave, LONGEST_WAIT_MS, SAVE_PAUSE_MS } from './draft-autosave';
-import type { SaveOutcome } from './draft-autosave';
 import type { SaveProgress } from './save-progress';
 
 const aimed = (thetaDeg: number): DesignDocument => replacedAt(STARTING_DESIGN, '/requirement/beams/0/thetaDeg', thetaDeg);

@@ -1,7 +1,8 @@
 import type { DraftSaved, PanelDetail } from '../../../shared/contracts/projects';
 import type { DesignDocument } from '../../../shared/model/design-document';
+import type { SaveOutcome } from '../api/draft-client';
 import { sameDesign } from './design-differences';
-import type { DraftFault, SaveProgress } from './save-progress';
+import type { SaveProgress } from './save-progress';
 
 /** A pause of typing this long sends the draft. */
 export const SAVE_PAUSE_MS = 600;
@@ -9,13 +10,6 @@ export const SAVE_PAUSE_MS = 600;
 export const LONGEST_WAIT_MS = 1400;
 const FIRST_RETRY_MS = 1000;
 const LONGEST_RETRY_MS = 15_000;
-
-export type SaveOutcome =
-  | { readonly kind: 'saved'; readonly saved: DraftSaved }
-  | { readonly kind: 'stale'; readonly current: PanelDetail }
-  | { readonly kind: 'refused'; readonly detail: string; readonly faults: readonly DraftFault[] }
-  /** No answer, or one that says nothing about the draft: to be tried again. */
-  | { readonly kind: 'unreachable' };
 
 export interface AutosaveLinks {
   send(design: DesignDocument, etag: string): Promise<SaveOutcome>;
@@ -70,6 +64,12 @@ export class DraftAutosave {
   resume(etag: string): void {
     this.etag = etag;
     this.halted = false;
+  }
+
+  /** Keeps the design without sending it, until `resume`. */
+  hold(design: DesignDocument): void {
+    this.halted = true;
+    this.queue(design);
   }
 
   /** Stops the clock; what waits stays in the local copy. */
