@@ -1,9 +1,10 @@
 import { HttpClient } from '@angular/common/http';
 import { Injectable, inject } from '@angular/core';
 import { firstValueFrom } from 'rxjs';
+import type { Observable } from 'rxjs';
 import type { Problem } from '../../../shared/contracts/common';
-import { draftSaved, panelDetail } from '../../../shared/contracts/projects';
-import type { DraftSaved, PanelDetail } from '../../../shared/contracts/projects';
+import { draftSaved, panelDetail, revisionDetail } from '../../../shared/contracts/projects';
+import type { DraftSaved, PanelDetail, RevisionDetail } from '../../../shared/contracts/projects';
 import type { DesignDocument } from '../../../shared/model/design-document';
 import { failedCall } from './failed-call';
 
@@ -18,6 +19,19 @@ export type PanelOutcome =
   | { readonly kind: 'found'; readonly panel: PanelDetail }
   | { readonly kind: 'refused'; readonly problem: Problem }
   | { readonly kind: 'unreachable' };
+
+export type RevisionOutcome =
+  | { readonly kind: 'found'; readonly revision: RevisionDetail }
+  | { readonly kind: 'refused'; readonly problem: Problem }
+  | { readonly kind: 'unreachable' };
+
+/** A draft to be frozen: the ETag says which state, the key makes a repeated call one revision. */
+export interface FreezeRequest {
+  readonly panelId: string;
+  readonly message: string;
+  readonly etag: string;
+  readonly idempotencyKey: string;
+}
 
 /** The draft of a panel, with the ETag that guards it. */
 @Injectable({ providedIn: 'root' })
@@ -42,6 +56,25 @@ export class DraftClient {
     } catch (error) {
       return saveFailure(error);
     }
+  }
+
+  /** Freezes the draft as the next revision. */
+  freeze({ panelId, message, etag, idempotencyKey }: FreezeRequest): Promise<RevisionOutcome> {
+    const headers = { 'If-Match': etag, 'Idempotency-Key': idempotencyKey };
+    return revisionOutcome(this.http.post<unknown>(`/api/panels/${encodeURIComponent(panelId)}/revisions`, { message }, { headers }));
+  }
+
+  readRevision(revisionId: string): Promise<RevisionOutcome> {
+    return revisionOutcome(this.http.get<unknown>(`/api/revisions/${encodeURIComponent(revisionId)}`));
+  }
+}
+
+async function revisionOutcome(call: Observable<unknown>): Promise<RevisionOutcome> {
+  try {
+    return { kind: 'found', revision: revisionDetail.parse(await firstValueFrom(call)) };
+  } catch (error) {
+    const failure = failedCall(error);
+    return failure.kind === 'unreachable' ? failure : { kind: 'refused', problem: failure.problem };
   }
 }
 

@@ -6,6 +6,7 @@ import type { BlockArray } from '../../../shared/contracts/binary-block';
 import { editionDetail, editionResponsesHead, familyList } from '../../../shared/contracts/library';
 import type { EditionDetail, FamilySummary } from '../../../shared/contracts/library';
 import type { CellResponseTable } from '../../../shared/model/cell-family';
+import { failedCall } from './failed-call';
 
 /** Narrows the list of families; every part is optional. */
 export interface FamilySearch {
@@ -16,6 +17,10 @@ export interface FamilySearch {
 }
 
 export type EditionWithResponses = EditionDetail & { readonly responses: CellResponseTable };
+
+export type EditionOutcome =
+  | { readonly kind: 'found'; readonly edition: EditionWithResponses }
+  | { readonly kind: 'missing'; readonly reason: string };
 
 /** Reading the library. A published edition never changes, so each is fetched once. */
 @Injectable({ providedIn: 'root' })
@@ -30,14 +35,17 @@ export class LibraryClient {
   }
 
   /** An edition with the responses of its cells; the second call for the same edition costs nothing. */
-  edition(editionId: string): Promise<EditionWithResponses> {
-    const known = this.fetched.get(editionId);
-    if (known) return known;
-    const fetching = this.fetchEdition(editionId);
+  async edition(editionId: string): Promise<EditionOutcome> {
+    const fetching = this.fetched.get(editionId) ?? this.fetchEdition(editionId);
     this.fetched.set(editionId, fetching);
-    // A failure is not kept, so that the next call tries again.
-    fetching.catch(() => this.fetched.delete(editionId));
-    return fetching;
+    try {
+      return { kind: 'found', edition: await fetching };
+    } catch (error) {
+      // A failure is not kept, so that the next call tries again.
+      this.fetched.delete(editionId);
+      const failure = failedCall(error);
+      return { kind: 'missing', reason: failure.kind === 'refused' ? failure.problem.detail : 'The server is out of reach' };
+    }
   }
 
   private async fetchEdition(editionId: string): Promise<EditionWithResponses> {
