@@ -9,5 +9,5 @@ export interface SeedStep {
 
 /** What demo mode fills a new database with, one line each, in order. */
 export const seedSteps: readonly SeedStep[] = [
-  { name: 'demo accounts', run: ({ ground, ...services }) => ensureDemoAccounts({ ground, ...services }, ground.config.demoPassword ?? '') },
+  { name: 'demo accounts', run: (house) => ensureDemoAccounts(house, house.ground.config.demoPassword ?? '') },
 ];

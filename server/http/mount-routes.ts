@@ -9,7 +9,7 @@ import { requestIdOf } from './problem-reply';
 import { InvalidInput, MethodNotAllowed, NotAllowed, NotSignedIn, UnsupportedType, type Fault } from './problems';
 import { addressKey, rateLimiters, rateLimits, type RateLimit } from './rate-limits';
 import type { Policy, RateClass, Route, RouteContext, UploadedFile } from './route';
-import { bodyFaults, parameterFaults } from './schema-faults';
+import { parseBody, parseParameters } from './schema-faults';
 import { sendAnswer } from './send-answer';
 
 const MAX_BODY_BYTES = 1024 * 1024;
@@ -90,22 +90,20 @@ interface ParsedParts {
 /** Parses params, query and body, and names the faults of all three together. */
 function parseParts(route: Route, request: Request): ParsedParts {
   const faults: Fault[] = [];
+  const dataOf = (result: ReturnType<typeof parseBody> | null): unknown => {
+    if (result?.success === false) faults.push(...result.faults);
+    return result?.success === true ? result.data : undefined;
+  };
   const parameters = (schema: Route['params'], given: unknown): unknown => {
     faults.push(...faultsOfJson(given).map(({ pointer, detail }) => ({ pointer: pointer.replace(/^#\/?/, ''), detail })));
-    const parsed = schema?.safeParse(given);
-    if (parsed?.success === false) faults.push(...parameterFaults(parsed.error));
-    return parsed?.data;
+    return dataOf(schema === undefined ? null : parseParameters(schema, given));
   };
   const params = parameters(route.params, { ...request.params });
   const query = parameters(route.query, { ...request.query });
-  let body: unknown;
-  if (route.body !== undefined) {
-    const given: unknown = route.upload === undefined ? request.body : { ...request.body };
-    const unfit = faultsOfJson(given);
-    const parsed = unfit.length === 0 ? route.body.safeParse(given) : null;
-    faults.push(...unfit, ...(parsed?.success === false ? bodyFaults(parsed.error) : []));
-    body = parsed?.data;
-  }
+  const given: unknown = route.upload === undefined ? request.body : { ...request.body };
+  const unfit = route.body === undefined ? [] : faultsOfJson(given);
+  faults.push(...unfit);
+  const body = dataOf(route.body === undefined || unfit.length > 0 ? null : parseBody(route.body, given));
   if (faults.length > 0) throw new InvalidInput(faults);
   return { params, query, body };
 }
