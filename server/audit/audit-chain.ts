@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { canonicalJson } from './canonical-json';
+import { canonicalJson } from '../../shared/model/canonical-json';
 
 /** Hash before the first row of a team. */
 export const CHAIN_START = '0'.repeat(64);
