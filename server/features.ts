@@ -4,6 +4,7 @@ import { auditRoutes } from './audit/audit-routes';
 import { healthRoutes } from './health/health-routes';
 import type { House } from './house';
 import type { Route } from './http/route';
+import { libraryRoutes } from './library/library-routes';
 import { letterRoutes } from './notices/letter-routes';
 import { invitationRoutes, teamRoutes } from './teams/team-routes';
 
@@ -17,4 +18,5 @@ export const features: readonly ((house: House) => readonly Route[])[] = [
   invitationRoutes,
   auditRoutes,
   letterRoutes,
+  libraryRoutes,
 ];

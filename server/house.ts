@@ -11,6 +11,9 @@ import { AuditService } from './audit/audit-service';
 import { isHttps } from './config';
 import type { Ground } from './database/ground';
 import type { Callers } from './http/authentication';
+import { ImportService } from './library/import-service';
+import { createInspectionRunner } from './library/inspection-runner';
+import { LibraryService } from './library/library-service';
 import { LetterService } from './notices/letter-service';
 import { InvitationService } from './teams/invitation-service';
 import { MembershipService } from './teams/membership-service';
@@ -38,7 +41,14 @@ function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions)
   const account = new AccountService({ ground, people, audit });
   const teams = new TeamService({ ground, people, sessions, audit });
   const invitations = new InvitationService({ ground, people, sessions, signIn, memberships, letters, audit });
-  return { hasher, memberships, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+  const library = new LibraryService(ground, {
+    namesOfPeople: (transaction, ids) => people.names(transaction, ids),
+    usesOfEdition: async () => [],
+    countUses: async () => new Map(),
+  });
+  const inspections = createInspectionRunner();
+  const imports = new ImportService(ground, { library, audit, runner: inspections });
+  return { library, inspections, imports, hasher, memberships, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
 }
 
 const SWEEP_MS = 6 * 3600 * 1000;
@@ -60,7 +70,7 @@ export interface House extends ReturnType<typeof createServices> {
 export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
-  const { letters, passwords, sessions, tokens } = services;
+  const { inspections, letters, passwords, sessions, tokens } = services;
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
   return {
@@ -89,6 +99,7 @@ export function createHouse(options: HouseOptions): House {
       clearInterval(sweeper);
       await passwords.settled();
       await letters.close();
+      await inspections.close();
     },
   };
 }

@@ -1,5 +1,6 @@
 import { ensureDemoAccounts } from './accounts/demo-account-service';
 import type { House } from './house';
+import { seedLibrary } from './library/library-seed-service';
 
 export interface SeedStep {
   readonly name: string;
@@ -10,4 +11,5 @@ export interface SeedStep {
 /** What demo mode fills a new database with, one line each, in order. */
 export const seedSteps: readonly SeedStep[] = [
   { name: 'demo accounts', run: (house) => ensureDemoAccounts(house, house.ground.config.demoPassword ?? '') },
+  { name: 'cell library', run: seedLibrary },
 ];

@@ -1,7 +1,7 @@
 import type { AuditService } from '../audit/audit-service';
 import type { Ground } from '../database/ground';
 import type { MembershipService } from '../teams/membership-service';
-import { demoAccounts, isolationAccounts, type DemoAccount } from './demo-accounts';
+import { DEMO_TEAM, demoAccounts, isolationAccounts, type DemoAccount } from './demo-accounts';
 import type { PasswordHasher } from './password-hash';
 import type { PersonService } from './person-service';
 
@@ -38,5 +38,19 @@ async function createAccount({ ground, people, memberships, audit }: Parts, acco
       object: `person:${person.id}`,
       detail: { email: account.email, roles: [account.role] },
     });
+  });
+}
+
+/** The demonstration person of a role with the team, for seeding in that person's name. */
+export async function demoActor(
+  parts: Pick<Parts, 'ground' | 'people' | 'memberships'>,
+  role: DemoAccount['role'],
+): Promise<{ teamId: string; person: { id: string } }> {
+  const email = demoAccounts.find((account) => account.role === role)?.email ?? '';
+  return parts.ground.transactions.run(async (transaction) => {
+    const person = await parts.people.findByEmail(transaction, email);
+    if (person === null) throw new Error(`the demo account ${email} is missing`);
+    const team = await parts.memberships.ensureTeam(transaction, DEMO_TEAM);
+    return { teamId: team.id, person: { id: person.id } };
   });
 }

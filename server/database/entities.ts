@@ -5,6 +5,10 @@ import { PersonalToken } from '../accounts/personal-token-entity';
 import { RefreshToken } from '../accounts/refresh-token-entity';
 import { Session } from '../accounts/session-entity';
 import { SignInAttempt } from '../accounts/sign-in-attempt-entity';
+import { CellFamily } from '../library/cell-family-entity';
+import { EditionFile } from '../library/edition-file-entity';
+import { Edition } from '../library/edition-entity';
+import { KeptFile } from '../library/kept-file-entity';
 import { OutboxLetter } from '../notices/letter-entity';
 import { Invitation } from '../teams/invitation-entity';
 import { Membership } from '../teams/membership-entity';
@@ -23,4 +27,8 @@ export const entities: readonly (new () => object)[] = [
   SignInAttempt,
   OutboxLetter,
   AuditRow,
+  CellFamily,
+  Edition,
+  KeptFile,
+  EditionFile,
 ];

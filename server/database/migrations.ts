@@ -1,6 +1,7 @@
 import type { MigrationInterface } from 'typeorm';
 import { PeopleAndTeams1764590400000 } from './migrations/1764590400000-people-and-teams';
 import { Audit1764590500000 } from './migrations/1764590500000-audit';
+import { Library1764590600000 } from './migrations/1764590600000-library';
 
 /**
  * Every migration, one line each, oldest first. One file per feature and change: `migrations/<timestamp>-<what>.ts`
@@ -10,4 +11,5 @@ import { Audit1764590500000 } from './migrations/1764590500000-audit';
 export const migrations: readonly (new () => MigrationInterface)[] = [
   PeopleAndTeams1764590400000,
   Audit1764590500000,
+  Library1764590600000,
 ];

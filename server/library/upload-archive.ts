@@ -41,7 +41,7 @@ async function unpackZip(archive: NamedBytes): Promise<NamedBytes[]> {
   const declared = declaredEntryCount(archive.bytes);
   if (declared !== Object.keys(zip.files).length) faults.push('it names the same entry more than once');
   if (entries.length > ARCHIVE_LIMITS.entries) faults.push(`it holds ${entries.length} files; at most ${ARCHIVE_LIMITS.entries} are read`);
-  if (faults.length > 0) throw new InvalidInput(faults.map((fault) => ({ pointer: '/files', detail: `${archive.name}: ${fault}` })));
+  if (faults.length > 0) throw new InvalidInput(faults.map((fault) => ({ pointer: '#/files', detail: `${archive.name}: ${fault}` })));
   const budget = { left: Math.min(ARCHIVE_LIMITS.totalBytes, archive.bytes.length * ARCHIVE_LIMITS.ratio) };
   const read: NamedBytes[] = [];
   for (const entry of entries) read.push({ name: baseName(entry.name), bytes: await inflate(archive.name, entry, budget) });
@@ -68,7 +68,7 @@ async function checkSums(archive: NamedBytes): Promise<void> {
 
 function unreadable(name: string, cause: unknown): InvalidInput {
   const reason = cause instanceof Error ? cause.message.split('\n')[0] : 'unknown reason';
-  return new InvalidInput([{ pointer: '/files', detail: `${name}: the zip cannot be read (${reason}); send it again, or send the files singly` }]);
+  return new InvalidInput([{ pointer: '#/files', detail: `${name}: the zip cannot be read (${reason}); send it again, or send the files singly` }]);
 }
 
 function entryFault(entry: JSZip.JSZipObject): string | null {
@@ -88,7 +88,7 @@ function inflate(archiveName: string, entry: JSZip.JSZipObject, budget: { left: 
     const stop = (detail: string) => {
       stream.pause();
       stream.removeAllListeners('data');
-      reject(new InvalidInput([{ pointer: '/files', detail: `${archiveName}: ${detail}` }]));
+      reject(new InvalidInput([{ pointer: '#/files', detail: `${archiveName}: ${detail}` }]));
     };
     stream.on('data', (chunk: Buffer) => {
       bytes += chunk.length;
@@ -124,5 +124,5 @@ function refuseDuplicates(files: readonly NamedBytes[]): void {
     seen.add(key);
   }
   if (twice.size === 0) return;
-  throw new InvalidInput([...twice].map((name) => ({ pointer: '/files', detail: `${name} comes more than once; keep one, or rename` })));
+  throw new InvalidInput([...twice].map((name) => ({ pointer: '#/files', detail: `${name} comes more than once; keep one, or rename` })));
 }
