@@ -1,5 +1,7 @@
 import type { ApertureField } from './aperture-field';
-import { rowShiftM } from './panel-lattice';
+import type { ApertureSpectrum } from './aperture-spectrum';
+import { exactFarField } from './exact-far-field';
+import { interpolatedFarField } from './interpolated-far-field';
 
 /** Array factor and its derivatives to u and v at one direction. Reused between calls. */
 export interface FarFieldSample {
@@ -17,159 +19,67 @@ export interface FarFieldSample {
   vvIm: number;
 }
 
-/** F(u, v) = sum of a_n exp(+j k (x_n u + y_n v)), element factor not applied. */
+export function newFarFieldSample(): FarFieldSample {
+  return { re: 0, im: 0, uRe: 0, uIm: 0, vRe: 0, vIm: 0, uuRe: 0, uuIm: 0, uvRe: 0, uvIm: 0, vvRe: 0, vvIm: 0 };
+}
+
+/** F(u, v) = sum of a_n exp(+j k (x_n u + y_n v)), element factor not applied, phase origin in the middle of the panel. */
 export interface FarField {
   /** |F|^2. */
   powerAt(u: number, v: number): number;
   /** F with first and second derivatives; the same object every time. */
   derivativesAt(u: number, v: number): FarFieldSample;
-  /** Inner sums of every row at one u, for many v at that u. Written into `re` and `im`. */
-  rowSumsAt(u: number, re: Float64Array, im: Float64Array): void;
 }
 
-/** Exact sums over the cells, row by row with the powers of exp(j k stepX u) shared by all rows. */
-export function exactFarField(field: ApertureField, wavenumber: number): FarField {
-  const { grid } = field;
-  const { columnCount, rowCount } = grid;
-  const cosines = new Float64Array(columnCount);
-  const sines = new Float64Array(columnCount);
-  const rowRe = new Float64Array(rowCount);
-  const rowIm = new Float64Array(rowCount);
-  // Origin of x in the middle of the columns: phases of far terms stay small, and the derivatives well scaled.
-  const middle = (columnCount - 1) / 2;
-  const centreXM = grid.firstXM + middle * grid.stepXM;
+/** Below this many grid points a plain sum costs less than interpolating. */
+const SUMMED_DIRECTLY = 600;
+/** Step of the difference quotients: phase, in rad, that it makes at the edge of the panel. */
+const DIFFERENCE_RAD = 0.05;
 
-  const fillPowers = (u: number): void => {
-    const step = wavenumber * grid.stepXM * u;
-    const start = -middle * step;
-    // A product per column drifts by about 1e-16 each; starting afresh every 64 keeps large panels exact too.
-    for (let c = 0; c < columnCount; c += 64) {
-      let cosine = Math.cos(start + c * step);
-      let sine = Math.sin(start + c * step);
-      const stepCos = Math.cos(step);
-      const stepSin = Math.sin(step);
-      const end = Math.min(columnCount, c + 64);
-      for (let i = c; i < end; i++) {
-        cosines[i] = cosine;
-        sines[i] = sine;
-        [cosine, sine] = [cosine * stepCos - sine * stepSin, cosine * stepSin + sine * stepCos];
-      }
-    }
+/** Far field by whichever way is cheaper: exact sums for small panels, interpolation of the spectrum for the others. */
+export function farFieldOf(field: ApertureField, spectrum: ApertureSpectrum, wavenumber: number): FarField {
+  if (field.re.length <= SUMMED_DIRECTLY) return exactFarField(field, wavenumber);
+  const at = interpolatedFarField(spectrum, wavenumber);
+  const { grid } = spectrum;
+  const stepU = (2 * DIFFERENCE_RAD) / (wavenumber * grid.columnCount * grid.stepXM);
+  const stepV = (2 * DIFFERENCE_RAD) / (wavenumber * grid.rowCount * grid.stepYM);
+  return {
+    powerAt: (u, v) => {
+      const { re, im } = at(u, v);
+      return re * re + im * im;
+    },
+    derivativesAt: differenceQuotients(at, stepU, stepV),
   };
-
-  const rowSumsAt = (u: number, outRe: Float64Array, outIm: Float64Array): void => {
-    fillPowers(u);
-    const { re, im } = field;
-    for (let r = 0; r < rowCount; r++) {
-      let sumRe = 0;
-      let sumIm = 0;
-      const from = r * columnCount;
-      for (let c = 0; c < columnCount; c++) {
-        const a = re[from + c];
-        const b = im[from + c];
-        sumRe += a * cosines[c] - b * sines[c];
-        sumIm += a * sines[c] + b * cosines[c];
-      }
-      const shift = wavenumber * u * (centreXM + rowShiftM(grid, r));
-      const shiftCos = Math.cos(shift);
-      const shiftSin = Math.sin(shift);
-      outRe[r] = sumRe * shiftCos - sumIm * shiftSin;
-      outIm[r] = sumRe * shiftSin + sumIm * shiftCos;
-    }
-  };
-
-  const powerAt = (u: number, v: number): number => {
-    rowSumsAt(u, rowRe, rowIm);
-    return columnPower({ re: rowRe, im: rowIm }, wavenumber * grid.firstYM * v, wavenumber * grid.stepYM * v);
-  };
-
-  const derivatives = derivativeSums(field, wavenumber, { cosines, sines, fillPowers, middle });
-  return { powerAt, derivativesAt: derivatives, rowSumsAt };
-}
-
-/** |sum over rows of G_r exp(j (start + r step))|^2. */
-export function columnPower(rows: { re: Float64Array; im: Float64Array }, startRad: number, stepRad: number): number {
-  let sumRe = 0;
-  let sumIm = 0;
-  let cosine = Math.cos(startRad);
-  let sine = Math.sin(startRad);
-  const stepCos = Math.cos(stepRad);
-  const stepSin = Math.sin(stepRad);
-  for (let r = 0; r < rows.re.length; r++) {
-    sumRe += rows.re[r] * cosine - rows.im[r] * sine;
-    sumIm += rows.re[r] * sine + rows.im[r] * cosine;
-    const turned = cosine * stepCos - sine * stepSin;
-    sine = cosine * stepSin + sine * stepCos;
-    cosine = turned;
-  }
-  return sumRe * sumRe + sumIm * sumIm;
-}
-
-interface PowerTable {
-  readonly cosines: Float64Array;
-  readonly sines: Float64Array;
-  readonly middle: number;
-  fillPowers(u: number): void;
 }
 
 /**
- * Sums weighted by j k x and j k y and their products. The aperture's own centre is the origin: the derivatives then
- * belong to the field less a phase that |F| does not see.
+ * Central differences over nine points. They serve to find where a climb goes next; their error, of the order of
+ * DIFFERENCE_RAD^2, slows the climb by as little and does not move its end, since only steps that climb are taken.
  */
-function derivativeSums(field: ApertureField, wavenumber: number, table: PowerTable): (u: number, v: number) => FarFieldSample {
-  const { grid, re, im } = field;
-  const { columnCount, rowCount } = grid;
-  const { cosines, sines, middle } = table;
-  const middleRow = (rowCount - 1) / 2;
-  const sample: FarFieldSample = { re: 0, im: 0, uRe: 0, uIm: 0, vRe: 0, vIm: 0, uuRe: 0, uuIm: 0, uvRe: 0, uvIm: 0, vvRe: 0, vvIm: 0 };
+function differenceQuotients(
+  at: (u: number, v: number) => { re: number; im: number },
+  stepU: number,
+  stepV: number,
+): (u: number, v: number) => FarFieldSample {
+  const sample = newFarFieldSample();
+  const re = new Float64Array(9);
+  const im = new Float64Array(9);
   return (u, v) => {
-    table.fillPowers(u);
-    for (const key of Object.keys(sample) as (keyof FarFieldSample)[]) sample[key] = 0;
-    for (let r = 0; r < rowCount; r++) {
-      let [re0, im0, re1, im1, re2, im2] = [0, 0, 0, 0, 0, 0];
-      const shiftM = rowShiftM(grid, r);
-      for (let c = 0; c < columnCount; c++) {
-        const at = r * columnCount + c;
-        const termRe = re[at] * cosines[c] - im[at] * sines[c];
-        const termIm = re[at] * sines[c] + im[at] * cosines[c];
-        const kx = wavenumber * ((c - middle) * grid.stepXM + shiftM);
-        re0 += termRe;
-        im0 += termIm;
-        re1 += kx * termRe;
-        im1 += kx * termIm;
-        re2 += kx * kx * termRe;
-        im2 += kx * kx * termIm;
-      }
-      const ky = wavenumber * (r - middleRow) * grid.stepYM;
-      const phase = ky * v + wavenumber * shiftM * u;
-      const cosine = Math.cos(phase);
-      const sine = Math.sin(phase);
-      addRow(sample, { cosine, sine, ky }, [re0, im0, re1, im1, re2, im2]);
+    for (let i = 0; i < 9; i++) {
+      const value = at(u + ((i % 3) - 1) * stepU, v + (Math.floor(i / 3) - 1) * stepV);
+      re[i] = value.re;
+      im[i] = value.im;
     }
+    // Points 3, 4, 5 lie along u and 1, 4, 7 along v.
+    [sample.re, sample.im] = [re[4], im[4]];
+    [sample.uRe, sample.uIm] = [(re[5] - re[3]) / (2 * stepU), (im[5] - im[3]) / (2 * stepU)];
+    [sample.vRe, sample.vIm] = [(re[7] - re[1]) / (2 * stepV), (im[7] - im[1]) / (2 * stepV)];
+    sample.uuRe = (re[5] - 2 * re[4] + re[3]) / (stepU * stepU);
+    sample.uuIm = (im[5] - 2 * im[4] + im[3]) / (stepU * stepU);
+    sample.vvRe = (re[7] - 2 * re[4] + re[1]) / (stepV * stepV);
+    sample.vvIm = (im[7] - 2 * im[4] + im[1]) / (stepV * stepV);
+    sample.uvRe = (re[8] - re[6] - re[2] + re[0]) / (4 * stepU * stepV);
+    sample.uvIm = (im[8] - im[6] - im[2] + im[0]) / (4 * stepU * stepV);
     return sample;
   };
-}
-
-function addRow(
-  sample: FarFieldSample,
-  { cosine, sine, ky }: { cosine: number; sine: number; ky: number },
-  [re0, im0, re1, im1, re2, im2]: readonly [number, number, number, number, number, number],
-): void {
-  const fRe = re0 * cosine - im0 * sine;
-  const fIm = re0 * sine + im0 * cosine;
-  const xRe = re1 * cosine - im1 * sine;
-  const xIm = re1 * sine + im1 * cosine;
-  sample.re += fRe;
-  sample.im += fIm;
-  // Each derivative brings a factor j k x or j k y: j (a + j b) = -b + j a, and j^2 = -1.
-  sample.uRe -= xIm;
-  sample.uIm += xRe;
-  sample.vRe -= ky * fIm;
-  sample.vIm += ky * fRe;
-  sample.uuRe -= re2 * cosine - im2 * sine;
-  sample.uuIm -= re2 * sine + im2 * cosine;
-  sample.uvRe -= ky * xRe;
-  sample.uvIm -= ky * xIm;
-  sample.vvRe -= ky * ky * fRe;
-  sample.vvIm -= ky * ky * fIm;
 }

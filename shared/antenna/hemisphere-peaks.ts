@@ -1,4 +1,3 @@
-import { spectrumPower } from './aperture-spectrum';
 import { elementPower, type RadiationPattern } from './radiation-pattern';
 
 /** A local maximum on the samples of the hemisphere; its power is relative, element factor included. */
@@ -21,8 +20,8 @@ export interface SampleGrid {
 
 /** Natural samples of the pattern that fall into the visible circle. */
 export function sampleGrid(pattern: RadiationPattern): SampleGrid {
-  const { grid, columns, rows } = pattern.spectrum;
-  const uStep = (2 * Math.PI) / (pattern.wavenumber * grid.stepXM * columns);
+  const { grid, periodU, rows } = pattern.spectrum;
+  const uStep = (2 * Math.PI) / (pattern.wavenumber * grid.stepXM * periodU);
   const vStep = (2 * Math.PI) / (pattern.wavenumber * grid.stepYM * rows);
   return { uStep, vStep, uReach: Math.floor(1 / uStep), vReach: Math.floor(1 / vStep) };
 }
@@ -34,10 +33,15 @@ export function sampleCount({ uReach, vReach }: SampleGrid): number {
 /** Power times element factor along one line of samples of constant u, v rising; -1 outside the circle. */
 export function sampleLine(pattern: RadiationPattern, samples: SampleGrid, m: number, line: Float64Array): void {
   const { vReach, uStep, vStep } = samples;
+  const { columns, rows, re, im } = pattern.spectrum;
+  const column = (m - columns * Math.floor(m / columns)) * rows;
   const uSquared = m * uStep * (m * uStep);
+  let row = -vReach - rows * Math.floor(-vReach / rows);
   for (let n = -vReach; n <= vReach; n++) {
     const wSquared = 1 - uSquared - n * vStep * (n * vStep);
-    line[n + vReach] = wSquared < 0 ? -1 : spectrumPower(pattern.spectrum, m, n) * elementPower(Math.sqrt(wSquared), pattern.radiateExponent);
+    const at = column + row;
+    line[n + vReach] = wSquared < 0 ? -1 : (re[at] * re[at] + im[at] * im[at]) * elementPower(Math.sqrt(wSquared), pattern.radiateExponent);
+    row = row + 1 === rows ? 0 : row + 1;
   }
 }
 

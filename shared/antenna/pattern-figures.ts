@@ -17,7 +17,7 @@ type FromPattern =
 export type PatternFigures = Pick<Figures, FromPattern> & { readonly peakUncertaintyDeg: number };
 
 const LISTED_LOBES = 6;
-const FEWEST_CUT_SAMPLES = 720;
+const FEWEST_CUT_SAMPLES = 480;
 const MOST_CUT_SAMPLES = 60_000;
 
 export interface PatternQuery {
@@ -69,7 +69,7 @@ function beamFigures(pattern: RadiationPattern, beam: Direction, found: PatternL
   };
 }
 
-/** Beamwidth and sidelobes on a great circle through the wanted direction; at least eight samples to the narrowest lobe. */
+/** Beamwidth and sidelobes on a great circle through the wanted direction; about nine samples to the narrowest lobe. */
 function planeMetrics(pattern: RadiationPattern, beam: Direction, plane: CutPlane): CutMetrics {
   const { grid } = pattern.spectrum;
   const [fromRad, toRad] = visibleArcRad(beam, plane);
@@ -80,7 +80,7 @@ function planeMetrics(pattern: RadiationPattern, beam: Direction, plane: CutPlan
     return { halfPowerBeamwidthDeg: reason, sidelobeDb: reason };
   }
   const at = greatCircle(beam, plane);
-  const samples = Math.max(FEWEST_CUT_SAMPLES, Math.ceil(lobes * 8));
+  const samples = Math.max(FEWEST_CUT_SAMPLES, Math.ceil(lobes * 6));
   return cutMetrics({ power: (angleRad) => directivityRatio(pattern, at(angleRad)), fromRad, toRad, samples });
 }
 

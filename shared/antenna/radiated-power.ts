@@ -7,16 +7,18 @@ import { kernelSpectrum } from './kernel-spectrum';
  * N log N. `fieldExponent` is the element factor's in field.
  */
 export function radiatedPower(spectrum: ApertureSpectrum, wavenumber: number, fieldExponent: number): number {
-  const { columns, rows, power, grid } = spectrum;
-  const kernel = kernelSpectrum({ grid, columns, rows, wavenumber, powerExponent: 2 * fieldExponent });
+  const { grid, periodU, rows, re, im } = spectrum;
+  const kernel = kernelSpectrum({ grid, columns: periodU, rows, wavenumber, powerExponent: 2 * fieldExponent });
   const half = rows / 2;
+  const powerAt = (at: number): number => re[at] * re[at] + im[at] * im[at];
   let total = 0;
-  for (let m = 0; m < columns; m++) {
+  // On a staggered lattice the second period repeats the first with v moved half a period; the kernel does too.
+  for (let m = 0; m < periodU; m++) {
     const at = m * rows;
     const kernelAt = m * (half + 1);
-    let sum = power[at] * kernel[kernelAt] + power[at + half] * kernel[kernelAt + half];
-    for (let n = 1; n < half; n++) sum += (power[at + n] + power[at + rows - n]) * kernel[kernelAt + n];
+    let sum = powerAt(at) * kernel[kernelAt] + powerAt(at + half) * kernel[kernelAt + half];
+    for (let n = 1; n < half; n++) sum += (powerAt(at + n) + powerAt(at + rows - n)) * kernel[kernelAt + n];
     total += sum;
   }
-  return total / (columns * rows);
+  return total / (periodU * rows);
 }

@@ -2,7 +2,7 @@ import type { Direction } from '../waves/conventions';
 import { outwardDirection } from '../waves/conventions';
 import type { ApertureField } from './aperture-field';
 import { apertureSpectrum, type ApertureSpectrum } from './aperture-spectrum';
-import { exactFarField, type FarField } from './far-field';
+import { farFieldOf, type FarField } from './far-field';
 import { radiatedPower } from './radiated-power';
 
 /** Everything that the figures and cuts ask of one aperture field at one frequency. */
@@ -10,6 +10,7 @@ export interface RadiationPattern {
   readonly wavenumber: number;
   /** Exponent b of the element factor cos^b(theta), in field. */
   readonly radiateExponent: number;
+  readonly field: ApertureField;
   readonly spectrum: ApertureSpectrum;
   readonly farField: FarField;
   /** Integral of |F|^2 over the outward hemisphere. */
@@ -21,8 +22,9 @@ export function radiationPattern(field: ApertureField, wavenumber: number, radia
   return {
     wavenumber,
     radiateExponent,
+    field,
     spectrum,
-    farField: exactFarField(field, wavenumber),
+    farField: farFieldOf(field, spectrum, wavenumber),
     radiatedPower: radiatedPower(spectrum, wavenumber, radiateExponent),
   };
 }
