@@ -60,7 +60,7 @@ export class Product {
   /** Refuses when another start runs on this data folder; ends a server whose start was killed. */
   async claim() {
     const earlier = existsSync(this.#instanceFile()) ? JSON.parse(readFileSync(this.#instanceFile(), 'utf8')) : null;
-    if (earlier !== null && isAlive(earlier.pid) && commandLine(earlier.pid).includes(earlier.script)) {
+    if (earlier !== null && isAlive(earlier.pid) && commandLine(earlier.pid) === earlier.command) {
       throw new Refusal(`The data folder ${this.data.path} is in use by the instance at ${earlier.address} (process ${earlier.pid}).`);
     }
     if (earlier?.serverPid && commandLine(earlier.serverPid).includes(mainFile)) await endProcess(earlier.serverPid);
@@ -72,8 +72,8 @@ export class Product {
   }
 
   #record(serverPid) {
-    const script = process.argv[1];
-    writeFileSync(this.#instanceFile(), JSON.stringify({ pid: process.pid, script, serverPid, address: this.address }), { mode: 0o600 });
+    const record = { pid: process.pid, command: commandLine(process.pid), serverPid, address: this.address };
+    writeFileSync(this.#instanceFile(), JSON.stringify(record), { mode: 0o600 });
   }
 
   release() {
