@@ -82,7 +82,8 @@ function addParameter(facts: CollectedFacts, parameter: DetectedParameter): void
   if (!facts.parameters.some(({ name }) => name === parameter.name)) facts.parameters.push(parameter);
 }
 
-const ASSIGNMENT = /(?:^|[\s;,(])([A-Za-z]\w{0,60})\s{0,4}[=:]\s{0,4}([^\s,;()]+)/g;
+// The value is only looked at, since in `substrate: eps_r = 2.2` it is the next name.
+const ASSIGNMENT = /(?<!\w)([A-Za-z]\w{0,60})\s{0,4}[=:]\s{0,4}(?=([^\s,;()]+))/g;
 
 /** Facts in the comments of a network file, such as `! patch_side_mm = 3.00` or `! theta_deg = 15`. */
 export function factsOfComments(comments: readonly TouchstoneComment[]): FileFacts {
