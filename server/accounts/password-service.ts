@@ -100,6 +100,7 @@ export class PasswordService {
     await ground.transactions.run(async (transaction) => {
       const person = await people.findByEmail(transaction, email);
       if (person === null) return;
+      await people.lock(transaction, person.id);
       const now = ground.now();
       const recent = await this.resets.countSince(transaction, person.id, new Date(now.getTime() - LINK_LIFE_MS));
       if (recent >= MAX_LINKS) return;

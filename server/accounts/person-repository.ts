@@ -11,6 +11,11 @@ export class PersonRepository {
     return managerOf(transaction).getRepository(Person).findOneBy({ email });
   }
 
+  /** Holds the person's row until the transaction ends, for counts that two must not take at once. */
+  async lock(transaction: Transaction, id: string): Promise<void> {
+    await managerOf(transaction).getRepository(Person).findOne({ where: { id }, lock: { mode: 'pessimistic_write' } });
+  }
+
   async findAll(transaction: Transaction, ids: readonly string[]): Promise<Person[]> {
     return ids.length === 0 ? [] : managerOf(transaction).getRepository(Person).findBy({ id: In([...ids]) });
   }

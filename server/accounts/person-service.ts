@@ -39,6 +39,11 @@ export class PersonService {
     return person;
   }
 
+  /** Makes others who lock the same person wait until the transaction ends. */
+  async lock(transaction: Transaction, id: string): Promise<void> {
+    await this.people.lock(transaction, id);
+  }
+
   async cards(transaction: Transaction, ids: readonly string[]): Promise<ReadonlyMap<string, PersonCard>> {
     const people = await this.people.findAll(transaction, ids);
     return new Map(people.map((person) => [person.id, cardOf(person)]));

@@ -5,7 +5,7 @@ import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { DataSource } from 'typeorm';
-import { role, scope, type Role, type Scope } from '../../shared/contracts/common';
+import { role, type Role, type Scope } from '../../shared/contracts/common';
 import type { Letter } from '../../shared/contracts/session';
 import { ensureDemoAccounts } from '../../server/accounts/demo-account-service';
 import { PasswordHasher } from '../../server/accounts/password-hash';
@@ -21,6 +21,7 @@ import { createLogger } from '../../server/log';
 import { ApiClient } from './api-client';
 import { createTestDatabase } from './postgres';
 
+export const TEST_SECRET = 'a signing key only for tests, long enough';
 export const TEST_PASSWORD = 'a password only for tests';
 /** Holds every role, in the other team: whatever is refused to this account is refused because of the team. */
 export const STRANGER = 'stranger@bench.example';
@@ -53,7 +54,7 @@ export class Api {
     const config = readConfig({
       DATABASE_URL: database.url,
       SLANTWISE_DATA: folder,
-      SLANTWISE_SECRET: 'a signing key only for tests, long enough',
+      SLANTWISE_SECRET: TEST_SECRET,
       SLANTWISE_DEMO: 'on',
       SLANTWISE_DEMO_PASSWORD: TEST_PASSWORD,
       LOG_LEVEL: 'silent',
@@ -97,7 +98,7 @@ export class Api {
   }
 
   /** A script with a new personal token of this account. */
-  async withToken(account: string, scopes: readonly Scope[] = scope.options): Promise<ApiClient> {
+  async withToken(account: string, scopes: readonly Scope[]): Promise<ApiClient> {
     const client = await this.signedIn(account);
     const answer = await client.post('/api/tokens', { name: 'test', scopes, days: 1 });
     if (answer.status !== 201) throw new Error(`the token was refused: ${answer.bytes.toString('utf8')}`);
