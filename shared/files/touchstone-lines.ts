@@ -40,6 +40,9 @@ export function splitTouchstoneLines(file: FileText, faults: FileFaults): Touchs
     else if ((content.startsWith('#') || content.startsWith('[')) && FOREIGN.test(content)) reportForeign(content, number, faults);
     else lines.push({ number, text: content });
   });
+  const last = lines[lines.length - 1];
+  if (last !== undefined && last.number === rows.length && !/[\r\n]$/.test(file.text) && !/^\[end\]/i.test(last.text))
+    faults.notice(last.number, 'The last line has no line end: its last number may be cut short');
   return { lines, comments };
 }
 

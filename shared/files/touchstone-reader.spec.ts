@@ -113,6 +113,7 @@ describe('reading version 1 files', () => {
     ['a Fortran exponent', `# Hz S MA R 50\n1.0D9 ${TERMS}\n`, /^2 warning: .*D exponent/],
     ['an equal repeat', `# GHz S MA R 50\n1 ${TERMS}\n1 ${TERMS}\n`, /^3 warning: .*merged/],
     ['Latin-1 in a comment', encodeLatin(`! angle \u00b0\n# GHz S MA R 50\n1 ${TERMS}\n`), /^1 warning: .*beyond ASCII/],
+    ['a last line without an end', `# GHz S MA R 50\n1 ${TERMS}`, /^2 notice: The last line has no line end/],
     ['a byte order mark', `\ufeff# GHz S MA R 50\n1 ${TERMS}\n`, /^1 notice: A byte order mark/],
     ['UTF-16', encodeUtf16(`# GHz S MA R 50\n1 ${TERMS}\n`), /^1 notice: The file is in UTF-16LE/],
   ])('reads %s and says so', (_name, text, said) => {
