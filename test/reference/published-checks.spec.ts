@@ -1,12 +1,13 @@
 import { loadChecks, loadPending, type CheckTable } from './published-check';
 import { arrayChecks } from './tables/array-checks';
 import { apertureChecks } from './tables/aperture-checks';
+import { cellChecks } from './tables/cell-checks';
 import { conventionsChecks } from './tables/conventions-checks';
 import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks };
 const checks = loadChecks();
 const pending = loadPending();
 

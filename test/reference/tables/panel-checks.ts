@@ -34,7 +34,7 @@ function comparePanel(check: PublishedCheck): void {
     ['beamwidth across', 'deg', numberOf(figures.halfPowerBeamwidthDeg.across), numberIn(expected, 'hpbw_ax_deg'), 'hpbw_deg'],
     ['sidelobe along', 'dB', numberOf(figures.sidelobeDb.along), numberIn(expected, 'sll_el_dB'), 'sll_dB'],
     ['sidelobe across', 'dB', numberOf(figures.sidelobeDb.across), numberIn(expected, 'sll_ax_dB'), 'sll_dB'],
-    ['highest lobe of the hemisphere', 'dB', hemisphere.levelDb, numberIn(lobe, 'level_dB'), 'sll_dB'],
+    ['highest lobe of the hemisphere', 'dB', numberOf(hemisphere.levelDb), numberIn(lobe, 'level_dB'), 'sll_dB'],
     ['taper', '', dbToPowerRatio(numberOf(figures.taperDb)), numberIn(expected, 'taper_eff_elements'), 'eff'],
     ['phase loss', 'dB', numberOf(figures.phaseLossDb), numberIn(expected, 'phase_loss_dB'), 'phase_loss_dB'],
   ];
