@@ -23,7 +23,7 @@ const parts = {
   },
 };
 
-const program = (name, args, options) => run(join(projectFolder, 'node_modules/.bin', name), args, { cwd: projectFolder, ...options });
+const program = (name, args, options) => run(join(projectFolder, 'node_modules/.bin', name), args, { cwd: projectFolder, env: { ...process.env, NO_COLOR: '1', FORCE_COLOR: '0' }, ...options });
 
 const sourceFiles = (folder) =>
   readdirSync(join(projectFolder, folder), { recursive: true, withFileTypes: true })

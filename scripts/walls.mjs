@@ -142,7 +142,7 @@ export function wallConfig(rootPath) {
           checkAllOrigins: true,
           checkUnknownLocals: true,
           checkInternals: true,
-          message: 'This file ({{ from.file.categories }}) may not open "{{ dependency.source }}": see the table of walls in scripts/walls.mjs.',
+          message: 'This file ({{ from.file.categories }}) may not open "{{ dependency.source }}", or there is no such file: see the table of walls in scripts/walls.mjs.',
           policies: [...roomPolicies(), ...packagePolicies()],
         },
       ],
