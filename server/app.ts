@@ -78,6 +78,7 @@ export function createApp(options: AppOptions): Express {
     secret: config.secret,
     secure,
     publicOrigin: new URL(config.publicUrl).origin,
+    replays: house.replays,
     checkReplies: options.checkReplies ?? false,
     rateLimits: options.rateLimits,
   });

@@ -15,6 +15,7 @@ import { ImportService } from './library/import-service';
 import { createInspectionRunner } from './library/inspection-runner';
 import { LibraryService } from './library/library-service';
 import { LetterService } from './notices/letter-service';
+import { ReplayService } from './replays/replay-service';
 import { InvitationService } from './teams/invitation-service';
 import { MembershipService } from './teams/membership-service';
 import { TeamService } from './teams/team-service';
@@ -31,6 +32,7 @@ export interface HouseOptions {
 /** The services of all features, made once per process, one line each. A feature reaches another one only through these. */
 function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions) {
   const memberships = new MembershipService(ground);
+  const replays = new ReplayService(ground);
   const people = new PersonService(ground, hasher);
   const audit = new AuditService(ground, (transaction, ids) => people.names(transaction, ids));
   const letters = new LetterService(ground);
@@ -48,7 +50,7 @@ function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions)
   });
   const inspections = createInspectionRunner();
   const imports = new ImportService(ground, { library, audit, runner: inspections });
-  return { library, inspections, imports, hasher, memberships, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+  return { library, inspections, imports, hasher, memberships, replays, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
 }
 
 const SWEEP_MS = 6 * 3600 * 1000;
@@ -70,7 +72,7 @@ export interface House extends ReturnType<typeof createServices> {
 export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
-  const { inspections, letters, passwords, sessions, tokens } = services;
+  const { inspections, letters, passwords, replays, sessions, tokens } = services;
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
   return {
@@ -89,7 +91,7 @@ export function createHouse(options: HouseOptions): House {
     start: async () => {
       await letters.start();
       sweeper = setInterval(() => {
-        sessions.sweep().catch((error: unknown) => ground.logger.error({ err: error }, 'old sessions could not be swept'));
+        Promise.all([sessions.sweep(), replays.sweep()]).catch((error: unknown) => ground.logger.error({ err: error }, 'old rows could not be swept'));
       }, SWEEP_MS).unref();
     },
     drain: () => {

@@ -10,6 +10,7 @@ import { EditionFile } from '../library/edition-file-entity';
 import { Edition } from '../library/edition-entity';
 import { KeptFile } from '../library/kept-file-entity';
 import { OutboxLetter } from '../notices/letter-entity';
+import { Replay } from '../replays/replay-entity';
 import { Invitation } from '../teams/invitation-entity';
 import { Membership } from '../teams/membership-entity';
 import { Team } from '../teams/team-entity';
@@ -27,6 +28,7 @@ export const entities: readonly (new () => object)[] = [
   SignInAttempt,
   OutboxLetter,
   AuditRow,
+  Replay,
   CellFamily,
   Edition,
   KeptFile,

@@ -1,6 +1,7 @@
 import type { MigrationInterface } from 'typeorm';
 import { PeopleAndTeams1764590400000 } from './migrations/1764590400000-people-and-teams';
 import { Audit1764590500000 } from './migrations/1764590500000-audit';
+import { Replays1764590550000 } from './migrations/1764590550000-replays';
 import { Library1764590600000 } from './migrations/1764590600000-library';
 
 /**
@@ -11,5 +12,6 @@ import { Library1764590600000 } from './migrations/1764590600000-library';
 export const migrations: readonly (new () => MigrationInterface)[] = [
   PeopleAndTeams1764590400000,
   Audit1764590500000,
+  Replays1764590550000,
   Library1764590600000,
 ];

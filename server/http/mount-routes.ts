@@ -3,6 +3,7 @@ import multer from 'multer';
 import type { Authenticate } from './authentication';
 import { hasRole, type Caller } from './caller';
 import { requireIfMatch } from './etag';
+import { runOnce, type ReplayStore } from './idempotency';
 import { refuseForeignOrigin, requireForgeryToken } from './forgery-guard';
 import { faultsOfJson } from './json-limits';
 import { requestIdOf } from './problem-reply';
@@ -21,6 +22,7 @@ export interface MountOptions {
   readonly publicOrigin: string;
   /** Parse every answer with its reply schema and fail on a difference: for tests. */
   readonly checkReplies: boolean;
+  readonly replays: ReplayStore;
   readonly rateLimits?: Readonly<Record<RateClass, RateLimit>>;
 }
 
@@ -139,7 +141,9 @@ export function mountRoutes(app: Express, routes: readonly Route[], options: Mou
   const identify = identifyStep(options);
   for (const route of routes) {
     const answer: RequestHandler = async (request, response) => {
-      await sendAnswer(route, await route.run(contextOf(route, request, response)), response, options.checkReplies);
+      const context = contextOf(route, request, response);
+      const result = route.idempotent === true ? await runOnce(options.replays, route, context) : await route.run(context);
+      await sendAnswer(route, result, response, options.checkReplies);
     };
     const steps = [identify, limiters[route.rate ?? 'general'], guardStep(route, options), ...bodySteps(route), answer];
     for (const step of steps) mounted.add(step);

@@ -23,7 +23,13 @@ function parametersOf(route: Route): JsonObject[] {
     }));
   };
   const version = { name: 'If-Match', in: 'header', required: true, schema: { type: 'string' }, description: 'ETag of the version you read' };
-  return [...described(route.params, 'path'), ...described(route.query, 'query'), ...(route.versioned ? [version] : [])];
+  const repetition = { name: 'Idempotency-Key', in: 'header', required: false, schema: { type: 'string', minLength: 8, maxLength: 200 }, description: 'A repetition with the same key gets the first answer' };
+  return [
+    ...described(route.params, 'path'),
+    ...described(route.query, 'query'),
+    ...(route.versioned ? [version] : []),
+    ...(route.idempotent ? [repetition] : []),
+  ];
 }
 
 function requestBodyOf(route: Route): JsonObject {
@@ -47,6 +53,7 @@ function refusalsOf(route: Route): JsonObject {
   const statuses = [
     ...(route.policy.kind === 'signed-in' ? ['401', '403'] : []),
     ...(route.path.includes(':') ? ['404'] : []),
+    ...(route.idempotent ? ['409'] : []),
     ...(route.versioned ? ['412', '428'] : []),
     ...(route.body !== undefined || route.upload !== undefined ? ['413', '415'] : []),
     ...(hasInput ? ['422'] : []),

@@ -93,6 +93,8 @@ interface RouteFrame<Pol extends Policy, P extends Schema, Q extends Schema, B e
   readonly bytes?: readonly string[];
   /** The object has a strong ETag and the change must name it in If-Match. */
   readonly versioned?: true;
+  /** Repeated with the same Idempotency-Key it gives the first answer and does nothing; for JSON answers. */
+  readonly idempotent?: true;
   readonly upload?: UploadRule;
   /** Largest JSON body; 1 MB unless said. */
   readonly maxBodyBytes?: number;

@@ -7,14 +7,31 @@ import { Conflict, Unavailable } from '../../server/http/problems';
 import { contentTag, refuseStale, versionTag } from '../../server/http/etag';
 import { defineRoute, type Route } from '../../server/http/route';
 import { Api, TEST_SECRET } from '../support/api';
-import { ApiClient } from '../support/api-client';
+import type { ApiClient } from '../support/api-client';
 import { expectInvalid, expectNotAllowed, expectNotSignedIn, expectProblem, problemOf } from '../support/problems';
 
 const member = { kind: 'signed-in', scope: 'read' } as const;
 const note = z.strictObject({ text: z.string(), more: z.unknown().optional() });
 
 /** Routes that do nothing but show what the frame does around a handler. */
+let made = 0;
 const probes: readonly Route[] = [
+  defineRoute({
+    method: 'post',
+    path: '/api/probe/things',
+    summary: 'Makes a thing',
+    policy: member,
+    body: note,
+    reply: z.strictObject({ number: z.number() }),
+    status: 201,
+    idempotent: true,
+    handler: async ({ body }) => {
+      if (body.text === 'refused') throw new Conflict('Not this one.');
+      await new Promise((resolve) => setTimeout(resolve, body.text === 'slow' ? 300 : 0));
+      made += 1;
+      return new Reply({ number: made }, { location: `/api/probe/things/${made}`, etag: versionTag(made) });
+    },
+  }),
   defineRoute({ method: 'post', path: '/api/probe/notes', summary: 'Echo', policy: member, body: note, reply: note, status: 201, handler: ({ body }) => body }),
   defineRoute({
     method: 'put',
@@ -209,6 +226,41 @@ describe('the frame around every route', () => {
       expect(stale.headers.get('etag')).toBe('"v7"');
       const done = await put('"v7"');
       expect([done.status, done.headers.get('etag')]).toEqual([200, '"v8"']);
+    });
+  });
+
+  describe('repetitions', () => {
+    const make = (text: string, key: string, sender = client) => sender.post('/api/probe/things', { text }, { headers: { 'idempotency-key': key } });
+
+    it('gives a repetition with the same key the first answer and does nothing', async () => {
+      const before = made;
+      const first = await make('x', 'key-number-one');
+      const again = await make('x', 'key-number-one');
+      expect(made).toBe(before + 1);
+      expect([again.status, again.json, again.headers.get('location'), again.headers.get('etag')]).toEqual([201, first.json, first.headers.get('location'), first.headers.get('etag')]);
+      expect([first.headers.get('idempotency-replayed'), again.headers.get('idempotency-replayed')]).toEqual([null, 'true']);
+    });
+
+    it('runs once when the same request comes several times at once', async () => {
+      const before = made;
+      const answers = await Promise.all([1, 2, 3, 4].map(() => make('slow', 'key-all-at-once')));
+      expect(made).toBe(before + 1);
+      expect(answers.map(({ status }) => status).sort()).toEqual([201, 409, 409, 409]);
+    });
+
+    it('refuses a key that was used for something else, and frees one whose request was refused', async () => {
+      await make('x', 'key-number-two');
+      expectProblem(await make('y', 'key-number-two'), problemOf('conflict', 409, 'This Idempotency-Key was used for another request.'));
+      expect([(await make('refused', 'key-number-three')).status, (await make('x', 'key-number-three')).status]).toEqual([409, 201]);
+    });
+
+    it('keeps the keys of different people apart, and wants no key', async () => {
+      const before = made;
+      const other = await api.signedIn('lab');
+      await Promise.all([make('x', 'key-of-everyone'), make('x', 'key-of-everyone', other)]);
+      await client.post('/api/probe/things', { text: 'x' });
+      expect(made).toBe(before + 3);
+      expectInvalid(await make('x', 'short'), [{ pointer: 'Idempotency-Key', detail: 'must have 8 to 200 visible ASCII characters, best a random id' }]);
     });
   });
 

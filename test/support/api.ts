@@ -39,14 +39,21 @@ export interface ApiOptions {
 
 /** The application on a database of its own, with the demonstration accounts and one stranger. */
 export class Api {
-  private constructor(
-    readonly url: string,
-    readonly config: Config,
-    readonly house: House,
-    readonly dataSource: DataSource,
-    readonly routes: readonly Route[],
-    private readonly closers: readonly (() => Promise<unknown>)[],
-  ) {}
+  readonly url: string;
+  readonly config: Config;
+  readonly house: House;
+  readonly dataSource: DataSource;
+  readonly routes: readonly Route[];
+  private readonly closers: readonly (() => Promise<unknown>)[];
+
+  private constructor(parts: Pick<Api, 'url' | 'config' | 'house' | 'dataSource' | 'routes'>, closers: readonly (() => Promise<unknown>)[]) {
+    this.url = parts.url;
+    this.config = parts.config;
+    this.house = parts.house;
+    this.dataSource = parts.dataSource;
+    this.routes = parts.routes;
+    this.closers = closers;
+  }
 
   static async start(options: ApiOptions = {}): Promise<Api> {
     const database = await createTestDatabase();
@@ -81,7 +88,8 @@ export class Api {
       () => database.drop(),
       async () => rmSync(folder, { recursive: true, force: true }),
     ];
-    return new Api(`http://127.0.0.1:${port}`, config, house, dataSource, allRoutes(house, options.moreRoutes), closers);
+    const routes = allRoutes(house, options.moreRoutes);
+    return new Api({ url: `http://127.0.0.1:${port}`, config, house, dataSource, routes }, closers);
   }
 
   anonymous(): ApiClient {
