@@ -55,21 +55,32 @@ function rowTransforms({ grid, columns, wavenumber, powerExponent }: KernelQuery
     }
   };
   const step = staggered ? 2 : 1;
-  for (let start = 0; start < step; start++) {
-    const offset = start === 1 ? 0.5 : 0;
-    for (let d = start; d < lagRows; d += 2 * step) {
-      fill(planes[0], d, offset);
-      fill(planes[1], d + step, offset);
+  for (let pair = 0; pair < lagRows; pair += 2 * step) {
+    for (let start = 0; start < step; start++) {
+      const offset = start === 1 ? 0.5 : 0;
+      fill(planes[0], pair + start, offset);
+      fill(planes[1], pair + start + step, offset);
       transform.transform(planes[0], planes[1]);
-      for (let m = 0; m < columns; m++) {
-        const cosine = Math.cos((2 * Math.PI * offset * m) / columns);
-        const sine = Math.sin((2 * Math.PI * offset * m) / columns);
-        result[m * lagRows + d] = planes[0][m] * cosine - planes[1][m] * sine;
-        if (d + step < lagRows) result[m * lagRows + d + step] = planes[0][m] * sine + planes[1][m] * cosine;
-      }
+      storePair({ result, lagRows, columns, offset }, planes, pair + start, step);
     }
   }
   return result;
+}
+
+/** The even rows' transforms are real: the two planes hold one each, once the half-step offset is turned out of them. */
+function storePair(
+  target: { result: Float64Array; lagRows: number; columns: number; offset: number },
+  [first, second]: Float64Array[],
+  row: number,
+  step: number,
+): void {
+  const { result, lagRows, columns, offset } = target;
+  for (let m = 0; m < columns; m++) {
+    const cosine = Math.cos((2 * Math.PI * offset * m) / columns);
+    const sine = Math.sin((2 * Math.PI * offset * m) / columns);
+    if (row < lagRows) result[m * lagRows + row] = first[m] * cosine - second[m] * sine;
+    if (row + step < lagRows) result[m * lagRows + row + step] = first[m] * sine + second[m] * cosine;
+  }
 }
 
 /** Transforms along y of the even extension of the lag rows, two columns at a time. */

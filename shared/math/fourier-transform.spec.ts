@@ -1,5 +1,5 @@
 import * as fc from 'fast-check';
-import FFT = require('fft.js');
+import FFT from 'fft.js';
 import { nextPowerOfTwo, radixFourTransform } from './fourier-transform';
 
 const noise = (size: number, seed: number): Float64Array => Float64Array.from({ length: size }, (_, i) => Math.sin(seed + 12.9898 * i * i + i));
