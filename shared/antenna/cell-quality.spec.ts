@@ -170,6 +170,56 @@ describe('finding what was damaged, by the right check', () => {
   });
 });
 
+describe('what a measurement adds', () => {
+  /** Complex Gaussian noise by Box and Muller from a congruential generator of fixed seed. */
+  function withNoise(edition: CellEdition, sigma: number): CellEdition {
+    let state = 12345;
+    const uniform = () => (state = (state * 1103515245 + 12345) % 2147483648) / 2147483648 + 1e-12;
+    const values = edition.responses.values.slice();
+    for (let at = 0; at < values.length; at += 8) {
+      const [radius, angle] = [sigma * Math.sqrt(-Math.log(uniform())), 2 * Math.PI * uniform()];
+      values[at] += radius * Math.cos(angle);
+      values[at + 1] += radius * Math.sin(angle);
+    }
+    return { ...edition, responses: { ...edition.responses, values } };
+  }
+
+  it.each([
+    [-50, 'pass'],
+    [-35, 'warn'],
+    [-20, 'fail'],
+  ])('is noise of %d dB, told within 4 dB and judged "%s"', (db, verdict) => {
+    const noise = findings(judgeEdition(withNoise(sample(), 10 ** (db / 20))), 'noise');
+    // 35 residuals of seven overlapping points: one cell's figure scatters by about 1.5 dB.
+    noise.forEach((finding) => expect(Math.abs((finding.value ?? 0) - db)).toBeLessThan(4));
+    const middle = noise.map(({ value }) => value ?? 0).sort((a, b) => a - b)[7];
+    expect(Math.abs(middle - db)).toBeLessThan(1.5);
+    expect(noise[0].verdict).toBe(verdict);
+  });
+
+  it('is noise far below any instrument in computed data', () => {
+    findings(judgeEdition(sample()), 'noise').forEach(({ value }) => expect(value).toBeLessThan(-80));
+  });
+
+  const shapes: FamilyDescription['shapes'] = [{ kind: 'rectangle', widthMm: { parameter: 'patchSide', factor: 1 }, heightMm: { parameter: 'patchSide', factor: 1 } }];
+  const plane = (edition: CellEdition) => findings(judgeEdition(edition), 'reference-plane')[0];
+
+  it('is a reference plane off the patches, told in mm from the smallest patch', () => {
+    const clean = sample({ description: { shapes } });
+    // 0.5 mm above the patches: 2 k0 times the distance is 14.41 degrees of lag at 12 GHz.
+    const shifted = clean.cells.reduce((edition, _, cell) => damage(edition, cell, { turnDeg: -14.41 }), clean);
+    expect(plane(clean).verdict).toBe('pass');
+    expect(plane(shifted)).toMatchObject({ verdict: 'warn' });
+    expect(Number(/lie ([\d.]+) mm above/.exec(plane(shifted).detail)?.[1])).toBeCloseTo(0.5 + ((plane(clean).value ?? 0) / 14.41) * 0.5, 1);
+  });
+
+  it('leaves the reference plane open without a small plain patch', () => {
+    expect(plane(sample()).verdict).toBe('not-evaluated');
+    expect(plane(sample({ description: { shapes }, sizesMm: [1.5, 1.8] })).detail).toMatch(/No patch is small enough/);
+    expect(plane(sample({ description: { shapes }, thetasDeg: [30] })).detail).toMatch(/No response at normal incidence/);
+  });
+});
+
 describe('reciprocity', () => {
   function withCross(forward: readonly [number, number], backward: readonly [number, number]): QualityReport {
     const edition = sample({ description: { ports: 'te-and-tm' } });

@@ -1,5 +1,6 @@
 import type { CellEdition, CellQuality, QualityFinding, QualityReport, QualityVerdict } from '../model/cell-family';
 import { checkPhaseJumps, checkPhaseSlope } from './cell-quality-frequency';
+import { checkNoise, checkReferencePlane } from './cell-quality-measurement';
 import { checkOutliers, checkPhaseRange } from './cell-quality-parameter';
 import { checkPassivity } from './cell-quality-passivity';
 import { checkCoverage, checkDuplicates, checkExcludedRegions, checkMissingPoints } from './cell-quality-points';
@@ -20,11 +21,13 @@ export const CELL_CHECKS: readonly CellCheck[] = [
   { finds: ['coverage'], question: 'Does the band hold the design frequency, and which angles are given?', run: checkCoverage },
   { finds: ['excluded-region'], question: 'How many points does the laboratory exclude?', run: checkExcludedRegions },
   { finds: ['phase-range', 'largest-gap'], question: 'Do the cells reach every phase at the design frequency?', run: checkPhaseRange },
+  { finds: ['reference-plane'], question: 'Are the phases given at the top of the slab?', run: checkReferencePlane },
   { finds: ['missing-points'], question: 'Is every point of the grid given?', run: checkMissingPoints },
   { finds: ['duplicate-points'], question: 'Is every cell given once?', run: checkDuplicates },
   { finds: ['passivity'], question: 'Does any cell return more power than comes in?', run: checkPassivity },
   { finds: ['reciprocity'], question: 'Does a cell answer alike both ways?', run: checkReciprocity },
   { finds: ['phase-slope'], question: 'Does the phase fall with frequency, as exp(+jwt) demands?', run: checkPhaseSlope },
+  { finds: ['noise'], question: 'How much of the response is noise?', run: checkNoise },
   { finds: ['phase-jump'], question: 'Does the phase step where its neighbours in frequency do not?', run: checkPhaseJumps },
   { finds: ['outlier'], question: 'Does a cell stand off its neighbours in size?', run: checkOutliers },
 ];

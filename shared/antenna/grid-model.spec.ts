@@ -1,6 +1,6 @@
 import * as fc from 'fast-check';
 import { radFromDeg } from '../units/angles';
-import { gridModelWarnings, gridReflection, zeroPhaseFrequency } from './grid-model';
+import { gridModelWarnings, gridReflection, groundedSlabReflection, zeroPhaseFrequency } from './grid-model';
 import type { PatchGrid } from './grid-model';
 
 function grid([periodMm, gapMm, thicknessMm, relativePermittivity]: readonly [number, number, number, number], lossTangent = 0): PatchGrid {
@@ -90,6 +90,34 @@ describe('gridReflection', () => {
     if (tm.kind === 'not-reached') throw new Error('not reached');
     expect(phaseDeg(gridReflection(insideRange, { frequencyHz: tm.frequencyHz, thetaRad: radFromDeg(45), polarisation: 'tm' }))).toBeCloseTo(0, 6);
     expect(tm.frequencyHz / 1e9).toBeGreaterThan(zeroPhaseGHz(insideRange));
+  });
+});
+
+describe('groundedSlabReflection', () => {
+  const slab = { thicknessM: 1.575e-3, relativePermittivity: 2.2, lossTangent: 0 };
+
+  it('turns back a quarter-wave slab in phase', () => {
+    const frequencyHz = 299_792_458 / (4 * 1.575e-3 * Math.sqrt(2.2));
+    const reflection = groundedSlabReflection(slab, { frequencyHz, thetaRad: 0, polarisation: 'te' });
+    expect([reflection.re, reflection.im]).toEqual([expect.closeTo(1, 9), expect.closeTo(0, 9)]);
+  });
+
+  it('turns back a half-wave slab as bare metal does', () => {
+    const frequencyHz = 299_792_458 / (2 * 1.575e-3 * Math.sqrt(2.2));
+    const reflection = groundedSlabReflection(slab, { frequencyHz, thetaRad: 0, polarisation: 'te' });
+    expect([reflection.re, reflection.im]).toEqual([expect.closeTo(-1, 9), expect.closeTo(0, 9)]);
+  });
+
+  it('gives the line formula 180 - 2 atan(tan(beta h) / sqrt(eps_r)) degrees at normal incidence', () => {
+    const k0h = (2 * Math.PI * 10e9 * 1.575e-3) / 299_792_458;
+    const expectedDeg = 180 - (2 * Math.atan(Math.tan(k0h * Math.sqrt(2.2)) / Math.sqrt(2.2)) * 180) / Math.PI;
+    expect(phaseDeg(groundedSlabReflection(slab, { frequencyHz: 10e9, thetaRad: 0, polarisation: 'tm' }))).toBeCloseTo(expectedDeg, 10);
+  });
+
+  it('is what a grid of vanishing patches tends to', () => {
+    const at = { frequencyHz: 10e9, thetaRad: 0.5, polarisation: 'tm' } as const;
+    const grid = gridReflection({ ...slab, periodM: 2e-3, gapM: 2e-3 - 1e-9 }, at);
+    expect(grid.re).toBeCloseTo(groundedSlabReflection(slab, at).re, 9);
   });
 });
 

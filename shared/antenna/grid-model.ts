@@ -1,14 +1,18 @@
 import { SPEED_OF_LIGHT_M_PER_S } from '../units/constants';
 
-/** A square grid of square patches on a grounded slab. */
-export interface PatchGrid {
-  readonly periodM: number;
-  /** Distance between the edges of neighbouring patches. */
-  readonly gapM: number;
+/** A slab on metal. */
+export interface GroundedSlab {
   readonly thicknessM: number;
   readonly relativePermittivity: number;
   /** 0 for a lossless slab. */
   readonly lossTangent: number;
+}
+
+/** A square grid of square patches on a grounded slab. */
+export interface PatchGrid extends GroundedSlab {
+  readonly periodM: number;
+  /** Distance between the edges of neighbouring patches. */
+  readonly gapM: number;
 }
 
 export interface GridIncidence {
@@ -34,31 +38,57 @@ interface Complex {
  */
 export function gridReflection(grid: PatchGrid, incidence: GridIncidence): Complex {
   checkGrid(grid, incidence);
-  const admittance = normalisedAdmittance(grid, incidence);
-  const cosine = Math.cos(incidence.thetaRad);
-  // Wave admittance over that of free space: cos(theta) for TE, its inverse for TM.
-  const wave = incidence.polarisation === 'te' ? cosine : 1 / cosine;
-  return divide({ re: wave - admittance.re, im: -admittance.im }, { re: wave + admittance.re, im: admittance.im });
+  return reflectionOf(slabAdmittance(grid, incidence), gridSusceptance(grid, incidence), incidence);
 }
 
-/** eta_0 (1/Z_g + 1/Z_s). */
-function normalisedAdmittance(grid: PatchGrid, { frequencyHz, thetaRad, polarisation }: GridIncidence): Complex {
-  const { periodM, gapM, thicknessM, relativePermittivity, lossTangent } = grid;
+/**
+ * Reflection of a plane wave by a bare slab on metal, as the ratio of tangential E at its top: exact transmission-line theory,
+ * Z_s as in `gridReflection`. What a grid of vanishing patches tends to. Throws as `gridReflection` does.
+ */
+export function groundedSlabReflection(slab: GroundedSlab, incidence: GridIncidence): Complex {
+  checkSlab(slab, incidence);
+  return reflectionOf(slabAdmittance(slab, incidence), 0, incidence);
+}
+
+/** An admittance as a quotient: a slab of half a wave has an infinite one, and its reflection is still a number. */
+interface Quotient {
+  readonly numerator: Complex;
+  readonly denominator: Complex;
+}
+
+function reflectionOf({ numerator, denominator }: Quotient, susceptance: number, { thetaRad, polarisation }: GridIncidence): Complex {
+  const cosine = Math.cos(thetaRad);
+  // Wave admittance over that of free space: cos(theta) for TE, its inverse for TM.
+  const wave = polarisation === 'te' ? cosine : 1 / cosine;
+  const sheet = { re: numerator.re - susceptance * denominator.im, im: numerator.im + susceptance * denominator.re };
+  return divide(
+    { re: wave * denominator.re - sheet.re, im: wave * denominator.im - sheet.im },
+    { re: wave * denominator.re + sheet.re, im: wave * denominator.im + sheet.im },
+  );
+}
+
+/** eta_0 / Z_g over j. */
+function gridSusceptance(grid: PatchGrid, { frequencyHz, thetaRad, polarisation }: GridIncidence): number {
+  const { periodM, gapM, relativePermittivity } = grid;
   const k0 = (2 * Math.PI * frequencyHz) / SPEED_OF_LIGHT_M_PER_S; // rad/m
-  const sine2 = Math.sin(thetaRad) ** 2;
   const effective = Math.sqrt((relativePermittivity + 1) / 2);
   const alpha = ((k0 * effective * periodM) / Math.PI) * Math.log(1 / Math.sin((Math.PI * gapM) / (2 * periodM)));
-  const teFactor = polarisation === 'te' ? 1 - sine2 / (relativePermittivity + 1) : 1;
-  const gridSusceptance = 2 * alpha * effective * teFactor;
+  const teFactor = polarisation === 'te' ? 1 - Math.sin(thetaRad) ** 2 / (relativePermittivity + 1) : 1;
+  return 2 * alpha * effective * teFactor;
+}
+
+/** eta_0 / Z_s = -j (beta / k0) cos(beta h) / sin(beta h), for TM over 1 - sin^2(theta) / eps_r. */
+function slabAdmittance({ thicknessM, relativePermittivity, lossTangent }: GroundedSlab, { frequencyHz, thetaRad, polarisation }: GridIncidence): Quotient {
+  const k0 = (2 * Math.PI * frequencyHz) / SPEED_OF_LIGHT_M_PER_S; // rad/m
+  const sine2 = Math.sin(thetaRad) ** 2;
   const permittivity = { re: relativePermittivity, im: -relativePermittivity * lossTangent };
   const slowness = squareRoot({ re: permittivity.re - sine2, im: permittivity.im }); // beta / k0
-  const phase = { re: slowness.re * k0 * thicknessM, im: slowness.im * k0 * thicknessM };
-  const impedance = divide(tangent(phase), slowness); // Z_s / (j eta_0), TE
-  const inverse = divide({ re: sine2, im: 0 }, permittivity);
-  const tm = { re: 1 - inverse.re, im: -inverse.im };
-  const slab = polarisation === 'te' ? impedance : { re: impedance.re * tm.re - impedance.im * tm.im, im: impedance.re * tm.im + impedance.im * tm.re };
-  const slabAdmittance = divide({ re: 0, im: -1 }, slab);
-  return { re: slabAdmittance.re, im: slabAdmittance.im + gridSusceptance };
+  const [x, y] = [slowness.re * k0 * thicknessM, slowness.im * k0 * thicknessM];
+  const sine = { re: Math.sin(x) * Math.cosh(y), im: Math.cos(x) * Math.sinh(y) };
+  const cosine = { re: Math.cos(x) * Math.cosh(y), im: -Math.sin(x) * Math.sinh(y) };
+  const tilted = divide({ re: sine2, im: 0 }, permittivity);
+  const denominator = polarisation === 'te' ? sine : times(sine, { re: 1 - tilted.re, im: -tilted.im });
+  return { numerator: times({ re: slowness.im, im: -slowness.re }, cosine), denominator };
 }
 
 /** The frequency at which the phase of the reflection passes 0, searched upward from 0; or why there is none. */
@@ -73,7 +103,11 @@ const BISECTIONS = 60;
 export function zeroPhaseFrequency(grid: PatchGrid, thetaRad: number, polarisation: 'te' | 'tm'): ZeroPhase {
   const slowness = Math.sqrt(grid.relativePermittivity - Math.sin(thetaRad) ** 2);
   const upToHz = SPEED_OF_LIGHT_M_PER_S / (4 * grid.thicknessM * slowness);
-  const susceptance = (frequencyHz: number) => normalisedAdmittance(grid, { frequencyHz, thetaRad, polarisation }).im;
+  const susceptance = (frequencyHz: number) => {
+    const incidence: GridIncidence = { frequencyHz, thetaRad, polarisation };
+    const { numerator, denominator } = slabAdmittance(grid, incidence);
+    return divide(numerator, denominator).im + gridSusceptance(grid, incidence);
+  };
   checkGrid(grid, { frequencyHz: upToHz, thetaRad, polarisation });
   let [low, high] = [upToHz * 1e-6, upToHz];
   if (susceptance(low) > 0 || susceptance(high) < 0) return { kind: 'not-reached', upToHz };
@@ -101,15 +135,27 @@ export function gridModelWarnings(grid: PatchGrid, frequencyHz: number): string[
   return warnings;
 }
 
-function checkGrid(grid: PatchGrid, { frequencyHz, thetaRad }: GridIncidence): void {
-  const { periodM, gapM, thicknessM, relativePermittivity, lossTangent } = grid;
-  for (const [name, lengthM] of [['period', periodM], ['gap', gapM], ['thickness', thicknessM]] as const)
-    if (!(lengthM > 0 && Number.isFinite(lengthM))) throw new RangeError(`The ${name} must be greater than 0 m; got ${lengthM} m`);
-  if (!(gapM < periodM)) throw new RangeError(`The gap must be smaller than the period ${periodM} m; got ${gapM} m`);
+function checkGrid(grid: PatchGrid, incidence: GridIncidence): void {
+  checkLength('period', grid.periodM);
+  checkLength('gap', grid.gapM);
+  if (!(grid.gapM < grid.periodM)) throw new RangeError(`The gap must be smaller than the period ${grid.periodM} m; got ${grid.gapM} m`);
+  checkSlab(grid, incidence);
+}
+
+function checkLength(name: string, lengthM: number): void {
+  if (!(lengthM > 0 && Number.isFinite(lengthM))) throw new RangeError(`The ${name} must be greater than 0 m; got ${lengthM} m`);
+}
+
+function checkSlab({ thicknessM, relativePermittivity, lossTangent }: GroundedSlab, { frequencyHz, thetaRad }: GridIncidence): void {
+  checkLength('thickness', thicknessM);
   if (!(relativePermittivity >= 1 && Number.isFinite(relativePermittivity))) throw new RangeError(`The relative permittivity must be at least 1; got ${relativePermittivity}`);
   if (!(lossTangent >= 0 && Number.isFinite(lossTangent))) throw new RangeError(`The loss tangent must be at least 0; got ${lossTangent}`);
   if (!(frequencyHz > 0 && Number.isFinite(frequencyHz))) throw new RangeError(`The frequency must be greater than 0 Hz; got ${frequencyHz} Hz`);
   if (!(Math.abs(thetaRad) < Math.PI / 2)) throw new RangeError(`The angle of incidence must be below 90 degrees; got ${thetaRad} rad`);
+}
+
+function times(a: Complex, b: Complex): Complex {
+  return { re: a.re * b.re - a.im * b.im, im: a.re * b.im + a.im * b.re };
 }
 
 function divide(a: Complex, b: Complex): Complex {
@@ -122,10 +168,4 @@ function squareRoot({ re, im }: Complex): Complex {
   const magnitude = Math.hypot(re, im);
   const real = Math.sqrt((magnitude + re) / 2);
   return { re: real, im: real === 0 ? Math.sqrt(magnitude) : im / (2 * real) };
-}
-
-/** tan(x + jy) = (sin 2x + j sinh 2y) / (cos 2x + cosh 2y). */
-function tangent({ re, im }: Complex): Complex {
-  const denominator = Math.cos(2 * re) + Math.cosh(2 * im);
-  return { re: Math.sin(2 * re) / denominator, im: Math.sinh(2 * im) / denominator };
 }

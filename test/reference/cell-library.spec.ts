@@ -50,7 +50,7 @@ const EXPECTED: Readonly<Record<string, Expected>> = {
   'square-patch-5-oblique': { cells: 30, grid: [5, 3, 21], ports: 2, verdict: 'pass', troubles: [], rangeDeg: 304 },
   // Steep resonances beside the excluded regions, and steps between sizes up to 76 degrees: worth a look, not wrong.
   'square-patch-15-oblique': { cells: 28, grid: [5, 3, 21], ports: 2, verdict: 'warn', troubles: ['largest-gap', 'phase-jump', 'phase-jump', 'phase-jump', 'phase-jump'], rangeDeg: 311 },
-  'square-patch-15-laboratory': { cells: 28, grid: [1, 1, 41], ports: 1, verdict: 'fail', troubles: ['passivity', 'phase-jump', 'missing-points'] },
+  'square-patch-15-laboratory': { cells: 28, grid: [1, 1, 41], ports: 1, verdict: 'fail', troubles: ['reference-plane', 'passivity', 'phase-jump', 'missing-points'] },
 };
 
 describe('the cell library', () => {
@@ -138,6 +138,10 @@ describe('the faults put into the laboratory exercise', () => {
     const detail = (cellId: string, check: string) => report.cells.find((cell) => cell.cellId === cellId)?.findings.find((finding) => finding.check === check)?.detail;
     expect(detail('patch15_a08.20_lab', 'phase-jump')).toMatch(/at 10\.2 GHz/);
     expect(detail('patch15_a09.20_lab', 'missing-points')).toBe('8 of 41 points are missing: 8.5 GHz, 8.6 GHz, 9.8 GHz, 9.9 GHz, 10 GHz, 10.1 GHz, 10.2 GHz, 11.3 GHz; the design frequency is among them');
+    // The README of the family: 0.3 mm above the surface (with 0.08 degrees of drift and the patch's own 0.7), noise -50 dB.
+    expect(report.family.find(({ check }) => check === 'reference-plane')?.detail).toMatch(/0\.3[0-4] mm above the patches/);
+    const noiseDb = report.cells.flatMap((cell) => cell.findings.filter(({ check }) => check === 'noise').map(({ value }) => value ?? 0)).sort((a, b) => a - b);
+    expect(Math.abs(noiseDb[14] + 50)).toBeLessThan(1.5);
     // faults.csv gives 1.11522 as the largest magnitude.
     expect(detail('patch15_a06.50_lab', 'passivity')).toMatch(/1\.1152 \(0\.95 dB\).*41 of 41 points/);
   });
