@@ -56,6 +56,12 @@ describe('DesignField', () => {
     expect(workspace.stepNames()).toEqual(['Set Design frequency']);
   });
 
+  it('writes the same value in its usual form again and counts no step', async () => {
+    const { workspace, fixture } = rig();
+    expect((await enter(fixture, 'Design frequency', '28e9 Hz')).value).toBe('28');
+    expect(workspace.stepNames()).toEqual([]);
+  });
+
   it('keeps a refused entry with reason and remedy, and the design as it was', async () => {
     const { workspace, fixture, pending } = rig();
     const box = await enter(fixture, 'Design frequency', '28,5');

@@ -1,0 +1,83 @@
+import type { Requirement } from '../../../../shared/model/design-document';
+import type { Verdict } from '../../../../shared/model/figures';
+import type { QuantityDimension } from '../../../../shared/units/quantity';
+import { figureText, signedText } from '../strip-figures';
+
+/** A line of the requirement with its limit field and what the prediction says of it. */
+export interface RequirementLine {
+  readonly line: Verdict['line'];
+  readonly name: string;
+  readonly sign: '≥' | '≤';
+  /** Null for the mask, whose limit is a table of its own. */
+  readonly field: { readonly pointer: string; readonly dimension: QuantityDimension; readonly unit: string } | null;
+  readonly word: 'meets' | 'falls-short' | 'not-evaluated' | 'stale' | 'no-limit' | 'waiting';
+  readonly value: string;
+  readonly margin: string | null;
+  readonly reason: string | null;
+}
+
+export interface VerdictSource {
+  /** Null before the first prediction. */
+  readonly verdicts: readonly Verdict[] | null;
+  /** The verdicts are of an older design than the one on the screen. */
+  readonly stale: boolean;
+}
+
+type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; isSet(requirement: Requirement): boolean };
+
+const SHAPES: readonly LineShape[] = [
+  {
+    line: 'gain',
+    name: 'Least gain',
+    sign: '≥',
+    field: { pointer: '/requirement/minGainDbi', dimension: 'level', unit: 'dBi' },
+    digits: 2,
+    unit: 'dBi',
+    isSet: ({ minGainDbi }) => minGainDbi !== undefined,
+  },
+  {
+    line: 'sidelobe',
+    name: 'Highest sidelobe',
+    sign: '≤',
+    field: { pointer: '/requirement/maxSidelobeDb', dimension: 'level', unit: 'dB' },
+    digits: 2,
+    unit: 'dB',
+    isSet: ({ maxSidelobeDb }) => maxSidelobeDb !== undefined,
+  },
+  {
+    line: 'pointing',
+    name: 'Pointing tolerance',
+    sign: '≤',
+    field: { pointer: '/requirement/pointingToleranceDeg', dimension: 'angle', unit: '°' },
+    digits: 3,
+    unit: '°',
+    isSet: ({ pointingToleranceDeg }) => pointingToleranceDeg !== undefined,
+  },
+  {
+    line: 'cross-polar',
+    name: 'Cross-polar discrimination',
+    sign: '≥',
+    field: { pointer: '/requirement/minCrossPolarDiscriminationDb', dimension: 'level', unit: 'dB' },
+    digits: 2,
+    unit: 'dB',
+    isSet: ({ minCrossPolarDiscriminationDb }) => minCrossPolarDiscriminationDb !== undefined,
+  },
+  { line: 'mask', name: 'Mask margin', sign: '≥', field: null, digits: 2, unit: 'dB', isSet: ({ mask }) => mask !== undefined },
+];
+
+/** The five lines in their fixed order; a line without a limit is never shown as met. */
+export function requirementLines(requirement: Requirement, { verdicts, stale }: VerdictSource): readonly RequirementLine[] {
+  return SHAPES.map(({ line, name, sign, field, digits, unit, isSet }) => {
+    const shape = { line, name, sign, field };
+    if (!isSet(requirement)) return { ...shape, word: 'no-limit', value: '–', margin: null, reason: null };
+    const verdict = verdicts?.find((candidate) => candidate.line === line);
+    if (!verdict) return { ...shape, word: 'waiting', value: '–', margin: null, reason: 'No prediction yet' };
+    return {
+      ...shape,
+      word: stale ? 'stale' : verdict.verdict,
+      value: typeof verdict.value === 'number' ? `${figureText(verdict.value, digits)} ${unit}` : '–',
+      margin: typeof verdict.margin === 'number' ? signedText(verdict.margin, digits) : null,
+      reason: verdict.reason ?? (typeof verdict.value === 'number' ? null : verdict.value.reason),
+    };
+  });
+}
