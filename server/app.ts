@@ -24,9 +24,6 @@ export interface AppOptions {
   readonly moreRoutes?: readonly Route[];
 }
 
-/** plotly.js adds a style element for its maps by itself, without a nonce. Its hash changes with the version: a test compares. */
-export const styleHashes: readonly string[] = ["'sha256-2GF9hCGTDj/GGFNlQA54jDdMGl2fvoeZmZjAvBSiAtM='"];
-
 /** Our own id for every request: one that a sender chose could forge lines of the log. */
 const giveRequestId: RequestHandler = (_request, response, next) => {
   response.setHeader('X-Request-Id', randomUUID());
@@ -71,7 +68,7 @@ export function createApp(options: AppOptions): Express {
   app.set('trust proxy', config.trustedProxyCount);
   // Tags are ours: made from versions, not from the bytes of an answer.
   app.set('etag', false);
-  app.use(giveRequestId, requestLog(house), securityHeaders({ secure, styleHashes }), compression());
+  app.use(giveRequestId, requestLog(house), securityHeaders({ secure }), compression());
   app.use('/api', noStore, cookieParser());
   mountRoutes(app, allRoutes(house, options.moreRoutes), {
     authenticate: authentication({ secret: config.secret, secure, callers: house.callers }),

@@ -27,7 +27,12 @@ function isRepetition(text: string): boolean {
   return `${text}${text}`.indexOf(text, 1) < text.length;
 }
 
-const isWord = (piece: string, extraWords: ReadonlySet<string>): boolean => commonPasswords.has(piece) || extraWords.has(piece);
+/** Letters people swap for signs; undone before looking words up. */
+const swaps: Readonly<Record<string, string>> = { '@': 'a', '4': 'a', '3': 'e', '1': 'i', '!': 'i', '0': 'o', $: 's', '5': 's', '7': 't' };
+const withoutSwaps = (text: string): string => [...text].map((mark) => swaps[mark] ?? mark).join('');
+
+const isWord = (piece: string, extraWords: ReadonlySet<string>): boolean =>
+  [piece, withoutSwaps(piece)].some((form) => commonPasswords.has(form) || extraWords.has(form));
 
 /**
  * The fewest known pieces (common passwords, known words, keyboard runs, single repeated characters) that make up the
@@ -55,10 +60,6 @@ function bestEnding(text: string, end: number, known: { fewest: readonly (number
   return best;
 }
 
-/** Letters people swap for signs; undone before looking words up. */
-const swaps: Readonly<Record<string, string>> = { '@': 'a', '4': 'a', '3': 'e', '1': 'i', '!': 'i', '0': 'o', $: 's', '5': 's', '7': 't' };
-const withoutSwaps = (text: string): string => [...text].map((mark) => swaps[mark] ?? mark).join('');
-
 /** Passphrases of this many words are fine even when each word is common. */
 const ENOUGH_WORDS = 4;
 
@@ -76,9 +77,8 @@ export function passwordFaults(password: string, context: readonly string[]): st
   if (isRepetition(text)) return ['repeats the same piece'];
   const own = context.flatMap((entry) => entry.toLowerCase().split(/[^\p{L}\p{N}]+/u)).filter((word) => word.length >= 3);
   const extraWords = new Set([...productWords, ...own]);
-  const forms = [text, withoutSwaps(text)];
-  const pieces = forms.flatMap((form) => fewestPieces(form, extraWords) ?? []);
-  if (pieces.some((count) => count < ENOUGH_WORDS)) {
+  const pieces = fewestPieces(text, extraWords);
+  if (pieces !== null && pieces < ENOUGH_WORDS) {
     return ['is made of passwords, names or key sequences that are tried first; add words that have nothing to do with you or this product'];
   }
   return [];

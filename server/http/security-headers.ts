@@ -13,19 +13,21 @@ export function nonceOf(response: object): string {
   return nonce;
 }
 
+/** plotly.js adds a style element for its maps by itself, without a nonce. Its hash changes with the version: a test compares. */
+export const styleHashes: readonly string[] = ["'sha256-2GF9hCGTDj/GGFNlQA54jDdMGl2fvoeZmZjAvBSiAtM='"];
+
 /**
  * Scripts only from us; styles from us or with the nonce. Plotly and Material set style attributes, which only
  * `style-src-attr` allows; images may be blobs (exports drawn in the page).
- * @param styleHashes hashes of style elements a library adds by itself, e.g. plotly's map style
  */
-export function securityHeaders(options: { secure: boolean; styleHashes: readonly string[] }): RequestHandler {
+export function securityHeaders(options: { secure: boolean }): RequestHandler {
   return helmet({
     contentSecurityPolicy: {
       useDefaults: false,
       directives: {
         defaultSrc: ["'self'"],
         scriptSrc: ["'self'"],
-        styleSrc: ["'self'", (_request, response) => `'nonce-${nonceOf(response)}'`, ...options.styleHashes],
+        styleSrc: ["'self'", (_request, response) => `'nonce-${nonceOf(response)}'`, ...styleHashes],
         styleSrcAttr: ["'unsafe-inline'"],
         imgSrc: ["'self'", 'data:', 'blob:'],
         fontSrc: ["'self'"],
