@@ -123,6 +123,10 @@ function checkShape({ rows, rowLines }: CsvCells, limits: CsvLimits, faults: Fil
 // One apostrophe in front of these was put there by a writer that guards against formulas.
 const GUARDED = /^'+[=+\-@\t\r\n]/;
 
+const LINE_FEED = 10;
+const CARRIAGE_RETURN = 13;
+const QUOTE = 34;
+
 /** Walks over the text once; each method leaves `at` behind what it read. */
 class CsvScanner {
   private at = 0;
@@ -155,7 +159,7 @@ class CsvScanner {
     for (;;) {
       const cell = this.text[this.at] === '"' ? this.scanQuoted(row.length + 1) : this.scanPlain(row.length + 1);
       if (cell.length > this.limits.cellLength) this.fault(row.length + 1, `The cell is longer than ${this.limits.cellLength} characters`);
-      row.push(GUARDED.test(cell) ? cell.slice(1) : cell);
+      row.push(cell.startsWith("'") && GUARDED.test(cell) ? cell.slice(1) : cell);
       if (row.length > this.limits.columns) this.fault(row.length, `The row has more than ${this.limits.columns} columns`);
       if (this.text[this.at] !== this.separator || this.faults.hasErrors) break;
       this.at += 1;
@@ -166,11 +170,16 @@ class CsvScanner {
 
   private scanPlain(column: number): string {
     const start = this.at;
-    while (this.at < this.text.length && !this.isCellEnd()) {
-      if (this.text[this.at] === '"') this.fault(column, `A quote stands inside the cell that begins ${quoted(this.text.slice(start, this.at))}`);
-      this.at += 1;
+    const separator = this.separator.charCodeAt(0);
+    // The inner loop of every import: codes are compared and not one-character strings.
+    let at = start;
+    for (; at < this.text.length; at++) {
+      const code = this.text.charCodeAt(at);
+      if (code === separator || code === LINE_FEED || code === CARRIAGE_RETURN) break;
+      if (code === QUOTE) this.fault(column, `A quote stands inside the cell that begins ${quoted(this.text.slice(start, at))}`);
     }
-    return this.text.slice(start, this.at);
+    this.at = at;
+    return this.text.slice(start, at);
   }
 
   private scanQuoted(column: number): string {

@@ -55,7 +55,7 @@ function factsOfRow(heads: readonly string[], row: readonly string[]): FileFacts
 
 function collectPair(facts: CollectedFacts, name: string, value: string): void {
   const text = value.trim();
-  if (!NUMBER_TEXT.test(text) || parameterId(name) === '') return;
+  if (!NUMBER_TEXT.test(text) || !Number.isFinite(Number(text)) || parameterId(name) === '') return;
   facts.parameters.push({ name: parameterId(name), value: Number(text), from: 'index' });
 }
 
