@@ -1,0 +1,122 @@
+import { ChangeDetectionStrategy, Component, computed, effect, inject } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
+import { ActivatedRoute, Router } from '@angular/router';
+import { map } from 'rxjs';
+import { derivedValues } from '../../../../shared/antenna/derived-values';
+import type { Mask } from '../../../../shared/model/design-document';
+import { editValue } from '../design-field-edit';
+import { DesignChoice } from '../fields/design-choice';
+import { DesignField } from '../fields/design-field';
+import { DesignTable } from '../fields/design-table';
+import type { DesignColumn } from '../fields/design-table';
+import { PendingEntries } from '../fields/pending-entries';
+import { RemarkList } from '../fields/remark-list';
+import { SheetHeader } from '../sheet-header';
+import { SheetNotes } from '../fields/sheet-notes';
+import { figureText } from '../strip-figures';
+import { WORKSPACE_STATE } from '../workspace-state';
+import { BeamsTable } from './beams-table';
+import { MaskSketch } from './mask-sketch';
+import { offAxisTraces } from './mask-drawing';
+import { requirementLines } from './requirement-lines';
+import { VerdictTable } from './verdict-table';
+
+const MASK_COLUMNS: readonly DesignColumn[] = [
+  { key: '0', label: 'Off axis', dimension: 'angle', unit: '°' },
+  { key: '1', label: 'Level', dimension: 'level', unit: 'dBi' },
+];
+/** A band drawn for the first time: two per cent to each side. */
+const FIRST_BAND_SHARE = 0.02;
+
+/** What must be met: beams, band, limits and mask, each with the verdict of the prediction. */
+@Component({
+  selector: 'slant-requirement-sheet',
+  imports: [BeamsTable, DesignChoice, DesignField, DesignTable, MaskSketch, RemarkList, SheetNotes, VerdictTable],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './requirement-sheet.html',
+  styleUrl: '../fields/sheet.scss',
+})
+export class RequirementSheet {
+  private readonly state = inject(WORKSPACE_STATE);
+  private readonly pending = inject(PendingEntries);
+  private readonly router = inject(Router);
+  private readonly route = inject(ActivatedRoute);
+
+  protected readonly canEdit = this.state.canEdit;
+  protected readonly design = this.state.design;
+  protected readonly requirement = computed(() => this.design().requirement);
+  protected readonly derived = computed(() => derivedValues(this.design()));
+  protected readonly wavelength = computed(() => figureText(this.derived().wavelengthMm, 3));
+  protected readonly angles = toSignal(this.route.queryParamMap.pipe(map((query) => (query.get('angles') === 'az-el' ? 'az-el' : 'polar') as 'polar' | 'az-el')), {
+    initialValue: 'polar',
+  });
+  protected readonly lines = computed(() =>
+    requirementLines(this.requirement(), { verdicts: this.state.prediction()?.head.verdicts ?? null, stale: this.state.failure() !== null }),
+  );
+  protected readonly maskColumns = MASK_COLUMNS;
+  protected readonly maskPoints = computed(() => {
+    const { mask } = this.requirement();
+    return mask?.kind === 'custom' ? mask.points : [];
+  });
+  protected readonly maskTraces = computed(() => {
+    const prediction = this.state.prediction();
+    return prediction ? prediction.cuts.slice(0, 2).flatMap((cut) => offAxisTraces(cut, prediction.of.requirement.beams)) : [];
+  });
+  protected readonly nextMaskPoint = (rows: readonly (readonly number[])[]): readonly number[] => {
+    const last = rows.at(-1) ?? [0, 20];
+    return [Math.min(180, last[0] + 10), last[1] - 5];
+  };
+
+  constructor() {
+    const header = inject(SheetHeader);
+    effect(() => {
+      const { beams, designFrequencyGHz } = this.requirement();
+      const count = beams.length === 1 ? 'one beam' : `${beams.length} beams`;
+      header.show({ number: 1, title: 'Requirement', subtitle: `${count} at ${designFrequencyGHz} GHz, ${this.limitText()}` });
+    });
+  }
+
+  private limitText(): string {
+    const count = this.lines().filter(({ word }) => word !== 'no-limit').length;
+    return count === 0 ? 'no limit set' : count === 1 ? 'one limit' : `${count} limits`;
+  }
+
+  protected showAngles(angles: 'polar' | 'az-el'): void {
+    const queryParams = { angles: angles === 'polar' ? null : angles };
+    void this.router.navigate([], { relativeTo: this.route, queryParams, queryParamsHandling: 'merge', replaceUrl: true });
+  }
+
+  protected setBand(): void {
+    const { designFrequencyGHz } = this.requirement();
+    const edge = (share: number): number => Number((designFrequencyGHz * (1 + share)).toPrecision(5));
+    this.put('/requirement/bandGHz', [edge(-FIRST_BAND_SHARE), edge(FIRST_BAND_SHARE)], 'Set band');
+  }
+
+  protected removeBand(): void {
+    this.pending.dropBelow('/requirement/bandGHz');
+    this.put('/requirement/bandGHz', undefined, 'Remove band');
+  }
+
+  protected setMask(): void {
+    const gain = this.requirement().minGainDbi ?? 30;
+    const first: Mask = {
+      kind: 'custom',
+      points: [
+        [5, gain - 12],
+        [30, gain - 28],
+        [90, gain - 34],
+      ],
+    };
+    this.put('/requirement/mask', first, 'Set mask');
+  }
+
+  protected removeMask(): void {
+    this.pending.dropBelow('/requirement/mask');
+    this.put('/requirement/mask', undefined, 'Remove mask');
+  }
+
+  private put(pointer: string, value: unknown, name: string): void {
+    const edit = editValue(this.design(), pointer, value);
+    if (edit.kind === 'changed') this.state.change(name, () => edit.design);
+  }
+}
