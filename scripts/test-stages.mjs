@@ -22,11 +22,11 @@ async function types(context) {
   return sum;
 }
 
-const jest = (project, ...more) => async (context) => {
+const jest = (project, workers = 2) => async (context) => {
   const report = join(reportFolder, `${project}.json`);
   mkdirSync(reportFolder, { recursive: true });
   rmSync(report, { force: true });
-  const args = ['--selectProjects', project, '--json', `--outputFile=${report}`, '--maxWorkers=2', ...more, ...context.patterns];
+  const args = ['--selectProjects', project, '--json', `--outputFile=${report}`, `--maxWorkers=${workers}`, ...context.patterns];
   const env = { ...context.environment, FORCE_COLOR: process.stdout.isTTY ? '1' : '0' };
   // jest prints its JSON to stdout even with an output file, and everything for people to stderr.
   const stdio = ['ignore', 'ignore', 'inherit'];
@@ -55,5 +55,5 @@ export const stages = [
   { name: 'architecture', run: jest('architecture') },
   { name: 'reference', run: jest('reference') },
   { name: 'api', run: jest('api'), needs: ['server', 'database'] },
-  { name: 'e2e', run: jest('e2e', '--runInBand'), needs: ['server', 'client', 'product'] },
+  { name: 'e2e', run: jest('e2e', 1), needs: ['server', 'client', 'product'] },
 ];
