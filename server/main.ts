@@ -1,23 +1,13 @@
 import { once } from 'node:events';
-import { createServer, type Server } from 'node:http';
+import { createServer } from 'node:http';
 import { createApp } from './app';
+import { drain } from './http/drain';
 import { openHouse, runProgram } from './opened-house';
 
 const HEADERS_TIMEOUT_MS = 10_000;
 /** Uploads need longer than the minute that is enough for anything else. */
 const REQUEST_TIMEOUT_MS = 600_000;
 const DRAIN_MS = 30_000;
-
-/** Stops accepting, lets what runs finish for up to half a minute, then cuts the rest. */
-async function drain(server: Server): Promise<void> {
-  const closed = once(server, 'close');
-  server.close();
-  server.closeIdleConnections();
-  const cut = setTimeout(() => server.closeAllConnections(), DRAIN_MS).unref();
-  await closed;
-  clearTimeout(cut);
-}
-
 void runProgram(async () => {
   const { house, config, close } = await openHouse(process.env);
   const { logger } = house.ground;
@@ -30,7 +20,7 @@ void runProgram(async () => {
   const signal = await asked;
   logger.info({ signal }, 'stopping');
   house.drain();
-  await drain(server);
+  await drain(server, DRAIN_MS);
   await close();
   logger.info('stopped');
 });

@@ -31,6 +31,7 @@ export class SignInService {
     }
     // Made before the transaction: it takes long and would hold a connection meanwhile.
     const renewed = hasher.isOutdated(account.hash) ? await hasher.hash(password) : null;
+    ground.logger.info({ personId: account.personId }, 'sign-in accepted');
     return ground.transactions.run(async (transaction) => {
       if (renewed !== null) await people.setPasswordHash(transaction, account.personId, renewed);
       await this.forgetFailures(transaction, email);

@@ -6,6 +6,7 @@ import {
   BadRequest,
   InvalidInput,
   MethodNotAllowed,
+  NotAllowed,
   NotFound,
   Problem,
   StaleVersion,
@@ -93,12 +94,19 @@ export const requestIdOf = (response: Response): string => String(response.getHe
 
 /** The one place where an error becomes an answer. Nothing of an unknown error leaves the server but its request id. */
 export function problemReply(logger: Logger): ErrorRequestHandler {
-  return (error: unknown, request, response, next) => {
-    if (response.headersSent) {
-      next(error);
+  // Express knows an error handler by its four parameters.
+  return (error: unknown, request, response, _next) => {
+    const requestId = requestIdOf(response);
+    if (response.destroyed) {
+      logger.debug({ err: error, requestId }, 'the caller went away');
       return;
     }
-    const requestId = requestIdOf(response);
+    if (response.headersSent) {
+      // Cut the connection: a body that just ended would look complete.
+      logger.error({ err: error, requestId }, 'the answer broke off');
+      response.destroy();
+      return;
+    }
     const instance = request.originalUrl.split('?')[0] ?? '';
     const problem = error instanceof Problem ? error : fromLibrary(error);
     response.setHeader('Cache-Control', 'no-store');
@@ -116,6 +124,7 @@ export function problemReply(logger: Logger): ErrorRequestHandler {
       response.status(500).send(JSON.stringify(body));
       return;
     }
+    if (problem instanceof NotAllowed) logger.warn({ requestId, path: instance, reason: problem.message }, 'access denied');
     if (!(error instanceof Problem)) logger.warn({ err: error, requestId }, 'request refused by a library');
     addHeaders(response, problem);
     const body = problemBody(problem, instance, requestId);

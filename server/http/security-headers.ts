@@ -39,6 +39,7 @@ export function securityHeaders(options: { secure: boolean }): RequestHandler {
         frameAncestors: ["'none'"],
       },
     },
+    frameguard: { action: 'deny' },
     crossOriginOpenerPolicy: { policy: 'same-origin' },
     crossOriginResourcePolicy: { policy: 'same-origin' },
     referrerPolicy: { policy: 'no-referrer' },

@@ -33,6 +33,7 @@ async function sendBytes(answer: BytesReply, response: Response): Promise<void> 
     response.setHeader('Content-Security-Policy', "default-src 'none'; sandbox");
   }
   if (answer.body instanceof Readable) {
+    // A caller who went away ends the pipeline too; `problem-reply` tells that from a body that broke off.
     await pipeline(answer.body, response);
     return;
   }

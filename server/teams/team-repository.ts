@@ -14,6 +14,11 @@ export class TeamRepository {
     return managerOf(transaction).getRepository(Team).findOne({ where: { name }, order: { createdAt: 'ASC' } });
   }
 
+  /** All of this installation: for programs on the server's machine, never for a request. */
+  async all(transaction: Transaction): Promise<Team[]> {
+    return managerOf(transaction).getRepository(Team).find({ order: { createdAt: 'ASC', id: 'ASC' } });
+  }
+
   async insert(transaction: Transaction, team: Team): Promise<void> {
     await managerOf(transaction).getRepository(Team).insert(team);
   }

@@ -50,6 +50,11 @@ export class TeamService {
     });
   }
 
+  /** Every team of this installation: for programs on the server's machine, never for a request. */
+  async everyTeam(): Promise<{ id: string; name: string }[]> {
+    return this.parts.ground.transactions.read((transaction) => this.teams.all(transaction));
+  }
+
   /** Addresses of the team's people, for what only its administrators may see. */
   async addresses(teamId: string): Promise<string[]> {
     return this.parts.ground.transactions.read(async (transaction) => {
