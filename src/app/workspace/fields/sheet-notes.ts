@@ -1,18 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { Notes } from '../../ui/notes';
 import { WORKSPACE_STATE } from '../workspace-state';
 
 /** Numbered drawing notes: assumptions and cautions of a sheet. Invented demo data say so by themselves. */
 @Component({
   selector: 'slant-sheet-notes',
+  imports: [Notes],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `
-    <ol class="notes" aria-label="Notes">
-      @for (note of all(); track note) {
-        <li>{{ note }}</li>
-      }
-    </ol>
-  `,
-  styleUrl: './sheet.scss',
+  template: `<slant-notes [notes]="all()" />`,
 })
 export class SheetNotes {
   private readonly state = inject(WORKSPACE_STATE);

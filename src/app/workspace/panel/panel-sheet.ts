@@ -11,6 +11,7 @@ import { RemarkList } from '../fields/remark-list';
 import { SheetNotes } from '../fields/sheet-notes';
 import { SheetHeader } from '../sheet-header';
 import { figureText } from '../strip-figures';
+import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { KeepOuts } from './keep-outs';
 import { LatticeSketch } from './lattice-sketch';
@@ -26,7 +27,7 @@ const LATTICE_OPTIONS = [
 /** The aperture: operation, outline, lattice and keep-outs, drawn to scale. */
 @Component({
   selector: 'slant-panel-sheet',
-  imports: [DesignChoice, DesignField, DesignTable, KeepOuts, LatticeSketch, PanelSketch, RemarkList, SheetNotes],
+  imports: [DesignChoice, DesignField, DesignTable, KeepOuts, LatticeSketch, PanelSketch, RemarkList, SheetNotes, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './panel-sheet.html',
   styleUrls: ['../fields/sheet.scss', './panel-sheet.scss'],

@@ -14,6 +14,8 @@ import { RemarkList } from '../fields/remark-list';
 import { SheetHeader } from '../sheet-header';
 import { SheetNotes } from '../fields/sheet-notes';
 import { figureText } from '../strip-figures';
+import { ChoiceTabs } from '../../ui/choice-tabs';
+import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { BeamsTable } from './beams-table';
 import { MaskSketch } from './mask-sketch';
@@ -25,13 +27,17 @@ const MASK_COLUMNS: readonly DesignColumn[] = [
   { key: '0', label: 'Off axis', dimension: 'angle', unit: '°' },
   { key: '1', label: 'Level', dimension: 'level', unit: 'dBi' },
 ];
+const ANGLE_CHOICES = [
+  { id: 'polar', label: 'θ and φ' },
+  { id: 'az-el', label: 'Azimuth and elevation' },
+] as const;
 /** A band drawn for the first time: two per cent to each side. */
 const FIRST_BAND_SHARE = 0.02;
 
 /** What must be met: beams, band, limits and mask, each with the verdict of the prediction. */
 @Component({
   selector: 'slant-requirement-sheet',
-  imports: [BeamsTable, DesignChoice, DesignField, DesignTable, MaskSketch, RemarkList, SheetNotes, VerdictTable],
+  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, DesignTable, MaskSketch, RemarkList, SheetNotes, VerdictTable, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './requirement-sheet.html',
   styleUrl: '../fields/sheet.scss',
@@ -53,6 +59,7 @@ export class RequirementSheet {
   protected readonly lines = computed(() =>
     requirementLines(this.requirement(), { verdicts: this.state.prediction()?.head.verdicts ?? null, stale: this.state.failure() !== null }),
   );
+  protected readonly angleChoices = ANGLE_CHOICES;
   protected readonly maskColumns = MASK_COLUMNS;
   protected readonly maskPoints = computed(() => {
     const { mask } = this.requirement();
@@ -81,7 +88,7 @@ export class RequirementSheet {
     return count === 0 ? 'no limit set' : count === 1 ? 'one limit' : `${count} limits`;
   }
 
-  protected showAngles(angles: 'polar' | 'az-el'): void {
+  protected showAngles(angles: string): void {
     const queryParams = { angles: angles === 'polar' ? null : angles };
     void this.router.navigate([], { relativeTo: this.route, queryParams, queryParamsHandling: 'merge', replaceUrl: true });
   }
