@@ -1,0 +1,56 @@
+import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
+
+/** A check box as a square cell filled with copper. */
+@Component({
+  selector: 'slant-check-field',
+  template: `
+    <label>
+      <input type="checkbox" [checked]="checked()" [disabled]="disabled()" (change)="changed.emit(!checked())" />
+      <span class="box" aria-hidden="true"></span>
+      <span>{{ label() }}</span>
+    </label>
+  `,
+  styles: `
+    label {
+      display: inline-flex;
+      align-items: center;
+      gap: 8px;
+      min-height: var(--hit);
+      font-size: var(--size-small);
+      cursor: pointer;
+    }
+    input {
+      position: absolute;
+      opacity: 0;
+      width: var(--hit);
+      height: var(--hit);
+      margin: 0;
+      cursor: pointer;
+    }
+    .box {
+      flex: none;
+      width: 12px;
+      height: 12px;
+      border: 1px solid var(--rule-strong);
+      background: var(--raised);
+    }
+    input:checked + .box {
+      border-color: var(--copper);
+      background: linear-gradient(var(--copper), var(--copper)) center / 6px 6px no-repeat var(--raised);
+    }
+    input:focus-visible + .box {
+      outline: 2px solid var(--copper);
+      outline-offset: 2px;
+    }
+    input:disabled ~ span {
+      color: var(--muted);
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class CheckField {
+  readonly label = input.required<string>();
+  readonly checked = input.required<boolean>();
+  readonly disabled = input(false);
+  readonly changed = output<boolean>();
+}

@@ -1,0 +1,49 @@
+import { ChangeDetectionStrategy, Component, input } from '@angular/core';
+
+/** Title of a view with a hairline to the right and its scale or unit at the end. */
+@Component({
+  selector: 'slant-view-title',
+  template: `
+    <h2 [id]="titleId()">{{ text() }}</h2>
+    <span class="line"></span>
+    @if (unit()) {
+      <span class="unit figure">{{ unit() }}</span>
+    }
+    <ng-content />
+  `,
+  styles: `
+    :host {
+      display: flex;
+      align-items: baseline;
+      gap: 8px;
+      min-width: 0;
+    }
+    h2 {
+      font-size: var(--size-text);
+      line-height: 20px;
+      font-weight: 620;
+      font-stretch: var(--stretch-heading);
+      white-space: nowrap;
+    }
+    .line {
+      flex: 1;
+      min-width: 8px;
+      height: 1px;
+      background: var(--rule);
+      align-self: center;
+    }
+    .unit {
+      color: var(--muted);
+      font-size: var(--size-label);
+      overflow: hidden;
+      text-overflow: ellipsis;
+      white-space: nowrap;
+    }
+  `,
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ViewTitle {
+  readonly text = input.required<string>();
+  readonly unit = input('');
+  readonly titleId = input<string | null>(null);
+}
