@@ -18,7 +18,7 @@ export interface DetectedNumber {
 }
 
 export interface DetectedParameter extends DetectedNumber {
-  /** The parameter's identifier without its unit, such as `patch_side`. The value is in mm. */
+  /** The parameter as an identifier of the description: `patch_side_mm` becomes `patchSide`. The value is in mm. */
   readonly name: string;
 }
 
