@@ -84,6 +84,7 @@ const EXAMPLE_DESCRIPTION: FamilyDescription = {
   instrument: 'a formula',
   date: '2026-01-01',
   limits: 'Invented.',
+  excludedRegions: [],
 };
 
 export const EXAMPLE_EDITION_ID = '00000000-0000-4000-8000-000000000001';

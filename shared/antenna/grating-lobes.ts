@@ -39,11 +39,12 @@ export function gratingLobes(lattice: SiLattice, beam: Direction, wavelengthM: n
   const vStep = wavelengthM * second[1];
   const found: { radius: number; u: number; v: number; orderX: number; orderY: number }[] = [];
   let count = 0;
-  for (let m = Math.ceil((-1 - beam.u) / uStep); m <= (1 - beam.u) / uStep; m++) {
+  for (let m = Math.ceil((-1 - beam.u) / uStep) + 0; m <= (1 - beam.u) / uStep; m++) {
     const u = beam.u + m * uStep;
     const reach = Math.sqrt(Math.max(0, 1 - u * u));
     const v0 = beam.v + m * wavelengthM * first[1];
-    const lowest = Math.ceil((-reach - v0) / vStep);
+    // Adding 0 turns the -0 of Math.ceil into 0.
+    const lowest = Math.ceil((-reach - v0) / vStep) + 0;
     const highest = Math.floor((reach - v0) / vStep);
     count += Math.max(0, highest - lowest + 1) - (m === 0 ? 1 : 0);
     for (let n = lowest; n <= Math.min(highest, lowest + MOST_LISTED); n++) {

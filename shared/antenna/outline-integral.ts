@@ -1,5 +1,5 @@
-import { gaussLegendre } from '../math/quadrature';
-import { outlineCorners } from './outline';
+import { gaussLegendre, type QuadratureRule } from '../math/quadrature';
+import { outlineCorners, signedPolygonAreaM2 } from './outline';
 import type { SiOutline, SiPoint } from './si-design';
 
 export interface IntegrationEffort {
@@ -11,51 +11,77 @@ export interface IntegrationEffort {
   readonly pivot: SiPoint;
 }
 
+/** Parts of one edge, and of a whole ellipse. */
 const MAX_PARTS = 24;
+const MAX_ELLIPSE_PARTS = 64;
 
-/**
- * Integral of a smooth function over an outline, exactly along its edge: triangles from a pivot to each edge, with
- * the sign of their turn, so any simple polygon is covered; the ellipse in polar coordinates about its centre.
- */
-export function integrateOverOutline(outline: SiOutline, f: (xM: number, yM: number) => number, effort: IntegrationEffort): number {
-  if (outline.kind === 'ellipse') return integrateEllipse(outline, f, effort);
-  const corners = outlineCorners(outline);
-  let sum = 0;
-  corners.forEach((from, i) => {
-    sum += integrateTriangle([effort.pivot, from, corners[(i + 1) % corners.length]], f, effort);
-  });
-  const first = corners[0];
-  const turn = corners.reduce((total, a, i) => {
-    const b = corners[(i + 1) % corners.length];
-    return total + (a.xM - first.xM) * (b.yM - first.yM) - (b.xM - first.xM) * (a.yM - first.yM);
-  }, 0);
-  return turn < 0 ? -sum : sum;
+type Integrand = (xM: number, yM: number) => number;
+
+/** A piece of the outline's edge: a point of it and its derivative, for t from 0 to 1. */
+interface EdgePiece {
+  readonly parts: number;
+  readonly reachM: number;
+  at(t: number): { xM: number; yM: number; dxM: number; dyM: number };
 }
 
 /**
- * The triangle as pivot + s (edge point - pivot), s from 0 to 1: area element s times twice the signed area. Parts in s
- * grow geometrically from the pivot.
+ * Integral of a smooth function over an outline, exactly along its edge: rays from a pivot to every point of the edge,
+ * with the sign of their turn, so any simple outline is covered wherever the pivot lies.
  */
-function integrateTriangle(corners: [SiPoint, SiPoint, SiPoint], f: (xM: number, yM: number) => number, effort: IntegrationEffort): number {
-  const [o, a, b] = corners;
-  const twiceArea = (a.xM - o.xM) * (b.yM - o.yM) - (b.xM - o.xM) * (a.yM - o.yM);
-  if (twiceArea === 0) return 0;
-  const edgeM = Math.hypot(b.xM - a.xM, b.yM - a.yM);
-  const heightM = Math.abs(twiceArea) / edgeM;
-  const reachM = Math.max(Math.hypot(a.xM - o.xM, a.yM - o.yM), Math.hypot(b.xM - o.xM, b.yM - o.yM));
-  const edgeParts = partCount(edgeM, Math.max(effort.partM, heightM));
-  const rule = gaussLegendre(effort.nodes);
-  const cuts = geometricCuts(reachM, effort.partM);
+export function integrateOverOutline(outline: SiOutline, f: Integrand, effort: IntegrationEffort): number {
+  const pieces = outline.kind === 'ellipse' ? [ellipsePiece(outline, effort)] : straightPieces(outlineCorners(outline), effort);
+  const sum = pieces.reduce((total, piece) => total + integratePiece(piece, f, effort), 0);
+  return outline.kind === 'polygon' && signedPolygonAreaM2(outline.points) < 0 ? -sum : sum;
+}
+
+/** Points pivot + s (edge point - pivot): the area element is s ds dt times the turn of the edge about the pivot. */
+function integratePiece(piece: EdgePiece, f: Integrand, { nodes: count, partM, pivot }: IntegrationEffort): number {
+  const rule = gaussLegendre(count);
+  const cuts = geometricCuts(piece.reachM, partM);
   let sum = 0;
-  for (let part = 0; part < edgeParts; part++) {
+  for (let part = 0; part < piece.parts; part++) {
     for (let i = 0; i < rule.nodes.length; i++) {
-      const t = (part + (rule.nodes[i] + 1) / 2) / edgeParts;
-      const dx = a.xM + t * (b.xM - a.xM) - o.xM;
-      const dy = a.yM + t * (b.yM - a.yM) - o.yM;
-      sum += (rule.weights[i] / (2 * edgeParts)) * integrateRay({ o, dx, dy, cuts }, f, rule);
+      const { xM, yM, dxM, dyM } = piece.at((part + (rule.nodes[i] + 1) / 2) / piece.parts);
+      const rayX = xM - pivot.xM;
+      const rayY = yM - pivot.yM;
+      const turn = rayX * dyM - rayY * dxM;
+      if (turn !== 0) sum += (rule.weights[i] / (2 * piece.parts)) * turn * integrateRay({ o: pivot, dx: rayX, dy: rayY, cuts }, f, rule);
     }
   }
-  return sum * twiceArea;
+  return sum;
+}
+
+function straightPieces(corners: readonly SiPoint[], { partM, pivot }: IntegrationEffort): EdgePiece[] {
+  return corners.map((a, i) => {
+    const b = corners[(i + 1) % corners.length];
+    const [dxM, dyM] = [b.xM - a.xM, b.yM - a.yM];
+    const edgeM = Math.hypot(dxM, dyM);
+    const heightM = Math.abs((a.xM - pivot.xM) * dyM - (a.yM - pivot.yM) * dxM) / edgeM;
+    return {
+      parts: partCount(edgeM, Math.max(partM, heightM), MAX_PARTS),
+      reachM: Math.max(distanceM(a, pivot), distanceM(b, pivot)),
+      at: (t) => ({ xM: a.xM + t * dxM, yM: a.yM + t * dyM, dxM, dyM }),
+    };
+  });
+}
+
+function ellipsePiece(outline: Extract<SiOutline, { kind: 'ellipse' }>, { partM, pivot }: IntegrationEffort): EdgePiece {
+  const { centre, widthM, heightM } = outline;
+  const sideM = Math.max(widthM, heightM);
+  const turn = 2 * Math.PI;
+  return {
+    parts: Math.max(8, partCount(Math.PI * sideM, partM, MAX_ELLIPSE_PARTS)),
+    reachM: sideM / 2 + distanceM(centre, pivot),
+    at: (t) => {
+      const [cosine, sine] = [Math.cos(turn * t), Math.sin(turn * t)];
+      return {
+        xM: centre.xM + (widthM / 2) * cosine,
+        yM: centre.yM + (heightM / 2) * sine,
+        dxM: -turn * (widthM / 2) * sine,
+        dyM: turn * (heightM / 2) * cosine,
+      };
+    },
+  };
 }
 
 interface Ray {
@@ -65,7 +91,7 @@ interface Ray {
   readonly cuts: readonly number[];
 }
 
-function integrateRay({ o, dx, dy, cuts }: Ray, f: (xM: number, yM: number) => number, rule: ReturnType<typeof gaussLegendre>): number {
+function integrateRay({ o, dx, dy, cuts }: Ray, f: Integrand, rule: QuadratureRule): number {
   let sum = 0;
   for (let c = 0; c + 1 < cuts.length; c++) {
     const half = (cuts[c + 1] - cuts[c]) / 2;
@@ -77,28 +103,12 @@ function integrateRay({ o, dx, dy, cuts }: Ray, f: (xM: number, yM: number) => n
   return sum;
 }
 
-function integrateEllipse(outline: Extract<SiOutline, { kind: 'ellipse' }>, f: (xM: number, yM: number) => number, effort: IntegrationEffort): number {
-  const { centre, widthM, heightM } = outline;
-  const radialParts = partCount(Math.max(widthM, heightM) / 2, effort.partM);
-  // The trapezoidal rule on a closed curve converges faster than any power.
-  const azimuths = Math.min(2048, 16 * effort.nodes * Math.max(1, Math.ceil(radialParts / 2)));
-  const { nodes, weights } = gaussLegendre(effort.nodes);
-  let sum = 0;
-  for (let a = 0; a < azimuths; a++) {
-    const x = (widthM / 2) * Math.cos((2 * Math.PI * a) / azimuths);
-    const y = (heightM / 2) * Math.sin((2 * Math.PI * a) / azimuths);
-    for (let part = 0; part < radialParts; part++) {
-      for (let i = 0; i < nodes.length; i++) {
-        const r = (part + (nodes[i] + 1) / 2) / radialParts;
-        sum += (weights[i] / (2 * radialParts)) * r * f(centre.xM + r * x, centre.yM + r * y);
-      }
-    }
-  }
-  return (sum * ((2 * Math.PI) / azimuths) * widthM * heightM) / 4;
+function distanceM(a: SiPoint, b: SiPoint): number {
+  return Math.hypot(a.xM - b.xM, a.yM - b.yM);
 }
 
-function partCount(lengthM: number, partM: number): number {
-  return Math.min(MAX_PARTS, Math.max(1, Math.ceil(lengthM / partM)));
+function partCount(lengthM: number, partM: number, most: number): number {
+  return Math.min(most, Math.max(1, Math.ceil(lengthM / partM)));
 }
 
 /** 0, then from a part's length on doubling up to the whole: fractions of the reach. */
