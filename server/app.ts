@@ -76,6 +76,7 @@ export function createApp(options: AppOptions): Express {
     secure,
     publicOrigin: new URL(config.publicUrl).origin,
     replays: house.replays,
+    eventStreams: house.eventStreams,
     checkReplies: options.checkReplies ?? false,
     rateLimits: options.rateLimits,
   });

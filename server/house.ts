@@ -11,6 +11,7 @@ import { AuditService } from './audit/audit-service';
 import { isHttps } from './config';
 import type { Ground } from './database/ground';
 import type { Callers } from './http/authentication';
+import { EventStreams } from './http/event-streams';
 import { ImportService } from './library/import-service';
 import { createInspectionRunner } from './library/inspection-runner';
 import { LibraryService } from './library/library-service';
@@ -59,11 +60,12 @@ export interface House extends ReturnType<typeof createServices> {
   readonly ground: Ground;
   readonly secure: boolean;
   readonly callers: Callers;
+  readonly eventStreams: EventStreams;
   readonly describe: () => About;
   readonly isReady: () => Promise<boolean>;
   /** Begins what runs in the background: only the program that serves does. */
   start(): Promise<void>;
-  /** From now on `isReady` says no, so that nobody sends new work here. */
+  /** From now on `isReady` says no, so that nobody sends new work here, and streams of events end. */
   drain(): void;
   /** Stops what the services keep running: pools, timers, servers. */
   close(): Promise<void>;
@@ -73,11 +75,13 @@ export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
   const { inspections, letters, passwords, replays, sessions, tokens } = services;
+  const eventStreams = new EventStreams();
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
   return {
     ...services,
     ground,
+    eventStreams,
     secure: isHttps(ground.config),
     callers: { bySession: (sessionId, personId) => sessions.callerOf(sessionId, personId), byToken: (secret) => tokens.callerOf(secret) },
     describe: () => ({
@@ -96,6 +100,7 @@ export function createHouse(options: HouseOptions): House {
     },
     drain: () => {
       draining = true;
+      eventStreams.endAll();
     },
     close: async () => {
       clearInterval(sweeper);

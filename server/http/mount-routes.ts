@@ -11,17 +11,15 @@ import { InvalidInput, MethodNotAllowed, NotAllowed, NotSignedIn, UnsupportedTyp
 import { addressKey, rateLimiters, rateLimits, type RateLimit } from './rate-limits';
 import type { Policy, RateClass, Route, RouteContext, UploadedFile } from './route';
 import { parseBody, parseParameters } from './schema-faults';
-import { sendAnswer } from './send-answer';
+import { sendAnswer, type AnswerOptions } from './send-answer';
 
 const MAX_BODY_BYTES = 1024 * 1024;
 
-export interface MountOptions {
+export interface MountOptions extends AnswerOptions {
   readonly authenticate: Authenticate;
   readonly secret: string;
   readonly secure: boolean;
   readonly publicOrigin: string;
-  /** Parse every answer with its reply schema and fail on a difference: for tests. */
-  readonly checkReplies: boolean;
   readonly replays: ReplayStore;
   readonly rateLimits?: Readonly<Record<RateClass, RateLimit>>;
 }
@@ -143,7 +141,7 @@ export function mountRoutes(app: Express, routes: readonly Route[], options: Mou
     const answer: RequestHandler = async (request, response) => {
       const context = contextOf(route, request, response);
       const result = route.idempotent === true ? await runOnce(options.replays, route, context) : await route.run(context);
-      await sendAnswer(route, result, response, options.checkReplies);
+      await sendAnswer(route, result, response, options);
     };
     const steps = [identify, limiters[route.rate ?? 'general'], guardStep(route, options), ...bodySteps(route), answer];
     for (const step of steps) mounted.add(step);

@@ -1,6 +1,7 @@
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { Response } from 'express';
+import { isEventStream, type EventStreams } from './event-streams';
 import { BytesReply, Reply, type CookieChange, type ReplyOptions } from './reply';
 import type { Route } from './route';
 
@@ -25,14 +26,23 @@ export function attachmentHeader(fileName: string): string {
   return `attachment; filename="${plain}"; filename*=UTF-8''${exact}`;
 }
 
-async function sendBytes(answer: BytesReply, response: Response): Promise<void> {
+async function sendBytes(answer: BytesReply, response: Response, streams: EventStreams): Promise<void> {
   response.setHeader('Content-Type', answer.contentType);
   if (answer.options.fileName !== undefined) {
     response.setHeader('Content-Disposition', attachmentHeader(answer.options.fileName));
     // A file someone made is never to run as a page of ours, even when opened in place.
     response.setHeader('Content-Security-Policy', "default-src 'none'; sandbox");
   }
+  if (isEventStream(answer.contentType)) {
+    // Neither compression nor a proxy may hold events back.
+    response.setHeader('Cache-Control', 'no-store, no-transform');
+    response.setHeader('X-Accel-Buffering', 'no');
+    response.flushHeaders();
+    streams.add(response);
+  }
   if (answer.body instanceof Readable) {
+    // The log, compression and the pipeline itself listen for the end: more than Node's ten, but no more with time.
+    response.setMaxListeners(20);
     // A caller who went away ends the pipeline too; `problem-reply` tells that from a body that broke off.
     await pipeline(answer.body, response);
     return;
@@ -41,20 +51,26 @@ async function sendBytes(answer: BytesReply, response: Response): Promise<void> 
   response.end(answer.body);
 }
 
+export interface AnswerOptions {
+  /** Parse every JSON answer with its reply schema and fail on a difference: for tests. */
+  readonly checkReplies: boolean;
+  readonly eventStreams: EventStreams;
+}
+
 /** Turns what a handler returned into the answer. */
-export async function sendAnswer(route: Route, result: unknown, response: Response, checkReplies: boolean): Promise<void> {
+export async function sendAnswer(route: Route, result: unknown, response: Response, options: AnswerOptions): Promise<void> {
   const usualStatus = route.status ?? (route.reply === undefined && route.bytes === undefined ? 204 : 200);
   if (result instanceof BytesReply) {
     applyOptions(response, result.options, usualStatus);
-    await sendBytes(result, response);
+    await sendBytes(result, response, options.eventStreams);
     return;
   }
-  const [body, options]: [unknown, ReplyOptions] = result instanceof Reply ? [result.body, result.options] : [result, {}];
-  applyOptions(response, options, usualStatus);
+  const [body, replyOptions]: [unknown, ReplyOptions] = result instanceof Reply ? [result.body, result.options] : [result, {}];
+  applyOptions(response, replyOptions, usualStatus);
   if (body === undefined) {
     response.end();
     return;
   }
-  if (checkReplies) route.reply?.parse(body);
+  if (options.checkReplies) route.reply?.parse(body);
   response.type('application/json').send(JSON.stringify(body));
 }

@@ -51,7 +51,7 @@ export class LetterService {
   async start(): Promise<void> {
     const { config, logger, now } = this.ground;
     const box = config.smtpUrl === null ? await LetterBox.open(now) : null;
-    if (box !== null) logger.warn('SMTP_URL is not set: letters go to the letter box of this server');
+    if (box !== null) logger[config.demoMode ? 'info' : 'warn']('SMTP_URL is not set: letters go to the letter box of this server');
     const transport = createTransport(withTimeouts(config.smtpUrl ?? box?.url ?? ''), { from: config.mailFrom });
     // Now and then, for letters whose mail server failed and those another process left behind.
     const timer = setInterval(() => this.sendDue(), POLL_MS).unref();

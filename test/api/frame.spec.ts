@@ -15,6 +15,7 @@ const note = z.strictObject({ text: z.string(), more: z.unknown().optional() });
 
 /** Routes that do nothing but show what the frame does around a handler. */
 let made = 0;
+let goneAfterMs: number | null = null;
 const probes: readonly Route[] = [
   defineRoute({
     method: 'post',
@@ -73,6 +74,32 @@ const probes: readonly Route[] = [
     body: z.strictObject({ label: z.string() }),
     reply: z.strictObject({ names: z.array(z.string()), tag: z.string(), label: z.string() }),
     handler: ({ files, body }) => ({ names: files.map(({ originalName }) => originalName), tag: contentTag(files[0]?.bytes ?? ''), label: body.label }),
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/probe/events',
+    summary: 'Events',
+    policy: member,
+    bytes: ['text/event-stream'],
+    handler: ({ signal }) => {
+      const started = Date.now();
+      signal.addEventListener('abort', () => (goneAfterMs = Date.now() - started));
+      const events = new Readable({ read: () => undefined });
+      events.push('data: first\n\n');
+      return new BytesReply(events, 'text/event-stream');
+    },
+  }),
+  defineRoute({
+    method: 'get',
+    path: '/api/probe/breaking-off',
+    summary: 'Breaks off',
+    policy: member,
+    bytes: ['text/csv'],
+    handler: () => new BytesReply(Readable.from((async function* () {
+      yield 'a,b\n';
+      await new Promise((resolve) => setTimeout(resolve, 50));
+      throw new Error('the source failed');
+    })()), 'text/csv'),
   }),
   defineRoute({ method: 'get', path: '/api/probe/broken', summary: 'Breaks', policy: member, handler: () => Promise.reject(new Error('SELECT secret FROM /etc')) }),
   defineRoute({ method: 'get', path: '/api/probe/conflict', summary: 'Conflict', policy: member, handler: () => Promise.reject(new Conflict('Already released.')) }),
@@ -287,6 +314,35 @@ describe('the frame around every route', () => {
       expectProblem(await client.send('POST', '/api/probe/upload', { form: form(101) }), refusal);
       expectProblem(await client.send('POST', '/api/probe/upload', { form: form(1, 3) }), refusal);
       expectProblem(await client.post('/api/probe/upload', {}), problemOf('unsupported-type', 415, 'Send the body as multipart/form-data.'));
+    });
+  });
+
+  describe('streams', () => {
+    const firstPiece = async (path: string, signal?: AbortSignal) => {
+      const cookie = [...client.cookies].map(([name, { value }]) => `${name}=${value}`).join('; ');
+      const answer = await fetch(`${api.url}${path}`, { headers: { cookie, 'accept-encoding': 'gzip' }, signal });
+      const reader = (answer.body as ReadableStream<Uint8Array>).getReader();
+      return { answer, reader, text: Buffer.from((await reader.read()).value ?? []).toString('utf8') };
+    };
+
+    it('pass events on at once, uncompressed', async () => {
+      const stop = new AbortController();
+      const { answer, text } = await firstPiece('/api/probe/events', stop.signal);
+      expect([text, answer.headers.get('cache-control'), answer.headers.get('content-encoding')]).toEqual(['data: first\n\n', 'no-store, no-transform', null]);
+      stop.abort();
+      await new Promise((resolve) => setTimeout(resolve, 200));
+      // The handler learns that the caller went away.
+      expect(goneAfterMs).toBeGreaterThanOrEqual(0);
+    });
+
+    it('of events end when the server is asked to stop', async () => {
+      const { reader } = await firstPiece('/api/probe/events');
+      api.house.eventStreams.endAll();
+      expect(await reader.read()).toEqual({ done: true, value: undefined });
+    });
+
+    it('that fail half-way cut the connection, so that no half file looks whole', async () => {
+      await expect(client.get('/api/probe/breaking-off')).rejects.toThrow('terminated');
     });
   });
 
