@@ -21,23 +21,15 @@ export const EXAMPLE_GRID: ExampleGrid = {
  */
 export function exampleEdition(grid: ExampleGrid = EXAMPLE_GRID, description: Partial<FamilyDescription> = {}): CellEdition {
   const { cellCount, frequenciesGHz, thetasDeg, phisDeg } = grid;
-  const points = cellCount * thetasDeg.length * phisDeg.length * frequenciesGHz.length;
-  const values = new Float64Array(points * 8);
-  let at = 0;
-  for (let cell = 0; cell < cellCount; cell++) {
-    for (const thetaDeg of thetasDeg) {
-      for (const phiDeg of phisDeg) {
-        for (const frequencyGHz of frequenciesGHz) {
-          for (const entry of [0, 3]) {
-            const { magnitude, phaseRad } = exampleResponse(cell / cellCount, frequencyGHz, { thetaDeg, phiDeg, entry });
-            values[at + 2 * entry] = magnitude * Math.cos(phaseRad);
-            values[at + 2 * entry + 1] = magnitude * Math.sin(phaseRad);
-          }
-          at += 8;
-        }
-      }
+  const points = gridPoints(grid);
+  const values = new Float64Array(points.length * 8);
+  points.forEach(({ cell, frequencyGHz, thetaDeg, phiDeg }, i) => {
+    for (const entry of [0, 3]) {
+      const { magnitude, phaseRad } = exampleResponse(cell / cellCount, frequencyGHz, { thetaDeg, phiDeg, entry });
+      values[8 * i + 2 * entry] = magnitude * Math.cos(phaseRad);
+      values[8 * i + 2 * entry + 1] = magnitude * Math.sin(phaseRad);
     }
-  }
+  });
   return {
     description: { ...EXAMPLE_DESCRIPTION, ...description },
     cells: Array.from({ length: cellCount }, (_, k) => ({ id: `cell-${k}`, parametersMm: [1 + k / 10], fileHashes: [] })),
@@ -47,9 +39,17 @@ export function exampleEdition(grid: ExampleGrid = EXAMPLE_GRID, description: Pa
       thetasRad: Float64Array.from(thetasDeg, radFromDeg),
       phisRad: Float64Array.from(phisDeg, radFromDeg),
       values,
-      present: new Uint8Array(points).fill(1),
+      present: new Uint8Array(points.length).fill(1),
     },
   };
+}
+
+/** Every point of the grid in the order of a response table. */
+function gridPoints({ cellCount, frequenciesGHz, thetasDeg, phisDeg }: ExampleGrid): { cell: number; frequencyGHz: number; thetaDeg: number; phiDeg: number }[] {
+  const cells = Array.from({ length: cellCount }, (_, cell) => cell);
+  return cells.flatMap((cell) =>
+    thetasDeg.flatMap((thetaDeg) => phisDeg.flatMap((phiDeg) => frequenciesGHz.map((frequencyGHz) => ({ cell, frequencyGHz, thetaDeg, phiDeg })))),
+  );
 }
 
 /** The made-up response behind {@link exampleEdition}. `size` runs from 0 to 1; entry 0 is TE, 3 is TM. */

@@ -25,9 +25,9 @@ function worstError(field: ReturnType<typeof exampleField>): number {
 }
 
 describe('the interpolated far field', () => {
-  it.each(['none', 'odd', 'even'] as const)('equals the plain sum to 1e-10 in amplitude and phase, stagger %s', (stagger) => {
+  it.each(['none', 'odd', 'even'] as const)('equals the plain sum to 1e-9 in amplitude and phase, stagger %s', (stagger) => {
     for (const [columnCount, rowCount] of [[7, 5], [20, 33], [1, 12], [40, 40]]) {
-      expect(worstError(exampleField({ stagger, columnCount, rowCount }))).toBeLessThan(1e-10);
+      expect(worstError(exampleField({ stagger, columnCount, rowCount }))).toBeLessThan(1e-9);
     }
   });
 

@@ -6,9 +6,10 @@ export interface FieldValue {
   im: number;
 }
 
-/** Samples used along each axis, half of them on either side. */
-const TAPS = 24;
-const HALF = TAPS / 2;
+/** Most samples used along an axis on either side. */
+const MOST_HALF_TAPS = 12;
+/** Fewer are used where this exponent of the error is reached with fewer: exp(-21) is 1e-9. */
+const ENOUGH = 21;
 
 /** Weights along one axis for one coordinate. */
 interface AxisWeights {
@@ -19,8 +20,8 @@ interface AxisWeights {
 /**
  * Interpolates F to any direction from the samples of its transform by a windowed sinc, at a cost that does not depend
  * on the number of cells. F is band-limited: the samples are s >= 2 times as fine as needed (3 up to 256 cells a side),
- * and the window exp(beta (sqrt(1 - t^2) - 1)), beta = pi TAPS/2 (1 - 1/s), keeps the error below about exp(-beta) of
- * the highest sample nearby: 1e-8 for s = 2, 1e-11 for s = 3. The window is the "exponential of semicircle" of
+ * and the window exp(beta (sqrt(1 - t^2) - 1)), beta = pi half (1 - 1/s) with `half` samples on either side, keeps the error
+ * below about exp(-beta) of the highest sample nearby: 1e-8 for s = 2, 1e-9 from s = 2.3 on. The window is the "exponential of semicircle" of
  * A. H. Barnett et al., SIAM J. Sci. Comput. 41(5), C479-C504, 2019 (from memory).
  */
 export function interpolatedFarField(spectrum: ApertureSpectrum, wavenumber: number): (u: number, v: number) => FieldValue {
@@ -35,11 +36,11 @@ export function interpolatedFarField(spectrum: ApertureSpectrum, wavenumber: num
     const { weights: weightsV, indices: indicesV } = alongV(v * samplesPerV);
     let sumRe = 0;
     let sumIm = 0;
-    for (let i = 0; i < TAPS; i++) {
+    for (let i = 0; i < weightsU.length; i++) {
       const column = indicesU[i] * rows;
       let lineRe = 0;
       let lineIm = 0;
-      for (let j = 0; j < TAPS; j++) {
+      for (let j = 0; j < weightsV.length; j++) {
         const at = column + indicesV[j];
         lineRe += weightsV[j] * re[at];
         lineIm += weightsV[j] * im[at];
@@ -57,21 +58,23 @@ function axisWeigher(axis: { size: number; cells: number; period: number; stagge
   const { size, cells, period, staggered } = axis;
   // Half a step more width where rows are staggered.
   const fineness = period / (cells + (staggered ? 0.5 : 0));
-  const beta = Math.PI * HALF * (1 - 1 / fineness);
+  const betaPerTap = Math.PI * (1 - 1 / fineness);
+  const half = Math.min(MOST_HALF_TAPS, Math.ceil(ENOUGH / betaPerTap));
+  const beta = betaPerTap * half;
   // One period on, the centred phase has turned by -pi (cells - 1); over the two periods of a staggered lattice by a whole turn.
   const flips = !staggered && cells % 2 === 0;
-  const weights = new Float64Array(TAPS);
-  const indices = new Int32Array(TAPS);
+  const weights = new Float64Array(2 * half);
+  const indices = new Int32Array(2 * half);
   const result = { weights, indices };
   return (position) => {
-    const first = Math.floor(position) - HALF + 1;
+    const first = Math.floor(position) - half + 1;
     const fraction = position - Math.floor(position);
     // sinc(x) = sin(pi x) / (pi x), and sin(pi (fraction + integer)) only changes sign.
     const sine = Math.sin(Math.PI * fraction) / Math.PI;
-    for (let i = 0; i < TAPS; i++) {
-      const x = fraction - (i - HALF + 1);
-      const t = x / HALF;
-      const sinc = Math.abs(x) < 1e-9 ? 1 : ((i - HALF + 1) % 2 === 0 ? sine : -sine) / x;
+    for (let i = 0; i < weights.length; i++) {
+      const x = fraction - (i - half + 1);
+      const t = x / half;
+      const sinc = Math.abs(x) < 1e-9 ? 1 : ((i - half + 1) % 2 === 0 ? sine : -sine) / x;
       const sample = first + i;
       const periods = Math.floor(sample / size);
       const sign = flips && periods % 2 !== 0 ? -1 : 1;
