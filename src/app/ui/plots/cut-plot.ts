@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, ElementRef, computed, effect, inject, input, model, output, signal, viewChild } from '@angular/core';
+import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, DestroyRef, computed, effect, inject, input, model, output, signal, viewChild } from '@angular/core';
 import type { Config } from 'plotly.js-dist-min';
 import { levelAt, nearestSample } from './cut-figure';
 import type { CutFigure } from './cut-figure';

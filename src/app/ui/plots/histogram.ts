@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, ElementRef, computed, inject, input, output, viewChild } from '@angular/core';
+import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, input, output, viewChild } from '@angular/core';
 import { niceStep } from './axis-ticks';
 import { colourIndex, colourMap, cssColour } from './colour-maps';
 import type { ColourScale } from './colour-maps';

@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, ElementRef, computed, effect, inject, input, model, signal, viewChild } from '@angular/core';
+import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, computed, effect, inject, input, model, signal, viewChild } from '@angular/core';
 import type { CopperShape } from './copper-shape';
 import { hostWidth } from './element-width';
 import { PlaceIndex } from './map-places';

@@ -1,6 +1,7 @@
 import { Injectable } from '@angular/core';
+import type plotly from 'plotly.js-dist-min';
 
-export type PlotLibraryModule = Pick<typeof import('plotly.js-dist-min').default, 'react' | 'purge' | 'toImage'>;
+export type PlotLibraryModule = Pick<typeof plotly, 'react' | 'purge' | 'toImage'>;
 
 /** The plot library, fetched when the first plot that needs it is shown. */
 @Injectable({ providedIn: 'root' })

@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, DOCUMENT, ElementRef, computed, effect, inject, input, output, signal, viewChild } from '@angular/core';
+import type { ElementRef} from '@angular/core';
+import { ChangeDetectionStrategy, Component, DOCUMENT, computed, effect, inject, input, output, signal, viewChild } from '@angular/core';
 import type { ColourScale } from './colour-maps';
 import { keyMarkup } from './colour-key-scale';
 import { drawnId } from './drawn-id';
