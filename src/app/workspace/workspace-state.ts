@@ -26,6 +26,8 @@ export interface WorkspaceState {
   /** Of the latest revision, for trends and overlays. */
   readonly parentPrediction: Signal<LivePrediction | null>;
   readonly edition: Signal<EditionInUse | null>;
+  /** Why the edition that the design names cannot be shown. */
+  readonly editionFailure?: Signal<string | null>;
   readonly stale: Signal<boolean>;
   /** Why the design on the screen has no prediction. */
   readonly failure: Signal<Problem | null>;
