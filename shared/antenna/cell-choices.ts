@@ -21,10 +21,13 @@ export interface CellChoice {
   readonly complexError: number;
 }
 
+/** What the choice at a position needs of a placed design; light and targets may be those of a few positions alone. */
+export type ChoiceSite = Pick<PlacedDesign, 'design' | 'si' | 'light' | 'targetRad'>;
+
 /** The three cells that come nearest at one position, best first by the design's own rule. None for a continuous ideal phase. */
-export function cellChoices(placed: PlacedDesign, position: number, edition?: PreparedEdition): CellChoice[] {
-  if (!Number.isInteger(position) || position < 0 || position >= placed.lattice.count) {
-    throw new RangeError(`the panel has positions 0 to ${placed.lattice.count - 1}; got ${position}`);
+export function cellChoices(placed: ChoiceSite, position: number, edition?: PreparedEdition): CellChoice[] {
+  if (!Number.isInteger(position) || position < 0 || position >= placed.targetRad.length) {
+    throw new RangeError(`the panel has positions 0 to ${placed.targetRad.length - 1}; got ${position}`);
   }
   const targetRad = placed.targetRad[position];
   const states = statesOf(placed, position, edition);
@@ -47,7 +50,7 @@ function choiceOf(states: CellStates, i: number, targetRad: number): CellChoice 
   };
 }
 
-function statesOf(placed: PlacedDesign, position: number, edition?: PreparedEdition): CellStates {
+function statesOf(placed: ChoiceSite, position: number, edition?: PreparedEdition): CellStates {
   const { cells } = placed.design;
   if (cells.kind === 'edition') {
     const site = editionSite(cells, { light: placed.light, designFrequencyHz: placed.si.designFrequencyHz, si: placed.si, edition });
