@@ -1,4 +1,5 @@
 import type { Cells } from '../model/design-document';
+import { candidateBins } from './candidate-bins';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
 import { editionChooser } from './edition-choice';
@@ -66,13 +67,13 @@ function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment
   const { light, edition, rule } = site;
   const at = edition.atFrequency(site.designFrequencyHz);
   const weigh = incidenceWeigher(edition, site.si.illumination.polarisation);
-  const allowedAt = allowedLister(site);
+  const candidatesAt = candidateLister(site, targetRad.length);
   const choose = edition.sineSquaredNodes.length === 1 && at.nodeCount === 1 && at.entryCount === 1 && rule === 'nearest-phase' ? tableChooser(site) : editionChooser(at, rule);
   const assignment: CellAssignment = emptyAssignment(targetRad.length);
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
   for (let n = 0; n < targetRad.length; n++) {
     const weights = weigh(light.incidenceRad[n], light.azimuthRad[n]);
-    const chosen = choose(targetRad[n], weights, allowedAt(light.incidenceRad[n], light.azimuthRad[n]));
+    const chosen = choose(targetRad[n], weights, candidatesAt(targetRad[n], light.incidenceRad[n], light.azimuthRad[n]));
     assignment.cellIndex[n] = chosen;
     if (chosen < 0) continue;
     coPolarResponse(at, chosen, weights, response);
@@ -80,6 +81,21 @@ function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment
     assignment.phaseRad[n] = response.phaseRad;
   }
   return assignment;
+}
+
+/** From this many positions on, listing the candidates by bins of angle and target costs less than it saves. */
+const BINNED_FROM = 30_000;
+
+/** Cells to choose from at a position: those allowed there, narrowed by bins where the panel is large. */
+function candidateLister(site: EditionSite, count: number): (targetRad: number, incidenceRad: number, azimuthRad: number) => Int32Array {
+  const { edition, rule, regions, allowed, light } = site;
+  if (count >= BINNED_FROM && rule === 'nearest-phase' && regions.isEmpty && edition.sineSquaredNodes.length > 1) {
+    const largestIncidenceRad = light.incidenceRad.reduce((largest, incidence) => Math.max(largest, incidence), 0);
+    const at = edition.atFrequency(site.designFrequencyHz);
+    return candidateBins({ prepared: edition, at, polarisation: site.si.illumination.polarisation, allowed, largestIncidenceRad });
+  }
+  const allowedAt = allowedLister(site);
+  return (_targetRad, incidenceRad, azimuthRad) => allowedAt(incidenceRad, azimuthRad);
 }
 
 function emptyAssignment(count: number): CellAssignment {
