@@ -2,7 +2,8 @@ import * as fc from 'fast-check';
 import { MAX_CELL_COUNT, type DesignDocument } from '../model/design-document';
 import { figures as figuresSchema, type Figures } from '../model/figures';
 import { EXAMPLE_DESIGN, exampleDesign, planeWaveDesign } from './example-design';
-import { predictDesign, type Prediction } from './predict-design';
+import { placeCells } from './place-cells';
+import { predictDesign, predictPlaced, type Prediction } from './predict-design';
 
 const { requirement, panel } = EXAMPLE_DESIGN;
 const everything = { cells: true, cuts: [{ phiDeg: 0, thetaDeg: [-90, 90, 5] as const }], uv: { size: 17 } };
@@ -58,6 +59,11 @@ describe('predicting a design', () => {
     expect(at(10.5).cells?.phaseDeg).toEqual(at().cells?.phaseDeg);
     expect(at(10.5).figures.wavelengthMm).toBeCloseTo(29.9792458 / 1.05, 9);
     expect(Number(at(10.5).figures.phaseErrorRmsDeg)).toBeGreaterThan(1);
+  });
+
+  it('predicts the same from cells placed once', () => {
+    const placed = placeCells(EXAMPLE_DESIGN);
+    for (const frequencyGHz of [9.6, 10, 10.4]) expect(predictPlaced(placed, { frequencyGHz, include: {} }).figures).toEqual(figuresOf(EXAMPLE_DESIGN, frequencyGHz));
   });
 
   it('holds one entry per cell, in the order of the lattice, errors wrapped', () => {

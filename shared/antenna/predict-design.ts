@@ -4,7 +4,7 @@ import { cellArrays, type CellArrays } from './cell-arrays';
 import { designFigures } from './design-figures';
 import { designWarnings } from './design-warnings';
 import { patternCut, type Cut, type CutRequest } from './pattern-cut';
-import { placeCells } from './place-cells';
+import { placeCells, type PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
 import { requirementVerdicts } from './requirement-verdicts';
 import { illuminatedState } from './illuminated-state';
@@ -32,24 +32,31 @@ export interface Prediction {
   readonly uv?: UvMap;
 }
 
+/** What to predict of a design whose cells are placed already. */
+export type PlacedPredictionOptions = Omit<PredictionOptions, 'edition'>;
+
 /**
  * Predicts what a design radiates by the scalar model of the design document: design -> lattice -> illumination ->
  * target phase -> assignment -> aperture field -> pattern -> figures, verdicts and warnings.
  * Throws InvalidDesign, naming every fault, where the fields do not go together.
  */
 export function predictDesign(design: DesignDocument, options: PredictionOptions): Prediction {
-  const placed = placeCells(design, options.edition);
-  const state = illuminatedState(placed, options.frequencyGHz);
+  return predictPlaced(placeCells(design, options.edition), options);
+}
+
+/** The same from placed cells on: for many frequencies of one design, place its cells once. */
+export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: PlacedPredictionOptions): Prediction {
+  const state = illuminatedState(placed, frequencyGHz);
   const { figures, gratingLobeCount, maxIncidence } = designFigures(state);
-  const { include } = options;
+  const { design, si } = placed;
   const gainOffsetDb = isNumber(state.gainOffsetDb) ? state.gainOffsetDb : 0;
-  const beam = placed.si.beams[0].direction;
+  const beam = si.beams[0].direction;
   return {
     figures,
     verdicts: requirementVerdicts(design.requirement, figures),
     warnings: designWarnings({
       design,
-      si: placed.si,
+      si,
       wavelengthM: state.wavelengthM,
       gratingLobeCount,
       maxIncidenceRad: maxIncidence,
