@@ -106,6 +106,7 @@ describe('DraftAutosave', () => {
     autosave.queue(aimed(23));
     expect(progress.at(-1)?.kind).toBe('offline');
     void autosave.flush();
+    await jest.advanceTimersByTimeAsync(0);
     expect(sent.at(-1)).toMatchObject({ theta: 23, etag: '"1"' });
     await sent[1].answer(savedAs('"2"'));
     expect(progress.at(-1)?.kind).toBe('saved');

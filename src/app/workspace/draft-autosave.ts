@@ -30,6 +30,7 @@ export class DraftAutosave {
   private waitingSince = 0;
   private timer: ReturnType<typeof setTimeout> | null = null;
   private sending = false;
+  private flight: Promise<void> | null = null;
   private halted = false;
   private retryMs = FIRST_RETRY_MS;
   private offlineSince: number | null = null;
@@ -56,8 +57,10 @@ export class DraftAutosave {
 
   /** Sends what waits at once: the page is hidden, the network is back, or a revision is about to be frozen. */
   async flush(): Promise<void> {
+    await this.flight;
     this.cancelTimer();
-    await this.sendWaiting();
+    this.flight = this.sendWaiting();
+    await this.flight;
   }
 
   /** Goes on from another state of the server, after a conflict was resolved. */
@@ -82,7 +85,7 @@ export class DraftAutosave {
     this.cancelTimer();
     this.timer = setTimeout(() => {
       this.timer = null;
-      void this.sendWaiting();
+      this.flight = this.sendWaiting();
     }, delayMs);
   }
 

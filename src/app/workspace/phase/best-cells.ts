@@ -1,0 +1,20 @@
+import { cellChoices } from '../../../../shared/antenna/cell-choices';
+import type { CellChoice } from '../../../../shared/antenna/cell-choices';
+import type { PreparedEdition } from '../../../../shared/antenna/prepare-edition';
+import { siDesign } from '../../../../shared/antenna/si-design';
+import { radFromDeg } from '../../../../shared/units/angles';
+import type { LivePrediction } from '../live-prediction-data';
+
+/** The three best cells for one position of a prediction, by the rule of its design; none while the edition is not at hand. */
+export function bestCells({ cells, of }: LivePrediction, position: number, edition: PreparedEdition | null): readonly CellChoice[] {
+  if (of.cells.kind === 'edition' && !edition) return [];
+  const one = (value: number): Float64Array => Float64Array.of(value);
+  const light = {
+    amplitude: one(cells.amplitude[position]),
+    // The choice does not ask for the path: the target holds it already.
+    pathM: one(0),
+    incidenceRad: one(radFromDeg(cells.incidenceDeg[position])),
+    azimuthRad: one(radFromDeg(cells.incidenceAzimuthDeg[position])),
+  };
+  return cellChoices({ design: of, si: siDesign(of), light, targetRad: one(radFromDeg(cells.targetPhaseDeg[position])) }, 0, edition ?? undefined);
+}

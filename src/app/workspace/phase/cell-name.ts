@@ -1,0 +1,21 @@
+import type { DesignDocument } from '../../../../shared/model/design-document';
+import { numberText } from '../../ui/plots/plot-text';
+import type { EditionInUse } from '../workspace-state';
+
+/** The edition, when it is the one a design stands on. */
+export function editionOf(design: DesignDocument, edition: EditionInUse | null): EditionInUse | null {
+  return design.cells.kind === 'edition' && edition?.id === design.cells.editionId ? edition : null;
+}
+
+/** What a cell is called beside its phase: "L 2.30", "level 3 of 8", "entry 2", or that there is none. */
+export function cellName(design: DesignDocument, edition: EditionInUse | null, cellIndex: number): string {
+  const { cells } = design;
+  if (cells.kind === 'ideal') return cells.levels === null ? 'continuous phase' : `level ${cellIndex + 1} of ${cells.levels}`;
+  if (cells.kind === 'inline') return `entry ${cellIndex + 1}`;
+  if (cellIndex < 0) return 'no cell';
+  const own = editionOf(design, edition);
+  if (!own || !own.cells[cellIndex]) return `cell ${cellIndex + 1}`;
+  const { parametersMm, id } = own.cells[cellIndex];
+  const named = own.description.parameters.map(({ id: parameter }, i) => (i < parametersMm.length ? `${parameter} ${numberText(parametersMm[i], 2)}` : ''));
+  return named.filter((text) => text !== '').join(', ') || id;
+}

@@ -1,0 +1,90 @@
+import type { CellChoice } from '../../../../shared/antenna/cell-choices';
+import { degFromRad, wrapDeg } from '../../../../shared/units/angles';
+import { amplitudeRatioToDb } from '../../../../shared/units/decibels';
+import { numberText, signedNumberText } from '../../ui/plots/plot-text';
+import type { LivePrediction } from '../live-prediction-data';
+import type { EditionInUse } from '../workspace-state';
+import { cellName, editionOf } from './cell-name';
+
+/** One line of the list of facts. `tone` is for what is yours (copper) or wants attention (warn). */
+export interface CellFact {
+  readonly name: string;
+  readonly value: string;
+  readonly tone: 'plain' | 'copper' | 'warn';
+  /** The number in full, for copying. */
+  readonly full?: string;
+}
+
+export interface CellFactSource {
+  readonly prediction: LivePrediction;
+  readonly edition: EditionInUse | null;
+  readonly cell: number;
+  /** Best first. */
+  readonly choices: readonly CellChoice[];
+  /** Largest amplitude on the panel. */
+  readonly brightest: number;
+}
+
+/** Columns and rows are counted from 1, as on drawings; those of a triangular lattice from its middle. */
+export function cellPlaceText({ cells, of }: LivePrediction, cell: number): string {
+  const first = of.panel.lattice.kind === 'rectangular' ? 1 : 0;
+  return `col ${numberText(cells.column[cell] + first, 0)}, row ${numberText(cells.row[cell] + first, 0)}`;
+}
+
+export function illuminationDb(amplitude: number, brightest: number): number {
+  return amplitude > 0 && brightest > 0 ? amplitudeRatioToDb(amplitude / brightest) : -200;
+}
+
+/** Everything about one cell, in the order of the picture. */
+export function cellFacts(source: CellFactSource): readonly CellFact[] {
+  const { prediction, cell, brightest } = source;
+  const { cells, of } = prediction;
+  const plain = (name: string, value: string, full?: number): CellFact => ({ name, value, tone: 'plain', ...(full === undefined ? {} : { full: String(full) }) });
+  return [
+    plain('Position', cellPlaceText(prediction, cell)),
+    plain('x, y', `${numberText(cells.xMm[cell], 2)}, ${numberText(cells.yMm[cell], 2)} mm`),
+    plain('Target phase', `${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°`, wrapDeg(cells.targetPhaseDeg[cell])),
+    plain('Cell', cellName(of, source.edition, cells.cellIndex[cell])),
+    plain('Cell phase', `${numberText(wrapDeg(cells.phaseDeg[cell]), 1)}°`, wrapDeg(cells.phaseDeg[cell])),
+    { ...plain('Phase error', `${signedNumberText(cells.errorDeg[cell], 2)}°`, cells.errorDeg[cell]), tone: 'copper' },
+    plain('Next best', nextBestText(source)),
+    plain('Response', `${numberText(cells.responseDb[cell], 2)} dB`, cells.responseDb[cell]),
+    plain('Illumination', `${numberText(illuminationDb(cells.amplitude[cell], brightest), 2)} dB`, illuminationDb(cells.amplitude[cell], brightest)),
+    incidenceFact(source),
+  ];
+}
+
+function nextBestText({ prediction, edition, cell, choices }: CellFactSource): string {
+  const { cells, of } = prediction;
+  if (of.cells.kind === 'ideal' && of.cells.levels === null) return 'none, the phase is continuous';
+  const next = choices.find(({ cellIndex }) => cellIndex !== cells.cellIndex[cell]);
+  return next ? `${cellName(of, edition, next.cellIndex)}, ${signedNumberText(next.errorDeg, 2)}°` : '–';
+}
+
+/** Cell data used beyond the angles they were taken at are said so, cell by cell. */
+function incidenceFact({ prediction, edition, cell }: CellFactSource): CellFact {
+  const { cells, of } = prediction;
+  const incidence = cells.incidenceDeg[cell];
+  const text = `${numberText(incidence, 1)}°`;
+  const own = editionOf(of, edition);
+  if (!own) return { name: 'Incidence', value: text, tone: 'plain', full: String(incidence) };
+  const { thetasRad } = own.responses;
+  const [smallest, steepest] = [degFromRad(thetasRad[0]), degFromRad(thetasRad[thetasRad.length - 1])];
+  // Half a degree is no difference that a cell would notice.
+  const covered = incidence >= smallest - 0.5 && incidence <= steepest + 0.5;
+  if (covered) return { name: 'Incidence', value: `${text}, covered`, tone: 'plain', full: String(incidence) };
+  const data = smallest === steepest ? `data at ${numberText(smallest, 0)}°` : `data ${numberText(smallest, 0)} to ${numberText(steepest, 0)}°`;
+  return { name: 'Incidence', value: `${text}, ${data}`, tone: 'warn', full: String(incidence) };
+}
+
+/** The short form for the line under the map. */
+export function cellSentence(prediction: LivePrediction, edition: EditionInUse | null, cell: number): string {
+  const { cells, of } = prediction;
+  const parts = [
+    cellPlaceText(prediction, cell),
+    `target ${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°`,
+    `${cellName(of, edition, cells.cellIndex[cell])} ${numberText(wrapDeg(cells.phaseDeg[cell]), 1)}°`,
+    `error ${signedNumberText(cells.errorDeg[cell], 2)}°`,
+  ];
+  return parts.join(', ');
+}
