@@ -25,9 +25,14 @@ export class LetterBox {
       logger: false,
       onData: (stream, session, done) => {
         const chunks: Buffer[] = [];
-        stream.on('data', (chunk: Buffer) => chunks.push(chunk));
+        // `size` is only announced to senders; what comes above it is read away and refused at the end.
+        stream.on('data', (chunk: Buffer) => stream.sizeExceeded || chunks.push(chunk));
         stream.on('error', done);
         stream.on('end', () => {
+          if (stream.sizeExceeded) {
+            done(Object.assign(new Error('the letter is above the size limit'), { responseCode: 552 }));
+            return;
+          }
           for (const to of recipientsOf(session)) {
             received.unshift({ id: randomUUID(), to, ...readMessage(Buffer.concat(chunks)), receivedAt: now().toISOString() });
           }

@@ -81,6 +81,16 @@ describe('team', () => {
     expect((await (await api.signedIn('fabricator')).get('/api/team')).status).toBe(200);
   });
 
+  it('names every fault of a change of rights, and knows no field but rights', async () => {
+    const person = await idOf('lab@merrow.example');
+    expectInvalid(await admin.patch(`/api/team/people/${person}`, { roles: ['owner'], disabled: 'no', email: 'x@y.example', teamId: person }), [
+      { pointer: '#/roles/0', detail: 'must be one of designer, lab, reviewer, fabricator, range, administrator; got "owner"' },
+      { pointer: '#/disabled', detail: 'must be true or false; got "no"' },
+      { pointer: '#/email', detail: 'is not a known field' },
+      { pointer: '#/teamId', detail: 'is not a known field' },
+    ]);
+  });
+
   it('does not know people of other teams', async () => {
     expectNotFound(await admin.patch(`/api/team/people/${await idOf(STRANGER)}`, { disabled: true }), 'person');
   });
