@@ -4,7 +4,8 @@ import { signedInOnly } from './session/signed-in-only';
 export const appRoutes: Routes = [
   { path: 'sign-in', title: 'Sign in', loadComponent: () => import('./session/sign-in-page').then((file) => file.SignInPage) },
   { path: 'invitation', title: 'Invitation', loadComponent: () => import('./session/invitation-page').then((file) => file.InvitationPage) },
-  { path: 'password-reset', title: 'New password', loadComponent: () => import('./session/password-reset-page').then((file) => file.PasswordResetPage) },
+  { path: 'forgotten-password', title: 'Forgotten password', loadComponent: () => import('./session/forgotten-password-page').then((file) => file.ForgottenPasswordPage) },
+  { path: 'new-password', title: 'New password', loadComponent: () => import('./session/new-password-page').then((file) => file.NewPasswordPage) },
   { path: 'letters', title: 'Letters', loadComponent: () => import('./session/letters-page').then((file) => file.LettersPage) },
   {
     path: 'panels/:panelId',

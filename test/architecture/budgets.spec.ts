@@ -71,7 +71,10 @@ describe('the words in the tree', () => {
 
   it('leaves out no test and runs none alone', () => {
     const specs = outsideHere.filter(({ path }) => path.endsWith('.spec.ts'));
-    expect(find(specs, /\b(describe|it|test)\.(skip|only|todo)\b|\b(xit|xdescribe|fit|fdescribe)\(/)).toEqual([]);
+    expect(find(specs, /\b(describe|it|test)\.(skip|only)\b|\b(xit|xdescribe|fit|fdescribe)\(/)).toEqual([]);
+    // Published checks of parts that are not built are listed with what each waits for; nothing else may wait.
+    const others = specs.filter(({ path }) => path !== 'test/reference/published-checks.spec.ts');
+    expect(find(others, /\b(describe|it|test)\.todo\b/)).toEqual([]);
   });
 
   it('silences neither compiler nor linter', () => {

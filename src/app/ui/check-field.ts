@@ -5,7 +5,7 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
   selector: 'slant-check-field',
   template: `
     <label>
-      <input type="checkbox" [checked]="checked()" [disabled]="disabled()" (change)="changed.emit(!checked())" />
+      <input type="checkbox" [attr.aria-label]="name()" [checked]="checked()" [disabled]="disabled()" (change)="changed.emit(!checked())" />
       <span class="box" aria-hidden="true"></span>
       <span>{{ label() }}</span>
     </label>
@@ -50,6 +50,8 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
 })
 export class CheckField {
   readonly label = input.required<string>();
+  /** What a screen reader says where there is no visible label. */
+  readonly name = input<string | null>(null);
   readonly checked = input.required<boolean>();
   readonly disabled = input(false);
   readonly changed = output<boolean>();

@@ -1,0 +1,73 @@
+import type { PanelOverview } from '../../../shared/contracts/projects';
+import { STARTING_DESIGN } from '../../../shared/model/starting-design';
+import { panelRow } from './project-rows';
+
+const hash = 'debfe0abb702'.padEnd(64, '0');
+const revision: PanelOverview['latestRevision'] = {
+  id: '6f1c1b7e-58a4-4f0b-9a53-111111111111',
+  panelId: '6f1c1b7e-58a4-4f0b-9a53-222222222222',
+  number: 3,
+  hash,
+  parentId: null,
+  parentNumber: null,
+  restoredFromNumber: null,
+  author: { id: '6f1c1b7e-58a4-4f0b-9a53-333333333333', name: 'Designer' },
+  message: 'steered',
+  createdAt: '2026-12-01T12:00:00.000Z',
+};
+
+const overview = (more: Partial<PanelOverview> = {}): PanelOverview => ({
+  id: revision.panelId,
+  projectId: revision.id,
+  name: 'A, lighthouse relay',
+  design: STARTING_DESIGN,
+  draftHash: hash,
+  summary: {
+    cellCount: 1600,
+    gainDbi: 34.761,
+    verdicts: [{ line: 'gain', sense: 'at-least', limit: 34, unit: 'dBi', value: 34.761, margin: 0.761, verdict: 'meets' }],
+    overall: 'meets',
+  },
+  latestRevision: revision,
+  draftIsRevision: false,
+  changedAt: '2026-12-01T14:02:00.000Z',
+  changedBy: revision.author,
+  ...more,
+});
+
+describe('line of a panel', () => {
+  it('says what it is, where it points, what it gains and by how much it meets', () => {
+    expect(panelRow(overview())).toMatchObject({
+      kind: 'reflecting, 1\u2009600 cells, 28 GHz',
+      beams: 'θ 20.0°, φ 0.0°',
+      gain: '34.76 dBi, margin +0.76 dB',
+      state: 'meets',
+      revision: 'Draft after 3',
+      revisionNote: 'debfe0abb702',
+    });
+  });
+
+  it('names the lines that fall short, whatever the others do', () => {
+    const verdicts: PanelOverview['summary'] = {
+      cellCount: 1600,
+      gainDbi: 33,
+      overall: 'falls-short',
+      verdicts: [
+        { line: 'gain', sense: 'at-least', limit: 34, unit: 'dBi', value: 33, margin: -1, verdict: 'falls-short' },
+        { line: 'mask', sense: 'at-least', limit: 0, unit: 'dB', value: -0.3, margin: -0.3, verdict: 'falls-short' },
+      ],
+    };
+    expect(panelRow(overview({ summary: verdicts }))).toMatchObject({ state: 'falls-short', stateText: 'falls short: gain, mask', gain: '33.00 dBi, margin −1.00 dB' });
+  });
+
+  it('never shows what was not evaluated as met', () => {
+    const summary: PanelOverview['summary'] = { cellCount: 4, gainDbi: { kind: 'unlit', reason: 'no cell is lit' }, verdicts: [], overall: 'not-evaluated' };
+    expect(panelRow(overview({ summary }))).toMatchObject({ state: 'not-evaluated', gain: 'no cell is lit' });
+    expect(panelRow(overview({ summary: null }))).toMatchObject({ state: 'in-work', gain: 'no prediction' });
+  });
+
+  it('tells a draft without revision from one that is its revision', () => {
+    expect(panelRow(overview({ latestRevision: null }))).toMatchObject({ revision: 'Draft', revisionNote: 'no revision' });
+    expect(panelRow(overview({ draftIsRevision: true }))).toMatchObject({ revision: 'Revision 3' });
+  });
+});

@@ -1,0 +1,71 @@
+import type { PanelOverview } from '../../../shared/contracts/projects';
+import type { DesignDocument } from '../../../shared/model/design-document';
+import type { MarkState } from '../ui/state-mark';
+
+/** A panel as one line of the projects sheet. */
+export interface PanelRow {
+  readonly id: string;
+  readonly name: string;
+  readonly kind: string;
+  readonly beams: string;
+  readonly gain: string;
+  readonly state: MarkState;
+  readonly stateText: string;
+  readonly revision: string;
+  readonly revisionNote: string;
+  readonly changedAt: string;
+  readonly changedBy: string;
+  readonly design: DesignDocument;
+}
+
+export function panelRow(panel: PanelOverview): PanelRow {
+  return {
+    id: panel.id,
+    name: panel.name,
+    kind: kindText(panel),
+    beams: beamText(panel.design),
+    gain: gainText(panel),
+    ...stateOf(panel),
+    ...revisionOf(panel),
+    changedAt: panel.changedAt,
+    changedBy: panel.changedBy.name,
+    design: panel.design,
+  };
+}
+
+function kindText({ design, summary }: PanelOverview): string {
+  const operation = design.panel.operation === 'reflect' ? 'reflecting' : 'transmitting';
+  const cells = summary === null ? '' : `, ${summary.cellCount.toLocaleString('en').replaceAll(',', '\u2009')} cells`;
+  return `${operation}${cells}, ${design.requirement.designFrequencyGHz} GHz`;
+}
+
+function beamText({ requirement }: DesignDocument): string {
+  const [first, ...others] = requirement.beams;
+  const one = ({ thetaDeg, phiDeg }: { thetaDeg: number; phiDeg: number }): string => `θ ${thetaDeg.toFixed(1)}°, φ ${phiDeg.toFixed(1)}°`;
+  if (others.length === 0) return one(first);
+  return others.length === 1 ? `${one(first)} and ${one(others[0])}` : `${one(first)} and ${others.length} more`;
+}
+
+function gainText({ summary }: PanelOverview): string {
+  if (summary === null) return 'no prediction';
+  if (typeof summary.gainDbi !== 'number') return summary.gainDbi.reason;
+  const line = summary.verdicts.find(({ line: name }) => name === 'gain');
+  const margin = typeof line?.margin === 'number' ? `, margin ${signed(line.margin)} dB` : '';
+  return `${summary.gainDbi.toFixed(2)} dBi${margin}`;
+}
+
+const signed = (value: number): string => `${value < 0 ? '−' : '+'}${Math.abs(value).toFixed(2)}`;
+
+function stateOf({ summary }: PanelOverview): { state: MarkState; stateText: string } {
+  if (summary === null) return { state: 'in-work', stateText: 'in work' };
+  const short = summary.verdicts.filter(({ verdict }) => verdict === 'falls-short');
+  if (short.length > 0) return { state: 'falls-short', stateText: `falls short: ${short.map(({ line }) => line).join(', ')}` };
+  if (summary.overall === 'meets') return { state: 'meets', stateText: 'meets' };
+  return { state: 'not-evaluated', stateText: 'not evaluated' };
+}
+
+function revisionOf({ latestRevision, draftIsRevision, draftHash }: PanelOverview): { revision: string; revisionNote: string } {
+  if (latestRevision === null) return { revision: 'Draft', revisionNote: 'no revision' };
+  if (draftIsRevision) return { revision: `Revision ${latestRevision.number}`, revisionNote: latestRevision.hash.slice(0, 12) };
+  return { revision: `Draft after ${latestRevision.number}`, revisionNote: draftHash.slice(0, 12) };
+}

@@ -1,0 +1,34 @@
+import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { RouterLink } from '@angular/router';
+import { SessionClient } from '../api/session-client';
+import type { CallFault } from './call-fault';
+import { callFault } from './call-fault';
+import { Entrance } from './entrance';
+
+@Component({
+  selector: 'slant-forgotten-password-page',
+  imports: [Entrance, RouterLink],
+  templateUrl: './forgotten-password-page.html',
+  styleUrl: './form.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class ForgottenPasswordPage {
+  private readonly client = inject(SessionClient);
+  protected readonly busy = signal(false);
+  protected readonly sentTo = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
+
+  protected async send(event: Event, email: string): Promise<void> {
+    event.preventDefault();
+    this.busy.set(true);
+    this.fault.set(null);
+    try {
+      await this.client.requestReset(email);
+      this.sentTo.set(email);
+    } catch (error) {
+      this.fault.set(callFault(error));
+    } finally {
+      this.busy.set(false);
+    }
+  }
+}

@@ -1,0 +1,41 @@
+import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { DatePipe, JsonPipe } from '@angular/common';
+import { RouterLink } from '@angular/router';
+import type { AuditRow } from '../../../shared/contracts/team';
+import { TeamClient } from '../api/team-client';
+import { callFault } from '../session/call-fault';
+import { SheetFrame } from '../ui/sheet-frame';
+import { StateMark } from '../ui/state-mark';
+import { ViewTitle } from '../ui/view-title';
+
+/** What was done, by whom and when, with the verdict on the chain of hashes that guards it. */
+@Component({
+  selector: 'slant-audit-page',
+  imports: [DatePipe, JsonPipe, RouterLink, SheetFrame, StateMark, ViewTitle],
+  templateUrl: './audit-page.html',
+  styleUrl: './team-page.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class AuditPage {
+  private readonly client = inject(TeamClient);
+  protected readonly rows = signal<readonly AuditRow[]>([]);
+  protected readonly next = signal<string | null>(null);
+  protected readonly intact = signal<boolean | null>(null);
+  protected readonly fault = signal<string | null>(null);
+
+  constructor() {
+    void this.read(null);
+  }
+
+  protected async read(after: string | null): Promise<void> {
+    try {
+      const page = await this.client.audit(after);
+      this.rows.update((rows) => (after === null ? page.items : [...rows, ...page.items]));
+      this.next.set(page.next);
+      this.intact.set(page.chainIntact);
+      this.fault.set(null);
+    } catch (error) {
+      this.fault.set(callFault(error).detail);
+    }
+  }
+}

@@ -1,0 +1,98 @@
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { DatePipe } from '@angular/common';
+import { RouterLink } from '@angular/router';
+import { role } from '../../../shared/contracts/common';
+import type { Role } from '../../../shared/contracts/common';
+import type { Invitation, Member, Team } from '../../../shared/contracts/team';
+import { TeamClient } from '../api/team-client';
+import type { CallFault } from '../session/call-fault';
+import { callFault } from '../session/call-fault';
+import { SessionStore } from '../session/session-store';
+import { CheckField } from '../ui/check-field';
+import { Confirm } from '../ui/confirm';
+import { EmptyState } from '../ui/empty-state';
+import { AskName } from '../ui/name-dialog';
+import { SheetFrame } from '../ui/sheet-frame';
+import { ViewTitle } from '../ui/view-title';
+import { ROLE_DUTIES } from './role-duties';
+
+/** Who works in the team and as what. Administrators change it; everybody may look. */
+@Component({
+  selector: 'slant-team-page',
+  imports: [CheckField, DatePipe, EmptyState, RouterLink, SheetFrame, ViewTitle],
+  templateUrl: './team-page.html',
+  styleUrl: './team-page.scss',
+  changeDetection: ChangeDetectionStrategy.OnPush,
+})
+export class TeamPage {
+  private readonly client = inject(TeamClient);
+  private readonly session = inject(SessionStore);
+  private readonly confirm = inject(Confirm);
+  private readonly names = inject(AskName);
+  protected readonly roles = role.options;
+  protected readonly duties = ROLE_DUTIES;
+  protected readonly team = signal<Team | null>(null);
+  protected readonly people = signal<readonly Member[]>([]);
+  protected readonly invitations = signal<readonly Invitation[]>([]);
+  protected readonly wantedRoles = signal<readonly Role[]>(['designer']);
+  protected readonly fault = signal<CallFault | null>(null);
+  protected readonly done = signal<string | null>(null);
+  protected readonly isAdministrator = computed(() => this.session.hasRole('administrator'));
+  protected readonly ownId = computed(() => this.session.current()?.person.id);
+
+  constructor() {
+    void this.attempt(() => this.load(), null);
+  }
+
+  private async load(): Promise<void> {
+    this.team.set(await this.client.team());
+    this.people.set(await this.client.people());
+    if (this.isAdministrator()) this.invitations.set(await this.client.invitations());
+  }
+
+  protected async rename(): Promise<void> {
+    const name = await this.names.ask({ title: 'Rename the team', label: 'Name', deed: 'Rename', value: this.team()?.name ?? '' });
+    if (name !== undefined) await this.attempt(() => this.client.rename(name), `The team is called ${name}.`);
+  }
+
+  protected async toggleRole(member: Member, changed: Role): Promise<void> {
+    const roles = member.roles.includes(changed) ? member.roles.filter((held) => held !== changed) : [...member.roles, changed];
+    await this.attempt(() => this.client.changeMember(member.id, { roles }), `${member.name} works as ${roles.join(', ') || 'nothing yet'}.`);
+  }
+
+  protected async setDisabled(member: Member, disabled: boolean): Promise<void> {
+    if (disabled) {
+      const sure = await this.confirm.ask({ title: `Disable ${member.name}?`, text: 'Every session of theirs in this team ends at once. Their work stays, and they can be enabled again.', deed: 'Disable' });
+      if (!sure) return;
+    }
+    await this.attempt(() => this.client.changeMember(member.id, { disabled }), `${member.name} is ${disabled ? 'disabled' : 'enabled'}.`);
+  }
+
+  protected toggleWanted(wanted: Role): void {
+    this.wantedRoles.update((roles) => (roles.includes(wanted) ? roles.filter((held) => held !== wanted) : [...roles, wanted]));
+  }
+
+  protected async invite(event: Event, field: HTMLInputElement): Promise<void> {
+    event.preventDefault();
+    const email = field.value.trim();
+    if (await this.attempt(() => this.client.invite(email, this.wantedRoles()), `A letter with the invitation is on its way to ${email}. It holds for seven days.`)) field.value = '';
+  }
+
+  protected async withdraw(invitation: Invitation): Promise<void> {
+    await this.attempt(() => this.client.withdraw(invitation.id), `The invitation of ${invitation.email} is withdrawn.`);
+  }
+
+  private async attempt(work: () => Promise<unknown>, done: string | null): Promise<boolean> {
+    this.fault.set(null);
+    this.done.set(null);
+    try {
+      await work();
+      await this.load();
+      this.done.set(done);
+      return true;
+    } catch (error) {
+      this.fault.set(callFault(error));
+      return false;
+    }
+  }
+}
