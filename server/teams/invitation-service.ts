@@ -102,6 +102,7 @@ export class InvitationService {
     return ground.transactions.run(async (transaction) => {
       const row = await this.openByToken(transaction, acceptance.token);
       const person = await create(transaction);
+      if (await memberships.isMember(transaction, row.teamId, person.id)) throw new Conflict('You are in this team already.');
       await memberships.add(transaction, { teamId: row.teamId, personId: person.id, roles: row.roles });
       await this.invitations.update(transaction, row.teamId, row.id, { acceptedAt: ground.now() });
       const opened = await sessions.open(transaction, person, { browser, teamId: row.teamId });

@@ -143,6 +143,20 @@ describe('team', () => {
     ]);
   });
 
+  it('takes a second invitation of the same address for what it is', async () => {
+    await admin.post('/api/team/invitations', { email: 'pair@new.example', roles: ['lab'] });
+    const token = await tokenIn('pair@new.example');
+    // Two administrators may have invited at the same moment: a copy stands for the second letter.
+    await api.query(`INSERT INTO invitation SELECT gen_random_uuid(), team_id, email, roles, encode(sha256('the-other-token-of-the-pair'), 'hex'),
+      invited_by, created_at, expires_at, accepted_at FROM invitation WHERE email = 'pair@new.example'`);
+    const password = 'four quiet river stones';
+    expect((await api.anonymous().post('/api/invitations/acceptance', { token, name: 'Pia', password })).status).toBe(200);
+    expectProblem(
+      await api.anonymous().post('/api/invitations/acceptance', { token: 'the-other-token-of-the-pair', password }),
+      problemOf('conflict', 409, 'You are in this team already.'),
+    );
+  });
+
   it('withdraws an invitation, whose link then opens nothing', async () => {
     const made = (await admin.post('/api/team/invitations', { email: 'gone@new.example', roles: ['lab'] })).json as Invitation;
     const token = await tokenIn('gone@new.example');
