@@ -49,11 +49,13 @@ function apertureEfficiency(gainDbi: Figure, areaM2: number, wavelengthM: number
 }
 
 /**
- * Numerical uncertainties of this computation, not of the model. Directivity: rounding of the transforms. Beamwidths and
+ * Numerical uncertainties of this computation, not of the model. Directivity: interpolation of
+ * the far field, 1e-8 of the field up to 256 cells a side and 1e-7 beyond. Beamwidths and
  * cut sidelobes: the tolerances of the bisection and of the golden-section search.
  */
 function uncertainties(state: IlluminatedState, peakUncertaintyDeg: number): Record<string, number> {
-  const directivityDb = 1e-9 * Math.log2(Math.max(2, state.placed.lattice.count));
+  const { columnCount, rowCount } = state.placed.lattice.grid;
+  const directivityDb = 8.7 * (Math.max(columnCount, rowCount) <= 256 ? 1e-8 : 1e-7);
   return {
     directivityDbi: directivityDb,
     directivityAtBeamDbi: directivityDb,

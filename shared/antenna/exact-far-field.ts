@@ -2,14 +2,8 @@ import type { ApertureField } from './aperture-field';
 import { newFarFieldSample, type FarField, type FarFieldSample } from './far-field';
 import { rowShiftM } from './panel-lattice';
 
-/** Exact sums, and what a map over (u, v) shares between its points. */
-export interface ExactFarField extends FarField {
-  /** Inner sums of every row at one u, for many v at that u. Written into `re` and `im`. */
-  rowSumsAt(u: number, re: Float64Array, im: Float64Array): void;
-}
-
 /** Exact sums over the cells, row by row with the powers of exp(j k stepX u) shared by all rows. */
-export function exactFarField(field: ApertureField, wavenumber: number): ExactFarField {
+export function exactFarField(field: ApertureField, wavenumber: number): FarField {
   const { grid } = field;
   const { columnCount, rowCount } = grid;
   const cosines = new Float64Array(columnCount);
@@ -38,7 +32,7 @@ export function exactFarField(field: ApertureField, wavenumber: number): ExactFa
     }
   };
 
-  const rowSumsAt = (u: number, outRe: Float64Array, outIm: Float64Array): void => {
+  const fillRowSums = (u: number): void => {
     fillPowers(u);
     const { re, im } = field;
     for (let r = 0; r < rowCount; r++) {
@@ -54,22 +48,22 @@ export function exactFarField(field: ApertureField, wavenumber: number): ExactFa
       const shift = wavenumber * u * (centreXM + rowShiftM(grid, r));
       const shiftCos = Math.cos(shift);
       const shiftSin = Math.sin(shift);
-      outRe[r] = sumRe * shiftCos - sumIm * shiftSin;
-      outIm[r] = sumRe * shiftSin + sumIm * shiftCos;
+      rowRe[r] = sumRe * shiftCos - sumIm * shiftSin;
+      rowIm[r] = sumRe * shiftSin + sumIm * shiftCos;
     }
   };
 
   const powerAt = (u: number, v: number): number => {
-    rowSumsAt(u, rowRe, rowIm);
+    fillRowSums(u);
     return columnPower({ re: rowRe, im: rowIm }, wavenumber * grid.firstYM * v, wavenumber * grid.stepYM * v);
   };
 
   const derivatives = derivativeSums(field, wavenumber, { cosines, sines, fillPowers, middle });
-  return { powerAt, derivativesAt: derivatives, rowSumsAt };
+  return { powerAt, derivativesAt: derivatives };
 }
 
 /** |sum over rows of G_r exp(j (start + r step))|^2. */
-export function columnPower(rows: { re: Float64Array; im: Float64Array }, startRad: number, stepRad: number): number {
+function columnPower(rows: { re: Float64Array; im: Float64Array }, startRad: number, stepRad: number): number {
   let sumRe = 0;
   let sumIm = 0;
   let cosine = Math.cos(startRad);

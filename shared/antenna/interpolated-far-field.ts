@@ -25,11 +25,8 @@ interface AxisWeights {
  * A. H. Barnett et al., SIAM J. Sci. Comput. 41(5), C479-C504, 2019 (from memory).
  */
 export function interpolatedFarField(spectrum: ApertureSpectrum, wavenumber: number): (u: number, v: number) => FieldValue {
-  const { grid, periodU, columns, rows, re, im } = spectrum;
-  const alongU = axisWeigher({ size: columns, cells: grid.columnCount, period: periodU, staggered: grid.stagger !== 'none' });
-  const alongV = axisWeigher({ size: rows, cells: grid.rowCount, period: rows, staggered: false });
-  const samplesPerU = (wavenumber * grid.stepXM * periodU) / (2 * Math.PI);
-  const samplesPerV = (wavenumber * grid.stepYM * rows) / (2 * Math.PI);
+  const { rows, re, im } = spectrum;
+  const { alongU, alongV, samplesPerU, samplesPerV } = axes(spectrum, wavenumber);
   const value: FieldValue = { re: 0, im: 0 };
   return (u, v) => {
     const { weights: weightsU, indices: indicesU } = alongU(u * samplesPerU);
@@ -51,6 +48,60 @@ export function interpolatedFarField(spectrum: ApertureSpectrum, wavenumber: num
     value.re = sumRe;
     value.im = sumIm;
     return value;
+  };
+}
+
+/**
+ * |F|^2 at many v of one u: interpolates the samples along u once for the whole column, then along v. Writes one
+ * value for each of `vs` into `power`.
+ */
+export function interpolatedColumn(spectrum: ApertureSpectrum, wavenumber: number, vs: Float64Array): (u: number, power: Float64Array) => void {
+  const { rows, re, im } = spectrum;
+  const { alongU, alongV, samplesPerU, samplesPerV } = axes(spectrum, wavenumber);
+  const fixed = Array.from(vs, (v) => {
+    const { weights, indices } = alongV(v * samplesPerV);
+    return { weights: weights.slice(), indices: indices.slice() };
+  });
+  const lineRe = new Float64Array(rows);
+  const lineIm = new Float64Array(rows);
+  return (u, power) => {
+    lineRe.fill(0);
+    lineIm.fill(0);
+    const { weights, indices } = alongU(u * samplesPerU);
+    for (let i = 0; i < weights.length; i++) {
+      const weight = weights[i];
+      const column = indices[i] * rows;
+      for (let n = 0; n < rows; n++) {
+        lineRe[n] += weight * re[column + n];
+        lineIm[n] += weight * im[column + n];
+      }
+    }
+    for (let k = 0; k < fixed.length; k++) {
+      const { weights: weightsV, indices: indicesV } = fixed[k];
+      let sumRe = 0;
+      let sumIm = 0;
+      for (let j = 0; j < weightsV.length; j++) {
+        sumRe += weightsV[j] * lineRe[indicesV[j]];
+        sumIm += weightsV[j] * lineIm[indicesV[j]];
+      }
+      power[k] = sumRe * sumRe + sumIm * sumIm;
+    }
+  };
+}
+
+interface Axes {
+  readonly samplesPerU: number;
+  readonly samplesPerV: number;
+  alongU(position: number): AxisWeights;
+  alongV(position: number): AxisWeights;
+}
+
+function axes({ grid, periodU, columns, rows }: ApertureSpectrum, wavenumber: number): Axes {
+  return {
+    alongU: axisWeigher({ size: columns, cells: grid.columnCount, period: periodU, staggered: grid.stagger !== 'none' }),
+    alongV: axisWeigher({ size: rows, cells: grid.rowCount, period: rows, staggered: false }),
+    samplesPerU: (wavenumber * grid.stepXM * periodU) / (2 * Math.PI),
+    samplesPerV: (wavenumber * grid.stepYM * rows) / (2 * Math.PI),
   };
 }
 

@@ -50,7 +50,7 @@ describe('the u-v map', () => {
     }
   });
 
-  it('is the same whether summed or interpolated', () => {
+  it('is that of single directions on a large staggered panel too', () => {
     const large = radiationPattern(exampleField({ columnCount: 90, rowCount: 70, stagger: 'odd' }), 210, 0.5);
     const fine = uvMap(large, 17, 0);
     const { size } = fine;

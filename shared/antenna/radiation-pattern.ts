@@ -10,7 +10,6 @@ export interface RadiationPattern {
   readonly wavenumber: number;
   /** Exponent b of the element factor cos^b(theta), in field. */
   readonly radiateExponent: number;
-  readonly field: ApertureField;
   readonly spectrum: ApertureSpectrum;
   readonly farField: FarField;
   /** Integral of |F|^2 over the outward hemisphere. */
@@ -22,7 +21,6 @@ export function radiationPattern(field: ApertureField, wavenumber: number, radia
   return {
     wavenumber,
     radiateExponent,
-    field,
     spectrum,
     farField: farFieldOf(field, spectrum, wavenumber),
     radiatedPower: radiatedPower(spectrum, wavenumber, radiateExponent),
