@@ -17,8 +17,9 @@ const LEAST_ZONE = 90;
 /** Zones are numbered along the long edges and lettered along the short ones; null before the sheet has a size. */
 export function frameDrawing({ width, height }: { width: number; height: number }): FrameDrawing | null {
   if (width < 4 * ZONE || height < 4 * ZONE) return null;
-  const columns = Math.max(2, Math.min(COLUMNS, Math.floor(width / LEAST_ZONE)));
-  const rows = Math.max(2, Math.min(LETTERS.length, Math.round(height / 220)));
+  // Even counts, so that the centre marks fall between two zones and not on a letter.
+  const columns = 2 * Math.max(1, Math.min(COLUMNS / 2, Math.floor(width / LEAST_ZONE / 2)));
+  const rows = 2 * Math.max(1, Math.min(LETTERS.length / 2, Math.round(height / 440)));
   const across = (i: number): number => ZONE + ((width - 2 * ZONE) * i) / columns;
   const down = (j: number): number => ZONE + ((height - 2 * ZONE) * j) / rows;
   const ticks: string[] = [];

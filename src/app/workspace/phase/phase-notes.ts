@@ -1,0 +1,35 @@
+import { degFromRad } from '../../../../shared/units/angles';
+import { numberText } from '../../ui/plots/plot-text';
+import type { LivePrediction } from '../live-prediction-data';
+import type { EditionInUse } from '../workspace-state';
+
+/** The line beside the title: how many cells, of what, by which rule. */
+export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInUse | null): string {
+  const count = `${numberText(cells.xMm.length, 0)} cells`;
+  switch (of.cells.kind) {
+    case 'ideal':
+      return `${count}, ideal phase, ${of.cells.levels === null ? 'continuous' : `${of.cells.levels} levels`}`;
+    case 'inline':
+      return `${count}, what-if table of ${of.cells.cells.length}, nearest phase`;
+    case 'edition': {
+      const rule = of.cells.rule === 'nearest-phase' ? 'nearest phase' : 'least complex error';
+      return edition ? `${count}, edition ${edition.number ?? 'not published'} of ${edition.familyName}, ${rule}` : `${count}, ${rule}`;
+    }
+  }
+}
+
+/** Assumptions of the map, as drawing notes. */
+export function phaseNotes({ head, of }: LivePrediction, edition: EditionInUse | null): readonly string[] {
+  const side = of.panel.operation === 'reflect' ? 'Seen from the outward side, where the beams and the horn are.' : 'Seen from the outward side, where the beams are; the horn is behind.';
+  const light = of.illumination;
+  const foot = light.kind === 'horn' ? ` Cross and circle: foot of the horn at x ${numberText(light.positionMm[0], 1)}, y ${numberText(light.positionMm[1], 1)}, z ${numberText(light.positionMm[2], 1)} mm.` : '';
+  return [side + foot, ...coverageNote(head.figures.maxIncidenceDeg, edition), 'A prediction is array theory, not a measurement.'];
+}
+
+function coverageNote(maxIncidenceDeg: LivePrediction['head']['figures']['maxIncidenceDeg'], edition: EditionInUse | null): readonly string[] {
+  if (!edition || typeof maxIncidenceDeg !== 'number') return [];
+  const { thetasRad } = edition.responses;
+  const steepest = degFromRad(thetasRad[thetasRad.length - 1]);
+  const data = `Cell data ${edition.description.provenance}${steepest === 0 ? ' at normal incidence' : ` up to ${numberText(steepest, 0)}°`}`;
+  return maxIncidenceDeg > steepest + 0.5 ? [`${data}, used up to ${numberText(maxIncidenceDeg, 1)}°: beyond the data the response of the nearest angle holds.`] : [`${data}; the panel needs ${numberText(maxIncidenceDeg, 1)}°.`];
+}
