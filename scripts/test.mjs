@@ -22,6 +22,9 @@ const endings = [];
 let current = null;
 let asked = null;
 
+/** The program that runs now, for the signal that may end it. */
+const remember = (child) => (current = child);
+
 function readArguments(words) {
   const names = stages.map((stage) => stage.name);
   const chosen = stages.filter((stage) => words.includes(stage.name));
@@ -80,6 +83,7 @@ async function runStage(stage, context) {
   const started = Date.now();
   try {
     for (const need of stage.needs ?? []) await (context.provided[need] ??= providers[need](context));
+    if (asked !== null) throw new Refusal(`Ended by ${asked}.`);
     return { ...(await stage.run(context)), time: seconds(started) };
   } catch (error) {
     console.error(error instanceof Refusal ? error.message : error);
@@ -103,7 +107,7 @@ async function main() {
   await provideMachine(...(needs.has('database') || needs.has('product') ? ['postgres'] : []), ...(needs.has('product') ? ['chromium'] : []));
   await provideDependencies();
   const folder = needs.has('database') || needs.has('product') ? await temporaryFolder() : null;
-  const context = { patterns, folder, environment: { ...process.env, NODE_ENV: 'test' }, provided: {}, onStart: (child) => (current = child) };
+  const context = { patterns, folder, environment: { ...process.env, NODE_ENV: 'test' }, provided: {}, onStart: remember };
   const results = [];
   for (const stage of chosen) {
     if (asked !== null) throw new Refusal(`Ended by ${asked}.`);
