@@ -20,9 +20,9 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
     title: 'Gain at the peak',
     formula: [
       'F(u, v) = cos^b θ Σ Aₙ Γₙ exp(−jkRₙ) exp(+jk(xₙu + yₙv))',
-      'D = 4π |F|² ⁄ ∫ |F|² dΩ over the outward hemisphere',
+      'D = 4π |F|² / ∫ |F|² dΩ over the outward hemisphere',
       'G (dBi) = D + spillover + cell loss',
-      'cell loss = 10 log (Σ|AΓ|² ⁄ Σ A²)',
+      'cell loss = 10 log (Σ|AΓ|² / Σ A²)',
     ],
     meaning: 'The highest lobe anywhere in the hemisphere, refined between samples. Directivity already holds taper and phase error, so neither is counted again.',
     conventions: `${GEOMETRY}; b is the radiate exponent, in field`,
@@ -63,7 +63,7 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
   },
   efficiency: {
     title: 'Aperture efficiency',
-    formula: ['η = G λ² ⁄ (4π A)'],
+    formula: ['η = G λ² / (4π A)'],
     meaning: 'Gain at the peak, as a ratio, against a uniformly lit loss-free aperture of the same area at boresight.',
     conventions: 'A is the count of cells times the area of one cell',
     validity: 'The projected area falls with cos θ, so a steered beam cannot reach 100 %.',
@@ -71,7 +71,7 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
   },
   'phase-error': {
     title: 'RMS phase error',
-    formula: ['σ = √(Σ eₙ² ⁄ N),  eₙ = wrap(φ achieved − φ target)', 'phase loss = |Σ A exp(je)|² ⁄ |Σ A|²'],
+    formula: ['σ = √(Σ eₙ² / N),  eₙ = wrap(φ achieved − φ target)', 'phase loss = |Σ A exp(je)|² / |Σ A|²'],
     meaning: 'What the choice of cells leaves of the target phase, each cell counted once. The phase loss beside it is weighted by the illumination.',
     conventions: 'Wrapped to ±180°; positive when the achieved phase leads',
     validity: 'Of the cell data at the incidence of each position, where the edition covers it; the Cells sheet says where it does not.',
@@ -79,7 +79,7 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
   },
   cells: {
     title: 'Cells',
-    formula: ['columns = ⌊W ⁄ pₓ⌋, rows = ⌊H ⁄ p_y⌋, less the keep-outs'],
+    formula: ['columns = floor(W / pₓ), rows = floor(H / p_y), less the keep-outs'],
     meaning: 'Positions of the lattice whose centre lies inside or on the outline and outside every keep-out. Evanescent cells ask for a tangential wavenumber above k, which does not travel.',
     conventions: 'Ordered row by row from the lowest y, within a row from the lowest x',
     validity: 'At most 1 000 000 cells.',

@@ -58,7 +58,7 @@ export class PanelSheet {
     const { spacingMm, largestFreeSpacingMm, largestCellSpacingMm } = this.derived();
     return [
       { name: 'No grating lobe of a beam, λ / (1 + sin θ)', limit: largestFreeSpacingMm, spacing: spacingMm },
-      { name: 'Cells of one order, λ / (1 + sin incidence)', limit: largestCellSpacingMm, spacing: spacingMm },
+      { name: 'Cells of one order at the edge, λ / (1 + sin incidence)', limit: largestCellSpacingMm, spacing: spacingMm },
     ].map(({ name, limit, spacing }) => ({
       name,
       spacing: `${figureText(spacing, 3)} mm`,

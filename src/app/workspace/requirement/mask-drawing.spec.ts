@@ -29,11 +29,10 @@ describe('maskDrawing', () => {
   });
 
   it('makes room for the predicted gain', () => {
-    const drawing = maskDrawing(points, [{ offAxisDeg: [0, 1], gainDbi: [36, -60] }], space);
+    const drawing = maskDrawing(points, [{ dashed: false, offAxisDeg: [0, 1, 2], gainDbi: [36, -60, 30] }], space);
     expect(drawing.levelsDbi.at(-1)?.text).toBe('40');
-    const ys = [...drawing.traces[0].matchAll(/ ([\d.]+)/g)].map(([, y]) => Number(y));
-    // What lies below the floor stays on it.
-    expect(ys[1]).toBe(drawing.frame.bottom);
+    // What lies below the floor leaves a gap.
+    expect(drawing.traces[0].path).toMatch(/^M40 [\d.]+M48\.89 [\d.]+$/);
   });
 
   it('draws the axes of a mask without points', () => {
@@ -51,7 +50,7 @@ describe('offAxisTraces', () => {
       directivityDbi: new Float64Array(5),
       gainDbi: Float64Array.of(1, 2, 30, 4, 5),
     };
-    const [below, above] = offAxisTraces(cut, [{ thetaDeg: 20, phiDeg: 0 }]);
+    const [below, above] = offAxisTraces(cut, [{ thetaDeg: 20, phiDeg: 0 }], true);
     expect(below.offAxisDeg.map(Math.round)).toEqual([0, 10, 20]);
     expect(below.gainDbi).toEqual([30, 2, 1]);
     expect(above.gainDbi).toEqual([30, 4, 5]);

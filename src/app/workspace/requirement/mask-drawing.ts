@@ -16,12 +16,14 @@ export interface MaskDrawing {
   readonly forbidden: string;
   readonly edge: string;
   readonly points: readonly { readonly x: number; readonly y: number }[];
-  readonly traces: readonly string[];
+  readonly traces: readonly { readonly path: string; readonly dashed: boolean }[];
   readonly anglesDeg: readonly AxisTick[];
   readonly levelsDbi: readonly AxisTick[];
 }
 
 export interface OffAxisTrace {
+  /** Drawn dashed: the cut across the beam. */
+  readonly dashed: boolean;
   readonly offAxisDeg: readonly number[];
   readonly gainDbi: readonly number[];
 }
@@ -53,7 +55,7 @@ export function maskDrawing(points: readonly MaskPoint[], traces: readonly OffAx
     edge,
     forbidden: shown.length === 0 ? '' : `${edge}L${n(x(shown[shown.length - 1][0]))} ${n(frame.top)}L${n(x(shown[0][0]))} ${n(frame.top)}Z`,
     points: points.map(([deg, level]) => ({ x: x(deg), y: y(level) })),
-    traces: traces.map(({ offAxisDeg, gainDbi }) => path(offAxisDeg.map((deg, i) => ({ x: x(deg), y: y(gainDbi[i]) })))),
+    traces: traces.map(({ dashed, offAxisDeg, gainDbi }) => ({ dashed, path: brokenPath(offAxisDeg.map((deg, i) => ({ x: x(deg), y: gainDbi[i] < bottomDbi ? null : y(gainDbi[i]) }))) })),
     anglesDeg: range(0, rightDeg, rightDeg === 180 ? 30 : 15).map((deg) => ({ at: x(deg), text: String(deg) })),
     levelsDbi: range(bottomDbi, topDbi, topDbi - bottomDbi > 70 ? 20 : 10).map((dbi) => ({ at: y(dbi), text: String(dbi).replace('-', '\u2212') })),
   };
@@ -71,8 +73,19 @@ function path(points: readonly { readonly x: number; readonly y: number }[]): st
   return points.length === 0 ? '' : `M${points.map((point) => `${n(point.x)} ${n(point.y)}`).join('L')}`;
 }
 
+/** Leaves a gap where a point lies below the floor. */
+function brokenPath(points: readonly { readonly x: number; readonly y: number | null }[]): string {
+  let drawn = '';
+  let pen = 'M';
+  for (const { x, y } of points) {
+    if (y !== null) drawn += `${pen}${n(x)} ${n(y)}`;
+    pen = y === null ? 'M' : 'L';
+  }
+  return drawn;
+}
+
 /** Both sides of a predicted cut against the angle off the nearest wanted beam. */
-export function offAxisTraces(cut: PredictedCut, beams: readonly Beam[]): readonly OffAxisTrace[] {
+export function offAxisTraces(cut: PredictedCut, beams: readonly Beam[], dashed: boolean): readonly OffAxisTrace[] {
   const directions = beams.map(({ thetaDeg, phiDeg }) => directionOf(rad(thetaDeg), rad(phiDeg)));
   const offAxis = Array.from(cut.thetaDeg, (theta, i) => {
     const direction = directionOf(rad(theta), rad(cut.phiDeg[i]));
@@ -80,7 +93,7 @@ export function offAxisTraces(cut: PredictedCut, beams: readonly Beam[]): readon
   });
   const nearest = offAxis.indexOf(Math.min(...offAxis));
   const sides = [[...offAxis.keys()].slice(0, nearest + 1).reverse(), [...offAxis.keys()].slice(nearest)];
-  return sides.map((places) => ({ offAxisDeg: places.map((i) => offAxis[i]), gainDbi: places.map((i) => cut.gainDbi[i]) }));
+  return sides.map((places) => ({ dashed, offAxisDeg: places.map((i) => offAxis[i]), gainDbi: places.map((i) => cut.gainDbi[i]) }));
 }
 
 function rad(deg: number): number {

@@ -67,7 +67,7 @@ export class RequirementSheet {
   });
   protected readonly maskTraces = computed(() => {
     const prediction = this.state.prediction();
-    return prediction ? prediction.cuts.slice(0, 2).flatMap((cut) => offAxisTraces(cut, prediction.of.requirement.beams)) : [];
+    return prediction ? prediction.cuts.slice(0, 2).flatMap((cut, place) => offAxisTraces(cut, prediction.of.requirement.beams, place === 1)) : [];
   });
   protected readonly nextMaskPoint = (rows: readonly (readonly number[])[]): readonly number[] => {
     const last = rows.at(-1) ?? [0, 20];
