@@ -1,0 +1,64 @@
+import { wrapDeg } from '../../../../shared/units/angles';
+import type { CutRequest } from '../../../../shared/contracts/predictions';
+import type { LivePrediction, PredictedCut } from '../live-prediction-data';
+
+/** Which cut is shown: through the beam along theta, across it, or a plane of one's own. */
+export type CutChoice = 'along' | 'across' | 'plane';
+
+const STEP_DEG = 0.1;
+const HALF_CIRCLE: [number, number, number] = [-90, 90, STEP_DEG];
+
+/** A cut with the angle it is drawn over. */
+export interface ShownCut {
+  readonly angleDeg: ArrayLike<number>;
+  readonly thetaDeg: ArrayLike<number>;
+  readonly phiDeg: ArrayLike<number>;
+  readonly gainDbi: ArrayLike<number>;
+  /** Angle of the wanted beam on this cut, or of what comes nearest to it. */
+  readonly beamDeg: number;
+  readonly angleTitle: string;
+}
+
+export interface CutWish {
+  readonly choice: CutChoice;
+  /** Of the wanted beam in question. */
+  readonly beam: { readonly thetaDeg: number; readonly phiDeg: number };
+  /** Of the plane of one's own. */
+  readonly planePhiDeg: number;
+}
+
+/** What to ask the engine for; the cut across the first beam comes by itself. */
+export function cutRequests({ choice, beam, planePhiDeg }: CutWish): readonly CutRequest[] {
+  if (choice === 'across') return [];
+  return [{ phiDeg: choice === 'along' ? beam.phiDeg : planePhiDeg, thetaDeg: HALF_CIRCLE }];
+}
+
+/** The wished cut from a prediction, or null when the prediction does not hold it yet. */
+export function shownCut({ cuts }: LivePrediction, wish: CutWish): ShownCut | null {
+  const cut = cuts.find(({ request }) => fits(request, wish));
+  if (!cut) return null;
+  if (wish.choice === 'across') return { ...part(cut, 0, cut.angleDeg.length), beamDeg: 0, angleTitle: 'angle across the beam, °' };
+  const planeDeg = wish.choice === 'along' ? wish.beam.phiDeg : wish.planePhiDeg;
+  const beamDeg = wish.choice === 'along' ? wish.beam.thetaDeg : nearestThetaDeg(wish.beam, planeDeg);
+  return { ...part(cut, 0, cut.angleDeg.length), beamDeg, angleTitle: `θ in the plane φ = ${tidy(planeDeg)}°, °` };
+}
+
+function fits(request: CutRequest, { choice, beam, planePhiDeg }: CutWish): boolean {
+  if (choice === 'across') return 'plane' in request && request.plane === 'across';
+  return 'phiDeg' in request && Math.abs(request.phiDeg - (choice === 'along' ? beam.phiDeg : planePhiDeg)) < 1e-9;
+}
+
+function part({ angleDeg, thetaDeg, phiDeg, gainDbi }: PredictedCut, from: number, to: number): Omit<ShownCut, 'beamDeg' | 'angleTitle'> {
+  return { angleDeg: angleDeg.slice(from, to), thetaDeg: thetaDeg.slice(from, to), phiDeg: phiDeg.slice(from, to), gainDbi: gainDbi.slice(from, to) };
+}
+
+/** The signed theta in a plane whose direction lies nearest to the beam: its projection. */
+function nearestThetaDeg({ thetaDeg, phiDeg }: CutWish['beam'], planePhiDeg: number): number {
+  const theta = (thetaDeg * Math.PI) / 180;
+  const along = Math.cos((wrapDeg(phiDeg - planePhiDeg) * Math.PI) / 180);
+  return (Math.atan2(Math.sin(theta) * along, Math.cos(theta)) * 180) / Math.PI;
+}
+
+function tidy(deg: number): string {
+  return String(Number(deg.toFixed(1))).replace('-', '\u2212');
+}
