@@ -35,11 +35,15 @@ const jest = (project, workers = 2) => async (context) => {
   return countTests(JSON.parse(readFileSync(report, 'utf8')), code);
 };
 
-/** A suite that could not run, a test left out and an empty stage are failures: each hides something unchecked. */
+/**
+ * A suite that could not run, a test left out and an empty stage are failures: each hides something unchecked. Published
+ * checks of parts that are not built are told, not counted; the architecture test lets nothing else wait.
+ */
 function countTests(report, code) {
-  const leftOut = report.numPendingTests + report.numTodoTests;
+  const leftOut = report.numPendingTests;
   const failed = report.numFailedTests + report.numRuntimeErrorTestSuites + leftOut;
   const notes = [];
+  if (report.numTodoTests > 0) notes.push(`${report.numTodoTests} published checks wait for parts not built`);
   if (leftOut > 0) notes.push(`${leftOut} left out`);
   if (report.numTotalTests === 0) notes.push('no tests');
   const unexplained = failed === 0 && (code !== 0 || report.numTotalTests === 0) ? 1 : 0;
