@@ -6,6 +6,9 @@ import type { House } from './house';
 import type { Route } from './http/route';
 import { libraryRoutes } from './library/library-routes';
 import { letterRoutes } from './notices/letter-routes';
+import { predictionRoutes } from './predictions/prediction-routes';
+import { projectRoutes } from './projects/project-routes';
+import { revisionRoutes } from './revisions/revision-routes';
 import { invitationRoutes, teamRoutes } from './teams/team-routes';
 
 /** Every feature's routes, one line each. */
@@ -19,4 +22,7 @@ export const features: readonly ((house: House) => readonly Route[])[] = [
   auditRoutes,
   letterRoutes,
   libraryRoutes,
+  predictionRoutes,
+  projectRoutes,
+  revisionRoutes,
 ];

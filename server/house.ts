@@ -11,12 +11,21 @@ import { AuditService } from './audit/audit-service';
 import { isHttps } from './config';
 import type { Ground } from './database/ground';
 import type { Callers } from './http/authentication';
+import { PredictionEngine, limitsFor } from './engine/prediction-engine';
+import { createPredictionRunner, type PredictionRunner } from './engine/prediction-runner';
 import { EventStreams } from './http/event-streams';
 import { ImportService } from './library/import-service';
 import { createInspectionRunner } from './library/inspection-runner';
 import { LibraryService } from './library/library-service';
 import { LetterService } from './notices/letter-service';
+import { FigureService } from './predictions/figure-service';
+import { PredictionService } from './predictions/prediction-service';
+import { DesignContentService } from './projects/design-content-service';
+import { DraftService } from './projects/draft-service';
+import { PanelService } from './projects/panel-service';
+import { ProjectService } from './projects/project-service';
 import { ReplayService } from './replays/replay-service';
+import { RevisionService } from './revisions/revision-service';
 import { InvitationService } from './teams/invitation-service';
 import { MembershipService } from './teams/membership-service';
 import { TeamService } from './teams/team-service';
@@ -28,10 +37,12 @@ export interface HouseOptions {
   readonly isSchemaReady: () => Promise<boolean>;
   /** Cheaper hashing for tests that sign in often. */
   readonly hasher?: PasswordHasher;
+  /** What computes predictions; threads of the engine unless given. */
+  readonly predictionRunner?: PredictionRunner;
 }
 
 /** The services of all features, made once per process, one line each. A feature reaches another one only through these. */
-function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions) {
+function createServices({ ground, hasher = new PasswordHasher(), predictionRunner }: HouseOptions) {
   const memberships = new MembershipService(ground);
   const replays = new ReplayService(ground);
   const people = new PersonService(ground, hasher);
@@ -46,12 +57,34 @@ function createServices({ ground, hasher = new PasswordHasher() }: HouseOptions)
   const invitations = new InvitationService({ ground, people, sessions, signIn, memberships, letters, audit });
   const library = new LibraryService(ground, {
     namesOfPeople: (transaction, ids) => people.names(transaction, ids),
-    usesOfEdition: async () => [],
-    countUses: async () => new Map(),
+    usesOfEdition: (teamId, editionId) => design.revisions.usesOfEdition(teamId, editionId),
+    countUses: (teamId) => design.revisions.countUses(teamId),
   });
+  const engine = new PredictionEngine(predictionRunner ?? createPredictionRunner(ground.config.workerCount), limitsFor(ground.config.workerCount));
+  const design = createDesignServices({ ground, people, audit, library, engine });
   const inspections = createInspectionRunner();
   const imports = new ImportService(ground, { library, audit, runner: inspections });
-  return { library, inspections, imports, hasher, memberships, replays, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+  return { ...design, engine, library, inspections, imports, hasher, memberships, replays, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+}
+
+interface DesignParts {
+  readonly ground: Ground;
+  readonly people: PersonService;
+  readonly audit: AuditService;
+  readonly library: LibraryService;
+  readonly engine: PredictionEngine;
+}
+
+/** Predictions, projects and revisions. */
+function createDesignServices({ ground, people, audit, library, engine }: DesignParts) {
+  const predictions = new PredictionService(engine, library);
+  const figures = new FigureService(ground, predictions);
+  const contents = new DesignContentService(library);
+  const drafts = new DraftService(ground, (transaction, ids) => people.names(transaction, ids));
+  const revisions = new RevisionService({ ground, drafts, contents, figures, audit });
+  const panels = new PanelService({ ground, drafts, contents, revisions, audit });
+  const projects = new ProjectService({ ground, drafts, revisions, figures, audit });
+  return { predictions, figures, revisions, panels, projects };
 }
 
 const SWEEP_MS = 6 * 3600 * 1000;
@@ -74,7 +107,7 @@ export interface House extends ReturnType<typeof createServices> {
 export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
-  const { inspections, letters, passwords, replays, sessions, tokens } = services;
+  const { engine, figures, inspections, letters, passwords, replays, sessions, tokens } = services;
   const eventStreams = new EventStreams();
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
@@ -95,7 +128,7 @@ export function createHouse(options: HouseOptions): House {
     start: async () => {
       await letters.start();
       sweeper = setInterval(() => {
-        Promise.all([sessions.sweep(), replays.sweep()]).catch((error: unknown) => ground.logger.error({ err: error }, 'old rows could not be swept'));
+        Promise.all([sessions.sweep(), replays.sweep(), figures.sweep()]).catch((error: unknown) => ground.logger.error({ err: error }, 'old rows could not be swept'));
       }, SWEEP_MS).unref();
     },
     drain: () => {
@@ -107,6 +140,7 @@ export function createHouse(options: HouseOptions): House {
       await passwords.settled();
       await letters.close();
       await inspections.close();
+      await engine.close();
     },
   };
 }

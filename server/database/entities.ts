@@ -10,7 +10,14 @@ import { EditionFile } from '../library/edition-file-entity';
 import { Edition } from '../library/edition-entity';
 import { KeptFile } from '../library/kept-file-entity';
 import { OutboxLetter } from '../notices/letter-entity';
+import { Result } from '../predictions/result-entity';
+import { Draft } from '../projects/draft-entity';
+import { Panel } from '../projects/panel-entity';
+import { Project } from '../projects/project-entity';
 import { Replay } from '../replays/replay-entity';
+import { Content } from '../revisions/content-entity';
+import { Revision } from '../revisions/revision-entity';
+import { RevisionPart } from '../revisions/revision-part-entity';
 import { Invitation } from '../teams/invitation-entity';
 import { Membership } from '../teams/membership-entity';
 import { Team } from '../teams/team-entity';
@@ -33,4 +40,11 @@ export const entities: readonly (new () => object)[] = [
   Edition,
   KeptFile,
   EditionFile,
+  Result,
+  Project,
+  Panel,
+  Draft,
+  Content,
+  Revision,
+  RevisionPart,
 ];

@@ -3,6 +3,7 @@ import { PeopleAndTeams1764590400000 } from './migrations/1764590400000-people-a
 import { Audit1764590500000 } from './migrations/1764590500000-audit';
 import { Replays1764590550000 } from './migrations/1764590550000-replays';
 import { Library1764590600000 } from './migrations/1764590600000-library';
+import { ProjectsAndRevisions1764590700000 } from './migrations/1764590700000-projects-and-revisions';
 
 /**
  * Every migration, one line each, oldest first. One file per feature and change: `migrations/<timestamp>-<what>.ts`
@@ -14,4 +15,5 @@ export const migrations: readonly (new () => MigrationInterface)[] = [
   Audit1764590500000,
   Replays1764590550000,
   Library1764590600000,
+  ProjectsAndRevisions1764590700000,
 ];

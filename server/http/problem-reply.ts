@@ -25,6 +25,7 @@ const answers: Readonly<Record<Cause, { readonly status: number; readonly title:
   'not-found': { status: 404, title: 'Not found' },
   'method-not-allowed': { status: 405, title: 'This method does not work here' },
   conflict: { status: 409, title: 'The present state does not allow this' },
+  superseded: { status: 409, title: 'A newer request took its place' },
   'stale-version': { status: 412, title: 'Changed in the meantime' },
   'version-required': { status: 428, title: 'The version is missing' },
   'too-large': { status: 413, title: 'Too large' },

@@ -17,6 +17,7 @@ export type Cause =
   | 'not-found'
   | 'method-not-allowed'
   | 'conflict'
+  | 'superseded'
   | 'stale-version'
   | 'version-required'
   | 'too-large'
@@ -77,6 +78,11 @@ export class MethodNotAllowed extends Problem {
 /** The state of the object forbids it now: already released, address already taken. */
 export class Conflict extends Problem {
   readonly kind = 'conflict';
+}
+
+/** A newer request of the same kind took the place of this one before it was answered. */
+export class Superseded extends Problem {
+  readonly kind = 'superseded';
 }
 
 /** If-Match named a version that is no longer the current one. */
