@@ -1,13 +1,14 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { SessionClient } from '../api/session-client';
+import { FaultNote } from '../ui/fault-note';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
 import { Entrance } from './entrance';
 
 @Component({
   selector: 'slant-forgotten-password-page',
-  imports: [Entrance, RouterLink],
+  imports: [Entrance, FaultNote, RouterLink],
   templateUrl: './forgotten-password-page.html',
   styleUrl: './form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -20,6 +21,7 @@ export class ForgottenPasswordPage {
 
   protected async send(event: Event, email: string): Promise<void> {
     event.preventDefault();
+    if (this.busy()) return;
     this.busy.set(true);
     this.fault.set(null);
     try {

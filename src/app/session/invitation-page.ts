@@ -1,17 +1,19 @@
 import { ChangeDetectionStrategy, Component, inject, signal, viewChild } from '@angular/core';
-import { ActivatedRoute, Router } from '@angular/router';
+import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import type { InvitationWelcome } from '../../../shared/contracts/team';
 import { SessionClient } from '../api/session-client';
+import { FaultNote } from '../ui/fault-note';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
 import { Entrance } from './entrance';
 import { NewPasswordField } from './new-password-field';
+import { PasswordBox } from './password-box';
 import { SessionStore } from './session-store';
 
 /** First sign-in: who was invited chooses a name and a password, or proves to be the person known by the address. */
 @Component({
   selector: 'slant-invitation-page',
-  imports: [Entrance, NewPasswordField],
+  imports: [Entrance, FaultNote, NewPasswordField, PasswordBox, RouterLink],
   templateUrl: './invitation-page.html',
   styleUrl: './form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -40,6 +42,7 @@ export class InvitationPage {
 
   protected async accept(event: Event, name: string | undefined, knownPassword: string | undefined): Promise<void> {
     event.preventDefault();
+    if (this.busy()) return;
     this.busy.set(true);
     this.fault.set(null);
     try {

@@ -1,8 +1,14 @@
-import type { CurrentSession } from '../../../shared/contracts/session';
+import type { SessionEnds } from './session-store';
 
-/** Whole minutes until the session ends, whichever end comes first; null without a session. */
-export function minutesLeft(session: Pick<CurrentSession, 'idleEndsAt' | 'endsAt'> | null, now: number): number | null {
-  if (session === null) return null;
-  const end = Math.min(Date.parse(session.idleEndsAt), Date.parse(session.endsAt));
-  return Math.max(0, Math.ceil((end - now) / 60_000));
+export interface MinutesLeft {
+  readonly minutes: number;
+  /** "idle" ends can be put off by any call, the last one cannot. */
+  readonly end: 'idle' | 'last';
+}
+
+/** Whole minutes until the session ends, and by which of its two ends; null without a session. */
+export function minutesLeft(ends: SessionEnds | null, nowMs: number): MinutesLeft | null {
+  if (ends === null) return null;
+  const end = ends.lastMs <= ends.idleMs ? 'last' : 'idle';
+  return { minutes: Math.max(0, Math.ceil((Math.min(ends.idleMs, ends.lastMs) - nowMs) / 60_000)), end };
 }

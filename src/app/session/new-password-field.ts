@@ -1,25 +1,18 @@
-import type { ElementRef} from '@angular/core';
-import { ChangeDetectionStrategy, Component, input, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, input, viewChild } from '@angular/core';
+import { PasswordBox } from './password-box';
 
 /** A field for a new password with its rule beside it; managers and pasting work. */
 @Component({
   selector: 'slant-new-password-field',
+  imports: [PasswordBox],
   template: `
-    <label class="text-field">
-      <span>{{ label() }}</span>
-      <input
-        #field
-        [type]="shown() ? 'text' : 'password'"
-        autocomplete="new-password"
-        [attr.name]="name()"
-        [attr.aria-invalid]="fault() !== null"
-        [attr.aria-describedby]="name() + '-rule'"
-      />
-    </label>
+    <div class="text-field">
+      <label class="label" [attr.for]="name()">{{ label() }}</label>
+      <slant-password-box purpose="new-password" [boxId]="name()" [faulty]="fault() !== null" [describedBy]="name() + '-rule'" />
+    </div>
     <p class="rule" [id]="name() + '-rule'" [class.field-fault]="fault() !== null" [attr.role]="fault() === null ? null : 'alert'">
-      {{ fault() ?? 'At least 15 characters; a few words are fine. No other rules.' }}
+      {{ fault() ?? 'At least 15 characters; a few words are fine. Common passwords, keyboard runs and your own name are refused.' }}
     </p>
-    <label class="show"><input type="checkbox" [checked]="shown()" (change)="shown.set(!shown())" /> Show password</label>
   `,
   styles: `
     :host {
@@ -30,14 +23,6 @@ import { ChangeDetectionStrategy, Component, input, signal, viewChild } from '@a
       color: var(--muted);
       font-size: var(--size-small);
     }
-    .show {
-      display: inline-flex;
-      align-items: center;
-      gap: 8px;
-      min-height: var(--hit);
-      color: var(--muted);
-      font-size: var(--size-small);
-    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
@@ -45,10 +30,9 @@ export class NewPasswordField {
   readonly label = input('New password');
   readonly name = input('newPassword');
   readonly fault = input<string | null>(null);
-  private readonly field = viewChild.required<ElementRef<HTMLInputElement>>('field');
-  protected readonly shown = signal(false);
+  private readonly box = viewChild.required(PasswordBox);
 
   value(): string {
-    return this.field().nativeElement.value;
+    return this.box().value();
   }
 }

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, signal, viewChild } from '@angular/core';
 import { ActivatedRoute, RouterLink } from '@angular/router';
 import { SessionClient } from '../api/session-client';
+import { FaultNote } from '../ui/fault-note';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
 import { Entrance } from './entrance';
@@ -9,7 +10,7 @@ import { NewPasswordField } from './new-password-field';
 /** Opened from the letter; the token stands in the fragment, which no server log sees. */
 @Component({
   selector: 'slant-new-password-page',
-  imports: [Entrance, NewPasswordField, RouterLink],
+  imports: [Entrance, FaultNote, NewPasswordField, RouterLink],
   templateUrl: './new-password-page.html',
   styleUrl: './form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -24,6 +25,7 @@ export class NewPasswordPage {
 
   protected async set(event: Event): Promise<void> {
     event.preventDefault();
+    if (this.busy()) return;
     this.busy.set(true);
     this.fault.set(null);
     try {

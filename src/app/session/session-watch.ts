@@ -1,5 +1,6 @@
-import type { ElementRef} from '@angular/core';
+import type { ElementRef } from '@angular/core';
 import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, signal, viewChild } from '@angular/core';
+import { failedCall } from '../api/failed-call';
 import { SessionStore } from './session-store';
 import { SignInForm } from './sign-in-form';
 import { minutesLeft } from './minutes-left';
@@ -25,14 +26,14 @@ export class SessionWatch {
   private readonly now = signal(Date.now());
   protected readonly needsSignIn = this.store.needsSignIn;
   protected readonly email = computed(() => this.store.current()?.person.email ?? null);
-  protected readonly left = computed(() => minutesLeft(this.store.current(), this.now()));
-  protected readonly warned = computed(() => {
+  private readonly left = computed(() => minutesLeft(this.store.ends(), this.now()));
+  protected readonly warning = computed(() => {
     const left = this.left();
-    return left !== null && left <= WARN_MINUTES && !this.needsSignIn();
+    return left !== null && left.minutes <= WARN_MINUTES && !this.needsSignIn() ? left : null;
   });
 
   constructor() {
-    const timer = setInterval(() => this.now.set(Date.now()), TICK_MS);
+    const timer = setInterval(() => this.look(), TICK_MS);
     inject(DestroyRef).onDestroy(() => clearInterval(timer));
     effect(() => {
       const dialog = this.dialog().nativeElement;
@@ -41,7 +42,17 @@ export class SessionWatch {
     });
   }
 
+  private look(): void {
+    this.now.set(Date.now());
+    if (this.left()?.minutes === 0 && !this.needsSignIn()) void this.stay();
+  }
+
+  /** A renewal counts as a sign of life; when the session is over it says so. Without an answer the next look tries again. */
   protected async stay(): Promise<void> {
-    if ((await this.store.refresh()) === null) this.store.lose();
+    try {
+      if ((await this.store.refresh()) === null) this.store.lose();
+    } catch (error) {
+      if (failedCall(error).kind !== 'unreachable') throw error;
+    }
   }
 }

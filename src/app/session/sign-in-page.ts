@@ -1,12 +1,13 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject, input, viewChild } from '@angular/core';
 import { Router, RouterLink } from '@angular/router';
+import { FaultNote } from '../ui/fault-note';
 import { Entrance } from './entrance';
 import { SessionStore } from './session-store';
 import { SignInForm } from './sign-in-form';
 
 @Component({
   selector: 'slant-sign-in-page',
-  imports: [Entrance, RouterLink, SignInForm],
+  imports: [Entrance, FaultNote, RouterLink, SignInForm],
   templateUrl: './sign-in-page.html',
   styleUrl: './form.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -14,20 +15,18 @@ import { SignInForm } from './sign-in-form';
 export class SignInPage {
   private readonly store = inject(SessionStore);
   private readonly router = inject(Router);
+  private readonly form = viewChild.required(SignInForm);
   /** Where the person wanted to go, from the query. */
   readonly to = input<string>();
   protected readonly about = this.store.about;
-  protected readonly demoAccounts = computed(() => this.about()?.demoAccounts ?? []);
 
   protected continueWork(): void {
     const wanted = this.to();
     // Only addresses of this client: a foreign one would make the sign-in page a trap.
-    void this.router.navigateByUrl(wanted !== undefined && /^\/(?!\/)/.test(wanted) ? wanted : '/projects');
+    void this.router.navigateByUrl(wanted !== undefined && /^\/(?![/\\])/.test(wanted) ? wanted : '/projects');
   }
 
   protected fillIn(email: string): void {
-    const field = document.querySelector<HTMLInputElement>('input[name="email"]');
-    if (field !== null) field.value = email;
-    document.querySelector<HTMLInputElement>('input[name="password"]')?.focus();
+    this.form().fill(email);
   }
 }
