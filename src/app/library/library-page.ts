@@ -25,10 +25,10 @@ export class LibraryPage {
   private readonly client = inject(LibraryClient);
   private readonly router = inject(Router);
   private readonly session = inject(SessionStore);
-  readonly text = input('');
-  readonly frequency = input('');
-  readonly period = input('');
-  readonly angle = input('');
+  readonly text = input<string>();
+  readonly frequency = input<string>();
+  readonly period = input<string>();
+  readonly angle = input<string>();
   protected readonly families = signal<readonly FamilySummary[] | null>(null);
   protected readonly fault = signal<string | null>(null);
   protected readonly isLab = computed(() => this.session.hasRole('lab'));
