@@ -11,32 +11,41 @@ interface Line {
 }
 
 /**
- * Each line of the requirement that was given, against the prediction. The gain and the pointing are those of the worst
- * wanted beam; the sidelobe is the highest anywhere in the hemisphere. What cannot be computed is never "meets".
+ * Each line of the requirement that was given, against the prediction. What cannot be computed is never "meets".
  */
 export function requirementVerdicts(requirement: Requirement, figures: Figures): Verdict[] {
   const lines: Line[] = [];
   const { minGainDbi, maxSidelobeDb, pointingToleranceDeg, minCrossPolarDiscriminationDb, mask } = requirement;
-  if (minGainDbi !== undefined) {
-    lines.push({ line: 'gain', sense: 'at-least', limit: minGainDbi, unit: 'dBi', value: worst(figures.beams.map((beam) => beam.gainDbi), Math.min) });
-  }
-  if (maxSidelobeDb !== undefined) {
-    const { hemisphere } = figures.sidelobeDb;
-    lines.push({ line: 'sidelobe', sense: 'at-most', limit: maxSidelobeDb, unit: 'dB', value: 'levelDb' in hemisphere ? numberOr(hemisphere.levelDb, hemisphere) : hemisphere });
-  }
-  if (pointingToleranceDeg !== undefined) {
-    const value = worst(figures.beams.map((beam) => beam.pointingErrorDeg), Math.max);
-    lines.push({ line: 'pointing', sense: 'at-most', limit: pointingToleranceDeg, unit: 'deg', value });
-  }
-  if (mask !== undefined) {
-    const margin = figures.maskMargin;
-    lines.push({ line: 'mask', sense: 'at-least', limit: 0, unit: 'dB', value: 'marginDb' in margin ? numberOr(margin.marginDb, margin) : margin });
-  }
-  if (minCrossPolarDiscriminationDb !== undefined) {
-    const value = noFigure('scalar-model', 'the scalar prediction has no cross-polar field');
-    lines.push({ line: 'cross-polar', sense: 'at-least', limit: minCrossPolarDiscriminationDb, unit: 'dB', value });
-  }
+  const add = (line: Verdict['line'], sense: Verdict['sense'], limit: number | undefined, unit: string): void => {
+    if (limit !== undefined) lines.push({ line, sense, limit, unit, value: figureOfLine(line, figures) });
+  };
+  add('gain', 'at-least', minGainDbi, 'dBi');
+  add('sidelobe', 'at-most', maxSidelobeDb, 'dB');
+  add('pointing', 'at-most', pointingToleranceDeg, 'deg');
+  add('mask', 'at-least', mask === undefined ? undefined : 0, 'dB');
+  add('cross-polar', 'at-least', minCrossPolarDiscriminationDb, 'dB');
   return lines.map(judge);
+}
+
+/**
+ * The figure that a line of the requirement is held against. The gain and the pointing are those of the worst wanted
+ * beam; the sidelobe is the highest anywhere in the hemisphere.
+ */
+export function figureOfLine(line: Verdict['line'], figures: Figures): Figure {
+  const { hemisphere } = figures.sidelobeDb;
+  const { maskMargin } = figures;
+  switch (line) {
+    case 'gain':
+      return worst(figures.beams.map((beam) => beam.gainDbi), Math.min);
+    case 'sidelobe':
+      return 'levelDb' in hemisphere ? numberOr(hemisphere.levelDb, hemisphere) : hemisphere;
+    case 'pointing':
+      return worst(figures.beams.map((beam) => beam.pointingErrorDeg), Math.max);
+    case 'mask':
+      return 'marginDb' in maskMargin ? numberOr(maskMargin.marginDb, maskMargin) : maskMargin;
+    case 'cross-polar':
+      return noFigure('scalar-model', 'the scalar prediction has no cross-polar field');
+  }
 }
 
 function judge(line: Line): Verdict {
