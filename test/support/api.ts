@@ -14,6 +14,7 @@ import { readConfig, type Config } from '../../server/config';
 import { apiDatabaseLimits, createDataSource } from '../../server/database/data-source';
 import { isSchemaReady } from '../../server/database/schema-state';
 import { TransactionRunner } from '../../server/database/transaction-runner';
+import type { PredictionRunner } from '../../server/engine/prediction-runner';
 import { createHouse, type House } from '../../server/house';
 import type { RateLimit } from '../../server/http/rate-limits';
 import type { RateClass, Route } from '../../server/http/route';
@@ -34,6 +35,8 @@ export interface ApiOptions {
   /** True for the real cost of password hashing; else a cheap one. */
   readonly realHashing?: boolean;
   readonly moreRoutes?: readonly Route[];
+  /** Computes predictions in place of the engine's own: to hold them, or to count them. */
+  readonly predictionRunner?: PredictionRunner;
   readonly environment?: Readonly<Record<string, string>>;
 }
 
@@ -73,7 +76,7 @@ export class Api {
     await dataSource.runMigrations();
     const hasher = options.realHashing === true ? new PasswordHasher() : new PasswordHasher({ logN: 8, r: 8, p: 1 });
     const ground = { config, logger: createLogger(config), transactions: new TransactionRunner(dataSource), now: () => new Date() };
-    const house = createHouse({ ground, hasher, isSchemaReady: () => isSchemaReady(dataSource) });
+    const house = createHouse({ ground, hasher, isSchemaReady: () => isSchemaReady(dataSource), predictionRunner: options.predictionRunner });
     await house.start();
     await ensureDemoAccounts(house, TEST_PASSWORD);
     await addStranger(house);

@@ -1,5 +1,6 @@
 import { accountSamples } from './samples/account-samples';
 import { librarySamples } from './samples/library-samples';
+import { projectSamples } from './samples/project-samples';
 import { teamSamples } from './samples/team-samples';
 import type { Api } from './api';
 import type { Call } from './api-client';
@@ -27,5 +28,6 @@ export type RouteSamples = Readonly<Record<string, RouteSample>>;
 export const routeSamples: RouteSamples = {
   ...accountSamples,
   ...librarySamples,
+  ...projectSamples,
   ...teamSamples,
 };
