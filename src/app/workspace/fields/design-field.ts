@@ -36,6 +36,7 @@ import { RemarkList } from './remark-list';
     <slant-remark-list [pointers]="remarkPointers()" />
   `,
   styleUrl: './design-field.scss',
+  host: { '[class.refused]': 'refused() !== null' },
 })
 export class DesignField {
   private readonly state = inject(WORKSPACE_STATE);

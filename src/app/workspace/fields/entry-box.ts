@@ -1,4 +1,5 @@
-import { ChangeDetectionStrategy, Component, ElementRef, afterRenderEffect, input, linkedSignal, output, signal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, afterRenderEffect, input, linkedSignal, output, signal, viewChild } from '@angular/core';
+import type { ElementRef } from '@angular/core';
 
 export interface RefusedEntry {
   readonly reason: string;
