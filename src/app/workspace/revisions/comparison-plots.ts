@@ -1,0 +1,119 @@
+import type { Comparison, CutDifference } from '../../../../shared/contracts/comparisons';
+import type { DesignDocument } from '../../../../shared/model/design-document';
+import type { ColourScale } from '../../ui/plots/colour-maps';
+import type { CutFigure } from '../../ui/plots/cut-figure';
+import type { LineFigure } from '../../ui/plots/line-figure';
+import type { MapPlaces } from '../../ui/plots/map-places';
+import type { MapLayer } from '../../ui/plots/paint-panel-map';
+import { niceStep } from '../../ui/plots/axis-ticks';
+import { numberText, signedNumberText } from '../../ui/plots/plot-text';
+import { maskLevelDbi } from '../pattern/mask-level';
+import { sideName } from './comparison-rows';
+import type { ComparedCells } from './comparison-rows';
+
+/** Which change of the cells the map shows. */
+export type CellChange = 'parameter' | 'phase' | 'error';
+
+/** Differences beyond this are clipped: they are moved nulls. */
+export const CLIPPED_DB = 10;
+
+/** A scale centred on zero that holds the largest magnitude. */
+function centredScale(values: ArrayLike<number>, most: number): ColourScale {
+  let largest = 0;
+  for (let i = 0; i < values.length; i++) largest = Math.max(largest, Math.abs(values[i]) || 0);
+  const step = niceStep(Math.max(largest, 1e-6), 3);
+  const limit = Math.min(most, Math.max(step, Math.ceil(largest / step) * step));
+  return { map: 'diverging', from: -limit, to: limit };
+}
+
+const CHANGES: Readonly<Record<CellChange, { readonly title: string; readonly unit: string; readonly digits: number; readonly most: number; of(arrays: ComparedCells['arrays']): readonly number[] }>> = {
+  parameter: { title: 'Change of size', unit: 'mm', digits: 2, most: Infinity, of: (arrays) => arrays.parameterChangeMm },
+  phase: { title: 'Change of cell phase', unit: '°', digits: 1, most: 180, of: (arrays) => arrays.phaseChangeDeg },
+  error: { title: 'Change of phase error', unit: '°', digits: 2, most: 180, of: (arrays) => arrays.errorChangeDeg },
+};
+
+/** The change at each cell; cells that did not change stay bare. */
+export function changeLayer(cells: ComparedCells, change: CellChange): MapLayer {
+  const { title, unit, digits, most, of } = CHANGES[change];
+  const { changed } = cells.arrays;
+  const all = of(cells.arrays);
+  const values = Float64Array.from(all, (value, i) => (changed[i] === 0 ? Number.NaN : value));
+  const named = change === 'parameter' && cells.parameter ? `Change of ${cells.parameter.label}` : title;
+  return { title: named, unit, digits, values, scale: centredScale(values, most) };
+}
+
+export function changePlaces(cells: ComparedCells, { panel: { lattice } }: DesignDocument): MapPlaces {
+  const { xMm, yMm } = cells.arrays;
+  return { xMm, yMm, pitchXMm: lattice.periodXMm, pitchYMm: lattice.kind === 'rectangular' ? lattice.periodYMm : lattice.rowSpacingMm };
+}
+
+export function cutName({ request }: CutDifference): string {
+  if ('plane' in request) return request.plane === 'along' ? 'along the beam' : 'across the beam';
+  return `in the plane φ = ${numberText(request.phiDeg, 1)}°`;
+}
+
+/** Both cuts in one plot with the mask of the side named last. */
+export function overlaidCut(comparison: Comparison, cut: CutDifference, design: DesignDocument): CutFigure {
+  const { before, after } = comparison;
+  const { requirement } = design;
+  const [beam] = requirement.beams;
+  const top = Math.ceil((Math.max(...cut.afterDbi, ...cut.beforeDbi) + 3) / 10) * 10;
+  const onCircle = 'plane' in cut.request;
+  const beamDeg = onCircle ? 0 : beam.thetaDeg;
+  return {
+    title: `Cuts ${cutName(cut)}, overlaid`,
+    angleTitle: onCircle ? 'angle from the beam, °' : `θ, plane φ = ${numberText('phiDeg' in cut.request ? cut.request.phiDeg : 0, 1)}°, °`,
+    levelTitle: 'gain, dBi',
+    main: { label: sideName(after), angleDeg: cut.angleDeg, levelDb: cut.afterDbi },
+    overlay: { label: sideName(before), angleDeg: cut.angleDeg, levelDb: cut.beforeDbi },
+    forbidden: forbiddenAbout(requirement.mask, cut.angleDeg, beamDeg),
+    forbiddenLabel: `forbidden, beam of ${sideName(after)}`,
+    least: requirement.minGainDbi === undefined ? null : { label: `least gain, ${numberText(requirement.minGainDbi, 1)} dBi`, angleDeg: beamDeg, levelDb: requirement.minGainDbi },
+    marks: [],
+    fromDeg: cut.angleDeg[0],
+    toDeg: cut.angleDeg[cut.angleDeg.length - 1],
+    floorDb: Math.floor((top - 60) / 10) * 10,
+    topDb: top,
+  };
+}
+
+/** On a plane through the beam the angle off it is the difference of angles. */
+function forbiddenAbout(mask: DesignDocument['requirement']['mask'], angleDeg: readonly number[], beamDeg: number): CutFigure['forbidden'] {
+  return [-1, 1].flatMap((side) => {
+    const angles = angleDeg.filter((angle) => side * (angle - beamDeg) >= 0);
+    const levels = angles.map((angle) => maskLevelDbi(mask, Math.abs(angle - beamDeg)));
+    const kept = angles.filter((_, i) => levels[i] !== null);
+    return kept.length < 2 ? [] : [{ angleDeg: kept, levelDb: levels.filter((level) => level !== null) }];
+  });
+}
+
+/** After minus before once the beams coincide; gaps where either lies below the floor. */
+export function cutDifferenceFigure(comparison: Comparison, cut: CutDifference): LineFigure {
+  const { before, after } = comparison;
+  const y = Float64Array.from(cut.differenceDb, (value) => (value === null ? Number.NaN : Math.max(-CLIPPED_DB, Math.min(CLIPPED_DB, value))));
+  return {
+    title: `Difference of the cuts ${cutName(cut)}`,
+    x: { title: 'plane' in cut.request ? 'angle from the beam, °' : 'θ, °', from: cut.angleDeg[0], to: cut.angleDeg[cut.angleDeg.length - 1], step: 30 },
+    y: { title: `${sideName(after)} less ${sideName(before)}, dB`, from: -CLIPPED_DB, to: CLIPPED_DB, step: 5 },
+    lines: [{ label: 'difference', x: cut.angleDeg, y, ink: 'copper' }],
+  };
+}
+
+export function shiftText({ before }: Comparison, cut: CutDifference): string {
+  return Math.abs(cut.shiftU) < 5e-5 ? 'beams coincide, no shift' : `${sideName(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
+}
+
+/** How the difference was made, and what it leaves out, as drawing notes. */
+export function comparisonNotes(comparison: Comparison): readonly string[] {
+  const [cut] = comparison.cuts;
+  return [
+    ...(cut ? [`Difference: ${sideName(comparison.before)} resampled linearly after the shift between the beams; gaps where either lies below ${numberText(cut.floorDbi, 0)} dBi, clipped at ±${CLIPPED_DB} dB.`] : []),
+    'Over the hemisphere the directions are subtracted as they are; moved nulls show as pairs.',
+    'A mask margin is taken about the beam of its own side.',
+    'A prediction is array theory, not a measurement.',
+  ];
+}
+
+export function hemisphereDifference({ uv }: Comparison): { readonly levels: { readonly size: number; readonly levelDb: readonly number[] }; readonly scale: ColourScale } {
+  return { levels: { size: uv.size, levelDb: uv.differenceDb }, scale: centredScale(uv.differenceDb, CLIPPED_DB) };
+}
