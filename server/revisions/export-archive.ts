@@ -1,0 +1,61 @@
+import { createHash } from 'node:crypto';
+import JSZip from 'jszip';
+
+export interface ArchivedFile {
+  /** Within the folder of the archive; letters, digits, dots, dashes and underscores only. */
+  readonly name: string;
+  /** What the file is for, in one line. */
+  readonly function: string;
+  readonly content: string;
+}
+
+export interface Archive {
+  /** Without `.zip`; the archive holds one folder of this name. */
+  readonly name: string;
+  readonly bytes: Buffer;
+}
+
+export const CHECKSUM_FILE = 'SHA256SUMS';
+// The oldest time a zip can hold. Times of the work itself stand in the manifest, so that equal content gives equal bytes.
+const FIXED_TIME = new Date(Date.UTC(1980, 0, 1));
+const LEVEL = 6;
+
+export const sha256Of = (bytes: string | Uint8Array): string => createHash('sha256').update(bytes).digest('hex');
+
+/** The list that `sha256sum --strict -c` checks, in the order of the names. */
+export function checksumList(files: readonly ArchivedFile[]): string {
+  return inOrder(files)
+    .map(({ name, content }) => `${sha256Of(content)}  ${name}\n`)
+    .join('');
+}
+
+/** The same files give the same bytes: fixed order, time, attributes and compression. */
+export async function zipArchive(name: string, files: readonly ArchivedFile[]): Promise<Archive> {
+  const zip = new JSZip();
+  const sums: ArchivedFile = { name: CHECKSUM_FILE, function: 'checksums', content: checksumList(files) };
+  for (const file of inOrder([...files, sums])) {
+    zip.file(`${name}/${file.name}`, Buffer.from(file.content, 'utf8'), { date: FIXED_TIME, createFolders: false });
+  }
+  const bytes = await zip.generateAsync({ type: 'nodebuffer', platform: 'DOS', compression: 'DEFLATE', compressionOptions: { level: LEVEL } });
+  return { name, bytes };
+}
+
+/** By the code units of their names, whatever the language of the machine. */
+const inOrder = (files: readonly ArchivedFile[]): ArchivedFile[] => [...files].sort((a, b) => (a.name < b.name ? -1 : 1));
+
+/** A name as part of a file name: what is no letter, digit or dot becomes a dash. */
+export function fileNamePart(text: string, otherwise: string): string {
+  const plain = text
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .replace(/[^A-Za-z0-9.]+/g, '-')
+    .slice(0, 60)
+    .replace(/^[-.]+|[-.]+$/g, '');
+  return plain === '' ? otherwise : plain;
+}
+
+/** The files of an archive as whoever unpacks it finds them. */
+export async function readArchive({ name, bytes }: Archive): Promise<{ name: string; content: Buffer }[]> {
+  const zip = await JSZip.loadAsync(bytes, { checkCRC32: true });
+  return Promise.all(Object.values(zip.files).map(async (entry) => ({ name: entry.name.slice(name.length + 1), content: await entry.async('nodebuffer') })));
+}
