@@ -4,7 +4,8 @@ import type { DimensionLine } from '../drawing/dimension-line';
 
 /** A few cells of the lattice, enlarged, with the lengths that repeat. */
 export interface LatticeDetail {
-  readonly size: number;
+  readonly width: number;
+  readonly height: number;
   readonly cells: string;
   readonly dimensions: readonly DimensionLine[];
   /** How many times larger than life, for a screen of 96 pixels per inch. */
@@ -32,7 +33,8 @@ export function latticeDetail(lattice: Lattice, size: number): LatticeDetail {
   const topEdge = y(0) - side / 2;
   const leftEdge = x(0, 0) - side / 2;
   return {
-    size,
+    width: size,
+    height: y(ROWS - 1) + side / 2 + MARGIN.bottom,
     cells,
     enlargement: scale / PIXELS_PER_MM_AT_LIFE_SIZE,
     dimensions: [

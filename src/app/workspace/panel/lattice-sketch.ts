@@ -8,7 +8,7 @@ import { latticeDetail } from './lattice-detail';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @let drawn = detail();
-    <svg [attr.width]="drawn.size" [attr.height]="drawn.size" [attr.viewBox]="'0 0 ' + drawn.size + ' ' + drawn.size" role="img" [attr.aria-label]="label()">
+    <svg [attr.width]="drawn.width" [attr.height]="drawn.height" [attr.viewBox]="'0 0 ' + drawn.width + ' ' + drawn.height" role="img" [attr.aria-label]="label()">
       <path class="cell" [attr.d]="drawn.cells" />
       @for (dimension of drawn.dimensions; track $index) {
         <path class="extension" [attr.d]="dimension.extensions" />
