@@ -1,5 +1,11 @@
 import type { PanelDetail } from '../../../shared/contracts/projects';
 import type { PlotHeading } from '../ui/plots/plot-export';
+import type { SaveProgress } from './save-progress';
+
+/** The server holds what the screen shows. */
+export function isSettled({ kind }: SaveProgress): boolean {
+  return kind === 'saved' || kind === 'view-only';
+}
 
 /** What an exported plot of the draft says of itself. A draft that is not saved yet has no hash of its own. */
 export function draftHeading(title: string, panel: PanelDetail | null, saved: boolean, now: Date): PlotHeading {

@@ -39,8 +39,13 @@ describe('marks', () => {
   it('lead to a balloon beside the window, within its height', () => {
     const box = cellBox(index, whole, 1599);
     expect(box && chosenLeader(box, whole).balloonY).toBe(12);
+    expect(box && chosenLeader(box, whole)).toMatchObject({ outside: true, balloonX: 551 });
+  });
+  it('keep the balloon beside a cell that is far from the edge', () => {
     const low = cellBox(index, whole, 5);
-    expect(low && chosenLeader(low, whole).path).toMatch(/H530$/);
+    const leader = low && chosenLeader(low, whole);
+    expect(leader?.outside).toBe(false);
+    expect(Math.hypot((leader?.balloonX ?? 0) - (low?.x ?? 0), (leader?.balloonY ?? 0) - (low?.y ?? 0))).toBeLessThan(60);
   });
 });
 

@@ -67,13 +67,28 @@ export function extentBox(view: MapView, extent: MapExtent): MapBox {
   return { x, y, width: screenX(view, extent.toXMm) - x, height: screenY(view, extent.fromYMm) - y };
 }
 
-/** A leader from the chosen cell to a balloon outside the right edge of the window. */
-export function chosenLeader(box: MapBox, view: MapView): { readonly path: string; readonly balloonY: number } {
+export interface ChosenLeader {
+  readonly path: string;
+  readonly balloonX: number;
+  readonly balloonY: number;
+  readonly outside: boolean;
+}
+
+/** A cell further to the left has its balloon beside it: a leader across the map would hide more than it shows. */
+const OUTSIDE_FROM = 0.62;
+
+/** A leader from the chosen cell to a balloon, outside the right edge of the window where that is near. */
+export function chosenLeader(box: MapBox, view: MapView): ChosenLeader {
   const startX = Math.min(view.size.width, box.x + box.width + 2);
   const startY = box.y + box.height / 2;
+  if (startX < OUTSIDE_FROM * view.size.width) {
+    const up = box.y > 44 ? -1 : 1;
+    const [balloonX, balloonY] = [startX + 26, startY + up * 30];
+    return { path: `M${round(startX)} ${round(startY)}L${round(balloonX)} ${round(balloonY)}`, balloonX, balloonY, outside: false };
+  }
   const balloonY = Math.max(12, Math.min(view.size.height - 12, startY > view.size.height * 0.2 ? Math.min(40, startY) : startY));
   const bendX = Math.max(startX, view.size.width - 26);
-  return { path: `M${round(startX)} ${round(startY)}L${round(bendX)} ${round(balloonY)}H${round(view.size.width)}`, balloonY };
+  return { path: `M${round(startX)} ${round(startY)}L${round(bendX)} ${round(balloonY)}H${round(view.size.width)}`, balloonX: view.size.width + 21, balloonY, outside: true };
 }
 
 /** Extent from one cell to another, both included. */

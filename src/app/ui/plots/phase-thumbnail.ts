@@ -29,14 +29,17 @@ export function paintPhaseThumbnail(canvas: HTMLCanvasElement, thumbnail: PhaseT
   const words = new Uint32Array(image.data.buffer);
   for (let n = 0; n < phaseDeg.length; n++) {
     const word = map.words[colourIndex(SCALE, phaseDeg[n])];
-    const fromX = Math.round(offsetX + (xM[n] - stepXM / 2 - left) * scale);
-    const toX = Math.max(fromX + 1, Math.round(offsetX + (xM[n] + stepXM / 2 - left) * scale));
-    const fromY = Math.round(offsetY + (top - yM[n] - stepYM / 2) * scale);
-    const toY = Math.max(fromY + 1, Math.round(offsetY + (top - yM[n] + stepYM / 2) * scale));
+    const fromX = pixelEdge(offsetX + (xM[n] - stepXM / 2 - left) * scale);
+    const toX = Math.max(fromX + 1, pixelEdge(offsetX + (xM[n] + stepXM / 2 - left) * scale));
+    const fromY = pixelEdge(offsetY + (top - yM[n] - stepYM / 2) * scale);
+    const toY = Math.max(fromY + 1, pixelEdge(offsetY + (top - yM[n] + stepYM / 2) * scale));
     for (let y = Math.max(0, fromY); y < Math.min(pixels, toY); y++) words.fill(word, y * pixels + Math.max(0, fromX), y * pixels + Math.min(pixels, toX));
   }
   context.putImageData(image, 0, 0);
 }
+
+/** The common edge of two tiles is computed twice: the slack keeps rounding from leaving a seam at half pixels. */
+const pixelEdge = (position: number): number => Math.round(position + 1e-6);
 
 function rangeOf(values: ArrayLike<number>, step: number): [number, number] {
   let [low, high] = [Infinity, -Infinity];

@@ -10,7 +10,7 @@ import { UvMap } from '../../ui/plots/uv-map';
 import { ViewTitle } from '../../ui/view-title';
 import { SheetNotes } from '../fields/sheet-notes';
 import type { LivePrediction } from '../live-prediction-data';
-import { draftHeading } from '../plot-heading';
+import { draftHeading, isSettled } from '../plot-heading';
 import { queryLink } from '../query-link';
 import { SheetHeader } from '../sheet-header';
 import { sheetNumber } from '../sheets';
@@ -175,6 +175,6 @@ export class PatternSheet {
   }
 
   private headingOf(title: string) {
-    return draftHeading(title, this.state.panel(), this.state.saveState().kind === 'saved', new Date());
+    return draftHeading(title, this.state.panel(), isSettled(this.state.saveState()), new Date());
   }
 }

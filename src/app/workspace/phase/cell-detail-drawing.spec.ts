@@ -13,7 +13,7 @@ const copperOf = () => [
 ];
 
 describe('detail of a cell', () => {
-  const drawing = cellDetailDrawing({ index, cell: 12, copperOf, parameter: 'L' });
+  const drawing = cellDetailDrawing({ index, cell: 12, copperOf });
   it('shows the cell among its eight neighbours', () => {
     expect(drawing.outlines.filter(({ own }) => own)).toHaveLength(1);
     expect(drawing.outlines).toHaveLength(9);
@@ -23,11 +23,11 @@ describe('detail of a cell', () => {
     expect((drawing.across?.to ?? 0) - (drawing.across?.from ?? 0)).toBeCloseTo(2.3 * drawing.pxPerMm, 9);
     expect(drawing.period.to - drawing.period.from).toBeCloseTo(5 * drawing.pxPerMm, 9);
   });
-  it('names parameter, inner size, strip and period', () => {
-    expect([drawing.across?.text, drawing.down?.text, drawing.strip?.text, drawing.period.text]).toEqual(['L 2.30', '1.426', '0.15', '5.00']);
+  it('names outer size, inner size, strip and period', () => {
+    expect([drawing.across?.text, drawing.down?.text, drawing.strip?.text, drawing.period.text]).toEqual(['2.30', '1.426', '0.15', '5.00']);
   });
   it('has fewer neighbours in a corner and no dimensions without copper', () => {
-    const bare = cellDetailDrawing({ index, cell: 0, copperOf: () => [], parameter: '' });
+    const bare = cellDetailDrawing({ index, cell: 0, copperOf: () => [] });
     expect([bare.outlines.length, bare.across, bare.down, bare.strip]).toEqual([4, null, null, null]);
   });
 });

@@ -37,11 +37,9 @@ export interface DetailSource {
   readonly index: PlaceIndex;
   readonly cell: number;
   readonly copperOf: (cell: number) => readonly CopperShape[];
-  /** Name of the first parameter, such as L. */
-  readonly parameter: string;
 }
 
-export function cellDetailDrawing({ index, cell, copperOf, parameter }: DetailSource): CellDetailDrawing {
+export function cellDetailDrawing({ index, cell, copperOf }: DetailSource): CellDetailDrawing {
   const { xMm, yMm, pitchXMm, pitchYMm } = index.places;
   const pxPerMm = RADIUS / (SHOWN * Math.max(pitchXMm, pitchYMm));
   const [centreX, centreY] = [WIDTH / 2 - 6, HEIGHT / 2 + 8];
@@ -59,15 +57,15 @@ export function cellDetailDrawing({ index, cell, copperOf, parameter }: DetailSo
     outlines: Array.from(shown, (one) => ({ x: placeOf(one).xPx - w / 2, y: placeOf(one).yPx - h / 2, width: w, height: h, own: one === cell })),
     copper: Array.from(shown).flatMap((one) => copperOf(one).map((shape) => ({ path: copperPath(shape, placeOf(one)), hole: shape.kind !== 'ring' && shape.hole }))),
     period: { from: centreY - h / 2, to: centreY + h / 2, text: numberText(pitchYMm, 2) },
-    ...shapeDimensions(copperOf(cell), { centreX, centreY, pxPerMm, parameter }),
+    ...shapeDimensions(copperOf(cell), { centreX, centreY, pxPerMm }),
   };
 }
 
 type ShapeDimensions = Pick<CellDetailDrawing, 'across' | 'down' | 'strip'>;
 
 /** The outermost shape is measured across, the one inside it (or its height) down, the strip of a ring by a leader. */
-function shapeDimensions(shapes: readonly CopperShape[], at: { readonly centreX: number; readonly centreY: number; readonly pxPerMm: number; readonly parameter: string }): ShapeDimensions {
-  const { centreX, centreY, pxPerMm, parameter } = at;
+function shapeDimensions(shapes: readonly CopperShape[], at: { readonly centreX: number; readonly centreY: number; readonly pxPerMm: number }): ShapeDimensions {
+  const { centreX, centreY, pxPerMm } = at;
   if (shapes.length === 0) return { across: null, down: null, strip: null };
   const outer = shapes.reduce((widest, shape) => (widthMm(shape) > widthMm(widest) ? shape : widest));
   const others = shapes.filter((shape) => shape !== outer);
@@ -76,7 +74,7 @@ function shapeDimensions(shapes: readonly CopperShape[], at: { readonly centreX:
   const downMm = inner ? heightMm(inner) : heightMm(outer);
   const ring = shapes.find((shape) => shape.kind === 'ring');
   return {
-    across: { ...span(centreX, widthMm(outer)), text: `${parameter} ${numberText(widthMm(outer), 2)}` },
+    across: { ...span(centreX, widthMm(outer)), text: numberText(widthMm(outer), 2) },
     down: inner || outer.kind === 'rectangle' ? { ...span(centreY, downMm), text: numberText(downMm, 3) } : null,
     strip: ring ? { x: centreX + ((ring.outerMm - ring.stripMm) * pxPerMm) / 2, y: centreY + (ring.outerMm * pxPerMm) / 2 - Math.min(10, ring.outerMm * pxPerMm * 0.2), text: numberText(ring.stripMm, 2) } : null,
   };

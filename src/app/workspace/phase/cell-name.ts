@@ -7,7 +7,7 @@ export function editionOf(design: DesignDocument, edition: EditionInUse | null):
   return design.cells.kind === 'edition' && edition?.id === design.cells.editionId ? edition : null;
 }
 
-/** What a cell is called beside its phase: "L 2.30", "level 3 of 8", "entry 2", or that there is none. */
+/** What a cell is called beside its phase: "2.30 mm", "level 3 of 8", "entry 2", or that there is none. */
 export function cellName(design: DesignDocument, edition: EditionInUse | null, cellIndex: number): string {
   const { cells } = design;
   if (cells.kind === 'ideal') return cells.levels === null ? 'continuous phase' : `level ${cellIndex + 1} of ${cells.levels}`;
@@ -16,6 +16,5 @@ export function cellName(design: DesignDocument, edition: EditionInUse | null, c
   const own = editionOf(design, edition);
   if (!own || !own.cells[cellIndex]) return `cell ${cellIndex + 1}`;
   const { parametersMm, id } = own.cells[cellIndex];
-  const named = own.description.parameters.map(({ id: parameter }, i) => (i < parametersMm.length ? `${parameter} ${numberText(parametersMm[i], 2)}` : ''));
-  return named.filter((text) => text !== '').join(', ') || id;
+  return parametersMm.length === 0 ? id : `${parametersMm.map((value) => numberText(value, 2)).join(' × ')} mm`;
 }

@@ -70,21 +70,15 @@ function incidenceFact({ prediction, edition, cell }: CellFactSource): CellFact 
   if (!own) return { name: 'Incidence', value: text, tone: 'plain', full: String(incidence) };
   const { thetasRad } = own.responses;
   const [smallest, steepest] = [degFromRad(thetasRad[0]), degFromRad(thetasRad[thetasRad.length - 1])];
-  // Half a degree is no difference that a cell would notice.
-  const covered = incidence >= smallest - 0.5 && incidence <= steepest + 0.5;
+  // Over two degrees the response of no cell moves by more than its own uncertainty.
+  const covered = incidence >= smallest - 2 && incidence <= steepest + 2;
   if (covered) return { name: 'Incidence', value: `${text}, covered`, tone: 'plain', full: String(incidence) };
   const data = smallest === steepest ? `data at ${numberText(smallest, 0)}°` : `data ${numberText(smallest, 0)} to ${numberText(steepest, 0)}°`;
   return { name: 'Incidence', value: `${text}, ${data}`, tone: 'warn', full: String(incidence) };
 }
 
 /** The short form for the line under the map. */
-export function cellSentence(prediction: LivePrediction, edition: EditionInUse | null, cell: number): string {
-  const { cells, of } = prediction;
-  const parts = [
-    cellPlaceText(prediction, cell),
-    `target ${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°`,
-    `${cellName(of, edition, cells.cellIndex[cell])} ${numberText(wrapDeg(cells.phaseDeg[cell]), 1)}°`,
-    `error ${signedNumberText(cells.errorDeg[cell], 2)}°`,
-  ];
-  return parts.join(', ');
+export function cellSentence(prediction: LivePrediction, cell: number): string {
+  const { cells } = prediction;
+  return `${cellPlaceText(prediction, cell)}: target ${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°, error ${signedNumberText(cells.errorDeg[cell], 2)}°`;
 }

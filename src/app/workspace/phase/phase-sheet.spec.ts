@@ -39,7 +39,7 @@ describe('PhaseSheet', () => {
     await fixture.whenStable();
     expect(fact('Position')).toBe(`col ${place?.split(', ')[0]}, row ${place?.split(', ')[1]}`);
     expect(element.querySelector('tr.chosen .place')?.textContent?.trim()).toBe(place);
-    expect(element.querySelector('.read-out')?.textContent).toContain(`col ${place?.split(', ')[0]},`);
+    expect(element.querySelector('.read-out')?.textContent).toContain(`col ${place?.split(', ')[0]}, row ${place?.split(', ')[1]}:`);
   });
 
   it('colours by another view and keeps the histogram of the error', async () => {
@@ -72,6 +72,6 @@ describe('PhaseSheet', () => {
       curve?.dispatchEvent(new KeyboardEvent('keydown', { key, cancelable: true }));
       await fixture.whenStable();
     }
-    expect(fact('Cell')).toBe(`a ${SAMPLE_EDITION.cells[smallest].parametersMm[0].toFixed(2)}`);
+    expect(fact('Cell')).toBe(`${SAMPLE_EDITION.cells[smallest].parametersMm[0].toFixed(2)} mm`);
   });
 });

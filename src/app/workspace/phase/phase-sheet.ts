@@ -18,7 +18,7 @@ import { numberText, signedNumberText } from '../../ui/plots/plot-text';
 import { ViewTitle } from '../../ui/view-title';
 import { SheetNotes } from '../fields/sheet-notes';
 import { cellPlaces } from '../illumination/illumination-layers';
-import { draftHeading } from '../plot-heading';
+import { draftHeading, isSettled } from '../plot-heading';
 import { queryLink } from '../query-link';
 import { SheetHeader } from '../sheet-header';
 import { sheetNumber } from '../sheets';
@@ -117,9 +117,8 @@ export class PhaseSheet {
     const [shown, index, copper] = [this.shown(), this.index(), this.copper()];
     if (!shown || !index) return null;
     const { cells, of } = shown.prediction;
-    const parameter = this.edition()?.description.parameters[0].id ?? '';
     const label = `Detail of the chosen cell: ${cellName(of, this.edition(), cells.cellIndex[shown.cell])}`;
-    return { index, cell: shown.cell, copperOf: copper ?? (() => []), parameter, label, targetDeg: cells.targetPhaseDeg[shown.cell], achievedDeg: cells.phaseDeg[shown.cell] };
+    return { index, cell: shown.cell, copperOf: copper ?? (() => []), label, targetDeg: cells.targetPhaseDeg[shown.cell], achievedDeg: cells.phaseDeg[shown.cell] };
   });
   protected readonly curve = computed(() => {
     const shown = this.shown();
@@ -135,7 +134,7 @@ export class PhaseSheet {
   });
   protected readonly lossText = computed(() => {
     const loss = this.prediction()?.head.figures.phaseLossDb;
-    return typeof loss === 'number' ? `costs ${numberText(loss, 3)} dB` : '';
+    return typeof loss === 'number' ? `${numberText(loss, 3)} dB` : '';
   });
   protected readonly shownError = computed(() => {
     const shown = this.shown();
@@ -169,13 +168,13 @@ export class PhaseSheet {
     return prediction ? phaseNotes(prediction, this.edition()) : [];
   });
   protected readonly describe = computed(() => {
-    const [prediction, edition] = [this.prediction(), this.edition()];
-    return (cell: number): string => (prediction && cell < prediction.cells.xMm.length ? cellSentence(prediction, edition, cell) : '');
+    const prediction = this.prediction();
+    return (cell: number): string => (prediction && cell < prediction.cells.xMm.length ? cellSentence(prediction, cell) : '');
   });
   protected readonly heading = computed(() => {
     const coloured = this.coloured();
     const title = coloured?.kind === 'layer' ? coloured.layer.title : 'Phase';
-    return draftHeading(title, this.state.panel(), this.state.saveState().kind === 'saved', new Date());
+    return draftHeading(title, this.state.panel(), isSettled(this.state.saveState()), new Date());
   });
   protected readonly curveHeading = computed(() => ({ ...this.heading(), title: this.curve()?.title ?? 'Library curve' }));
   protected readonly histogramHeading = computed(() => ({ ...this.heading(), title: 'Phase error, histogram' }));

@@ -16,7 +16,7 @@ describe('worst cells', () => {
     const worst = worstCells(SAMPLE_PHASE, 3);
     const table = worstRows({ prediction: SAMPLE_PHASE, edition: SAMPLE_EDITION, worst, chosen: 210, brightest: 1 });
     expect(table.rows.map(({ cell, chosen }) => [cell, chosen])).toEqual([[worst[0], false], [worst[1], false], [210, true]]);
-    expect([table.stockHead, table.rows[2].place]).toEqual(['a, mm', '11, 11']);
+    expect([table.stockHead, table.rows[2].place]).toEqual(['Cell, mm', '11, 11']);
     expect(table.range).toMatch(/^\u2212\d+\.\d\d° to \+\d+\.\d\d°$/);
   });
 });

@@ -35,8 +35,7 @@ export function worstRows({ prediction, edition, worst, chosen, brightest }: Wor
   const { cells, of } = prediction;
   const listed = chosen === null || worst.includes(chosen) ? worst : [...worst.slice(0, -1), chosen];
   const first = of.panel.lattice.kind === 'rectangular' ? 1 : 0;
-  const parameter = edition?.description.parameters.length === 1 ? edition.description.parameters[0] : null;
-  const stockText = (index: number): string => (parameter && edition && index >= 0 ? numberText(edition.cells[index].parametersMm[0], 2) : cellName(of, edition, index));
+  const stockText = (index: number): string => cellName(of, edition, index).replace(/ mm$/, '');
   let [low, high] = [0, 0];
   for (let i = 0; i < cells.errorDeg.length; i++) {
     low = Math.min(low, cells.errorDeg[i]);
@@ -44,7 +43,7 @@ export function worstRows({ prediction, edition, worst, chosen, brightest }: Wor
   }
   return {
     range: `${signedNumberText(low, 2)}° to ${signedNumberText(high, 2)}°`,
-    stockHead: parameter ? `${parameter.id}, mm` : 'Cell',
+    stockHead: edition ? 'Cell, mm' : 'Cell',
     rows: listed.map((cell) => ({
       cell,
       place: `${numberText(cells.column[cell] + first, 0)}, ${numberText(cells.row[cell] + first, 0)}`,
