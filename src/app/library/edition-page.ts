@@ -103,6 +103,8 @@ export class EditionPage {
       return;
     }
     this.edition.set(outcome.edition);
+    // The middle of the family, where its curve is steepest and a cell shows its form.
+    this.cellIndex.set(Math.floor(outcome.edition.cells.length / 2));
     const design = outcome.edition.description.designFrequencyGHz;
     const distances = this.frequencies().map((value) => Math.abs(value - design));
     this.frequencyIndex.set(distances.indexOf(Math.min(...distances)));
