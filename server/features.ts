@@ -8,6 +8,7 @@ import { libraryRoutes } from './library/library-routes';
 import { letterRoutes } from './notices/letter-routes';
 import { predictionRoutes } from './predictions/prediction-routes';
 import { projectRoutes } from './projects/project-routes';
+import { exportRoutes } from './revisions/export-routes';
 import { revisionRoutes } from './revisions/revision-routes';
 import { invitationRoutes, teamRoutes } from './teams/team-routes';
 
@@ -25,4 +26,5 @@ export const features: readonly ((house: House) => readonly Route[])[] = [
   predictionRoutes,
   projectRoutes,
   revisionRoutes,
+  exportRoutes,
 ];

@@ -27,8 +27,10 @@ export function exportReadme(facts: ReadmeFacts): string {
     '',
     ...FILES,
     '',
-    ...CONVENTIONS.flatMap((line) => wrapped(line)),
+    'Units and conventions',
+    ...CONVENTIONS.flatMap((line) => wrapped(line, '- ')),
     '',
+    'Cautions',
     ...cautions(facts).flatMap((line) => wrapped(line, '- ')),
     '',
   ].join('\n');
@@ -46,12 +48,11 @@ const FILES = [
 ];
 
 const CONVENTIONS = [
-  'Units and conventions',
   'Lengths in mm, frequencies in GHz, angles and phases in degrees, levels in dB or dBi; decimal points, comma separated.',
   'The panel lies in z = 0 with its centre at the origin; +z is the side the beams are on. theta from +z, phi from +x towards +y. Columns count from 0 at the lowest x, rows from 0 at the lowest y; cells.csv goes row by row from the lowest y.',
   'Time exp(+j omega t), waves exp(-j k.r): a delay is a falling phase. Target and achieved phases lie in [0, 360), the error is achieved minus target in (-180, 180], all at the design frequency.',
   'amplitude is that of the incident wave at the cell, response_db what the cell gives back of it, incidence_deg the angle from the normal at which the wave arrives and incidence_azimuth_deg the azimuth it travels in.',
-  'In the cuts the angle is 0 in the wanted direction: along, it grows away from z; across, towards rising phi. -200 dBi stands for nothing.',
+  'In the cuts the angle is 0 in the wanted direction: along, it grows away from z; across, towards rising phi. -200 dBi is the floor: no radiation.',
 ];
 
 function cautions({ edition, warnings, invented }: ReadmeFacts): string[] {

@@ -1,4 +1,5 @@
 import { accountSamples } from './samples/account-samples';
+import { exportSamples } from './samples/export-samples';
 import { librarySamples } from './samples/library-samples';
 import { projectSamples } from './samples/project-samples';
 import { teamSamples } from './samples/team-samples';
@@ -27,6 +28,7 @@ export type RouteSamples = Readonly<Record<string, RouteSample>>;
 /** One line per feature. */
 export const routeSamples: RouteSamples = {
   ...accountSamples,
+  ...exportSamples,
   ...librarySamples,
   ...projectSamples,
   ...teamSamples,

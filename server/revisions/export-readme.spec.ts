@@ -1,0 +1,45 @@
+import { exportReadme, type ReadmeFacts } from './export-readme';
+
+const id = '6f9619ff-8b86-4d01-b42d-00cf4fc964ff';
+const facts: ReadmeFacts = {
+  header: {
+    id,
+    panelId: id,
+    number: 3,
+    hash: 'a'.repeat(64),
+    parentId: null,
+    parentNumber: null,
+    restoredFromNumber: null,
+    author: { id, name: 'Designer' },
+    message: `A message ${'that goes on '.repeat(20)}${'x'.repeat(120)}`,
+    createdAt: '2026-12-01T14:02:31.000Z',
+  },
+  projectName: 'Project',
+  panelName: 'Panel',
+  invented: false,
+  edition: { familyName: 'Ring and patch', number: 2, provenance: 'simulated', limits: 'Normal incidence only.' },
+  warnings: [{ code: 'image-lobe', pointer: '#/cells', severity: 'warn', message: 'Two levels give an image.', numbers: {} }],
+  engineVersion: 'scalar-1',
+  productVersion: '0.1.0',
+};
+const flat = (text: string): string => text.replace(/\s+/g, ' ');
+
+describe('the text of an export', () => {
+  it('breaks lines at 78 characters, except within a longer word', () => {
+    const long = exportReadme(facts).split('\n').filter((line) => line.length > 78);
+    expect(long).toEqual(['x'.repeat(120)]);
+  });
+
+  it('says whose cells they are, and repeats every warning of the prediction', () => {
+    const text = flat(exportReadme(facts));
+    expect(text).toContain('- The cells come from "Ring and patch", edition 2: simulated. Normal incidence only.');
+    expect(text).toContain('- Two levels give an image.');
+    expect(text).not.toContain('INVENTED');
+  });
+
+  it('says that ideal cells cannot be made, and calls invented what is', () => {
+    const text = flat(exportReadme({ ...facts, edition: null, invented: true }));
+    expect(text).toContain('cannot be made as they stand');
+    expect(text).toContain('INVENTED: this project is a demonstration.');
+  });
+});
