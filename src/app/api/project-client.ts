@@ -32,4 +32,11 @@ export class ProjectClient {
   async addPanel(projectId: string, panel: NewPanel): Promise<PanelDetail> {
     return panelDetail.parse(await firstValueFrom(this.http.post(`/api/projects/${encodeURIComponent(projectId)}/panels`, panel)));
   }
+
+  /** Reads the panel first: renaming it is a change of the draft that was seen. */
+  async renamePanel(panelId: string, name: string): Promise<PanelDetail> {
+    const address = `/api/panels/${encodeURIComponent(panelId)}`;
+    const { etag } = panelDetail.parse(await firstValueFrom(this.http.get(address)));
+    return panelDetail.parse(await firstValueFrom(this.http.patch(address, { name }, { headers: { 'If-Match': etag } })));
+  }
 }

@@ -1,63 +1,64 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { SessionStore } from '../session/session-store';
+import { CheckField } from '../ui/check-field';
+import { ViewTitle } from '../ui/view-title';
+import { FIRST_STEPS } from './first-steps-text';
 
-const KEY = 'slantwise.first-steps-dismissed';
+const DISMISSED = 'slantwise.first-steps-dismissed';
+const DONE = 'slantwise.first-steps-done';
 
-const STEPS: Readonly<Record<string, readonly string[]>> = {
-  designer: [
-    'Open a panel and drag its beam on the Pattern sheet, or type the angles: gain, sidelobes and the cut follow.',
-    'On the Cells sheet choose an edition of the library; on the Phase sheet read the error it leaves, cell by cell.',
-    'Freeze a revision with a message, change something, freeze another, and compare the two under Revisions.',
-    'Export a revision: the element layout, figures and cuts as CSV with their checksums.',
-  ],
-  lab: [
-    'Import a family under Library: drop its network files or one zip, look at what was found, complete the description.',
-    'Read the verdict of each check, accept with a note, then publish the edition. A published edition never changes.',
-  ],
-  reviewer: ['Open a panel, compare its revisions under Revisions, and read which lines of the requirement each meets.'],
-  administrator: ['Invite people under Team and give them their roles. The audit log keeps every change.'],
-};
-
-/** What to do first, by role. Goes away for good when dismissed. */
+/** A checklist of what to do first, by role. Ticks and dismissal stay in this browser; once dismissed it is gone for good. */
 @Component({
   selector: 'slant-first-steps',
+  imports: [CheckField, ViewTitle],
   template: `
     @if (!dismissed() && steps().length > 0) {
       <section aria-label="First steps">
-        <ol>
-          @for (step of steps(); track step) {
-            <li>{{ step }}</li>
+        <div class="head">
+          <slant-view-title text="First steps" [unit]="doneCount() + ' of ' + steps().length + ' done'" />
+          <button type="button" class="button quiet" (click)="dismiss()">Do not show again</button>
+        </div>
+        <ul>
+          @for (step of steps(); track step.id) {
+            <li [class.done]="done().has(step.id)"><slant-check-field [label]="step.text" [checked]="done().has(step.id)" (changed)="tick(step.id, $event)" /></li>
           }
-        </ol>
-        <button type="button" class="button quiet" (click)="dismiss()">Do not show again</button>
+        </ul>
       </section>
     }
   `,
   styles: `
-    section {
+    .head {
       display: flex;
-      align-items: start;
-      gap: var(--s4);
-      padding: var(--s2) var(--s3);
-      border-left: 2px solid var(--copper);
-      background: var(--sunk);
+      align-items: center;
+      gap: var(--s2);
     }
-    ol {
+    slant-view-title {
       flex: 1;
-      display: grid;
-      gap: 2px;
-      padding-left: var(--s5);
+    }
+    ul {
+      padding: 0;
+      list-style: none;
+    }
+    .done {
+      color: var(--muted);
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class FirstSteps {
   private readonly session = inject(SessionStore);
-  protected readonly dismissed = signal(localStorage.getItem(KEY) === 'yes');
-  protected readonly steps = computed(() => this.session.roles().flatMap((role) => STEPS[role] ?? []));
+  protected readonly dismissed = signal(localStorage.getItem(DISMISSED) === 'yes');
+  protected readonly done = signal<ReadonlySet<string>>(new Set((localStorage.getItem(DONE) ?? '').split(' ')));
+  protected readonly steps = computed(() => this.session.roles().flatMap((role) => FIRST_STEPS[role]));
+  protected readonly doneCount = computed(() => this.steps().filter(({ id }) => this.done().has(id)).length);
+
+  protected tick(id: string, isDone: boolean): void {
+    this.done.update((held) => new Set(isDone ? [...held, id] : [...held].filter((other) => other !== id)));
+    localStorage.setItem(DONE, [...this.done()].join(' '));
+  }
 
   protected dismiss(): void {
     this.dismissed.set(true);
-    localStorage.setItem(KEY, 'yes');
+    localStorage.setItem(DISMISSED, 'yes');
   }
 }

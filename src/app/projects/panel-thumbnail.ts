@@ -14,7 +14,6 @@ const SIDE = 76;
   styles: `
     canvas {
       display: block;
-      border: 1px solid var(--rule-strong);
     }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,

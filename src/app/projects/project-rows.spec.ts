@@ -47,6 +47,15 @@ describe('line of a panel', () => {
     });
   });
 
+  it('names several beams as short as it can', () => {
+    const pointing = (...beams: { thetaDeg: number; phiDeg: number }[]): string =>
+      panelRow(overview({ design: { ...STARTING_DESIGN, requirement: { ...STARTING_DESIGN.requirement, beams } } })).beams;
+    const [a, b] = [{ thetaDeg: 25, phiDeg: 0 }, { thetaDeg: 25, phiDeg: 180 }];
+    expect(pointing(a, b)).toBe('θ 25.0°, φ 0.0° and 180.0°');
+    expect(pointing(a, { thetaDeg: 30, phiDeg: 90 })).toBe('θ 25.0°, φ 0.0° and θ 30.0°, φ 90.0°');
+    expect(pointing(a, b, a)).toBe('θ 25.0°, φ 0.0° and 2 more');
+  });
+
   it('names the lines that fall short, whatever the others do', () => {
     const verdicts: PanelOverview['summary'] = {
       cellCount: 1600,

@@ -1,5 +1,5 @@
 import type { PanelOverview } from '../../../shared/contracts/projects';
-import type { DesignDocument } from '../../../shared/model/design-document';
+import type { Beam, DesignDocument } from '../../../shared/model/design-document';
 import type { MarkState } from '../ui/state-mark';
 
 /** A panel as one line of the projects sheet. */
@@ -41,9 +41,13 @@ function kindText({ design, summary }: PanelOverview): string {
 
 function beamText({ requirement }: DesignDocument): string {
   const [first, ...others] = requirement.beams;
-  const one = ({ thetaDeg, phiDeg }: { thetaDeg: number; phiDeg: number }): string => `θ ${thetaDeg.toFixed(1)}°, φ ${phiDeg.toFixed(1)}°`;
+  const theta = ({ thetaDeg }: Beam): string => `θ ${thetaDeg.toFixed(1)}°`;
+  const phi = ({ phiDeg }: Beam): string => `φ ${phiDeg.toFixed(1)}°`;
+  const one = (beam: Beam): string => `${theta(beam)}, ${phi(beam)}`;
   if (others.length === 0) return one(first);
-  return others.length === 1 ? `${one(first)} and ${one(others[0])}` : `${one(first)} and ${others.length} more`;
+  if (others.length > 1) return `${one(first)} and ${others.length} more`;
+  const [second] = others;
+  return second.thetaDeg === first.thetaDeg ? `${one(first)} and ${second.phiDeg.toFixed(1)}°` : `${one(first)} and ${one(second)}`;
 }
 
 function gainText({ summary }: PanelOverview): string {

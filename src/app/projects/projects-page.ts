@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { DatePipe } from '@angular/common';
 import { MatMenuModule } from '@angular/material/menu';
 import { Router, RouterLink } from '@angular/router';
@@ -6,19 +6,23 @@ import type { FamilySummary } from '../../../shared/contracts/library';
 import type { Project } from '../../../shared/contracts/projects';
 import { LibraryClient } from '../api/library-client';
 import { ProjectClient } from '../api/project-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { SessionStore } from '../session/session-store';
-import { CommandRegistry } from '../ui/command-registry';
 import { EmptyState } from '../ui/empty-state';
+import { FaultNote } from '../ui/fault-note';
 import { AskName } from '../ui/name-dialog';
 import { SheetFrame } from '../ui/sheet-frame';
 import { StateMark } from '../ui/state-mark';
 import { TitleBlock } from '../ui/title-block';
 import { ViewTitle } from '../ui/view-title';
+import { WhyNot } from '../ui/why-not';
 import { FirstSteps } from './first-steps';
 import { PanelThumbnail } from './panel-thumbnail';
 import type { PanelRow } from './project-rows';
 import { panelRow } from './project-rows';
+
+const EDITIONS_SHOWN = 3;
 
 interface ProjectSection {
   readonly project: Project;
@@ -28,7 +32,7 @@ interface ProjectSection {
 
 @Component({
   selector: 'slant-projects-page',
-  imports: [DatePipe, EmptyState, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle],
+  imports: [DatePipe, EmptyState, FaultNote, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle, WhyNot],
   templateUrl: './projects-page.html',
   styleUrl: './projects-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -41,15 +45,16 @@ export class ProjectsPage {
   private readonly names = inject(AskName);
   protected readonly projects = signal<readonly Project[] | null>(null);
   protected readonly families = signal<readonly FamilySummary[]>([]);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
   /** Published editions, the newest of each family. */
   protected readonly editions = computed(() =>
     this.families()
       .flatMap(({ editions }) => editions.filter(({ state }) => state === 'published').slice(0, 1))
-      .sort((a, b) => (b.publishedAt ?? '').localeCompare(a.publishedAt ?? '')),
+      .sort((a, b) => (b.publishedAt ?? '').localeCompare(a.publishedAt ?? ''))
+      .slice(0, EDITIONS_SHOWN),
   );
-  protected readonly canDesign = computed(() => this.session.hasRole('designer'));
-  protected readonly whyNot = computed(() => (this.canDesign() ? null : 'This needs the role designer'));
+  protected readonly canRead = computed(() => this.session.hasRole('designer', 'lab', 'reviewer', 'range', 'administrator'));
+  protected readonly whyNot = computed(() => (this.session.hasRole('designer') ? null : `This needs the role designer. You work as ${this.session.roles().join(', ')}.`));
   protected readonly panelCount = computed(() => (this.projects() ?? []).reduce((sum, { panels }) => sum + panels.length, 0));
   protected readonly sections = computed<readonly ProjectSection[]>(() =>
     (this.projects() ?? []).map((project) => ({
@@ -67,17 +72,7 @@ export class ProjectsPage {
   ]);
 
   constructor() {
-    void this.load();
-    const registry = inject(CommandRegistry);
-    let takeBack = (): void => undefined;
-    effect(() => {
-      const panels = (this.projects() ?? []).flatMap(({ name, panels: list }) => list.map((panel) => ({ panel, project: name })));
-      takeBack = registry.set(
-        'panels',
-        panels.map(({ panel, project }) => ({ id: panel.id, label: panel.name, kind: 'panel', words: `${project} ${panel.draftHash.slice(0, 12)}`, run: () => void this.open(panel.id) })),
-      );
-    });
-    inject(DestroyRef).onDestroy(() => takeBack());
+    if (this.canRead()) void this.load();
   }
 
   protected async load(): Promise<void> {
@@ -86,7 +81,7 @@ export class ProjectsPage {
       this.fault.set(null);
       this.families.set(await this.library.families());
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 
@@ -116,13 +111,18 @@ export class ProjectsPage {
     if (name !== undefined) await this.attempt(() => this.client.addPanel(project.id, { name, copyOfPanelId: row.id }));
   }
 
+  protected async renamePanel(row: PanelRow): Promise<void> {
+    const name = await this.names.ask({ title: 'Rename the panel', label: 'Name', deed: 'Rename', value: row.name });
+    if (name !== undefined) await this.attempt(() => this.client.renamePanel(row.id, name));
+  }
+
   private async attempt<T>(work: () => Promise<T>): Promise<T | null> {
     try {
       const result = await work();
       await this.load();
       return result;
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
       return null;
     }
   }

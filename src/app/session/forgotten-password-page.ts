@@ -1,10 +1,11 @@
-import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import { SessionClient } from '../api/session-client';
 import { FaultNote } from '../ui/fault-note';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
 import { Entrance } from './entrance';
+import { SessionStore } from './session-store';
 
 @Component({
   selector: 'slant-forgotten-password-page',
@@ -15,6 +16,8 @@ import { Entrance } from './entrance';
 })
 export class ForgottenPasswordPage {
   private readonly client = inject(SessionClient);
+  private readonly store = inject(SessionStore);
+  protected readonly letterBox = computed(() => this.store.about()?.letterBox === true);
   protected readonly busy = signal(false);
   protected readonly sentTo = signal<string | null>(null);
   protected readonly fault = signal<CallFault | null>(null);

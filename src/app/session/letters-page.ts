@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { DatePipe } from '@angular/common';
 import { RouterLink } from '@angular/router';
 import type { Letter } from '../../../shared/contracts/session';
@@ -9,7 +9,6 @@ import { SheetFrame } from '../ui/sheet-frame';
 import { letterParts } from './letter-parts';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
-import { SessionStore } from './session-store';
 
 /** What this server wrote while no mail server is set: for development and demonstration only. */
 @Component({
@@ -17,15 +16,12 @@ import { SessionStore } from './session-store';
   imports: [DatePipe, EmptyState, FaultNote, RouterLink, SheetFrame],
   templateUrl: './letters-page.html',
   styleUrl: './letters-page.scss',
-  host: { role: 'main' },
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class LettersPage {
   private readonly client = inject(SessionClient);
   protected readonly letters = signal<readonly Letter[] | null>(null);
   protected readonly fault = signal<CallFault | null>(null);
-  private readonly session = inject(SessionStore);
-  protected readonly signedIn = computed(() => this.session.current() !== null);
   protected readonly parts = letterParts;
   protected readonly origin = location.origin;
 

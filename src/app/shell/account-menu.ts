@@ -18,6 +18,7 @@ export class AccountMenu {
   protected readonly theme = inject(Theme);
   protected readonly current = this.session.current;
   protected readonly name = computed(() => this.current()?.person.name ?? '');
+  protected readonly readsLetters = computed(() => this.current()?.letterBox === true && this.session.hasRole('administrator'));
   protected readonly themes: readonly { readonly id: ThemeChoice; readonly label: string }[] = [
     { id: 'light', label: 'Light sheet' },
     { id: 'dark', label: 'Dark sheet' },

@@ -1,7 +1,9 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { SessionClient } from '../api/session-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { SessionStore } from '../session/session-store';
+import { FaultNote } from '../ui/fault-note';
 import { AskName } from '../ui/name-dialog';
 import { SheetFrame } from '../ui/sheet-frame';
 import { OwnSessions } from './own-sessions';
@@ -11,7 +13,7 @@ import { PasswordForm } from './password-form';
 /** The own account: name, team, password, sessions, personal tokens. */
 @Component({
   selector: 'slant-account-page',
-  imports: [OwnSessions, OwnTokens, PasswordForm, SheetFrame],
+  imports: [FaultNote, OwnSessions, OwnTokens, PasswordForm, SheetFrame],
   templateUrl: './account-page.html',
   styleUrl: './team-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -22,7 +24,7 @@ export class AccountPage {
   private readonly names = inject(AskName);
   protected readonly current = this.session.current;
   protected readonly teams = computed(() => this.current()?.teams ?? []);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
 
   protected async rename(): Promise<void> {
     const name = await this.names.ask({ title: 'Your name', label: 'Name', deed: 'Change', value: this.current()?.person.name ?? '', hint: 'It stands in title blocks and in the audit log.' });
@@ -38,7 +40,7 @@ export class AccountPage {
       await work();
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 }

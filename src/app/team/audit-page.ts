@@ -3,15 +3,18 @@ import { DatePipe, JsonPipe } from '@angular/common';
 import { RouterLink } from '@angular/router';
 import type { AuditRow } from '../../../shared/contracts/team';
 import { TeamClient } from '../api/team-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
+import { FaultNote } from '../ui/fault-note';
 import { SheetFrame } from '../ui/sheet-frame';
 import { StateMark } from '../ui/state-mark';
 import { ViewTitle } from '../ui/view-title';
+import { detailText, objectText } from './audit-text';
 
 /** What was done, by whom and when, with the verdict on the chain of hashes that guards it. */
 @Component({
   selector: 'slant-audit-page',
-  imports: [DatePipe, JsonPipe, RouterLink, SheetFrame, StateMark, ViewTitle],
+  imports: [DatePipe, FaultNote, JsonPipe, RouterLink, SheetFrame, StateMark, ViewTitle],
   templateUrl: './audit-page.html',
   styleUrl: './team-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -21,7 +24,9 @@ export class AuditPage {
   protected readonly rows = signal<readonly AuditRow[]>([]);
   protected readonly next = signal<string | null>(null);
   protected readonly intact = signal<boolean | null>(null);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
+  protected readonly objectText = objectText;
+  protected readonly detailText = detailText;
 
   constructor() {
     void this.read(null);
@@ -35,7 +40,7 @@ export class AuditPage {
       this.intact.set(page.chainIntact);
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 }

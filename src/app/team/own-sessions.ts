@@ -2,27 +2,30 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { DatePipe } from '@angular/common';
 import type { OwnSession } from '../../../shared/contracts/session';
 import { SessionClient } from '../api/session-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
+import { FaultNote } from '../ui/fault-note';
 import { ViewTitle } from '../ui/view-title';
+import { browserName } from './browser-name';
 
 @Component({
   selector: 'slant-own-sessions',
-  imports: [DatePipe, ViewTitle],
+  imports: [DatePipe, FaultNote, ViewTitle],
   template: `
     <section aria-label="Sessions">
       <slant-view-title text="Sessions" unit="where you are signed in" />
-      @if (fault(); as text) {
-        <p class="field-fault" role="alert">{{ text }}</p>
+      @if (fault(); as problem) {
+        <slant-fault-note [text]="problem.detail" [requestId]="problem.requestId" />
       }
-      <div class="scroll-box">
+      <div class="scroll-box" tabindex="0" role="group" aria-label="Own sessions">
         <table class="data-table">
           <thead>
-            <tr><th class="text" scope="col">Browser</th><th class="text" scope="col">Address</th><th scope="col">Since</th><th scope="col">Last used</th><th scope="col"></th></tr>
+            <tr><th class="text" scope="col">Browser</th><th class="text" scope="col">Address</th><th scope="col">Since</th><th scope="col">Last used</th><th scope="col"><span class="visually-hidden">End it</span></th></tr>
           </thead>
           <tbody>
             @for (session of sessions(); track session.id) {
               <tr [class.chosen]="session.current">
-                <td class="text">{{ session.browser }}</td>
+                <td class="text" [attr.title]="session.browser">{{ browserName(session.browser) }}</td>
                 <td class="text">{{ session.address }}</td>
                 <td>{{ session.createdAt | date: 'yyyy-MM-dd HH:mm' }}</td>
                 <td>{{ session.lastUsedAt | date: 'yyyy-MM-dd HH:mm' }}</td>
@@ -30,7 +33,7 @@ import { ViewTitle } from '../ui/view-title';
                   @if (session.current) {
                     this one
                   } @else {
-                    <button type="button" class="button quiet" (click)="end(session.id)">End</button>
+                    <button type="button" class="button quiet" [attr.aria-label]="'End the session of ' + browserName(session.browser) + ' at ' + session.address" (click)="end(session.id)">End</button>
                   }
                 </td>
               </tr>
@@ -49,7 +52,8 @@ import { ViewTitle } from '../ui/view-title';
 export class OwnSessions {
   private readonly client = inject(SessionClient);
   protected readonly sessions = signal<readonly OwnSession[]>([]);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
+  protected readonly browserName = browserName;
 
   constructor() {
     void this.attempt(async () => undefined);
@@ -64,7 +68,7 @@ export class OwnSessions {
       this.sessions.set(await this.client.sessions());
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 }

@@ -4,26 +4,30 @@ import { scope } from '../../../shared/contracts/common';
 import type { Scope } from '../../../shared/contracts/common';
 import type { PersonalToken, TokenCreated } from '../../../shared/contracts/session';
 import { SessionClient } from '../api/session-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { CheckField } from '../ui/check-field';
+import { Confirm } from '../ui/confirm';
+import { FaultNote } from '../ui/fault-note';
 import { ViewTitle } from '../ui/view-title';
 
 /** Personal tokens for scripts: scoped, expiring, shown once. */
 @Component({
   selector: 'slant-own-tokens',
-  imports: [CheckField, DatePipe, ViewTitle],
+  imports: [CheckField, DatePipe, FaultNote, ViewTitle],
   templateUrl: './own-tokens.html',
   styleUrl: './own-tokens.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
 export class OwnTokens {
   private readonly client = inject(SessionClient);
+  private readonly confirm = inject(Confirm);
   protected readonly scopes = scope.options;
   protected readonly wanted = signal<readonly Scope[]>(['read', 'predict']);
   protected readonly tokens = signal<readonly PersonalToken[]>([]);
   protected readonly created = signal<TokenCreated | null>(null);
   protected readonly copied = signal(false);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
 
   constructor() {
     void this.attempt(async () => undefined);
@@ -42,13 +46,20 @@ export class OwnTokens {
     });
   }
 
-  protected async copy(secret: string): Promise<void> {
-    await navigator.clipboard.writeText(secret);
+  /** Pages without secure context have no clipboard: the secret is then marked, ready for the person's own copy. */
+  protected async copy(secret: HTMLElement): Promise<void> {
+    const { clipboard } = navigator as { readonly clipboard?: Clipboard };
+    if (clipboard === undefined) {
+      getSelection()?.selectAllChildren(secret);
+      return;
+    }
+    await clipboard.writeText(secret.textContent ?? '');
     this.copied.set(true);
   }
 
-  protected revoke(id: string): Promise<void> {
-    return this.attempt(async () => {
+  protected async revoke({ id, name }: PersonalToken): Promise<void> {
+    if (!(await this.confirm.ask({ title: `Revoke ${name}?`, text: 'Scripts that use it are refused at once. It cannot be brought back.', deed: 'Revoke', final: true }))) return;
+    await this.attempt(async () => {
       await this.client.revokeToken(id);
       if (this.created()?.id === id) this.created.set(null);
     });
@@ -60,7 +71,7 @@ export class OwnTokens {
       this.tokens.set(await this.client.tokens());
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 }

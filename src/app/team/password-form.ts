@@ -3,28 +3,30 @@ import { SessionClient } from '../api/session-client';
 import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { NewPasswordField } from '../session/new-password-field';
+import { PasswordBox } from '../session/password-box';
 import { CheckField } from '../ui/check-field';
+import { FaultNote } from '../ui/fault-note';
 import { ViewTitle } from '../ui/view-title';
 
 @Component({
   selector: 'slant-password-form',
-  imports: [CheckField, NewPasswordField, ViewTitle],
+  imports: [CheckField, FaultNote, NewPasswordField, PasswordBox, ViewTitle],
   template: `
     <section aria-label="Password">
       <slant-view-title text="Password" />
       <form (submit)="change($event, current)" novalidate>
-        <label class="text-field">
-          <span>Current password</span>
-          <input #current type="password" autocomplete="current-password" [attr.aria-invalid]="fault()?.fields?.['currentPassword'] !== undefined" />
-        </label>
+        <div class="text-field">
+          <label class="label" for="currentPassword">Current password</label>
+          <slant-password-box #current boxId="currentPassword" [faulty]="!!fault()?.fields?.['currentPassword']" [describedBy]="fault()?.fields?.['currentPassword'] ? 'current-fault' : null" />
+        </div>
         @if (fault()?.fields?.['currentPassword']; as text) {
-          <p class="field-fault" role="alert">{{ text }}</p>
+          <p class="field-fault" id="current-fault" role="alert">{{ text }}</p>
         }
         <slant-new-password-field [fault]="fault()?.fields?.['newPassword'] ?? null" />
         <slant-check-field label="End my other sessions" [checked]="endOthers()" (changed)="endOthers.set($event)" />
         @if (fault(); as problem) {
           @if (!problem.fields['currentPassword'] && !problem.fields['newPassword']) {
-            <p class="field-fault" role="alert">{{ problem.detail }}</p>
+            <slant-fault-note [text]="problem.detail" [requestId]="problem.requestId" />
           }
         }
         @if (done()) {
@@ -54,12 +56,12 @@ export class PasswordForm {
   protected readonly fault = signal<CallFault | null>(null);
   protected readonly done = signal(false);
 
-  protected async change(event: Event, current: HTMLInputElement): Promise<void> {
+  protected async change(event: Event, current: PasswordBox): Promise<void> {
     event.preventDefault();
     this.fault.set(null);
     this.done.set(false);
     try {
-      await this.client.changePassword({ currentPassword: current.value, newPassword: this.newPassword().value(), endOtherSessions: this.endOthers() });
+      await this.client.changePassword({ currentPassword: current.value(), newPassword: this.newPassword().value(), endOtherSessions: this.endOthers() });
       this.done.set(true);
     } catch (error) {
       this.fault.set(callFault(error));

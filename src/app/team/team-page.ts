@@ -11,15 +11,17 @@ import { SessionStore } from '../session/session-store';
 import { CheckField } from '../ui/check-field';
 import { Confirm } from '../ui/confirm';
 import { EmptyState } from '../ui/empty-state';
+import { FaultNote } from '../ui/fault-note';
 import { AskName } from '../ui/name-dialog';
 import { SheetFrame } from '../ui/sheet-frame';
 import { ViewTitle } from '../ui/view-title';
+import { WhyNot } from '../ui/why-not';
 import { ROLE_DUTIES } from './role-duties';
 
 /** Who works in the team and as what. Administrators change it; everybody may look. */
 @Component({
   selector: 'slant-team-page',
-  imports: [CheckField, DatePipe, EmptyState, RouterLink, SheetFrame, ViewTitle],
+  imports: [CheckField, DatePipe, EmptyState, FaultNote, RouterLink, SheetFrame, ViewTitle, WhyNot],
   templateUrl: './team-page.html',
   styleUrl: './team-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -38,6 +40,7 @@ export class TeamPage {
   protected readonly fault = signal<CallFault | null>(null);
   protected readonly done = signal<string | null>(null);
   protected readonly isAdministrator = computed(() => this.session.hasRole('administrator'));
+  protected readonly whyNot = computed(() => (this.isAdministrator() ? null : `This needs the role administrator. You work as ${this.session.roles().join(', ')}.`));
   protected readonly ownId = computed(() => this.session.current()?.person.id);
 
   constructor() {

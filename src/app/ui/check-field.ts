@@ -12,6 +12,7 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
   `,
   styles: `
     label {
+      position: relative;
       display: inline-flex;
       align-items: center;
       gap: 8px;
