@@ -20,7 +20,7 @@ class HeldRunner implements PredictionRunner {
   }
 }
 
-const question = { design: STARTING_DESIGN, edition: null } as const;
+const question = { design: STARTING_DESIGN } as const;
 const settle = (): Promise<void> => new Promise((resolve) => setImmediate(resolve));
 const engineWith = (runner: PredictionRunner): PredictionEngine => new PredictionEngine(runner, limitsFor(1));
 
@@ -57,16 +57,52 @@ describe('PredictionEngine', () => {
     const older = engine.predict({ teamId: 'a', question, preview: 'main' });
     await settle();
     const newer = engine.predict({ teamId: 'a', question, preview: 'main' });
-    await expect(older).rejects.toMatchObject({ kind: 'superseded' });
     expect(Atomics.load(runner.tasks[0].task.stop, 0)).toBe(1);
     runner.tasks[0].finish();
+    await expect(older).rejects.toMatchObject({ kind: 'superseded' });
     await settle();
     runner.tasks[1].finish();
     expect((await newer).figures.cellCount).toBe(1600);
   });
 
+  it('keeps the order of previews even when the older one waits for its edition', async () => {
+    const runner = new HeldRunner();
+    const engine = engineWith(runner);
+    const edition = async (): Promise<never> => {
+      await settle();
+      await settle();
+      throw new Error('fetched too late to matter');
+    };
+    const older = engine.predict({ teamId: 'a', question, edition, preview: 'main' });
+    const newer = engine.predict({ teamId: 'a', question, preview: 'main' });
+    await expect(older).rejects.toThrow();
+    runner.tasks[0].finish();
+    expect((await newer).figures.cellCount).toBe(1600);
+  });
+
+  it('lets a running preview answer that is past its last step, so that steady steering shows something', async () => {
+    const answer = createTaskAnswerer();
+    const answers: (() => void)[] = [];
+    const runner: PredictionRunner = {
+      run: (task) => {
+        const outcome = answer(task);
+        return new Promise((resolve) => answers.push(() => resolve(outcome)));
+      },
+      close: () => Promise.resolve(),
+    };
+    const engine = engineWith(runner);
+    const older = engine.predict({ teamId: 'a', question, preview: 'main' });
+    await settle();
+    const newer = engine.predict({ teamId: 'a', question, preview: 'main' });
+    answers[0]();
+    expect((await older).figures.cellCount).toBe(1600);
+    await settle();
+    answers[1]();
+    expect((await newer).figures.cellCount).toBe(1600);
+  });
+
   it('stops at the flag before it takes memory', () => {
-    expect(createTaskAnswerer()({ ...question, stop: Int32Array.of(1) })).toEqual({ kind: 'stopped' });
+    expect(createTaskAnswerer()({ ...question, edition: null, stop: Int32Array.of(1) })).toEqual({ kind: 'stopped' });
   });
 
   it('drops what nobody waits for any more', async () => {
@@ -85,7 +121,7 @@ describe('PredictionEngine', () => {
 
   it('names the faults of an invalid design', async () => {
     const design = { ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.panel, outline: { kind: 'rectangle', widthMm: 1, heightMm: 1 } } } as const;
-    await expect(engineWith(createInlineRunner()).predict({ teamId: 'a', question: { design, edition: null } })).rejects.toMatchObject({
+    await expect(engineWith(createInlineRunner()).predict({ teamId: 'a', question: { design } })).rejects.toMatchObject({
       faults: [{ pointer: '#/panel', detail: 'the outline is smaller than one period, so the panel has no cells' }],
     });
   });
@@ -94,7 +130,7 @@ describe('PredictionEngine', () => {
     const runner = new HeldRunner();
     const outline = { kind: 'rectangle', widthMm: 16_000, heightMm: 16_000 } as const;
     const design = { ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.panel, outline } };
-    await expect(engineWith(runner).predict({ teamId: 'a', question: { design, edition: null } })).rejects.toMatchObject({
+    await expect(engineWith(runner).predict({ teamId: 'a', question: { design } })).rejects.toMatchObject({
       faults: [{ pointer: '#/panel', detail: 'the panel would have 10240000 cells; the limit is 1000000' }],
     });
     expect(runner.tasks).toEqual([]);
@@ -106,7 +142,7 @@ describe('PredictionEngine', () => {
     const lattice = { kind: 'rectangular', periodXMm: 100, periodYMm: 0.03 } as const;
     const keepOuts = Array.from({ length: 200 }, () => ({ kind: 'polygon', pointsMm, centreMm: [0, 0] as [number, number] }) as const);
     const design = { ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.panel, outline: { kind: 'polygon', pointsMm } as const, lattice, keepOuts } };
-    await expect(engineWith(runner).predict({ teamId: 'a', question: { design, edition: null } })).rejects.toMatchObject({ kind: 'too-costly' });
+    await expect(engineWith(runner).predict({ teamId: 'a', question: { design } })).rejects.toMatchObject({ kind: 'too-costly' });
     expect(runner.tasks).toEqual([]);
   });
 

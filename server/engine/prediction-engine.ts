@@ -2,10 +2,10 @@ import { InvalidDesign } from '../../shared/antenna/invalid-design';
 import type { Prediction } from '../../shared/antenna/predict-design';
 import { MAX_CELL_COUNT } from '../../shared/model/design-document';
 import { EngineRefusal, abandoned, superseded } from './engine-refusals';
-import { FairQueue, type FairQueueLimits } from './fair-queue';
+import { FairQueue, type FairQueueLimits, type WaitOptions } from './fair-queue';
 import { MAX_PREDICTION_SECONDS, predictionCost } from './prediction-cost';
 import type { PredictionRunner } from './prediction-runner';
-import type { PredictionOutcome, PredictionQuestion } from './prediction-task';
+import type { EngineEdition, PredictionOutcome, PredictionQuestion } from './prediction-task';
 
 /** Twice what the cost check lets pass, for a machine at work on other things. */
 const TIME_LIMIT_MS = 2 * MAX_PREDICTION_SECONDS * 1000;
@@ -17,7 +17,9 @@ const BOUND_OVER_LIMIT = 4;
 
 export interface EngineRequest {
   readonly teamId: string;
-  readonly question: PredictionQuestion;
+  readonly question: Omit<PredictionQuestion, 'edition'>;
+  /** Fetches the edition that the cells come from; asked for once the request has its place among the previews. */
+  readonly edition?: () => Promise<EngineEdition>;
   /** Who previews what: a newer request of the same name takes the place of the older one. */
   readonly preview?: string;
   /** Waits behind however many others, instead of being told to come back: for what the house itself needs. */
@@ -46,7 +48,7 @@ export class PredictionEngine {
   }
 
   /** @throws InvalidDesign where fields do not go together, EngineRefusal where there will be no answer */
-  async predict({ teamId, question, preview, patient, signal }: EngineRequest): Promise<Prediction> {
+  async predict({ teamId, question, edition, preview, patient, signal }: EngineRequest): Promise<Prediction> {
     refuseTooCostly(question);
     const withdrawal = new AbortController();
     const withdraw = (): void => withdrawal.abort(abandoned());
@@ -54,8 +56,8 @@ export class PredictionEngine {
     if (signal?.aborted === true) withdraw();
     if (preview !== undefined) this.replace(preview, withdrawal);
     try {
-      const options = { priority: preview === undefined ? 0 : PREVIEW_PRIORITY, patient, signal: withdrawal.signal };
-      return predictionOf(await this.queue.run(teamId, () => this.start(question, withdrawal.signal), options));
+      const complete = { ...question, edition: edition === undefined ? null : await edition() };
+      return await this.answerInLine(teamId, complete, { withdrawn: withdrawal.signal, patient, priority: preview === undefined ? 0 : PREVIEW_PRIORITY });
     } finally {
       signal?.removeEventListener('abort', withdraw);
       if (preview !== undefined && this.previews.get(preview) === withdrawal) this.previews.delete(preview);
@@ -71,8 +73,28 @@ export class PredictionEngine {
     this.previews.set(preview, withdrawal);
   }
 
+  /**
+   * A withdrawn request leaves the line at once. One that runs is asked to stop, but answers all the same if it is past
+   * its last step: whoever steers faster than predictions come would otherwise never see one.
+   */
+  private async answerInLine(teamId: string, question: PredictionQuestion, options: WaitOptions & { readonly withdrawn: AbortSignal }): Promise<Prediction> {
+    const { withdrawn, ...wait } = options;
+    const line = new AbortController();
+    const leave = (): void => line.abort(withdrawn.reason);
+    withdrawn.addEventListener('abort', leave, { once: true });
+    if (withdrawn.aborted) leave();
+    const begin = (): Promise<PredictionOutcome> => {
+      withdrawn.throwIfAborted();
+      withdrawn.removeEventListener('abort', leave);
+      return this.start(question, withdrawn);
+    };
+    const outcome = await this.queue.run(teamId, begin, { ...wait, signal: line.signal });
+    if (outcome.kind === 'stopped') throw withdrawn.reason;
+    if (outcome.kind === 'invalid') throw new InvalidDesign(outcome.faults);
+    return outcome.prediction;
+  }
+
   private async start(question: PredictionQuestion, withdrawn: AbortSignal): Promise<PredictionOutcome> {
-    withdrawn.throwIfAborted();
     const stop = new Int32Array(new SharedArrayBuffer(Int32Array.BYTES_PER_ELEMENT));
     const askToStop = (): void => void Atomics.store(stop, 0, 1);
     withdrawn.addEventListener('abort', askToStop, { once: true });
@@ -88,13 +110,7 @@ export class PredictionEngine {
   }
 }
 
-function predictionOf(outcome: PredictionOutcome): Prediction {
-  if (outcome.kind === 'invalid') throw new InvalidDesign(outcome.faults);
-  if (outcome.kind === 'stopped') throw abandoned();
-  return outcome.prediction;
-}
-
-function refuseTooCostly(question: PredictionQuestion): void {
+function refuseTooCostly(question: EngineRequest['question']): void {
   const { cellBound, directionCount, seconds } = predictionCost(question);
   if (cellBound > BOUND_OVER_LIMIT * MAX_CELL_COUNT) {
     throw new InvalidDesign([{ pointer: '#/panel', detail: `the panel would have ${cellBound} cells; the limit is ${MAX_CELL_COUNT}` }]);

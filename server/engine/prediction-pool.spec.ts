@@ -14,7 +14,7 @@ describe('the pool of threads', () => {
   afterAll(() => pool.close());
 
   it('gives bit for bit what the caller’s own thread gives, arrays included', async () => {
-    const question = { design: STARTING_DESIGN, edition: null, cells: true, uvSize: 32, cuts: [{ plane: 'along' as const, angleDeg: [-30, 30, 0.5] as [number, number, number] }] };
+    const question = { design: STARTING_DESIGN, cells: true, uvSize: 32, cuts: [{ plane: 'along' as const, angleDeg: [-30, 30, 0.5] as [number, number, number] }] };
     const [threaded, own] = await Promise.all([pool.predict({ teamId: 'a', question }), inline.predict({ teamId: 'a', question })]);
     expect(threaded).toEqual(own);
     expect(threaded.cells?.xMm.buffer).toBeInstanceOf(ArrayBuffer);
@@ -23,14 +23,14 @@ describe('the pool of threads', () => {
   it('uses an edition on shared memory, and the same again', async () => {
     const edition = { key: 'example', edition: shareEdition(exampleEdition()) };
     const design = { ...STARTING_DESIGN, cells: { kind: 'edition', editionId: '00000000-0000-4000-8000-000000000001', rule: 'nearest-phase', excludedCells: [] } } as const;
-    const question = { design: { ...design, cells: { ...design.cells, excludedCells: [] } }, edition };
-    const own = await inline.predict({ teamId: 'a', question });
-    for (let i = 0; i < 2; i++) expect(await pool.predict({ teamId: 'a', question })).toEqual(own);
+    const request = { teamId: 'a', question: { design: { ...design, cells: { ...design.cells, excludedCells: [] } } }, edition: async () => edition };
+    const own = await inline.predict(request);
+    for (let i = 0; i < 2; i++) expect(await pool.predict(request)).toEqual(own);
   }, 30_000);
 
   it('names faults with their class lost between threads', async () => {
     const design = { ...STARTING_DESIGN, illumination: { ...STARTING_DESIGN.illumination, positionMm: [0, 0, 0] as [number, number, number] } };
-    const question = { design: design as typeof STARTING_DESIGN, edition: null };
+    const question = { design: design as typeof STARTING_DESIGN };
     await expect(pool.predict({ teamId: 'a', question })).rejects.toMatchObject({ name: 'InvalidDesign', faults: expect.arrayContaining([expect.objectContaining({ pointer: '#/illumination/positionMm/2' })]) });
   });
 });

@@ -79,8 +79,9 @@ describe('PredictionService', () => {
     const older = service.predict('team', { design: STARTING_DESIGN, preview: 'main' });
     await settle();
     const newer = service.predict('team', { design: STARTING_DESIGN, preview: 'main' });
-    await expect(older).rejects.toBeInstanceOf(Superseded);
+    await settle();
     runner.release();
+    await expect(older).rejects.toBeInstanceOf(Superseded);
     await settle();
     runner.release();
     expect((await newer).figures.cellCount).toBe(1600);

@@ -1,5 +1,4 @@
 import type { Prediction } from '../../shared/antenna/predict-design';
-import type { DesignDocument } from '../../shared/model/design-document';
 import type { PredictionEngine } from '../engine/prediction-engine';
 import type { EngineEdition, PredictionQuestion } from '../engine/prediction-task';
 import { InvalidInput, NotFound } from '../http/problems';
@@ -29,25 +28,21 @@ export class PredictionService {
    * Superseded, TooMany, Unavailable when there will be no answer
    */
   async predict(teamId: string, { preview, patient, signal, ...question }: PredictionWish): Promise<Prediction> {
-    const edition = await this.editionOf(teamId, question.design);
+    const { cells } = question.design;
+    const edition = cells.kind === 'edition' ? () => this.editionOf(teamId, cells.editionId) : undefined;
     try {
-      return await this.engine.predict({ teamId, question: { ...question, edition }, preview, patient, signal });
+      return await this.engine.predict({ teamId, question, edition, preview, patient, signal });
     } catch (error) {
       throw problemOfEngine(error);
     }
   }
 
-  private async editionOf(teamId: string, { cells }: DesignDocument): Promise<EngineEdition | null> {
-    if (cells.kind !== 'edition') return null;
+  private async editionOf(teamId: string, editionId: string): Promise<EngineEdition> {
     try {
-      return await this.shelf.take(teamId, cells.editionId);
+      return await this.shelf.take(teamId, editionId);
     } catch (error) {
-      if (error instanceof NotFound) throw unknownEdition('#/design');
+      if (error instanceof NotFound) throw new InvalidInput([{ pointer: '#/design/cells/editionId', detail: 'there is no such published edition' }]);
       throw error;
     }
   }
 }
-
-/** @param at pointer of the design document */
-export const unknownEdition = (at: string): InvalidInput =>
-  new InvalidInput([{ pointer: `${at}/cells/editionId`, detail: 'there is no such published edition' }]);
