@@ -5,7 +5,7 @@ import { figureText } from '../strip-figures';
 import { WORKSPACE_STATE } from '../workspace-state';
 import type { EditionInUse } from '../workspace-state';
 
-const ROWS_AT_ONCE = 12;
+const ROWS_AT_ONCE = 8;
 
 /** The cells of the edition in use: how often each stands on the panel, and which are not to be used. */
 @Component({
