@@ -1,6 +1,7 @@
 import { ensureDemoAccounts } from './accounts/demo-account-service';
 import type { House } from './house';
 import { seedLibrary } from './library/library-seed-service';
+import { seedProjects } from './projects/project-seed-service';
 
 export interface SeedStep {
   readonly name: string;
@@ -12,4 +13,5 @@ export interface SeedStep {
 export const seedSteps: readonly SeedStep[] = [
   { name: 'demo accounts', run: (house) => ensureDemoAccounts(house, house.ground.config.demoPassword ?? '') },
   { name: 'cell library', run: seedLibrary },
+  { name: 'demo project', run: seedProjects },
 ];

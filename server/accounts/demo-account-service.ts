@@ -45,12 +45,12 @@ async function createAccount({ ground, people, memberships, audit }: Parts, acco
 export async function demoActor(
   parts: Pick<Parts, 'ground' | 'people' | 'memberships'>,
   role: DemoAccount['role'],
-): Promise<{ teamId: string; person: { id: string } }> {
+): Promise<{ teamId: string; person: { id: string; name: string } }> {
   const email = demoAccounts.find((account) => account.role === role)?.email ?? '';
   return parts.ground.transactions.run(async (transaction) => {
     const person = await parts.people.findByEmail(transaction, email);
     if (person === null) throw new Error(`the demo account ${email} is missing`);
     const team = await parts.memberships.ensureTeam(transaction, DEMO_TEAM);
-    return { teamId: team.id, person: { id: person.id } };
+    return { teamId: team.id, person: { id: person.id, name: person.name } };
   });
 }

@@ -11,8 +11,4 @@ export class ProjectRepository extends TeamScopedRepository<Project> {
   async list(transaction: Transaction, teamId: string): Promise<Project[]> {
     return this.rows(transaction, teamId, 'project').orderBy('project.createdAt').addOrderBy('project.id').getMany();
   }
-
-  async byName(transaction: Transaction, teamId: string, name: string): Promise<Project | null> {
-    return this.store(transaction).findOneBy(this.ofTeam(teamId, { name }));
-  }
 }

@@ -74,11 +74,6 @@ export class ProjectService {
     return this.replyOf(actor.teamId, changed);
   }
 
-  /** The first project of this name, for demo data; null when there is none. */
-  async findByName(teamId: string, name: string): Promise<{ id: string } | null> {
-    return this.parts.ground.transactions.read((transaction) => this.projects.byName(transaction, teamId, name));
-  }
-
   private async replyOf(teamId: string, { project, panels, latest }: ProjectParts): Promise<ProjectReply> {
     const { id, name, version, invented, createdAt } = project;
     const overviews = await Promise.all(panels.map((panel) => this.overviewOf(teamId, panel, latest.get(panel.id) ?? null)));
