@@ -1,5 +1,8 @@
 import type { Readable } from 'node:stream';
 
+/** More numbers than this are not written as JSON: 20 bytes each, and seconds to write and to read. */
+export const MAX_JSON_NUMBERS = 2_500_000;
+
 export interface CookieChange {
   readonly name: string;
   /** Null removes the cookie. */

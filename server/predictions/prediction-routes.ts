@@ -1,10 +1,10 @@
 import { predictionReply, predictionRequest, type CutRequest, type PredictionRequest } from '../../shared/contracts/predictions';
 import { InvalidInput, NotAcceptable } from '../http/problems';
-import { BytesReply } from '../http/reply';
+import { BytesReply, MAX_JSON_NUMBERS } from '../http/reply';
 import { defineRoute, type Route } from '../http/route';
 import { predictionBlockOf, predictionReplyOf } from './prediction-reply';
 import type { PredictionService, PredictionWish } from './prediction-service';
-import { MAX_CUT_SAMPLES, MAX_JSON_NUMBERS, arrayNumberBound, cutSamples } from './prediction-size';
+import { MAX_CUT_SAMPLES, arrayNumberBound, cutSamples } from './prediction-size';
 
 const BLOCK = 'application/octet-stream';
 const DEFAULT_UV_SIZE = 256;

@@ -4,9 +4,6 @@ import { MAX_CELL_COUNT } from '../../shared/model/design-document';
 import { cutSampleCount } from '../engine/prediction-cost';
 import type { PredictionWish } from './prediction-service';
 
-/** More numbers than this are not written as JSON: 20 bytes each, and seconds to write and to read. */
-export const MAX_JSON_NUMBERS = 2_500_000;
-
 /** All cuts of a request together; an exact cut costs memory for five numbers per sample. */
 export const MAX_CUT_SAMPLES = 200_000;
 
