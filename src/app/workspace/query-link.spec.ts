@@ -31,6 +31,16 @@ describe('queryLink', () => {
     await rest();
     expect(TestBed.inject(Router).url).toBe('/view?other=1&floor=60');
   });
+  it('keeps what changes while the address is being written', async () => {
+    const view = await harness.navigateByUrl('/view', LinkedView);
+    view.floor.set(30);
+    harness.detectChanges();
+    await new Promise((done) => setTimeout(done, 252));
+    view.floor.set(35);
+    harness.detectChanges();
+    await rest();
+    expect([view.floor(), TestBed.inject(Router).url]).toEqual([35, '/view?floor=35']);
+  });
   it('follows back and forward, and leaves the address when it is as at first', async () => {
     const view = await harness.navigateByUrl('/view?floor=40', LinkedView);
     await TestBed.inject(Router).navigateByUrl('/view?floor=20');

@@ -15,17 +15,22 @@ export function queryLink<T>(read: (query: ParamMap) => T, write: (state: T) => 
   const route = inject(ActivatedRoute);
   const router = inject(Router);
   const state = signal(read(route.snapshot.queryParamMap));
+  /** What the address is known to say. An echo of our own writing must not undo what changed since. */
+  let inAddress = write(untracked(state));
   let timer: ReturnType<typeof setTimeout> | undefined;
 
   route.queryParamMap.pipe(takeUntilDestroyed()).subscribe((query) => {
     const wanted = read(query);
-    if (!sameParams(write(wanted), write(untracked(state)))) state.set(wanted);
+    if (sameParams(write(wanted), inAddress)) return;
+    inAddress = write(wanted);
+    state.set(wanted);
   });
   effect(() => {
     const queryParams = write(state());
     clearTimeout(timer);
     timer = setTimeout(() => {
-      if (sameParams(queryParams, write(read(route.snapshot.queryParamMap)))) return;
+      if (sameParams(queryParams, inAddress)) return;
+      inAddress = queryParams;
       void router.navigate([], { relativeTo: route, queryParams, queryParamsHandling: 'merge', replaceUrl: true });
     }, REST_MS);
   });

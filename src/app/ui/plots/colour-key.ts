@@ -44,5 +44,5 @@ export class ColourKey {
   private readonly width = hostWidth();
   protected readonly bar = computed(() => Math.max(80, Math.min(this.maxWidth(), this.width() - 2 * SIDE)));
   protected readonly stops = computed(() => keyStops(this.scale(), this.themes.theme().name));
-  protected readonly ticks = computed(() => keyTicks(this.scale(), Math.max(2, Math.floor(this.bar() / 42))));
+  protected readonly ticks = computed(() => keyTicks(this.scale(), Math.max(2, Math.floor(this.bar() / 34))));
 }

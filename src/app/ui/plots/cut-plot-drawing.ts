@@ -67,7 +67,7 @@ function forbiddenTraces(edge: ForbiddenEdge, { topDb }: CutWindow, theme: PlotT
     y: [above, ...levelDb, above],
     fill: 'toself',
     fillcolor: 'rgba(0,0,0,0)',
-    fillpattern: { shape: '/', fgcolor: theme.hatch, bgcolor: 'rgba(0,0,0,0)', size: 8, solidity: 0.16, fgopacity: 1 },
+    fillpattern: { shape: '/', fgcolor: theme.hatch, bgcolor: 'rgba(0,0,0,0)', size: 6, solidity: 0.14, fgopacity: 1 },
     hoverinfo: 'skip',
   };
   // The end next to the beam closes upwards; the outer end is the end of the cut.
@@ -110,13 +110,12 @@ function markTraces(figure: CutFigure, { window, width, height }: CutDrawingSize
   ];
 }
 
-/** Balloons keep off the high part of the trace, which is what the eye looks for. */
+/** Balloons keep off the trace, which is what the eye looks for. */
 function traceObstacles({ main }: CutFigure, { x, y }: CutAxes): { readonly x: number; readonly y: number; readonly r: number }[] {
-  const step = Math.max(1, Math.floor(main.angleDeg.length / 300));
-  const high = (y.from + y.to) / 2;
+  const step = Math.max(1, Math.floor(main.angleDeg.length / 500));
   const found: { x: number; y: number; r: number }[] = [];
   for (let i = 0; i < main.angleDeg.length; i += step) {
-    if (main.levelDb[i] > high) found.push({ x: axisPx(x, main.angleDeg[i]), y: axisPx(y, main.levelDb[i]), r: 2 });
+    if (main.levelDb[i] > y.from) found.push({ x: axisPx(x, main.angleDeg[i]), y: axisPx(y, main.levelDb[i]), r: 2 });
   }
   return found;
 }

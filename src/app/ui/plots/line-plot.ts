@@ -43,7 +43,7 @@ export class LinePlot implements ExportablePlot {
     return { from: y.from, to: y.to, startPx: this.height() - MARGIN.bottom, endPx: MARGIN.top };
   });
   protected readonly labelled = computed(() => this.x().endPx < this.width() - MARGIN.right);
-  protected readonly xTicks = computed(() => axisTicks(this.x(), this.figure().x.step ?? niceStep(this.figure().x.to - this.figure().x.from, Math.max(2, (this.x().endPx - this.x().startPx) / 56))));
+  protected readonly xTicks = computed(() => axisTicks(this.x(), this.figure().x.step ?? niceStep(this.figure().x.to - this.figure().x.from, Math.max(2, (this.x().endPx - this.x().startPx) / 48))));
   protected readonly yTicks = computed(() => axisTicks(this.y(), this.figure().y.step ?? niceStep(Math.abs(this.figure().y.to - this.figure().y.from), Math.max(2, (this.height() - 42) / 22))));
   protected readonly paths = computed(() =>
     this.figure().lines.map((line) => {

@@ -27,7 +27,7 @@ export interface MapMark {
   readonly label: string;
 }
 
-const NARROW_PX = 480;
+const NARROW_PX = 376;
 const ZOOM_STEP = 1.5;
 const PAN_PX = 40;
 /** Pixels of an exported map per pixel on the screen. */

@@ -29,7 +29,7 @@ const SCALE_PX = 74;
       <text class="copper" [class.end]="d.beam.x < 0" [attr.x]="d.beam.x + (d.beam.x < 0 ? -6 : 6)" [attr.y]="d.beam.y + 4">beam</text>
       @if (field()) {
         <path class="field" [attr.d]="fieldPath()" />
-        <text class="patina" [attr.x]="d.fieldFrom.x - 10" [attr.y]="d.fieldFrom.y + 3">E</text>
+        <text class="patina" [attr.x]="d.fieldFrom.x - 4" [attr.y]="d.fieldFrom.y - 5">E</text>
       }
     </svg>
     <p class="label">u = sin θ cos φ, v = sin θ sin φ;<br />time exp(+jωt)</p>

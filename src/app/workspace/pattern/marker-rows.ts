@@ -26,7 +26,7 @@ export interface MarkerSource {
   readonly ownDeg: readonly number[];
 }
 
-/** Peak, half power, first nulls, sidelobes, least margin to the mask, then one's own; numbered in this order. */
+/** Peak, half power, sidelobes, least margin to the mask, first nulls, then one's own; numbered in this order. */
 export function markersOf({ cut, found, design, ownDeg }: MarkerSource): readonly Marker[] {
   const { mask, beams, minGainDbi } = design.requirement;
   const toMask = ({ angleDeg, levelDb }: CutPlace): number | null => {
@@ -37,9 +37,9 @@ export function markersOf({ cut, found, design, ownDeg }: MarkerSource): readonl
   const listed: readonly Omit<Marker, 'name'>[] = [
     { ...marker('peak', found.peak), marginDb: minGainDbi === undefined ? null : found.peak.levelDb - minGainDbi },
     ...found.halfPower.flatMap((place) => (place ? [marker('half power', place)] : [])),
-    ...found.firstNulls.flatMap((place) => (place ? [marker('first null', place)] : [])),
     ...found.sidelobes.flatMap((place) => (place ? [{ ...marker('sidelobe', place), marginDb: toMask(place) }] : [])),
     ...(least ? [{ ...marker('least margin', { angleDeg: cut.angleDeg[least.at], levelDb: cut.gainDbi[least.at] }), marginDb: least.marginDb }] : []),
+    ...found.firstNulls.flatMap((place) => (place ? [marker('first null', place)] : [])),
     ...ownDeg.flatMap((angleDeg) => {
       const level = levelAt({ label: '', angleDeg: cut.angleDeg, levelDb: cut.gainDbi }, angleDeg);
       const place = level && { angleDeg, levelDb: level.levelDb };

@@ -50,7 +50,8 @@ import type { MarkerRow } from './marker-rows';
       font-family: var(--font-figure);
     }
     button {
-      min-height: 20px;
+      min-height: 16px;
+      line-height: 16px;
       padding: 0;
       border: 0;
       background: none;

@@ -11,9 +11,8 @@ export function patternSubtitle({ requirement, prediction }: DesignDocument): st
 export function patternNotes(prediction: LivePrediction | null): readonly string[] {
   const mask = prediction?.head.figures.maskMargin;
   const notes = [
-    'A prediction is array theory, not a measurement.',
+    'A prediction is array theory, not a measurement. Blockage by the horn is not included.',
     'Cross-polar: not evaluated, the scalar model has no cross-polar part.',
-    'Blockage by the horn not included.',
     'A range test is a transmission: confirm authorisation for frequency, power, place and dates.',
   ];
   if (mask && 'kind' in mask && mask.kind === 'mask-not-built') return [...notes, `The mask is not drawn: ${mask.reason}.`];

@@ -55,6 +55,12 @@ export class ChangeMap {
     const [compared, design, form] = [this.compared(), this.design(), this.form()];
     return compared && design && form !== 'hemisphere' ? { places: changePlaces(compared, design), layer: changeLayer(compared, form as CellChange) } : null;
   });
+  protected readonly keyLabel = computed(() => {
+    const layer = this.cells()?.layer;
+    if (!layer) return '';
+    const clipped = Array.from(layer.values).some((value) => Math.abs(value) > layer.scale.to);
+    return `${layer.title}, ${layer.unit}; unchanged cells are bare${clipped ? `; beyond ±${numberText(layer.scale.to, 2)} clipped` : ''}`;
+  });
   protected readonly hemisphere = computed(() => hemisphereDifference(this.comparison()));
   protected readonly describe = computed(() => {
     const cells = this.cells();

@@ -41,7 +41,7 @@ export class ComparedCuts {
   private readonly wanted = signal(0);
   protected readonly window = signal<CutWindow | null>(null);
   protected readonly at = computed(() => Math.min(this.wanted(), this.comparison().cuts.length - 1));
-  protected readonly tabs = computed(() => this.comparison().cuts.map((cut, i) => ({ id: String(i), label: cutName(cut) })));
+  protected readonly tabs = computed(() => this.comparison().cuts.map((cut, i) => ({ id: String(i), label: capital(cutName(cut)) })));
   private readonly cut = computed(() => (this.at() < 0 ? null : this.comparison().cuts[this.at()]));
   protected readonly overlaid = computed(() => {
     const cut = this.cut();
@@ -58,4 +58,8 @@ export class ComparedCuts {
     this.wanted.set(Number(at));
     this.window.set(null);
   }
+}
+
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }

@@ -8,7 +8,7 @@ import type { MapLayer } from '../../ui/plots/paint-panel-map';
 import { niceStep } from '../../ui/plots/axis-ticks';
 import { numberText, signedNumberText } from '../../ui/plots/plot-text';
 import { maskLevelDbi } from '../pattern/mask-level';
-import { sideName } from './comparison-rows';
+import { sideMark, sideName } from './comparison-rows';
 import type { ComparedCells } from './comparison-rows';
 
 /** Which change of the cells the map shows. */
@@ -17,13 +17,21 @@ export type CellChange = 'parameter' | 'phase' | 'error';
 /** Differences beyond this are clipped: they are moved nulls. */
 export const CLIPPED_DB = 10;
 
-/** A scale centred on zero that holds the largest magnitude. */
-function centredScale(values: ArrayLike<number>, most: number): ColourScale {
-  let largest = 0;
-  for (let i = 0; i < values.length; i++) largest = Math.max(largest, Math.abs(values[i]) || 0);
-  const step = niceStep(Math.max(largest, 1e-6), 3);
-  const limit = Math.min(most, Math.max(step, Math.ceil(largest / step) * step));
+/** A scale centred on zero that reaches a magnitude rounded up. */
+function centredScale(reach: number, most: number): ColourScale {
+  const step = niceStep(Math.max(reach, 1e-6), 3);
+  const limit = Math.min(most, Math.max(step, Math.ceil(reach / step - 1e-9) * step));
   return { map: 'diverging', from: -limit, to: limit };
+}
+
+/**
+ * Three times the median magnitude, or the largest when that is nearer. A cell that goes once round the curve changes by its
+ * whole length and would leave no colour to the others.
+ */
+function robustReach(values: ArrayLike<number>): number {
+  const magnitudes = Float64Array.from(values, Math.abs).filter((value) => value > 0).sort();
+  if (magnitudes.length === 0) return 0;
+  return Math.min(magnitudes[magnitudes.length - 1], 3 * magnitudes[magnitudes.length >> 1]);
 }
 
 const CHANGES: Readonly<Record<CellChange, { readonly title: string; readonly unit: string; readonly digits: number; readonly most: number; of(arrays: ComparedCells['arrays']): readonly number[] }>> = {
@@ -39,7 +47,7 @@ export function changeLayer(cells: ComparedCells, change: CellChange): MapLayer 
   const all = of(cells.arrays);
   const values = Float64Array.from(all, (value, i) => (changed[i] === 0 ? Number.NaN : value));
   const named = change === 'parameter' && cells.parameter ? `Change of ${cells.parameter.label}` : title;
-  return { title: named, unit, digits, values, scale: centredScale(values, most) };
+  return { title: named, unit, digits, values, scale: centredScale(robustReach(values), most) };
 }
 
 export function changePlaces(cells: ComparedCells, { panel: { lattice } }: DesignDocument): MapPlaces {
@@ -100,7 +108,7 @@ export function cutDifferenceFigure(comparison: Comparison, cut: CutDifference):
 }
 
 export function shiftText({ before }: Comparison, cut: CutDifference): string {
-  return Math.abs(cut.shiftU) < 5e-5 ? 'beams coincide, no shift' : `${sideName(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
+  return Math.abs(cut.shiftU) < 5e-5 ? 'beams coincide, no shift' : `${sideMark(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
 }
 
 /** How the difference was made, and what it leaves out, as drawing notes. */
@@ -115,5 +123,5 @@ export function comparisonNotes(comparison: Comparison): readonly string[] {
 }
 
 export function hemisphereDifference({ uv }: Comparison): { readonly levels: { readonly size: number; readonly levelDb: readonly number[] }; readonly scale: ColourScale } {
-  return { levels: { size: uv.size, levelDb: uv.differenceDb }, scale: centredScale(uv.differenceDb, CLIPPED_DB) };
+  return { levels: { size: uv.size, levelDb: uv.differenceDb }, scale: centredScale(robustReach(uv.differenceDb), CLIPPED_DB) };
 }

@@ -1,7 +1,10 @@
 import type { Comparison, FigureDifference, ParameterDifference, Side } from '../../../../shared/contracts/comparisons';
 import type { Figure, VerdictWord } from '../../../../shared/model/figures';
 import { fullNumberText, numberText, signedNumberText } from '../../ui/plots/plot-text';
-import { HASH_LETTERS, requirementText, requirementWord, utcText } from './revision-rows';
+import { requirementText, requirementWord, utcText } from './revision-rows';
+
+/** In a head that shares the line with four more facts. */
+const SHORT_HASH_LETTERS = 8;
 
 /** The head of one side of a comparison. */
 export interface SideHead {
@@ -30,7 +33,7 @@ export function sideHead(side: Side, other: Side): SideHead {
     mark: sideMark(side),
     lineage: [related, otherPanel].filter((text) => text !== '').join('; '),
     facts: [
-      plain('Hash', side.hash.slice(0, HASH_LETTERS), true),
+      plain('Hash', side.hash.slice(0, SHORT_HASH_LETTERS), true),
       ...(revision ? [plain('Frozen, UTC', utcText(revision.createdAt), true), plain('Drawn by', revision.author.name)] : [plain('State', 'changes with every edit')]),
       plain('Cells', side.editionName ?? 'no library edition'),
       { label: 'Requirement', value: requirementText(side.requirement), figure: false, word: requirementWord(side.requirement) },
@@ -68,7 +71,7 @@ export function cellRows({ cells }: Comparison): readonly CellRow[] | { readonly
   const share = cells.total > 0 ? (100 * cells.changed) / cells.total : 0;
   const { parameter } = cells;
   return [
-    { label: 'Changed', value: `${numberText(cells.changed, 0)} of ${numberText(cells.total, 0)}, ${numberText(share, 1)} %` },
+    { label: 'Changed', value: `${numberText(cells.changed, 0)} of ${numberText(cells.total, 0)}, ${numberText(share, 1)}\u00a0%` },
     ...(parameter
       ? [
           { label: `Larger ${parameter.label}`, value: numberText(parameter.larger, 0) },
