@@ -4,7 +4,7 @@ import { RedirectCommand, Router } from '@angular/router';
 import type { Role } from '../../../shared/contracts/common';
 import { SessionStore } from './session-store';
 
-/** Shows why instead of the sheet when the person has none of the roles; the address stays, so that it can be passed on. */
+/** Shows why instead of the sheet when the person has none of the roles; the address bar is left alone. */
 export const roleOnly =
   (...roles: readonly Role[]): CanActivateFn =>
   () => {

@@ -23,6 +23,7 @@ export class SessionStore {
   /** Every answer moves the idle end on, as the server counts it. */
   private readonly idleEnd = signal(0);
   private idleLifeMs = 0;
+  private readonly waiting: (() => void)[] = [];
   readonly current = this.held.asReadonly();
   /** True when a session ended while somebody worked: they sign in again over their work. */
   readonly needsSignIn = this.ended.asReadonly();
@@ -53,6 +54,7 @@ export class SessionStore {
     this.idleLifeMs = Date.parse(session.idleEndsAt) - Date.now();
     this.idleEnd.set(Date.parse(session.idleEndsAt));
     this.ended.set(false);
+    this.waiting.splice(0).forEach((goOn) => goOn());
   }
 
   async signIn(email: string, password: string): Promise<void> {
@@ -78,6 +80,11 @@ export class SessionStore {
   /** Called when the server no longer knows the session. */
   lose(): void {
     if (this.held() !== null) this.ended.set(true);
+  }
+
+  /** Resolves when somebody is signed in: at once, or after they have signed in again. */
+  signedIn(): Promise<void> {
+    return this.ended() ? new Promise((goOn) => this.waiting.push(goOn)) : Promise.resolve();
   }
 
   /** An answer came: the server counts the idle time from now. */

@@ -23,6 +23,7 @@ const WARN_MINUTES = 2;
 export class SessionWatch {
   private readonly store = inject(SessionStore);
   private readonly dialog = viewChild.required<ElementRef<HTMLDialogElement>>('dialog');
+  private asking = false;
   private readonly now = signal(Date.now());
   protected readonly needsSignIn = this.store.needsSignIn;
   protected readonly email = computed(() => this.store.current()?.person.email ?? null);
@@ -49,10 +50,14 @@ export class SessionWatch {
 
   /** A renewal counts as a sign of life; when the session is over it says so. Without an answer the next look tries again. */
   protected async stay(): Promise<void> {
+    if (this.asking) return;
+    this.asking = true;
     try {
       if ((await this.store.refresh()) === null) this.store.lose();
     } catch (error) {
       if (failedCall(error).kind !== 'unreachable') throw error;
+    } finally {
+      this.asking = false;
     }
   }
 }
