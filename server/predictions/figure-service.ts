@@ -19,6 +19,14 @@ export interface FigureSet {
   readonly warnings: Warning[];
 }
 
+/** What a list says of a design. */
+export interface Headline {
+  /** Null when the design cannot be predicted, or is still being predicted. */
+  readonly summary: FiguresSummary | null;
+  readonly summaryPending?: true;
+}
+
+const LIST_PATIENCE_MS = 3000;
 const KEPT_DAYS = 90;
 const DAY_MS = 24 * 3600 * 1000;
 
@@ -30,7 +38,8 @@ export class FigureService {
 
   constructor(
     private readonly ground: Pick<Ground, 'transactions' | 'now'>,
-    private readonly predictions: PredictionService,
+    private readonly predictions: Pick<PredictionService, 'predict'>,
+    private readonly listPatienceMs = LIST_PATIENCE_MS,
   ) {}
 
   /** @throws InvalidInput when the design cannot be predicted */
@@ -45,8 +54,28 @@ export class FigureService {
     }
   }
 
+  /**
+   * Headline figures for a list, in the order of the designs. The list waits only so long for what nobody has computed
+   * yet: that goes on, is said to be pending, and the next list has it.
+   */
+  async headlinesOf(teamId: string, designs: readonly HashedDesign[]): Promise<Headline[]> {
+    let timer: NodeJS.Timeout | undefined;
+    const late = new Promise<Headline>((resolve) => {
+      timer = setTimeout(() => resolve({ summary: null, summaryPending: true }), this.listPatienceMs);
+    });
+    try {
+      return await Promise.all(designs.map((design) => Promise.race([this.headlineOf(teamId, design), late])));
+    } finally {
+      clearTimeout(timer);
+    }
+  }
+
+  private async headlineOf(teamId: string, design: HashedDesign): Promise<Headline> {
+    return { summary: await this.summaryOf(teamId, design) };
+  }
+
   /** Null when the design cannot be predicted. */
-  async summaryOf(teamId: string, hashed: HashedDesign): Promise<FiguresSummary | null> {
+  private async summaryOf(teamId: string, hashed: HashedDesign): Promise<FiguresSummary | null> {
     try {
       return summary(await this.figuresOf(teamId, hashed));
     } catch (error) {

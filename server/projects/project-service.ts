@@ -3,7 +3,7 @@ import type { PanelOverview, Project as ProjectReply, RevisionHeader } from '../
 import type { AuditService } from '../audit/audit-service';
 import type { Ground } from '../database/ground';
 import { refuseStale, versionTag } from '../http/etag';
-import type { FigureService } from '../predictions/figure-service';
+import type { FigureService, Headline } from '../predictions/figure-service';
 import type { RevisionService } from '../revisions/revision-service';
 import type { Actor, DraftService, PanelState } from './draft-service';
 import type { Project } from './project-entity';
@@ -76,22 +76,23 @@ export class ProjectService {
 
   private async replyOf(teamId: string, { project, panels, latest }: ProjectParts): Promise<ProjectReply> {
     const { id, name, version, invented, createdAt } = project;
-    const overviews = await Promise.all(panels.map((panel) => this.overviewOf(teamId, panel, latest.get(panel.id) ?? null)));
+    const headlines = await this.parts.figures.headlinesOf(teamId, panels);
+    const overviews = panels.map((panel, i) => overviewOf(panel, latest.get(panel.id) ?? null, headlines[i]));
     return { id, name, version, invented, createdAt: createdAt.toISOString(), panels: overviews };
   }
+}
 
-  private async overviewOf(teamId: string, panel: PanelState, latestRevision: RevisionHeader | null): Promise<PanelOverview> {
-    return {
-      id: panel.id,
-      projectId: panel.project.id,
-      name: panel.name,
-      design: panel.design,
-      draftHash: panel.hash,
-      summary: await this.parts.figures.summaryOf(teamId, panel),
-      latestRevision,
-      draftIsRevision: latestRevision?.hash === panel.hash,
-      changedAt: panel.changedAt.toISOString(),
-      changedBy: panel.changedBy,
-    };
-  }
+function overviewOf(panel: PanelState, latestRevision: RevisionHeader | null, headline: Headline): PanelOverview {
+  return {
+    id: panel.id,
+    projectId: panel.project.id,
+    name: panel.name,
+    design: panel.design,
+    draftHash: panel.hash,
+    ...headline,
+    latestRevision,
+    draftIsRevision: latestRevision?.hash === panel.hash,
+    changedAt: panel.changedAt.toISOString(),
+    changedBy: panel.changedBy,
+  };
 }

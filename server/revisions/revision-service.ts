@@ -54,7 +54,8 @@ export class RevisionService {
       for (const row of rows) frozen.push({ row, content: await this.contentOf(transaction, row) });
       return frozen;
     }, 'REPEATABLE READ');
-    return Promise.all(found.map(async ({ row, content }) => ({ ...revisionHeaderOf(row), summary: await figures.summaryOf(teamId, content) })));
+    const headlines = await figures.headlinesOf(teamId, found.map(({ content }) => content));
+    return found.map(({ row }, i) => ({ ...revisionHeaderOf(row), ...headlines[i] }));
   }
 
   /** @throws NotFound */

@@ -48,6 +48,9 @@ export const figuresSummary = z.strictObject({
   overall: verdictWord,
 });
 
+/** Present while the figures are still being computed: the summary is null until then, and a later list has it. */
+const summaryPending = z.literal(true).optional();
+
 export const panelOverview = z.strictObject({
   id,
   projectId: id,
@@ -56,6 +59,7 @@ export const panelOverview = z.strictObject({
   draftHash: sha256,
   /** Null when the design cannot be predicted; the workspace says why. */
   summary: figuresSummary.nullable(),
+  summaryPending,
   latestRevision: revisionHeader.nullable(),
   /** True when the draft equals its latest revision. */
   draftIsRevision: z.boolean(),
@@ -88,7 +92,7 @@ export const draftChange = z.strictObject({ design: designDocument });
 export const draftSaved = z.strictObject({ etag: text, draftHash: sha256, changedAt: isoTime, draftIsRevision: z.boolean() });
 
 export const newRevision = z.strictObject({ message: z.string().trim().min(1).max(2000) });
-export const revisionList = z.strictObject({ items: z.array(revisionHeader.extend({ summary: figuresSummary.nullable() })) });
+export const revisionList = z.strictObject({ items: z.array(revisionHeader.extend({ summary: figuresSummary.nullable(), summaryPending })) });
 export const revisionDetail = revisionHeader.extend({
   panelName: text,
   projectName: text,
