@@ -178,6 +178,17 @@ describe('cell library', () => {
     expectNotSignedIn(await api.anonymous().get('/api/library/families'));
   });
 
+  it('accepts once for one Idempotency-Key, however often the request comes', async () => {
+    const name = `Once ${randomUUID().slice(0, 8)}`;
+    const form = (): FormData => uploadForm(cellFilesOf(FOUR), { import: importOf(FOUR, { description: { ...descriptionOf(FOUR), name } }) });
+    const headers = { 'idempotency-key': randomUUID() };
+    const first = await lab.send('POST', '/api/library/families', { form: form(), headers });
+    const second = await lab.send('POST', '/api/library/families', { form: form(), headers });
+    expect([first.status, second.status]).toEqual([201, 201]);
+    expect((second.json as EditionDetail).id).toBe((first.json as EditionDetail).id);
+    expect(await api.query('SELECT 1 FROM edition WHERE family_id = $1', [(first.json as EditionDetail).familyId])).toHaveLength(1);
+  });
+
   it('writes one audit row for acceptance and one for publication', async () => {
     const edition = await published();
     const rows = await api.query<{ action: string }>(`SELECT action FROM audit_row WHERE object = $1 ORDER BY sequence`, [`edition:${edition.id}`]);
