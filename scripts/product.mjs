@@ -19,7 +19,9 @@ export class Product {
     this.data.keep('secret', randomSecret);
     const wish = process.env.SLANTWISE_DEMO;
     if (wish && !['on', 'off'].includes(wish)) throw new Refusal('SLANTWISE_DEMO must be "on" or "off".');
-    this.demo = (wish || this.data.keep('demo', () => (this.isNew ? 'on' : 'off'))) === 'on';
+    // What a new folder was made as is remembered, so that the next start needs no word of it.
+    const kept = this.data.keep('demo', () => wish || (this.isNew ? 'on' : 'off'));
+    this.demo = (wish || kept) === 'on';
     this.demoPassword = this.demo ? this.#demoPassword() : null;
     this.cluster = new Cluster(this.data, { throwAway });
     this.port = Number(process.env.PORT || 4600);
