@@ -1,4 +1,4 @@
-import { maskMargin } from '../../../../shared/antenna/mask-margin';
+import type { maskMargin } from '../../../../shared/antenna/mask-margin';
 import { forbiddenEdges, leastMargin, maskLevelDbi, offAxisDeg } from './mask-level';
 import { MASKED_DESIGN, SAMPLE_PATTERN, sampleCut } from './sample-pattern';
 

@@ -1,0 +1,46 @@
+import { exampleDesign } from '../../../../shared/antenna/example-design';
+import { changeLayer, changePlaces, comparisonNotes, cutDifferenceFigure, hemisphereDifference, overlaidCut, shiftText } from './comparison-plots';
+import { isCompared } from './comparison-rows';
+import { SAMPLE_COMPARISON } from './sample-comparison';
+
+const { cells, cuts: [cut] } = SAMPLE_COMPARISON;
+if (!isCompared(cells)) throw new Error('the sample compares cells');
+const design = exampleDesign({ requirement: { ...exampleDesign().requirement, minGainDbi: 34, mask: { kind: 'custom', points: [[5, 18], [90, -2]] } } });
+
+describe('map of changes', () => {
+  it('leaves unchanged cells bare', () => {
+    const { values, title } = changeLayer(cells, 'parameter');
+    expect(title).toBe('Change of ring outer side');
+    expect(Array.from(values, Number.isNaN)).toEqual([false, true, false, false]);
+  });
+  it('keeps colour for small changes when one cell goes round the whole curve', () => {
+    expect(changeLayer(cells, 'parameter').scale.to).toBeLessThan(0.5);
+    expect(changeLayer(cells, 'error').scale).toMatchObject({ from: -3, to: 3 });
+  });
+  it('stands on the lattice of the later side', () => {
+    expect(changePlaces(cells, design)).toMatchObject({ pitchXMm: 15, pitchYMm: 15 });
+  });
+});
+
+describe('cuts of two sides', () => {
+  const figure = overlaidCut(SAMPLE_COMPARISON, cut, design);
+  it('lie over each other with the mask of the later beam', () => {
+    expect([figure.main.label, figure.overlay?.label]).toEqual(['revision 4', 'revision 3']);
+    expect(figure.forbidden).toHaveLength(2);
+    expect(figure.forbidden[1]).toMatchObject({ angleDeg: [30, 60, 90] });
+    expect(figure.least).toMatchObject({ levelDb: 34, angleDeg: 0 });
+  });
+  it('are subtracted with gaps below the floor and clipped where nulls moved', () => {
+    const { lines: [line] } = cutDifferenceFigure(SAMPLE_COMPARISON, cut);
+    expect(Array.from(line.y)).toEqual([Number.NaN, -2, 10, 0.02, -2, Number.NaN, Number.NaN]);
+  });
+  it('say how far the earlier one was shifted', () => {
+    expect(shiftText(SAMPLE_COMPARISON, cut)).toBe('3 shifted by Δu +0.0082');
+    expect(shiftText(SAMPLE_COMPARISON, { ...cut, shiftU: 0 })).toBe('beams coincide, no shift');
+    expect(comparisonNotes(SAMPLE_COMPARISON)[0]).toBe('Difference: revision 3 resampled linearly after the shift between the beams; gaps where either lies below \u221215 dBi, clipped at ±10 dB.');
+  });
+  it('differ over the hemisphere on a scale centred on zero', () => {
+    const { scale, levels } = hemisphereDifference(SAMPLE_COMPARISON);
+    expect([scale.from, scale.to, levels.size]).toEqual([-1, 1, 2]);
+  });
+});
