@@ -48,5 +48,5 @@ describe('access to objects by id', () => {
     const statuses: Record<string, number> = {};
     for (const who of Object.keys(statusesOf(sample))) statuses[who] = await statusFor(route, who, sample);
     expect(statuses).toEqual(statusesOf(sample));
-  });
+  }, 30_000);
 });
