@@ -44,12 +44,13 @@ export class TeamPage {
   protected readonly ownId = computed(() => this.session.current()?.person.id);
 
   constructor() {
-    void this.attempt(() => this.load(), null);
+    void this.attempt(async () => undefined, null);
   }
 
   private async load(): Promise<void> {
-    this.team.set(await this.client.team());
-    this.people.set(await this.client.people());
+    const [team, people] = await Promise.all([this.client.team(), this.client.people()]);
+    this.team.set(team);
+    this.people.set(people);
     if (this.isAdministrator()) this.invitations.set(await this.client.invitations());
   }
 

@@ -32,6 +32,12 @@ describe('check field', () => {
     expect(on.changes).toEqual([false]);
   });
 
+  it('goes on showing what holds until its owner changes it', async () => {
+    const { box } = await shown({ checked: false });
+    box.click();
+    expect(box.checked).toBe(false);
+  });
+
   it('says nothing while it is disabled', async () => {
     const { box, changes } = await shown({ checked: false, disabled: true });
     box.click();

@@ -5,7 +5,7 @@ import { ChangeDetectionStrategy, Component, input, output } from '@angular/core
   selector: 'slant-check-field',
   template: `
     <label>
-      <input type="checkbox" [attr.aria-label]="name()" [checked]="checked()" [disabled]="disabled()" (change)="changed.emit(!checked())" />
+      <input #box type="checkbox" [attr.aria-label]="name()" [checked]="checked()" [disabled]="disabled()" (change)="ask(box)" />
       <span class="box" aria-hidden="true"></span>
       <span>{{ label() }}</span>
     </label>
@@ -56,4 +56,10 @@ export class CheckField {
   readonly checked = input.required<boolean>();
   readonly disabled = input(false);
   readonly changed = output<boolean>();
+
+  /** Shows what holds, not what was wished: the box moves when its owner says so. */
+  protected ask(box: HTMLInputElement): void {
+    box.checked = this.checked();
+    this.changed.emit(!this.checked());
+  }
 }
