@@ -21,6 +21,7 @@ import { EditionCells } from './edition-cells';
 import { EditionChooser } from './edition-chooser';
 import { editionCurve } from './edition-curve';
 import { cellUse, phaseCoverage } from './phase-coverage';
+import { TargetPhaseChoice } from './target-phase-choice';
 
 const KIND_OPTIONS = [
   { value: 'ideal', label: 'Ideal' },
@@ -43,7 +44,7 @@ const FIRST_TABLE: Cells = {
 /** Which cells stand on the panel: ideal ones, an edition of the library, or a what-if table; and what the choice costs. */
 @Component({
   selector: 'slant-cells-sheet',
-  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, SheetNotes, ViewTitle],
+  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, SheetNotes, TargetPhaseChoice, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './cells-sheet.html',
   styleUrl: '../fields/sheet.scss',
