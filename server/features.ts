@@ -8,6 +8,7 @@ import { libraryRoutes } from './library/library-routes';
 import { letterRoutes } from './notices/letter-routes';
 import { predictionRoutes } from './predictions/prediction-routes';
 import { projectRoutes } from './projects/project-routes';
+import { comparisonRoutes } from './revisions/comparison-routes';
 import { exportRoutes } from './revisions/export-routes';
 import { revisionRoutes } from './revisions/revision-routes';
 import { invitationRoutes, teamRoutes } from './teams/team-routes';
@@ -26,5 +27,6 @@ export const features: readonly ((house: House) => readonly Route[])[] = [
   predictionRoutes,
   projectRoutes,
   revisionRoutes,
+  comparisonRoutes,
   exportRoutes,
 ];

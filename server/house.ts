@@ -25,6 +25,7 @@ import { DraftService } from './projects/draft-service';
 import { PanelService } from './projects/panel-service';
 import { ProjectService } from './projects/project-service';
 import { ReplayService } from './replays/replay-service';
+import { ComparisonService } from './revisions/comparison-service';
 import { ExportService } from './revisions/export-service';
 import { RevisionService } from './revisions/revision-service';
 import { InvitationService } from './teams/invitation-service';
@@ -83,10 +84,11 @@ function createDesignServices({ ground, people, audit, library, engine }: Design
   const contents = new DesignContentService(library);
   const drafts = new DraftService(ground, (transaction, ids) => people.names(transaction, ids));
   const revisions = new RevisionService({ ground, drafts, contents, figures, audit });
+  const comparisons = new ComparisonService({ ground, drafts, revisions, predictions, library });
   const exports = new ExportService({ ground, drafts, revisions, predictions, library, productVersion: version });
   const panels = new PanelService({ ground, drafts, contents, revisions, audit });
   const projects = new ProjectService({ ground, drafts, revisions, figures, audit });
-  return { predictions, figures, revisions, exports, panels, projects };
+  return { predictions, figures, revisions, comparisons, exports, panels, projects };
 }
 
 const SWEEP_MS = 6 * 3600 * 1000;

@@ -1,5 +1,4 @@
 import type { Lattice } from '../model/design-document';
-import type { DesignDocument } from '../model/design-document';
 import type { NoFigure } from '../model/figures';
 import type { CellArrays } from './cell-arrays';
 import { noFigure } from './no-figure';
@@ -10,11 +9,10 @@ export type CellIdentities =
   | { readonly kind: 'continuous' }
   /** Cells without parameters: ideal levels or a what-if table. Tables of one `key` hold the same cells. */
   | { readonly kind: 'table'; readonly key: string }
-  /** Cells of a family, by the values of its parameters, index by index. Families of one `key` have the same parameters in the same order. */
-  | { readonly kind: 'family'; readonly key: string; readonly parameterLabel: string; readonly parametersMm: readonly (readonly number[])[] };
+  /** Cells of a family, by the values of its parameters, index by index. */
+  | { readonly kind: 'family'; readonly familyName: string; readonly parameterLabel: string; readonly parametersMm: readonly (readonly number[])[] };
 
 export interface PlacedCells {
-  readonly lattice: DesignDocument['panel']['lattice'];
   readonly lattice: Lattice;
   readonly arrays: CellArrays;
   readonly identities: CellIdentities;
@@ -52,12 +50,9 @@ const LARGE_ERROR_DEG = 15;
 
 /**
  * What changed from cell to cell, after against before, at the positions that both have. Swapping the sides turns the
- * sign of every change and exchanges what is told of each side. Lattices of different periods are not compared even
- * where some of their positions fall together: those few would stand for nothing.
+ * sign of every change and nothing else.
  */
 export function compareCells(before: PlacedCells, after: PlacedCells): CellChanges | NoFigure {
-  const [left, right] = [latticeText(before.lattice), latticeText(after.lattice)];
-  if (left !== right) return noFigure('lattices-differ', `one lattice is ${left}, the other ${right}`);
   const fault = latticeFault(before.lattice, after.lattice);
   if (fault !== undefined) return noFigure('lattices-differ', fault);
   const pairs = commonPositions(before.arrays, after.arrays);
@@ -84,12 +79,6 @@ function latticeFault(before: Lattice, after: Lattice): string | undefined {
 }
 
 const periodsText = (lattice: Lattice): string => `${lattice.periodXMm} × ${lattice.kind === 'rectangular' ? lattice.periodYMm : lattice.rowSpacingMm}`;
-
-function latticeText(lattice: PlacedCells['lattice']): string {
-  return lattice.kind === 'rectangular'
-    ? `rectangular, ${lattice.periodXMm} × ${lattice.periodYMm} mm`
-    : `triangular, ${lattice.periodXMm} × ${lattice.rowSpacingMm} mm`;
-}
 
 /** Indices of one position on either side. */
 interface Pairs {
@@ -163,7 +152,7 @@ interface Indices {
 function changeTest(before: CellIdentities, after: CellIdentities): (indices: Indices, phaseChangeDeg: number) => boolean {
   if (before.kind === 'continuous' && after.kind === 'continuous') return (_indices, phaseChangeDeg) => Math.abs(phaseChangeDeg) > SAME_PHASE_DEG;
   if (before.kind === 'table' && after.kind === 'table' && before.key === after.key) return (indices) => indices.before !== indices.after;
-  if (before.kind === 'family' && after.kind === 'family' && before.key === after.key) {
+  if (before.kind === 'family' && after.kind === 'family' && before.familyName === after.familyName) {
     return (indices) => {
       const left = before.parametersMm[indices.before];
       const right = after.parametersMm[indices.after];
@@ -174,7 +163,7 @@ function changeTest(before: CellIdentities, after: CellIdentities): (indices: In
 }
 
 function commonFamily(before: CellIdentities, after: CellIdentities): boolean {
-  return before.kind === 'family' && after.kind === 'family' && before.key === after.key;
+  return before.kind === 'family' && after.kind === 'family' && before.familyName === after.familyName;
 }
 
 function parameterChange(before: CellIdentities, after: CellIdentities): (indices: Indices) => number {

@@ -1,6 +1,6 @@
 /** A cut as its level over a coordinate that moves along with a beam: u in the plane of the cut. */
 export interface LevelOverU {
-  /** Rising, or standing still where samples fall together. */
+  /** Rising. */
   readonly u: Float64Array;
   readonly levelDbi: Float64Array;
 }

@@ -5,7 +5,12 @@ import { cutRequest } from './predictions';
 import { revisionHeader } from './projects';
 import { id, sha256 } from './common';
 
-/** What two states of panels have different: parameters, cells, cuts, map, figures. */
+/**
+ * What two states of panels have different: parameters, cells, cuts, map, figures.
+ *
+ * GET /api/comparisons?before=&after=   comparison, or a binary block with Accept: application/octet-stream: the head is
+ * comparisonHead, the arrays are named cells.xMm, ... , cuts.0.angleDeg, ... and uv.differenceDb. There NaN stands for a gap.
+ */
 
 const numbers = z.array(z.number());
 const value = z.union([z.number(), z.string(), z.boolean(), z.null()]);
@@ -91,6 +96,17 @@ export const comparison = z.strictObject({
   deciding: z.string().nullable(),
 });
 
+/** Arrays of the binary form under `cells.`, and under `cuts.0.`, `cuts.1.` ...; besides these there is `uv.differenceDb`. */
+export const COMPARED_CELL_ARRAY_NAMES = ['xMm', 'yMm', 'changed', 'parameterChangeMm', 'phaseChangeDeg', 'errorChangeDeg'] as const;
+export const COMPARED_CUT_ARRAY_NAMES = ['angleDeg', 'beforeDbi', 'afterDbi', 'differenceDb'] as const;
+
+/** Head of the binary form: the comparison without its arrays. A gap in a `differenceDb` is NaN there. */
+export const comparisonHead = comparison.omit({ cells: true, cuts: true, uv: true }).extend({
+  cells: z.union([cellDifference.omit({ arrays: true }), noFigure]),
+  cuts: z.array(cutDifference.pick({ request: true, shiftU: true, floorDbi: true })),
+  uv: z.strictObject({ size: z.number().int() }),
+});
+
 export const comparisonQuery = z.strictObject({ before: z.string().max(80), after: z.string().max(80) });
 
 export type Side = z.infer<typeof side>;
@@ -99,3 +115,4 @@ export type CellDifference = z.infer<typeof cellDifference>;
 export type CutDifference = z.infer<typeof cutDifference>;
 export type FigureDifference = z.infer<typeof figureDifference>;
 export type Comparison = z.infer<typeof comparison>;
+export type ComparisonHead = z.infer<typeof comparisonHead>;
