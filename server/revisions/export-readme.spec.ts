@@ -37,6 +37,15 @@ describe('the text of an export', () => {
     expect(text).not.toContain('INVENTED');
   });
 
+  it('cautions whoever mounts or lights the panel, and calls nothing safe or compliant', () => {
+    const text = flat(exportReadme(facts));
+    expect(text).toContain('verify by measurement before use.');
+    expect(text).toContain('Do not enter the beam or the feed–panel space while transmitting.');
+    expect(text).toContain('Confirm authorisation for frequency, power, place and dates.');
+    expect(text).toContain('must follow local codes and be done or checked by a licensed professional.');
+    expect(text).not.toMatch(/\b(safe|compliant|certified|approved)\b/i);
+  });
+
   it('says that ideal cells cannot be made, and calls invented what is', () => {
     const text = flat(exportReadme({ ...facts, edition: null, invented: true }));
     expect(text).toContain('cannot be made as they stand');

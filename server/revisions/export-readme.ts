@@ -55,6 +55,14 @@ const CONVENTIONS = [
   'In the cuts the angle is 0 in the wanted direction: along, it grows away from z; across, towards rising phi. -200 dBi is the floor: no radiation.',
 ];
 
+/** For whoever builds, mounts or lights the panel, whatever the design. */
+const GENERAL_CAUTIONS = [
+  'Results depend on the measured cells, their angle and frequency range, and the stated model; verify by measurement before use.',
+  'Observe the exposure limits of your jurisdiction. Do not enter the beam or the feed–panel space while transmitting. Interlock, barrier and sign as the site\'s RF safety officer directs.',
+  'A range test is a transmission. Confirm authorisation for frequency, power, place and dates.',
+  'Mounting, wind, ice, seismic, lightning and grounding design must follow local codes and be done or checked by a licensed professional.',
+];
+
 function cautions({ edition, warnings, invented }: ReadmeFacts): string[] {
   return [
     'Everything here is predicted by a scalar model of independent cells; nothing was measured on this panel. There is no cross-polar field in it, no scattering from edges, struts or the horn.',
@@ -63,6 +71,7 @@ function cautions({ edition, warnings, invented }: ReadmeFacts): string[] {
       ? ['The cells are ideal or a what-if table: they have no geometry and cannot be made as they stand.']
       : [`The cells come from "${edition.familyName}", edition ${edition.number}: ${edition.provenance}. ${edition.limits}`.trim()]),
     ...(invented ? ['Names, places and requirements are invented.'] : []),
+    ...GENERAL_CAUTIONS,
     ...warnings.map(({ message }) => message),
   ];
 }
