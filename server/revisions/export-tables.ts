@@ -12,11 +12,10 @@ export interface ExportedStock {
   readonly edition: { readonly description: FamilyDescription; readonly cells: readonly CellEntry[] } | null;
 }
 
-/** Decimals in degrees, mm and dB: far below what the model says, and above the noise of single precision. */
-const DECIMALS = 4;
-const rounded = (value: number): number => Number(value.toFixed(DECIMALS)) + 0;
+/** Four decimals in degrees and dB: far below what the model says, and above the noise of single precision. */
+const rounded = (value: number): number => Math.round(value * 1e4) / 1e4 + 0;
 /** Positions are given to the nanometre. */
-const position = (mm: number): number => Number(mm.toFixed(6)) + 0;
+const position = (mm: number): number => Math.round(mm * 1e6) / 1e6 + 0;
 
 /** Rows written between two turns of the event loop, so that others are answered meanwhile. */
 const ROWS_PER_TURN = 5000;
