@@ -45,11 +45,19 @@ export function sampleLine(pattern: RadiationPattern, samples: SampleGrid, m: nu
   }
 }
 
+export interface SampledTops {
+  /** The highest local maxima among the samples, strongest first. */
+  readonly peaks: SampledPeak[];
+  /** Samples beside a lobe too shallow to have one, strongest first, none weaker than the weakest of `peaks`. */
+  readonly shoulders: SampledPeak[];
+}
+
 /**
- * The highest local maxima among the samples of the whole hemisphere, strongest first. The samples are two to three
- * times as fine as the pattern needs, so every lobe has one; refinePeak then finds its true top.
+ * Where lobes of the whole hemisphere stand. The samples are two to three times as fine as the pattern needs, so every
+ * lobe that stands clear has a local maximum among them. A lobe on the flank of a stronger one, parted from it by a
+ * shallow saddle, may have none: it is found as a shoulder. refinePeak then finds the true tops.
  */
-export function hemispherePeaks(pattern: RadiationPattern, count: number): SampledPeak[] {
+export function hemispherePeaks(pattern: RadiationPattern, count: number): SampledTops {
   const samples = sampleGrid(pattern);
   const { uReach, vReach, uStep, vStep } = samples;
   const length = 2 * vReach + 1;
@@ -58,19 +66,27 @@ export function hemispherePeaks(pattern: RadiationPattern, count: number): Sampl
   let after: Float64Array = new Float64Array(length);
   sampleLine(pattern, samples, -uReach, here);
   const found: SampledPeak[] = [];
+  const bends: SampledPeak[] = [];
   let least = 0;
   for (let m = -uReach; m <= uReach; m++) {
     if (m < uReach) sampleLine(pattern, samples, m + 1, after);
     else after.fill(-1);
     for (let i = 0; i < length; i++) {
       const value = here[i];
-      if (value <= least || !isLocalMaximum(value, i, { before, here, after })) continue;
-      insertPeak(found, { u: m * uStep, v: (i - vReach) * vStep, power: value }, count);
-      if (found.length === count) least = found[count - 1].power;
+      if (value <= least) continue;
+      const lines = { before, here, after };
+      const sample = { u: m * uStep, v: (i - vReach) * vStep, power: value };
+      if (isLocalMaximum(value, i, lines)) least = insertPeak(found, sample, count);
+      else if (isShoulder(i, lines)) bends.push(sample);
     }
     [before, here, after] = [here, after, before];
   }
-  return found;
+  return { peaks: found, shoulders: bends.filter((bend) => bend.power > least && standsClear(bend, found, samples)).sort((a, b) => b.power - a.power) };
+}
+
+/** No neighbour of a sampled maximum: those climb to the top of that maximum. */
+function standsClear(bend: SampledPeak, peaks: readonly SampledPeak[], { uStep, vStep }: SampleGrid): boolean {
+  return !peaks.some((peak) => Math.abs(peak.u - bend.u) < 1.5 * uStep && Math.abs(peak.v - bend.v) < 1.5 * vStep);
 }
 
 interface Lines {
@@ -85,9 +101,29 @@ function isLocalMaximum(value: number, i: number, { before, here, after }: Lines
   return !(before[i - 1] >= value || before[i + 1] >= value || after[i - 1] > value || after[i + 1] > value);
 }
 
-function insertPeak(found: SampledPeak[], peak: SampledPeak, count: number): void {
+/** A top this many samples away, by the curvature of the logarithm, is worth a climb. */
+const SHOULDER_REACH = 1.5;
+
+/** The logarithm of the power bends down in every direction, and the parabola through the neighbours has its top nearby. */
+function isShoulder(i: number, { before, here, after }: Lines): boolean {
+  if (!(here[i - 1] > 0 && here[i + 1] > 0 && before[i] > 0 && after[i] > 0)) return false;
+  if (!(before[i - 1] > 0 && before[i + 1] > 0 && after[i - 1] > 0 && after[i + 1] > 0)) return false;
+  const middle = 2 * Math.log(here[i]);
+  const huu = Math.log(after[i] * before[i]) - middle;
+  const hvv = Math.log(here[i + 1] * here[i - 1]) - middle;
+  const huv = Math.log((after[i + 1] * before[i - 1]) / (after[i - 1] * before[i + 1])) / 4;
+  const determinant = huu * hvv - huv * huv;
+  if (!(huu < 0 && determinant > 0)) return false;
+  const gu = Math.log(after[i] / before[i]) / 2;
+  const gv = Math.log(here[i + 1] / here[i - 1]) / 2;
+  return Math.max(Math.abs(huv * gv - hvv * gu), Math.abs(huv * gu - huu * gv)) < SHOULDER_REACH * determinant;
+}
+
+/** Keeps the `count` strongest in order; gives the power that the next one must exceed. */
+function insertPeak(found: SampledPeak[], peak: SampledPeak, count: number): number {
   let at = found.length;
   while (at > 0 && found[at - 1].power < peak.power) at -= 1;
   found.splice(at, 0, peak);
   if (found.length > count) found.pop();
+  return found.length === count ? found[count - 1].power : 0;
 }

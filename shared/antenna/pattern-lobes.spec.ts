@@ -1,9 +1,12 @@
 import { degFromRad, radFromDeg } from '../units/angles';
 import { directionOf } from '../waves/conventions';
 import type { ApertureField } from './aperture-field';
+import { EXAMPLE_DESIGN, exampleDesign } from './example-design';
 import { exampleField } from './example-field';
 import { hemispherePeaks } from './hemisphere-peaks';
+import { illuminatedState } from './illuminated-state';
 import { lobeRelativeTo, patternLobes, peakAnglesDeg } from './pattern-lobes';
+import { placeCells } from './place-cells';
 import { directivityRatioAt, radiationPattern, type RadiationPattern } from './radiation-pattern';
 import { refinePeak } from './refine-peak';
 
@@ -67,10 +70,39 @@ describe('the lobes of a pattern', () => {
 
   it('samples every strong lobe: the strongest of them stand where a fine scan finds maxima', () => {
     const model = pattern(exampleField({ columnCount: 9, rowCount: 8 }));
-    const [first] = hemispherePeaks(model, 5);
+    const [first] = hemispherePeaks(model, 5).peaks;
     let best = 0;
     for (let u = -1; u <= 1; u += 0.005) for (let v = -1; v <= 1; v += 0.005) if (u * u + v * v < 1) best = Math.max(best, directivityRatioAt(model, u, v));
     expect(refinePeak(model, first.u, first.v).directivityRatio).toBeGreaterThanOrEqual(best * (1 - 1e-9));
+  });
+
+  it.each([
+    [1.15, { thetaDeg: 24, phiDeg: 178, frequencyGHz: 9.1, positionMm: [-49, 0, 244], widthMm: 285 }, -15.27955, [-0.295443, 0.015559]],
+    [0.49, { thetaDeg: 22, phiDeg: 40, frequencyGHz: 9.3, positionMm: [-20, 0, 208], widthMm: 285 }, -18.302146, [0.470101, 0.258081]],
+    [0.05, { thetaDeg: 14, phiDeg: 101, frequencyGHz: 10.8, positionMm: [-81, 0, 178], widthMm: 300 }, -15.805633, [-0.148636, 0.219384]],
+  ] as const)('finds a lobe on the flank of the beam behind a saddle %d dB deep', (_depthDb, { thetaDeg, phiDeg, frequencyGHz, positionMm, widthMm }, levelDb, [u, v]) => {
+    // Level and place by a direct sum over the cells and a search without derivatives, in another language.
+    const placed = placeCells(
+      exampleDesign({
+        requirement: { designFrequencyGHz: 10, beams: [{ thetaDeg, phiDeg }], polarisation: 'x' },
+        panel: { ...EXAMPLE_DESIGN.panel, outline: { kind: 'rectangle', widthMm, heightMm: 300 } },
+        illumination: { kind: 'horn', positionMm: [...positionMm], aimMm: [0, 0, 0], exponentE: 4, exponentH: 4, polarisation: 'x' },
+      }),
+    );
+    const state = illuminatedState(placed, frequencyGHz);
+    const { ofBeams, others } = patternLobes(state.pattern, [directionOf(radFromDeg(thetaDeg), radFromDeg(phiDeg))]);
+    expect(lobeRelativeTo(others[0], ofBeams[0]).levelDb).toBeCloseTo(levelDb, 5);
+    expect([others[0].u, others[0].v]).toEqual([expect.closeTo(u, 5), expect.closeTo(v, 5)]);
+  });
+
+  it('names the wanted beam as the highest where its image is equal to it but for rounding', () => {
+    // Real weights: the pattern is the same at (u, v) and (-u, -v).
+    const field = steered(16, 35);
+    field.im.fill(0);
+    const lobes = patternLobes(pattern(field), [directionOf(radFromDeg(35), Math.PI)]);
+    expect(lobes.highest).toBe(lobes.ofBeams[0]);
+    expect(lobes.highest.u).toBeLessThan(-0.5);
+    expect(lobeRelativeTo(lobes.others[0], lobes.highest).levelDb).toBeCloseTo(0, 9);
   });
 
   it('keeps a peak of the horizon on the rim when the element does not fall off', () => {

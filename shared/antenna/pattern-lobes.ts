@@ -2,7 +2,7 @@ import type { Lobe } from '../model/figures';
 import { degFromRad } from '../units/angles';
 import { powerRatioToDb } from '../units/decibels';
 import { angleBetweenRad, anglesOf, outwardDirection, type Direction } from '../waves/conventions';
-import { hemispherePeaks, MOST_SAMPLES, sampleCount, sampleGrid } from './hemisphere-peaks';
+import { hemispherePeaks, MOST_SAMPLES, sampleCount, sampleGrid, type SampledPeak } from './hemisphere-peaks';
 import type { RadiationPattern } from './radiation-pattern';
 import { refinePeak, type PatternPeak } from './refine-peak';
 
@@ -20,10 +20,18 @@ export interface PatternLobes {
 /** Sampled maxima that are refined beyond one for each beam; their order may change by refining, so some more than are listed. */
 const REFINED = 12;
 
-/** Finds the lobes: the strongest sampled maxima of the hemisphere, refined, and one climb from each wanted direction. */
+/** So many of the strongest tops must be right: the wanted lobe and the six that the figures list. */
+const LISTED_TOPS = 7;
+/** Power of a shoulder, at most one and a half samples from its top, relative to that top: at least about this. */
+const SHOULDER_SHARE = 0.7;
+
+/** Powers nearer than this share are equal: the accuracy of the interpolated far field. */
+const EQUAL_SHARE = 1e-8;
+
+/** Finds the lobes: the strongest sampled maxima and shoulders of the hemisphere, refined, and one climb from each wanted direction. */
 export function patternLobes(pattern: RadiationPattern, beams: readonly Direction[]): PatternLobes {
   const searched = sampleCount(sampleGrid(pattern)) <= MOST_SAMPLES;
-  const sampled = searched ? hemispherePeaks(pattern, REFINED + 2 * beams.length) : [];
+  const { peaks, shoulders } = searched ? hemispherePeaks(pattern, REFINED + 2 * beams.length) : { peaks: [], shoulders: [] };
   const { grid } = pattern.spectrum;
   // Two tops nearer than this are one lobe: a tenth of the width of the narrowest lobe.
   const apart = (0.1 * 2 * Math.PI) / (pattern.wavenumber * Math.max(grid.columnCount * grid.stepXM, grid.rowCount * grid.stepYM));
@@ -33,11 +41,28 @@ export function patternLobes(pattern: RadiationPattern, beams: readonly Directio
     if (top.directivityRatio > 0 && !tops.some((other) => samePlace(other, top, apart))) tops.push(top);
   };
   climbed.forEach(addTop);
-  sampled.forEach((peak) => addTop(refinePeak(pattern, peak.u, peak.v)));
+  peaks.forEach((peak) => addTop(refinePeak(pattern, peak.u, peak.v)));
+  shouldersWorthAClimb(pattern, shoulders, tops).forEach(({ u, v }) => {
+    const top = refinePeak(pattern, u, v);
+    // A climb counts where it ends on a top, not where it gives up on a ridge.
+    if (top.lastStep < 1e-3 * apart) addTop(top);
+  });
   tops.sort((a, b) => b.directivityRatio - a.directivityRatio);
   const ofBeams = beams.map((beam, i) => nearestTop(tops, beam) ?? climbed[i]);
   const others = tops.filter((top) => !ofBeams.some((own) => samePlace(own, top, apart)));
-  return { highest: tops[0] ?? climbed[0], ofBeams, others, searched };
+  return { highest: highestOf(tops, ofBeams) ?? climbed[0], ofBeams, others, searched };
+}
+
+/** Those that may stand beside a top higher than the ones that will be listed. */
+function shouldersWorthAClimb(pattern: RadiationPattern, shoulders: readonly SampledPeak[], tops: readonly PatternPeak[]): readonly SampledPeak[] {
+  const ratios = tops.map((top) => top.directivityRatio).sort((a, b) => b - a);
+  const least = (SHOULDER_SHARE * (ratios[LISTED_TOPS - 1] ?? 0) * pattern.radiatedPower) / (4 * Math.PI);
+  return shoulders.filter((shoulder) => shoulder.power > least).slice(0, REFINED);
+}
+
+/** The highest top; of lobes that are equal but for rounding, as a beam and its image may be, the wanted one. */
+function highestOf(tops: readonly PatternPeak[], ofBeams: readonly PatternPeak[]): PatternPeak | undefined {
+  return ofBeams.find((own) => own.directivityRatio >= tops[0]?.directivityRatio * (1 - EQUAL_SHARE)) ?? tops[0];
 }
 
 function samePlace(a: PatternPeak, b: PatternPeak, apart: number): boolean {
