@@ -52,13 +52,13 @@ describe('CutPlot', () => {
   it('walks from the peak by samples and reads them in full, without calling them interpolated', async () => {
     await press('ArrowRight');
     const angle = SAMPLE_CUT.main.angleDeg[551];
-    expect(readOut()).toContain(`θ in the plane φ = 0°, ° ${angle}; gain, dBi ${SAMPLE_CUT.main.levelDb[551]}`);
+    expect(readOut()).toContain(`${angle}°: ${SAMPLE_CUT.main.levelDb[551]} dBi; revision 3 `);
     expect(readOut()).not.toContain('interpolated');
   });
   it('says when a value lies between samples', async () => {
     fixture.componentInstance.cursorDeg.set(20.05);
     await fixture.whenStable();
-    expect(readOut()).toMatch(/^θ in the plane φ = 0°, ° 20\.05; .*; interpolated$/);
+    expect(readOut()).toMatch(/^20\.05°: .* dBi; revision 3 .*; interpolated$/);
   });
   it('zooms about the cursor by keys and shows all again by 0', async () => {
     fixture.componentInstance.cursorDeg.set(20);

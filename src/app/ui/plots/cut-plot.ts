@@ -65,12 +65,13 @@ export class CutPlot implements ExportablePlot {
   protected readonly readOut = computed(() => {
     const angle = this.cursorDeg();
     if (angle === null) return '';
-    const { main, overlay, angleTitle, levelTitle } = this.figure();
+    const { main, overlay, levelTitle } = this.figure();
     const level = levelAt(main, angle);
     if (!level) return '';
     const other = overlay && levelAt(overlay, angle);
-    const parts = [`${angleTitle} ${fullNumberText(angle)}`, `${levelTitle} ${fullNumberText(level.levelDb)}`];
-    if (overlay && other) parts.push(`${overlay.label} ${fullNumberText(other.levelDb)}`);
+    const unit = levelTitle.replace(/^.*, /, '');
+    const parts = [`${fullNumberText(angle)}°: ${fullNumberText(level.levelDb)} ${unit}`];
+    if (overlay && other) parts.push(`${overlay.label.replace(/,.*$/, '')} ${fullNumberText(other.levelDb)}`);
     if (level.interpolated || other?.interpolated) parts.push('interpolated');
     return parts.join('; ');
   });

@@ -50,7 +50,7 @@ describe('marks', () => {
 });
 
 it('spans from cell to cell whichever comes first', () => {
-  expect(extentOfCells(index, 41, 0)).toEqual({ fromXMm: -97.5, toXMm: -92.5, fromYMm: -97.5, toYMm: -92.5 });
+  expect(extentOfCells(index, 41, 0)).toEqual({ fromXMm: -100, toXMm: -90, fromYMm: -100, toYMm: -90 });
 });
 
 it('states the scale as drawings do', () => {

@@ -91,14 +91,14 @@ export function chosenLeader(box: MapBox, view: MapView): ChosenLeader {
   return { path: `M${round(startX)} ${round(startY)}L${round(bendX)} ${round(balloonY)}H${round(view.size.width)}`, balloonX: view.size.width + 21, balloonY, outside: true };
 }
 
-/** Extent from one cell to another, both included. */
+/** Extent from one cell to another, both included to their edges. */
 export function extentOfCells(index: PlaceIndex, one: number, other: number): MapExtent {
-  const { xMm, yMm } = index.places;
+  const { xMm, yMm, pitchXMm, pitchYMm } = index.places;
   return {
-    fromXMm: Math.min(xMm[one], xMm[other]),
-    toXMm: Math.max(xMm[one], xMm[other]),
-    fromYMm: Math.min(yMm[one], yMm[other]),
-    toYMm: Math.max(yMm[one], yMm[other]),
+    fromXMm: Math.min(xMm[one], xMm[other]) - pitchXMm / 2,
+    toXMm: Math.max(xMm[one], xMm[other]) + pitchXMm / 2,
+    fromYMm: Math.min(yMm[one], yMm[other]) - pitchYMm / 2,
+    toYMm: Math.max(yMm[one], yMm[other]) + pitchYMm / 2,
   };
 }
 

@@ -50,7 +50,7 @@ describe('PanelMap', () => {
     fixture.componentInstance.chosen.set(0);
     await press('ArrowRight', { shiftKey: true });
     await press('ArrowUp', { shiftKey: true });
-    expect(fixture.componentInstance.selection()).toEqual({ fromXMm: -5, toXMm: 0, fromYMm: -5, toYMm: 0 });
+    expect(fixture.componentInstance.selection()).toEqual({ fromXMm: -7.5, toXMm: 2.5, fromYMm: -7.5, toYMm: 2.5 });
     await press('Escape');
     expect(fixture.componentInstance.selection()).toBeNull();
   });

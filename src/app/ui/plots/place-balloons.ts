@@ -21,14 +21,17 @@ export interface BalloonRoom {
 export const BALLOON_R = 8.5;
 const GAP = 4;
 const REACHES = [26, 38, 54, 74];
+const FURTHEST = REACHES[REACHES.length - 1];
 const TURNS = 16;
 
 /** Gives each anchor a balloon beside it that covers neither another balloon nor an obstacle, as near as that can be had. */
 export function placeBalloons(anchors: readonly BalloonAnchor[], room: BalloonRoom): readonly PlacedBalloon[] {
   const taken = [...room.obstacles, ...anchors.map(({ x, y }) => ({ x, y, r: 4 }))];
   return anchors.map((anchor) => {
-    const best = candidates(anchor, room).reduce((a, b) => (cost(b, anchor, taken, room) < cost(a, anchor, taken, room) ? b : a));
-    taken.push({ ...best, r: BALLOON_R });
+    const near = taken.filter(({ x, y, r }) => Math.hypot(x - anchor.x, y - anchor.y) < FURTHEST + BALLOON_R + r + GAP);
+    const priced = candidates(anchor, room).map((spot) => ({ ...spot, cost: cost(spot, anchor, near, room) }));
+    const best = priced.reduce((a, b) => (b.cost < a.cost ? b : a));
+    taken.push({ x: best.x, y: best.y, r: BALLOON_R });
     return { ...anchor, balloonX: best.x, balloonY: best.y };
   });
 }

@@ -29,7 +29,7 @@ export interface ExportablePlot {
   exportTable(): PlotTable;
 }
 
-const HEAD_HEIGHT = 44;
+const HEAD_HEIGHT = 58;
 const MARGIN = 12;
 const LINE_END = '\r\n';
 
@@ -37,8 +37,8 @@ export function escapeXml(text: string): string {
   return text.replace(/&/g, '&amp;').replace(/</g, '&lt;').replace(/>/g, '&gt;').replace(/"/g, '&quot;');
 }
 
-function headingLine(heading: PlotHeading): string {
-  return `${heading.subject}; ${heading.state}; ${heading.hash.slice(0, 12)}; ${heading.date}`;
+function stateLine({ state, hash, date }: PlotHeading): string {
+  return [state, hash.slice(0, 12), date].filter((part) => part !== '').join('; ');
 }
 
 /** A self-contained SVG document on white with the heading above the picture; its text stays text. */
@@ -53,23 +53,25 @@ export function plotSvg(picture: PlotPicture, heading: PlotHeading, styles = '')
     `<title>${escapeXml(heading.title)}</title>`,
     `<rect width="${width}" height="${height}" fill="#ffffff"/>`,
     text(MARGIN + 13, "font:600 14px 'Archivo Variable',Archivo,sans-serif;fill:#1c2730", heading.title),
-    text(MARGIN + 30, "font:400 11px 'IBM Plex Mono',monospace;fill:#55606a", headingLine(heading)),
+    text(MARGIN + 30, "font:400 11px 'IBM Plex Mono',monospace;fill:#55606a", heading.subject),
+    text(MARGIN + 45, "font:400 11px 'IBM Plex Mono',monospace;fill:#55606a", stateLine(heading)),
     `<g transform="translate(${MARGIN} ${MARGIN + HEAD_HEIGHT})">${picture.markup}</g>`,
     '</svg>',
   ].join('\n');
 }
 
-/** The table as CSV after RFC 4180, with two lines of heading that start with "#". Numbers are written in full. */
+/** The table as CSV after RFC 4180, with three lines of heading that start with "#". Numbers have twelve digits. */
 export function plotCsv(table: PlotTable, heading: PlotHeading): string {
   const { columns } = table;
   const length = Math.max(0, ...columns.map(({ values }) => values.length));
-  const lines = [`# ${heading.title}`, `# ${headingLine(heading)}`, columns.map(({ head }) => csvField(head)).join(',')];
+  const lines = [`# ${heading.title}`, `# ${heading.subject}`, `# ${stateLine(heading)}`, columns.map(({ head }) => csvField(head)).join(',')];
   for (let i = 0; i < length; i++) lines.push(columns.map(({ values }) => (i < values.length ? csvField(values[i]) : '')).join(','));
   return lines.join(LINE_END) + LINE_END;
 }
 
 function csvField(value: number | string): string {
-  if (typeof value === 'number') return Number.isFinite(value) ? String(value) : '';
+  // Twelve digits are more than any plot shows and fewer than binary noise reaches.
+  if (typeof value === 'number') return Number.isFinite(value) ? String(Number(value.toPrecision(12))) : '';
   return /[",\r\n]/.test(value) ? `"${value.replace(/"/g, '""')}"` : value;
 }
 

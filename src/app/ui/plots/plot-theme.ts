@@ -57,7 +57,7 @@ export class PlotThemes {
   withPrinted<T>(use: (element: HTMLElement) => T, inside: Element = this.document.body): T {
     const element = this.document.createElement('div');
     element.dataset['theme'] = 'light';
-    element.style.cssText = 'position:absolute;visibility:hidden;width:0;height:0;overflow:hidden';
+    element.style.cssText = 'position:absolute;visibility:hidden;width:0;height:0;overflow:hidden;--paper:#ffffff';
     inside.append(element);
     try {
       return use(element);

@@ -19,7 +19,7 @@ const PNG_SCALE = 2;
         <button type="button" [attr.aria-label]="'Save ' + heading().title + ' as ' + format" [disabled]="busy()" (click)="save(format)">{{ format }}</button>
       }
     </span>
-    <span class="told" role="status">{{ told() }}</span>
+    <span class="told" [class.trouble]="failed()" role="status">{{ told() }}</span>
   `,
   styleUrl: './plot-tools.scss',
 })
@@ -30,16 +30,19 @@ export class PlotTools {
   protected readonly formats: readonly PlotFormat[] = ['SVG', 'PNG', 'CSV'];
   protected readonly busy = signal(false);
   protected readonly told = signal('');
+  protected readonly failed = signal(false);
   private readonly document = inject(DOCUMENT);
 
   protected async save(format: PlotFormat): Promise<void> {
     this.busy.set(true);
+    this.failed.set(false);
     this.told.set('');
     try {
       const content = await this.contentOf(format);
       saveFile(this.document, plotFileName(this.heading(), format.toLowerCase()), content);
       this.told.set(`${format} saved`);
     } catch (error) {
+      this.failed.set(true);
       this.told.set(`${format} not saved: ${error instanceof Error ? error.message : String(error)}`);
     } finally {
       this.busy.set(false);

@@ -5,6 +5,7 @@ import { drawnId } from './drawn-id';
 import { hostWidth } from './element-width';
 import type { ExportablePlot, PlotPicture, PlotTable } from './plot-export';
 import { PlotThemes } from './plot-theme';
+import { placeBalloons } from './place-balloons';
 import { polarFrame, polarGrid, polarPath, polarPoint } from './polar-drawing';
 import { svgSnapshot } from './svg-snapshot';
 
@@ -40,11 +41,8 @@ export class PolarPlot implements ExportablePlot {
   protected readonly marks = computed(() => {
     const frame = this.frame();
     if (frame.radius < SMALLEST_WITH_MARKS_PX) return [];
-    return this.figure().marks.map((mark) => {
-      const at = polarPoint(frame, mark.angleDeg, mark.levelDb);
-      const out = polarPoint({ ...frame, radius: 26 }, mark.angleDeg, frame.topDb);
-      return { name: mark.name, x: at.x, y: at.y, balloonX: at.x + out.x - frame.centreX, balloonY: at.y + out.y - frame.centreY };
-    });
+    const anchors = this.figure().marks.map((mark) => ({ name: mark.name, ...polarPoint(frame, mark.angleDeg, mark.levelDb) }));
+    return placeBalloons(anchors, { width: this.width(), height: this.height(), obstacles: [], awayFrom: { x: frame.centreX, y: frame.centreY } });
   });
   protected readonly cursor = computed(() => {
     const angle = this.cursorDeg();

@@ -62,11 +62,13 @@ describe('tile image', () => {
   });
   it('colours a hundred thousand cells well within the time of a first paint', () => {
     const places = square(317);
-    const started = performance.now();
-    const large = rasterOf(places);
     const values = Float32Array.from({ length: 317 * 317 }, (_, i) => i % 360);
-    tileImage(large, values, { map: 'cyclic', from: -180, to: 180 }, { map: colourMap('cyclic', 'light'), block: 1 });
-    // 300 ms are allowed from data to paint; a busy test machine gets the same for this part alone.
-    expect(performance.now() - started).toBeLessThan(300);
+    const times = Array.from({ length: 5 }, () => {
+      const started = performance.now();
+      tileImage(rasterOf(places), values, { map: 'cyclic', from: -180, to: 180 }, { map: colourMap('cyclic', 'light'), block: 1 });
+      return performance.now() - started;
+    });
+    // 300 ms are allowed from data to paint. The best of five is the work itself; the others wait for a busy machine.
+    expect(Math.min(...times)).toBeLessThan(150);
   });
 });

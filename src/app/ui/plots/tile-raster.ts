@@ -63,10 +63,11 @@ export function tileImage(raster: TileRaster, values: ArrayLike<number>, scale: 
   const height = Math.ceil(raster.rows / block);
   const words = new Uint32Array(width * height);
   const valueOf = block === 1 ? singleValue : BLOCK_VALUE[scale.map];
+  const source = { raster, values, turn: scale.to - scale.from };
   for (let y = 0; y < height; y++) {
     const toRow = (height - 1 - y) * width;
     for (let x = 0; x < width; x++) {
-      const value = valueOf({ raster, values, turn: scale.to - scale.from }, x * block, y * block, block);
+      const value = valueOf(source, x * block, y * block, block);
       // Where no cell is, the pixel stays clear.
       if (value === value) words[toRow + x] = map.words[colourIndex(scale, value)];
     }

@@ -9,7 +9,7 @@ describe('cuts on show', () => {
   });
   it('runs along over signed theta with the beam in its place', () => {
     const cut = sampleCut();
-    expect([cut.angleDeg[0], cut.angleDeg[cut.angleDeg.length - 1], cut.beamDeg, cut.angleTitle]).toEqual([-90, 90, 20, 'θ in the plane φ = 0°, °']);
+    expect([cut.angleDeg[0], cut.angleDeg[cut.angleDeg.length - 1], cut.beamDeg, cut.angleTitle]).toEqual([-90, 90, 20, 'θ in the plane φ = 0°, °'].map((value) => (typeof value === 'number' ? expect.closeTo(value, 9) : value)));
   });
   it('runs across over the angle from the beam', () => {
     expect(sampleCut({ ...ALONG, choice: 'across' })).toMatchObject({ beamDeg: 0, angleTitle: 'angle across the beam, °' });
@@ -19,6 +19,11 @@ describe('cuts on show', () => {
     expect(beamDeg).toBeCloseTo((Math.atan(Math.tan((20 * Math.PI) / 180) * Math.SQRT1_2) * 180) / Math.PI, 9);
   });
   it('is not there before it was predicted', () => {
-    expect(shownCut(SAMPLE_PATTERN, { ...ALONG, beam: { thetaDeg: 20, phiDeg: 33 } })).toBeNull();
+    expect(shownCut(SAMPLE_PATTERN, { ...ALONG, choice: 'plane', planePhiDeg: 33 })).toBeNull();
+  });
+  it('lags in azimuth for a moment under its own name', () => {
+    const cut = shownCut(SAMPLE_PATTERN, { ...ALONG, beam: { thetaDeg: 20, phiDeg: 3 } });
+    expect(cut?.angleTitle).toBe('θ in the plane φ = 0°, °');
+    expect(cut?.beamDeg).toBeCloseTo(20, 1);
   });
 });

@@ -1,6 +1,6 @@
 import { wrapDeg } from '../../../../shared/units/angles';
 import type { CutRequest } from '../../../../shared/contracts/predictions';
-import type { LivePrediction, PredictedCut } from '../live-prediction-data';
+import type { LivePrediction } from '../live-prediction-data';
 
 /** Which cut is shown: through the beam along theta, across it, or a plane of one's own. */
 export type CutChoice = 'along' | 'across' | 'plane';
@@ -33,23 +33,22 @@ export function cutRequests({ choice, beam, planePhiDeg }: CutWish): readonly Cu
   return [{ phiDeg: choice === 'along' ? beam.phiDeg : planePhiDeg, thetaDeg: HALF_CIRCLE }];
 }
 
-/** The wished cut from a prediction, or null when the prediction does not hold it yet. */
+/**
+ * The wished cut from a prediction, or null when the prediction does not hold it yet. While a drag turns the beam in azimuth,
+ * an answer may hold the plane that was asked for just before; it is shown for that moment and named by its own azimuth.
+ */
 export function shownCut({ cuts }: LivePrediction, wish: CutWish): ShownCut | null {
-  const cut = cuts.find(({ request }) => fits(request, wish));
+  const cut = cuts.find(({ request }) => fits(request, wish)) ?? (wish.choice === 'along' ? cuts.find(({ request }) => 'phiDeg' in request) : undefined);
   if (!cut) return null;
-  if (wish.choice === 'across') return { ...part(cut, 0, cut.angleDeg.length), beamDeg: 0, angleTitle: 'angle across the beam, °' };
-  const planeDeg = wish.choice === 'along' ? wish.beam.phiDeg : wish.planePhiDeg;
-  const beamDeg = wish.choice === 'along' ? wish.beam.thetaDeg : nearestThetaDeg(wish.beam, planeDeg);
-  return { ...part(cut, 0, cut.angleDeg.length), beamDeg, angleTitle: `θ in the plane φ = ${tidy(planeDeg)}°, °` };
+  const { angleDeg, thetaDeg, phiDeg, gainDbi, request } = cut;
+  const arrays = { angleDeg, thetaDeg, phiDeg, gainDbi };
+  if (!('phiDeg' in request)) return { ...arrays, beamDeg: 0, angleTitle: 'angle across the beam, °' };
+  return { ...arrays, beamDeg: nearestThetaDeg(wish.beam, request.phiDeg), angleTitle: `θ in the plane φ = ${tidy(request.phiDeg)}°, °` };
 }
 
 function fits(request: CutRequest, { choice, beam, planePhiDeg }: CutWish): boolean {
   if (choice === 'across') return 'plane' in request && request.plane === 'across';
   return 'phiDeg' in request && Math.abs(request.phiDeg - (choice === 'along' ? beam.phiDeg : planePhiDeg)) < 1e-9;
-}
-
-function part({ angleDeg, thetaDeg, phiDeg, gainDbi }: PredictedCut, from: number, to: number): Omit<ShownCut, 'beamDeg' | 'angleTitle'> {
-  return { angleDeg: angleDeg.slice(from, to), thetaDeg: thetaDeg.slice(from, to), phiDeg: phiDeg.slice(from, to), gainDbi: gainDbi.slice(from, to) };
 }
 
 /** The signed theta in a plane whose direction lies nearest to the beam: its projection. */

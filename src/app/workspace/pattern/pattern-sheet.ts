@@ -52,7 +52,11 @@ export class PatternSheet {
   protected readonly beamIndex = computed(() => Math.min(this.link().beam, this.design().requirement.beams.length - 1));
   /** The handle stands where the design wants the beam, at once; the pattern follows when it is predicted. */
   protected readonly beam = computed(() => this.design().requirement.beams[this.beamIndex()]);
-  private readonly wish = computed((): CutWish => ({ choice: this.beamIndex() > 0 && this.link().cut === 'across' ? 'along' : this.link().cut, beam: this.beam(), planePhiDeg: this.link().planePhiDeg }));
+  private readonly choice = computed(() => (this.beamIndex() > 0 && this.link().cut === 'across' ? 'along' : this.link().cut));
+  private readonly planePhiDeg = computed(() => this.link().planePhiDeg);
+  private readonly wish = computed((): CutWish => ({ choice: this.choice(), beam: this.beam(), planePhiDeg: this.planePhiDeg() }));
+  /** What was predicted is drawn against the requirement it was predicted for, so a drag redraws once for each answer. */
+  private readonly drawnDesign = computed(() => this.prediction()?.of ?? this.design());
   protected readonly cut = computed(() => {
     const prediction = this.prediction();
     return prediction ? this.cutOf(prediction) : null;
@@ -72,7 +76,7 @@ export class PatternSheet {
   });
   private readonly markers = computed(() => {
     const [cut, found] = [this.cut(), this.found()];
-    return cut && found ? markersOf({ cut, found, design: this.design(), ownDeg: this.link().marksDeg }) : [];
+    return cut && found ? markersOf({ cut, found, design: this.drawnDesign(), ownDeg: this.link().marksDeg }) : [];
   });
   protected readonly rows = computed(() => markerRows(this.markers()));
   protected readonly delta = computed(() => deltaText(this.markers()));
@@ -81,7 +85,7 @@ export class PatternSheet {
     if (!cut || !found) return null;
     const marks = this.markers().map(({ name, angleDeg, levelDbi }) => ({ name, angleDeg, levelDb: levelDbi }));
     const parent = link.show.parent ? this.parentCut() : null;
-    return patternCutFigure({ title: this.cutTitle(), cut, design: this.design(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, withMask: link.show.mask, marks });
+    return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, withMask: link.show.mask, marks });
   });
   private readonly parentCut = computed(() => {
     const parent = this.state.parentPrediction();
@@ -90,11 +94,11 @@ export class PatternSheet {
     if (!parent || !cut || number === undefined) return null;
     const beams = parent.of.requirement.beams;
     const own = beams[Math.min(this.beamIndex(), beams.length - 1)];
-    const peak = cutMarkers({ label: '', angleDeg: cut.angleDeg, levelDb: cut.gainDbi }, this.wish().choice === 'across' ? 0 : own.thetaDeg);
+    const peak = cutMarkers({ label: '', angleDeg: cut.angleDeg, levelDb: cut.gainDbi }, cut.beamDeg);
     return peak ? { label: `revision ${number}, beam at ${numberText(own.thetaDeg, 1)}°`, cut, peakDbi: peak.peak.levelDb } : null;
   });
   protected readonly cutTitle = computed(() => {
-    const { choice, planePhiDeg } = this.wish();
+    const [choice, planePhiDeg] = [this.choice(), this.planePhiDeg()];
     return choice === 'along' ? 'Cut along the beam' : choice === 'across' ? 'Cut across the beam' : `Cut in the plane φ = ${numberText(planePhiDeg, 1)}°`;
   });
   protected readonly cutLine = computed(() => {
@@ -106,12 +110,12 @@ export class PatternSheet {
   /** Lobes are told against the lobe of the first wanted beam. */
   protected readonly lobes = computed(() => {
     const prediction = this.prediction();
-    return prediction ? lobeRows(prediction.head.figures, this.design(), this.beamPeakDbi(prediction)) : [];
+    return prediction ? lobeRows(prediction.head.figures, prediction.of, this.beamPeakDbi(prediction)) : [];
   });
   protected readonly letteredLobes = computed(() => (this.link().show.lobes ? this.lobes() : []));
   protected readonly marked = computed(() => {
     const prediction = this.prediction();
-    return prediction ? markedDirections(prediction.head.figures, this.design(), { specular: this.link().show.specular, beam: this.beamIndex() }) : [];
+    return prediction ? markedDirections(prediction.head.figures, prediction.of, { specular: this.link().show.specular, beam: this.beamIndex() }) : [];
   });
   protected readonly notes = computed(() => patternNotes(this.prediction()));
   protected readonly cutHeading = computed(() => this.headingOf(this.cutTitle()));
@@ -161,10 +165,8 @@ export class PatternSheet {
   }
 
   private cutOf(prediction: LivePrediction): ShownCut | null {
-    const wish = this.wish();
-    // While a drag turns the beam in azimuth, the last answer still holds the plane that was asked for before.
-    const beams = prediction.of.requirement.beams;
-    return shownCut(prediction, wish) ?? shownCut(prediction, { ...wish, beam: beams[Math.min(this.beamIndex(), beams.length - 1)] });
+    const { beams } = prediction.of.requirement;
+    return shownCut(prediction, { choice: this.choice(), planePhiDeg: this.planePhiDeg(), beam: beams[Math.min(this.beamIndex(), beams.length - 1)] });
   }
 
   private beamPeakDbi(prediction: LivePrediction): number {
