@@ -1,5 +1,6 @@
-import type { Warning } from '../model/figures';
+import type { NoFigure, Warning } from '../model/figures';
 import { hornAxis } from './horn-field';
+import { noFigure } from './no-figure';
 import { outlineBounds, rowIntervals } from './outline';
 import type { SiDesign, SiHorn, SiOutline } from './si-design';
 
@@ -9,9 +10,21 @@ export function illuminationWarnings(si: SiDesign, litCount: number): Warning[] 
   return [...sideWarning(si.illumination, si.operation), ...aimWarning(si.illumination, si.panel.outline, litCount)];
 }
 
+/**
+ * Why no line of the requirement can be judged: the model reckons only with what reaches a cell, so it gives figures for
+ * a horn on the side from which the panel cannot work, too.
+ */
+export function wrongSide(si: SiDesign): NoFigure | undefined {
+  if (si.illumination.kind !== 'horn' || isOnItsSide(si.illumination, si.operation)) return undefined;
+  return noFigure('behind-panel', si.operation === 'reflect' ? 'the horn stands behind a reflecting panel' : 'the horn stands in front of a transmitting panel');
+}
+
+function isOnItsSide(horn: SiHorn, operation: SiDesign['operation']): boolean {
+  return horn.position.zM > 0 === (operation === 'reflect');
+}
+
 function sideWarning(horn: SiHorn, operation: SiDesign['operation']): Warning[] {
-  const inFront = horn.position.zM > 0;
-  if (inFront === (operation === 'reflect')) return [];
+  if (isOnItsSide(horn, operation)) return [];
   const zMm = horn.position.zM * 1000;
   return [
     {

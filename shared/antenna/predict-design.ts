@@ -3,6 +3,7 @@ import type { Figures, Verdict, Warning } from '../model/figures';
 import { cellArrays, type CellArrays } from './cell-arrays';
 import { designFigures } from './design-figures';
 import { designWarnings } from './design-warnings';
+import { wrongSide } from './illumination-warnings';
 import { patternCut, type Cut, type CutRequest } from './pattern-cut';
 import { placeCells, type PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
@@ -53,7 +54,7 @@ export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: P
   const beam = si.beams[0].direction;
   return {
     figures,
-    verdicts: requirementVerdicts(design.requirement, figures),
+    verdicts: requirementVerdicts(design.requirement, figures, wrongSide(si)),
     warnings: designWarnings({
       design,
       si,

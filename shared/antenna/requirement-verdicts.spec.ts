@@ -1,5 +1,5 @@
 import type { Figures } from '../model/figures';
-import { EXAMPLE_DESIGN } from './example-design';
+import { EXAMPLE_DESIGN, exampleDesign } from './example-design';
 import { predictDesign } from './predict-design';
 import { requirementVerdicts } from './requirement-verdicts';
 
@@ -29,6 +29,21 @@ describe('verdicts', () => {
     const maskMargin: Figures['maskMargin'] = { marginDb: -1.5, thetaDeg: 3, phiDeg: 0 };
     const [mask] = requirementVerdicts({ ...requirement, mask: { kind: 'published', id: 'x' } }, { ...figures, maskMargin });
     expect(mask).toEqual({ line: 'mask', sense: 'at-least', limit: 0, unit: 'dB', value: -1.5, margin: -1.5, verdict: 'falls-short' });
+  });
+
+  it.each(['reflect', 'transmit'] as const)('judge nothing of a panel to %s whose horn stands on the wrong side', (operation) => {
+    const { illumination, panel } = EXAMPLE_DESIGN;
+    if (illumination.kind !== 'horn') throw new Error('the example has a horn');
+    const [x, y, z] = illumination.positionMm;
+    const design = exampleDesign({
+      requirement: { ...requirement, minGainDbi: 0, maxSidelobeDb: 0, pointingToleranceDeg: 90 },
+      panel: { ...panel, operation },
+      illumination: { ...illumination, positionMm: [x, y, operation === 'reflect' ? -z : z] },
+    });
+    const { verdicts } = predictDesign(design, { include: {} });
+    const reason = operation === 'reflect' ? 'the horn stands behind a reflecting panel' : 'the horn stands in front of a transmitting panel';
+    expect(verdicts.map(({ verdict }) => verdict)).toEqual(['not-evaluated', 'not-evaluated', 'not-evaluated']);
+    expect(verdicts[0]).toMatchObject({ value: { kind: 'behind-panel' }, margin: { kind: 'behind-panel' }, reason });
   });
 
   it('never call "meets" what was not evaluated, and say why', () => {

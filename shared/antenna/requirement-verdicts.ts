@@ -1,5 +1,5 @@
 import type { Requirement } from '../model/design-document';
-import type { Figure, Figures, Verdict } from '../model/figures';
+import type { Figure, Figures, NoFigure, Verdict } from '../model/figures';
 import { isNumber, noFigure } from './no-figure';
 
 interface Line {
@@ -11,13 +11,14 @@ interface Line {
 }
 
 /**
- * Each line of the requirement that was given, against the prediction. What cannot be computed is never "meets".
+ * Each line of the requirement that was given, against the prediction. What cannot be computed is never "meets", nor is
+ * anything where an obstacle keeps the figures from meaning this panel.
  */
-export function requirementVerdicts(requirement: Requirement, figures: Figures): Verdict[] {
+export function requirementVerdicts(requirement: Requirement, figures: Figures, obstacle?: NoFigure): Verdict[] {
   const lines: Line[] = [];
   const { minGainDbi, maxSidelobeDb, pointingToleranceDeg, minCrossPolarDiscriminationDb, mask } = requirement;
   const add = (line: Verdict['line'], sense: Verdict['sense'], limit: number | undefined, unit: string): void => {
-    if (limit !== undefined) lines.push({ line, sense, limit, unit, value: figureOfLine(line, figures) });
+    if (limit !== undefined) lines.push({ line, sense, limit, unit, value: obstacle ?? figureOfLine(line, figures) });
   };
   add('gain', 'at-least', minGainDbi, 'dBi');
   add('sidelobe', 'at-most', maxSidelobeDb, 'dB');
