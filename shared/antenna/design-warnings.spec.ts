@@ -36,7 +36,7 @@ describe('warnings', () => {
     expect(find(warnings(steep, 9.5), 'evanescent-beam')).toMatchObject({ severity: 'serious', numbers: { count: 400, cellCount: 400 } });
   });
 
-  it('tell of an image lobe stronger than the beam: one bit, 40 degrees, a plane wave', () => {
+  it('tell of an image lobe as strong as the beam: one bit, 40 degrees, a plane wave from straight above', () => {
     const design = planeWaveDesign({
       requirement: { ...requirement, beams: [{ thetaDeg: 40, phiDeg: 0 }] },
       cells: { kind: 'ideal', levels: 2 },
@@ -44,7 +44,19 @@ describe('warnings', () => {
     });
     const warning = find(warnings(design), 'image-lobe');
     expect(warning?.severity).toBe('serious');
-    expect(warning?.numbers['levelDb']).toBeGreaterThan(0);
+    expect(warning?.numbers['levelDb']).toBeCloseTo(0, 6);
+    expect(warning?.message).toContain('is as strong as the wanted beam');
+  });
+
+  it('tell by how much another lobe is stronger than the beam', () => {
+    // 0.8 wavelengths at 48.59 degrees: the grating lobe stands at 30 degrees, where the element gives more.
+    const design = planeWaveDesign({
+      requirement: { ...requirement, beams: [{ thetaDeg: 48.59, phiDeg: 0 }] },
+      panel: { ...panel, lattice: { kind: 'rectangular', periodXMm: 23.983, periodYMm: 15 } },
+    });
+    const warning = find(warnings(design), 'image-lobe');
+    expect(warning?.numbers).toMatchObject({ levelDb: expect.closeTo(1.1644, 1), thetaDeg: expect.closeTo(30, 0) });
+    expect(warning?.message).toMatch(/is 1\.\d\d dB stronger than the wanted beam/);
   });
 
   it('tell of a horn on the wrong side, either way', () => {

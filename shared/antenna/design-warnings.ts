@@ -24,15 +24,18 @@ export function designWarnings(facts: DesignFacts): Warning[] {
   return warnings.sort((a, b) => RANK[a.severity] - RANK[b.severity]);
 }
 
+/** A lobe this little below the beam is as strong as it: less is not told from rounding. */
+const AS_STRONG_DB = 0.005;
+
 function imageLobeWarning({ sidelobeDb: { hemisphere } }: Figures): Warning[] {
-  if (!('levelDb' in hemisphere) || typeof hemisphere.levelDb !== 'number' || hemisphere.levelDb <= 0) return [];
+  if (!('levelDb' in hemisphere) || typeof hemisphere.levelDb !== 'number' || hemisphere.levelDb < -AS_STRONG_DB) return [];
   const { levelDb, thetaDeg, phiDeg } = hemisphere as { levelDb: number; thetaDeg: number; phiDeg: number };
   return [
     {
       code: 'image-lobe',
       pointer: '#/requirement/beams/0',
       severity: 'serious',
-      message: `A lobe at theta ${thetaDeg.toFixed(1)}, phi ${phiDeg.toFixed(1)} deg is ${levelDb.toFixed(2)} dB stronger than the wanted beam.`,
+      message: `A lobe at theta ${thetaDeg.toFixed(1)}, phi ${phiDeg.toFixed(1)} deg is ${levelDb < AS_STRONG_DB ? 'as strong as' : `${levelDb.toFixed(2)} dB stronger than`} the wanted beam.`,
       numbers: { levelDb, thetaDeg, phiDeg },
     },
   ];

@@ -51,8 +51,8 @@ function cellPeriodWarning({ si, wavelengthM, maxIncidenceRad }: LatticeFacts): 
       pointer: '#/panel/lattice',
       severity: 'warn',
       message:
-        `At the largest angle of incidence, ${maxIncidenceDeg.toFixed(1)} deg, cells ${spacingMm.toFixed(3)} mm apart scatter into a second order; ` +
-        `below lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm they do not.`,
+        `At the largest angle of incidence, ${maxIncidenceDeg.toFixed(1)} deg, cells ${spacingMm.toFixed(3)} mm apart can scatter into a second order; ` +
+        `below lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm they cannot, whatever the azimuth.`,
       numbers: { spacingMm, limitMm, maxIncidenceDeg },
     },
   ];
