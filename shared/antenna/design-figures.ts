@@ -22,7 +22,8 @@ export function designFigures(state: IlluminatedState): DesignFigures {
   const beams = si.beams.map((beam) => beam.direction);
   const orders = beams.map((beam) => gratingLobes(si.panel.lattice, beam, wavelengthM));
   const maxIncidence = maxIncidenceRad(light);
-  const { mask } = placed.design.requirement;
+  // The wanted directions as written, not as they come back from direction cosines.
+  const { mask, beams: wanted } = placed.design.requirement;
   const radiates = pattern.radiatedPower > 0;
   const { peakUncertaintyDeg, ...read } = radiates ? patternFigures({ pattern, beams, mask, gainOffsetDb: state.gainOffsetDb }) : darkFigures(state);
   const figures: Figures = {
@@ -34,6 +35,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     gratingLobes: orders.flatMap((order) => order.lobes),
     edgeTaperDb: edgeTaperDb(si.illumination, si.panel, lattice),
     ...read,
+    beams: read.beams.map((found, i) => ({ ...found, thetaDeg: wanted[i].thetaDeg, phiDeg: wanted[i].phiDeg })),
     spilloverDb: state.spilloverDb,
     ...losses,
     apertureEfficiency: apertureEfficiency(read.gainDbi, lattice.count * lattice.cellAreaM2, wavelengthM),
