@@ -24,6 +24,9 @@ const question = { design: STARTING_DESIGN } as const;
 const settle = (): Promise<void> => new Promise((resolve) => setImmediate(resolve));
 const engineWith = (runner: PredictionRunner): PredictionEngine => new PredictionEngine(runner, limitsFor(1));
 
+/** Whole predictions, on a machine that may be busy. */
+jest.setTimeout(30_000);
+
 describe('PredictionEngine', () => {
   it('gives the figures, and arrays only where asked for', async () => {
     const engine = engineWith(createInlineRunner());

@@ -46,6 +46,9 @@ const small: DesignDocument = { ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.
 
 const settle = (): Promise<void> => new Promise((resolve) => setImmediate(resolve));
 
+/** Whole predictions, on a machine that may be busy. */
+jest.setTimeout(30_000);
+
 describe('PredictionService', () => {
   it('reads an edition once and hands the same shared memory to every task', async () => {
     const runner = new WatchedRunner();

@@ -18,6 +18,9 @@ const steered = (thetaDeg: number, phiDeg = 0): DesignDocument => ({
 
 type ComparedCells = Extract<Comparison['cells'], { arrays: object }>;
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 describe('comparisons', () => {
   let api: Api;
   let designer: ApiClient;

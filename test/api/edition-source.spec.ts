@@ -5,6 +5,9 @@ import { InMemoryEditionSource } from '../../server/predictions/in-memory-editio
 import { Api } from '../support/api';
 import { acceptedEdition, publishedEdition } from '../support/published-edition';
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 interface Sourced {
   readonly source: EditionSource;
   readonly teamId: string;

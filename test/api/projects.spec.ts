@@ -15,6 +15,9 @@ const steered = (thetaDeg: number): DesignDocument => ({
   requirement: { ...STARTING_DESIGN.requirement, beams: [{ thetaDeg, phiDeg: 0 }] },
 });
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 describe('projects and panels', () => {
   let api: Api;
   let designer: ApiClient;
