@@ -1,5 +1,6 @@
 import type { QualityFinding, QualityVerdict } from '../model/cell-family';
 import { degFromRad, wrapRad } from '../units/angles';
+import { degreesText } from './angle-text';
 import { curvePlaces, inGHz, inWords, pointIndex, termAt } from './cell-quality-subject';
 import type { CurvePlace, JudgedTerm, QualitySubject } from './cell-quality-subject';
 
@@ -83,7 +84,7 @@ export function checkPhaseJumps(subject: QualitySubject): QualityFinding[] {
     const { standOffDeg, allowanceDeg, place, term, step } = odd;
     const verdict = standOffDeg > allowanceDeg ? 'fail' : standOffDeg > PHASE_JUMP_WARN_SHARE * allowanceDeg ? 'warn' : 'pass';
     const where = `${inGHz(edition.responses.frequenciesHz[step.frequency])} (${term.name}, ${inWords(edition, place)})`;
-    const detail = `Oddest phase step ${degFromRad(step.stepRad).toFixed(1)} deg at ${where}: ${standOffDeg.toFixed(1)} deg beyond the steps beside it, ${allowanceDeg.toFixed(1)} deg allowed`;
+    const detail = `Oddest phase step ${degreesText(degFromRad(step.stepRad))} at ${where}: ${degreesText(standOffDeg)} beyond the steps beside it, ${degreesText(allowanceDeg)} allowed`;
     return [{ check: 'phase-jump', verdict, detail, cellId: cell.id, value: standOffDeg, limit: allowanceDeg }];
   });
 }
@@ -106,7 +107,7 @@ export function checkPhaseSlope(subject: QualitySubject): QualityFinding[] {
       }
     if (highest.text === '') return [];
     const verdict: QualityVerdict = highest.changeDeg > RISING_PHASE_DEG ? 'fail' : 'pass';
-    const detail = `The phase changes by at most ${highest.changeDeg.toFixed(1)} deg across the given band (${highest.text}); it must fall`;
+    const detail = `The phase changes by at most ${degreesText(highest.changeDeg)} across the given band (${highest.text}); it must fall`;
     return [{ check: 'phase-slope', verdict, detail, cellId: cell.id, value: highest.changeDeg, limit: RISING_PHASE_DEG }];
   });
   return [...findings, familySlope(curves, rising, subject)];

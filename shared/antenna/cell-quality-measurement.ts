@@ -3,6 +3,7 @@ import type { QualityFinding } from '../model/cell-family';
 import { degFromRad, wrapRad } from '../units/angles';
 import { SPEED_OF_LIGHT_M_PER_S } from '../units/constants';
 import { amplitudeRatioToDb } from '../units/decibels';
+import { degreesText } from './angle-text';
 import { groundedSlabReflection } from './grid-model';
 import { curvePlaces, inGHz, pointIndex, termAt } from './cell-quality-subject';
 import type { CurvePlace, JudgedTerm, QualitySubject } from './cell-quality-subject';
@@ -72,7 +73,7 @@ export function checkReferencePlane(subject: QualitySubject): QualityFinding[] {
   const deg = degFromRad(lagRad);
   const isOff = Math.abs(deg) > REFERENCE_PLANE_WARN_DEG;
   const side = offsetMm > 0 ? 'above' : 'below';
-  const detail = `The smallest patch (${edition.cells[cell].id}) lags the bare slab by ${deg.toFixed(1)} deg at ${inGHz(frequencyHz)}`;
+  const detail = `The smallest patch (${edition.cells[cell].id}) lags the bare slab by ${degreesText(deg)} at ${inGHz(frequencyHz)}`;
   const meaning = isOff ? `: the reference plane seems to lie ${Math.abs(offsetMm).toFixed(2)} mm ${side} the patches` : '';
   return [{ check: 'reference-plane', verdict: isOff ? 'warn' : 'pass', detail: `${detail}${meaning}`, value: deg, limit: REFERENCE_PLANE_WARN_DEG }];
 }

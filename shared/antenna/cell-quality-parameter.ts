@@ -2,6 +2,7 @@ import { median } from '../math/statistics';
 import { unwrapPhasesRad } from '../math/unwrap-phase';
 import type { QualityFinding, QualityVerdict } from '../model/cell-family';
 import { degFromRad, positiveDeg, wrapRad } from '../units/angles';
+import { degreesText } from './angle-text';
 import { inGHz, inWords, pointIndex, termAt } from './cell-quality-subject';
 import type { JudgedTerm, QualitySubject } from './cell-quality-subject';
 
@@ -81,14 +82,14 @@ export function checkPhaseRange(subject: QualitySubject): QualityFinding[] {
     {
       check: 'phase-range',
       verdict: least.rangeDeg < PHASE_RANGE_FAIL_DEG ? 'fail' : least.rangeDeg < PHASE_RANGE_WARN_DEG ? 'warn' : 'pass',
-      detail: `Phase range ${first.rangeDeg.toFixed(1)} deg at ${at} (${first.text}); least ${least.rangeDeg.toFixed(1)} deg (${least.text})`,
+      detail: `Phase range ${degreesText(first.rangeDeg)} at ${at} (${first.text}); least ${degreesText(least.rangeDeg)} (${least.text})`,
       value: least.rangeDeg,
       limit: PHASE_RANGE_WARN_DEG,
     },
     {
       check: 'largest-gap',
       verdict: widest.gapDeg > LARGEST_GAP_FAIL_DEG ? 'fail' : widest.gapDeg > LARGEST_GAP_WARN_DEG ? 'warn' : 'pass',
-      detail: `Largest gap between phases ${first.gapDeg.toFixed(1)} deg at ${at} (${first.text}); widest ${widest.gapDeg.toFixed(1)} deg (${widest.text})`,
+      detail: `Largest gap between phases ${degreesText(first.gapDeg)} at ${at} (${first.text}); widest ${degreesText(widest.gapDeg)} (${widest.text})`,
       value: widest.gapDeg,
       limit: LARGEST_GAP_WARN_DEG,
     },
@@ -121,7 +122,7 @@ export function checkOutliers(subject: QualitySubject): QualityFinding[] {
     const { deg, text } = worst[index];
     if (deg < 0) return { check: 'outlier', verdict: 'not-evaluated', detail: 'The cell has no neighbours on both sides in any parameter', cellId: cell.id };
     const verdict: QualityVerdict = deg > OUTLIER_FAIL_DEG ? 'fail' : deg > OUTLIER_WARN_DEG ? 'warn' : 'pass';
-    const detail = deg === 0 ? 'Its phases lie between those of the neighbours in size' : `Over the band its phase lies ${deg.toFixed(1)} deg outside those of the neighbours in size (${text})`;
+    const detail = deg === 0 ? 'Its phases lie between those of the neighbours in size' : `Over the band its phase lies ${degreesText(deg)} outside those of the neighbours in size (${text})`;
     return { check: 'outlier', verdict, detail, cellId: cell.id, value: deg, limit: OUTLIER_FAIL_DEG };
   });
 }

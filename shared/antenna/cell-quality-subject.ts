@@ -88,7 +88,7 @@ export function inGHz(frequencyHz: number): string {
 /** An incidence for a sentence. */
 export function inWords({ responses }: CellEdition, place: { readonly theta: number; readonly phi: number }): string {
   const [theta, phi] = [responses.thetasRad[place.theta], responses.phisRad[place.phi]].map((rad) => Number(degFromRad(rad).toFixed(2)));
-  return `theta ${theta} deg, phi ${phi} deg`;
+  return `θ ${theta}°, φ ${phi}°`;
 }
 
 function excludedPoints(edition: CellEdition): Uint8Array {

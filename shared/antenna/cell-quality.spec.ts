@@ -107,7 +107,7 @@ describe('judging a clean edition', () => {
     const report = judgeEdition(sample({ thetasDeg: [0, 30], description: { ports: 'te-and-tm' } }));
     expect(troubled(report, 'fail')).toEqual([]);
     expect(findings(report, 'phase-slope').find(({ cellId }) => cellId === undefined)?.detail).toBe('The phase rises with frequency on 0 of 60 curves');
-    expect(findings(report, 'coverage')[0].detail).toMatch(/2 x 1 incidences up to theta 30 deg, phi 0 deg/);
+    expect(findings(report, 'coverage')[0].detail).toMatch(/2 x 1 incidences up to θ 30°, φ 0°/);
   });
 });
 

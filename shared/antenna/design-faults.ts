@@ -25,7 +25,7 @@ function requirementFaults({ requirement }: DesignDocument): DesignFault[] {
   if (requirement.mask?.kind === 'custom') {
     requirement.mask.points.forEach(([angle], i, points) => {
       if (i > 0 && angle <= points[i - 1][0]) {
-        faults.push({ pointer: `#/requirement/mask/points/${i}/0`, detail: `angles must rise; got ${angle} after ${points[i - 1][0]} deg` });
+        faults.push({ pointer: `#/requirement/mask/points/${i}/0`, detail: `angles must rise; got ${angle} after ${points[i - 1][0]}°` });
       }
     });
   }

@@ -16,11 +16,12 @@ const withHorn = (changes: Partial<NonNullable<typeof horn>>): DesignDocument =>
 };
 
 describe('warnings', () => {
-  it('tell of the grating lobe, with the lattice and its limit lambda / (1 + sin theta)', () => {
+  it('tell of the grating lobe, with the lattice and its limit λ / (1 + sin θ)', () => {
     const design = planeWaveDesign({ panel: { ...panel, lattice: { kind: 'rectangular', periodXMm: 25, periodYMm: 15 } } });
     const warning = find(warnings(design), 'grating-lobe');
     expect(warning).toMatchObject({ pointer: '#/panel/lattice', severity: 'warn', numbers: { count: 1, spacingMm: expect.closeTo(25, 6), limitMm: expect.closeTo(29.9792458 / (1 + Math.sin(Math.PI / 9)), 6) } });
     expect(warning?.message).toContain('25.000 mm');
+    expect(warning?.message).toContain('a beam at θ 20.0° has no grating lobe only below λ / (1 + sin θ) = 22.339 mm');
     expect(find(warnings(planeWaveDesign()), 'grating-lobe')).toBeUndefined();
   });
 

@@ -1,5 +1,6 @@
 import type { DesignDocument } from '../model/design-document';
 import type { Figures, Warning } from '../model/figures';
+import { directionText } from './angle-text';
 import { illuminationWarnings } from './illumination-warnings';
 import { latticeWarnings, type LatticeFacts } from './lattice-warnings';
 
@@ -35,7 +36,7 @@ function imageLobeWarning({ sidelobeDb: { hemisphere } }: Figures): Warning[] {
       code: 'image-lobe',
       pointer: '#/requirement/beams/0',
       severity: 'serious',
-      message: `A lobe at theta ${thetaDeg.toFixed(1)}, phi ${phiDeg.toFixed(1)} deg is ${levelDb < AS_STRONG_DB ? 'as strong as' : `${levelDb.toFixed(2)} dB stronger than`} the wanted beam.`,
+      message: `A lobe at ${directionText(thetaDeg, phiDeg)} is ${levelDb < AS_STRONG_DB ? 'as strong as' : `${levelDb.toFixed(2)} dB stronger than`} the wanted beam.`,
       numbers: { levelDb, thetaDeg, phiDeg },
     },
   ];

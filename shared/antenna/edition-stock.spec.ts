@@ -82,7 +82,7 @@ describe('what an edition does not cover', () => {
     const normal = described({}, { ...EXAMPLE_GRID, thetasDeg: [0], phisDeg: [0] });
     const warning = find(predict(withEdition(), normal), 'incidence-not-covered');
     expect(warning).toMatchObject({ severity: 'serious', numbers: { cells: 400, coveredDeg: 0, largestDeg: expect.closeTo(49.7, 1) } });
-    expect(warning?.message).toContain('described at 0.0 deg only, but used up to 49.7 deg');
+    expect(warning?.message).toContain('described at 0.0° only, but used up to 49.7° of incidence');
   });
 
   it('is nothing when the table reaches far enough', () => {

@@ -1,5 +1,6 @@
 import type { Warning } from '../model/figures';
 import { degFromRad } from '../units/angles';
+import { degreesText } from './angle-text';
 import type { CellAssignment } from './cell-stock';
 import type { EditionSite } from './edition-stock';
 import { regionFilter } from './excluded-regions';
@@ -50,14 +51,14 @@ function incidenceWarning({ edition, light }: EditionSite): Warning[] {
   const coveredDeg = degFromRad(largestThetaRad);
   const fromDeg = degFromRad(smallestThetaRad);
   const largestDeg = degFromRad(largest);
-  const covered = largestThetaRad === smallestThetaRad ? `at ${coveredDeg.toFixed(1)} deg only` : `from ${fromDeg.toFixed(1)} to ${coveredDeg.toFixed(1)} deg`;
+  const covered = largestThetaRad === smallestThetaRad ? `at ${degreesText(coveredDeg)} only` : `from ${degreesText(fromDeg)} to ${degreesText(coveredDeg)}`;
   return [
     {
       code: 'incidence-not-covered',
       pointer: '#/illumination',
       severity: largestDeg - coveredDeg > 20 ? 'serious' : 'warn',
       message:
-        `The cells are described ${covered}, but used up to ${largestDeg.toFixed(1)} deg of incidence: ` +
+        `The cells are described ${covered}, but used up to ${degreesText(largestDeg)} of incidence: ` +
         `at ${beyond} of ${light.incidenceRad.length} cells the response of the nearest angle stands in.`,
       numbers: { cells: beyond, largestDeg, coveredDeg, coveredFromDeg: fromDeg },
     },

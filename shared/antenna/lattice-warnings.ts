@@ -1,5 +1,6 @@
 import type { Figures, Warning } from '../model/figures';
 import { degFromRad } from '../units/angles';
+import { degreesText, directionText } from './angle-text';
 import { shortestReciprocalPerM } from './grating-lobes';
 import type { SiDesign } from './si-design';
 
@@ -25,15 +26,15 @@ function gratingLobeWarning({ si, wavelengthM, gratingLobeCount, figures }: Latt
   const limitMm = mm(wavelengthM / (1 + sine));
   const spacingMm = mm(1 / shortestReciprocalPerM(si.panel.lattice));
   const [lobe] = figures.gratingLobes;
-  const where = `theta ${lobe.thetaDeg.toFixed(1)}, phi ${lobe.phiDeg.toFixed(1)} deg`;
+  const where = directionText(lobe.thetaDeg, lobe.phiDeg);
   return [
     {
       code: 'grating-lobe',
       pointer: '#/panel/lattice',
       severity: 'warn',
       message:
-        `The lattice repeats every ${spacingMm.toFixed(3)} mm; a beam at ${degFromRad(Math.asin(Math.min(1, sine))).toFixed(1)} deg has no grating lobe only below ` +
-        `lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm. ${gratingLobeCount === 1 ? 'One stands' : `${gratingLobeCount} stand, the first`} at ${where}.`,
+        `The lattice repeats every ${spacingMm.toFixed(3)} mm; a beam at θ ${degreesText(degFromRad(Math.asin(Math.min(1, sine))))} has no grating lobe only below ` +
+        `λ / (1 + sin θ) = ${limitMm.toFixed(3)} mm. ${gratingLobeCount === 1 ? 'One stands' : `${gratingLobeCount} stand, the first`} at ${where}.`,
       numbers: { count: gratingLobeCount, spacingMm, limitMm, thetaDeg: lobe.thetaDeg, phiDeg: lobe.phiDeg },
     },
   ];
@@ -51,8 +52,8 @@ function cellPeriodWarning({ si, wavelengthM, maxIncidenceRad }: LatticeFacts): 
       pointer: '#/panel/lattice',
       severity: 'warn',
       message:
-        `At the largest angle of incidence, ${maxIncidenceDeg.toFixed(1)} deg, cells ${spacingMm.toFixed(3)} mm apart can scatter into a second order; ` +
-        `below lambda / (1 + sin theta) = ${limitMm.toFixed(3)} mm they cannot, whatever the azimuth.`,
+        `At the largest angle of incidence, ${degreesText(maxIncidenceDeg)}, cells ${spacingMm.toFixed(3)} mm apart can scatter into a second order; ` +
+        `below λ / (1 + sin θ) = ${limitMm.toFixed(3)} mm they cannot, whatever the azimuth.`,
       numbers: { spacingMm, limitMm, maxIncidenceDeg },
     },
   ];

@@ -22,7 +22,7 @@ export function requirementVerdicts(requirement: Requirement, figures: Figures, 
   };
   add('gain', 'at-least', minGainDbi, 'dBi');
   add('sidelobe', 'at-most', maxSidelobeDb, 'dB');
-  add('pointing', 'at-most', pointingToleranceDeg, 'deg');
+  add('pointing', 'at-most', pointingToleranceDeg, '°');
   add('mask', 'at-least', mask === undefined ? undefined : 0, 'dB');
   add('cross-polar', 'at-least', minCrossPolarDiscriminationDb, 'dB');
   return lines.map(judge);

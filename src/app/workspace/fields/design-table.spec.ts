@@ -87,7 +87,7 @@ describe('DesignTable', () => {
     await press('Paste rows');
     await pasteText('9\t21\n3\t10');
     await press('Use 2 rows');
-    expect(element.textContent).toContain('angles must rise; got 3 after 9 deg');
+    expect(element.textContent).toContain('angles must rise; got 3 after 9°');
     expect(element.querySelector('textarea')?.value).toBe('9\t21\n3\t10');
     expect(points()).toEqual([[5, 20], [10, 12]]);
   });
