@@ -17,6 +17,9 @@ function cutOffAfter(count: number, revisions: RevisionService): RevisionService
   return Object.assign(Object.create(revisions) as RevisionService, { freeze });
 }
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 describe('the demonstration project', () => {
   let api: Api;
   let designer: ApiClient;

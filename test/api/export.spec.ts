@@ -36,6 +36,9 @@ async function unpack(bytes: Uint8Array, folder: string): Promise<void> {
   }
 }
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 describe('export', () => {
   let api: Api;
   let designer: ApiClient;

@@ -48,6 +48,9 @@ class HeldRunner implements PredictionRunner {
 
 const pause = (): Promise<void> => new Promise((resolve) => setTimeout(resolve, 10));
 
+/** Predictions run in the test's own thread here, several to a test. */
+jest.setTimeout(30_000);
+
 describe('predictions', () => {
   let api: Api;
   let designer: ApiClient;
