@@ -1,5 +1,5 @@
 import type { Figure, Figures } from '../model/figures';
-import { degFromRad } from '../units/angles';
+import { degFromRad, radFromDeg } from '../units/angles';
 import { dbToPowerRatio } from '../units/decibels';
 import { edgeTaperDb, maxIncidenceRad } from './aperture-figures';
 import { gratingLobes } from './grating-lobes';
@@ -40,7 +40,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     ...losses,
     apertureEfficiency: apertureEfficiency(read.gainDbi, lattice.count * lattice.cellAreaM2, wavelengthM),
     referencePhaseDeg: degFromRad(placed.referencePhaseRad),
-    uncertainty: radiates ? uncertainties(state, peakUncertaintyDeg) : {},
+    uncertainty: radiates ? uncertainties(state, read.peakThetaDeg, peakUncertaintyDeg) : {},
   };
   return { figures, gratingLobeCount: orders.reduce((sum, order) => sum + order.count, 0), maxIncidence };
 }
@@ -55,18 +55,19 @@ function apertureEfficiency(gainDbi: Figure, areaM2: number, wavelengthM: number
  * the far field, 1e-8 of the field up to 256 cells a side and 1e-7 beyond. Beamwidths and
  * cut sidelobes: the tolerances of the bisection and of the golden-section search.
  */
-function uncertainties(state: IlluminatedState, peakUncertaintyDeg: number): Record<string, number> {
+function uncertainties(state: IlluminatedState, peakThetaDeg: Figure, peakUncertaintyDeg: number): Record<string, number> {
   const { columnCount, rowCount } = state.placed.lattice.grid;
   const directivityDb = 8.7 * (Math.max(columnCount, rowCount) <= 256 ? 1e-8 : 1e-7);
   return {
     directivityDbi: directivityDb,
     directivityAtBeamDbi: directivityDb,
     peakThetaDeg: peakUncertaintyDeg,
-    peakPhiDeg: peakUncertaintyDeg,
+    // The same arc is a wider azimuth the nearer the peak stands to broadside, and any azimuth there.
+    peakPhiDeg: Math.min(180, peakUncertaintyDeg / Math.max(1e-12, isNumber(peakThetaDeg) ? Math.sin(radFromDeg(peakThetaDeg)) : 0)),
     pointingErrorDeg: peakUncertaintyDeg,
     gainDbi: directivityDb + state.spilloverUncertaintyDb,
     gainAtBeamDbi: directivityDb + state.spilloverUncertaintyDb,
-    spilloverDb: state.spilloverUncertaintyDb,
+    ...(isNumber(state.spilloverDb) ? { spilloverDb: state.spilloverUncertaintyDb } : {}),
     halfPowerBeamwidthDeg: 1e-7,
     sidelobeDb: 1e-6,
   };

@@ -49,8 +49,21 @@ export function patternFigures({ pattern, beams, mask, gainOffsetDb }: PatternQu
     maskMargin: isNumber(gainOffsetDb) ? maskMargin(pattern, mask, beams, gainOffsetDb) : gainOffsetDb,
     highestLobes: lobes.others.slice(0, LISTED_LOBES).map((lobe) => lobeRelativeTo(lobe, lobes.ofBeams[0])),
     beams: perBeam,
-    peakUncertaintyDeg: Math.max(1e-8, degFromRad(lobes.highest.lastStep / Math.max(1e-3, Math.cos(radFromDeg(thetaDeg))))),
+    peakUncertaintyDeg: peakUncertaintyDeg(pattern, lobes.highest, thetaDeg),
   };
+}
+
+/** Share of lambda over the panel's side by which the interpolated field moves a peak: up to 256 cells a side, and beyond. */
+const PEAK_SHARE = 1e-5;
+const PEAK_SHARE_OF_LARGE = 1e-4;
+
+/** How far the place of a peak may be off along theta: its last step, and what the interpolation of the field moves it. */
+function peakUncertaintyDeg({ wavenumber, spectrum: { grid } }: RadiationPattern, peak: PatternLobes['highest'], thetaDeg: number): number {
+  const { columnCount, rowCount, stepXM, stepYM } = grid;
+  const share = Math.max(columnCount, rowCount) <= 256 ? PEAK_SHARE : PEAK_SHARE_OF_LARGE;
+  const sideM = Math.min(columnCount * stepXM, rowCount * stepYM);
+  const moved = (share * 2 * Math.PI) / (wavenumber * sideM);
+  return Math.min(90, degFromRad((peak.lastStep + moved) / Math.max(1e-3, Math.cos(radFromDeg(thetaDeg)))));
 }
 
 function beamFigures(pattern: RadiationPattern, beam: Direction, found: PatternLobes['highest'], gainOffsetDb: Figure): BeamFigures {
