@@ -87,11 +87,13 @@ export class PatternSheet {
     const parent = link.show.parent ? this.parentCut() : null;
     return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, withMask: link.show.mask, marks });
   });
+  /** By itself, because every save brings a new panel and the plot must not be drawn again for that. */
+  private readonly parentNumber = computed(() => this.state.panel()?.latestRevision?.number ?? null);
   private readonly parentCut = computed(() => {
     const parent = this.state.parentPrediction();
     const cut = parent && this.cutOf(parent);
-    const number = this.state.panel()?.latestRevision?.number;
-    if (!parent || !cut || number === undefined) return null;
+    const number = this.parentNumber();
+    if (!parent || !cut || number === null) return null;
     const beams = parent.of.requirement.beams;
     const own = beams[Math.min(this.beamIndex(), beams.length - 1)];
     const peak = cutMarkers({ label: '', angleDeg: cut.angleDeg, levelDb: cut.gainDbi }, cut.beamDeg);
