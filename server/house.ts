@@ -111,7 +111,7 @@ export interface House extends ReturnType<typeof createServices> {
 export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
-  const { engine, figures, inspections, letters, passwords, replays, sessions, tokens } = services;
+  const { engine, exports, figures, inspections, letters, passwords, replays, sessions, tokens } = services;
   const eventStreams = new EventStreams();
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
@@ -144,6 +144,7 @@ export function createHouse(options: HouseOptions): House {
       await passwords.settled();
       await letters.close();
       await inspections.close();
+      await exports.close();
       await engine.close();
     },
   };
