@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
 import { RouterLink } from '@angular/router';
 import type { RevisionListItem } from '../../../../shared/contracts/projects';
+import { requestKey } from '../../api/request-key';
 import { RevisionClient } from '../../api/revision-client';
 import { outcomeText } from '../../api/call-outcome';
 import { Confirm } from '../../ui/confirm';
@@ -83,7 +84,7 @@ export class RevisionsSheet {
       deed: `Restore revision ${row.number}`,
     });
     if (!yes) return;
-    const outcome = await this.client.restore(row.id, `Restore revision ${row.number}: ${row.message}`.slice(0, 2000), crypto.randomUUID());
+    const outcome = await this.client.restore(row.id, `Restore revision ${row.number}: ${row.message}`.slice(0, 2000), requestKey());
     this.trouble.set(outcomeText(outcome) ?? '');
     if (outcome.kind !== 'found') return;
     this.told.set(`Revision ${outcome.value.number} holds the content of revision ${row.number}`);
