@@ -13,7 +13,6 @@ import { Confirm } from '../ui/confirm';
 import { AskName } from '../ui/name-dialog';
 import { LinePlot } from '../ui/plots/line-plot';
 import { SheetFrame } from '../ui/sheet-frame';
-import { StateMark } from '../ui/state-mark';
 import { TitleBlock } from '../ui/title-block';
 import { ViewTitle } from '../ui/view-title';
 import { CellDrawing } from './cell-drawing';
@@ -27,7 +26,7 @@ import { verdictMark, verdictText } from './verdict-words';
 /** One edition: its cells, curves, checks, description, files and uses; the lab publishes or discards it here. */
 @Component({
   selector: 'slant-edition-page',
-  imports: [CellDrawing, ChoiceTabs, DescriptionList, LinePlot, QualityList, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle],
+  imports: [CellDrawing, ChoiceTabs, DescriptionList, LinePlot, QualityList, RouterLink, SheetFrame, TitleBlock, ViewTitle],
   templateUrl: './edition-page.html',
   styleUrls: ['./library-page.scss', './edition-page.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
