@@ -60,6 +60,11 @@ describe('warnings', () => {
     expect(warning?.message).toMatch(/is 1\.\d\d dB stronger than the wanted beam/);
   });
 
+  it('say nothing of image lobes where the panel is focused in its near field', () => {
+    const focused = planeWaveDesign({ synthesis: { kind: 'focus', pointMm: [0, 0, 200] } });
+    expect(warnings(focused).map(({ code }) => code)).not.toContain('image-lobe');
+  });
+
   it('tell of a horn on the wrong side, either way', () => {
     expect(find(warnings(withHorn({ positionMm: [0, 0, -200] })), 'behind-panel')?.message).toContain('reflecting panel is lit from in front');
     const transmitting = exampleDesign({ panel: { ...panel, operation: 'transmit' } });

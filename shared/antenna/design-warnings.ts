@@ -19,7 +19,7 @@ export function designWarnings(facts: DesignFacts): Warning[] {
     ...illuminationWarnings(facts.si, facts.litCount),
     ...facts.cellWarnings,
     ...latticeWarnings(facts),
-    ...imageLobeWarning(facts.figures),
+    ...imageLobeWarning(facts.design, facts.figures),
     ...tableWarning(facts.design),
   ];
   return warnings.sort((a, b) => RANK[a.severity] - RANK[b.severity]);
@@ -28,7 +28,9 @@ export function designWarnings(facts: DesignFacts): Warning[] {
 /** A lobe this little below the beam is as strong as it: less is not told from rounding. */
 const AS_STRONG_DB = 0.005;
 
-function imageLobeWarning({ sidelobeDb: { hemisphere } }: Figures): Warning[] {
+function imageLobeWarning({ synthesis }: DesignDocument, { sidelobeDb: { hemisphere } }: Figures): Warning[] {
+  // A panel focused in its near field has no one beam in the far field that another lobe could rival.
+  if (synthesis.kind === 'focus') return [];
   if (!('levelDb' in hemisphere) || typeof hemisphere.levelDb !== 'number' || hemisphere.levelDb < -AS_STRONG_DB) return [];
   const { levelDb, thetaDeg, phiDeg } = hemisphere as { levelDb: number; thetaDeg: number; phiDeg: number };
   return [

@@ -73,6 +73,7 @@ describe('a panel of an edition', () => {
     expect(() => placeCells(withEdition())).toThrow('#/cells/editionId: edition 00000000-0000-4000-8000-000000000001 is not at hand');
     expect(() => place(withEdition(), described({ operation: 'transmit' }))).toThrow('the cells of Invented example cells transmit, the panel is to reflect');
     const everyCell = Array.from({ length: 24 }, (_, k) => `cell-${k}`);
+    expect(() => place(withEdition({ excludedCells: ['cell-3', 'cell 3'] }), exampleEdition())).toThrow('#/cells/excludedCells/1: there is no cell "cell 3" in Invented example cells');
     expect(() => place(withEdition({ excludedCells: everyCell }), exampleEdition())).toThrow('#/cells/excludedCells: no cell of Invented example cells is left at 10 GHz: 24 are excluded');
   });
 });

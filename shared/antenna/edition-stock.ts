@@ -41,6 +41,7 @@ export function editionSite(cells: EditionCells, site: StockSite): EditionSite {
     const detail = `the cells of ${description.name} ${description.operation}, the panel is to ${site.si.operation}`;
     throw new InvalidDesign([{ pointer: '#/cells/editionId', detail }]);
   }
+  refuseStrangers(cells, edition);
   const excluded = new Set(cells.excludedCells);
   const { usable } = edition.atFrequency(site.designFrequencyHz);
   const allowed = Int32Array.from(edition.edition.cells.keys()).filter((k) => usable[k] === 1 && !excluded.has(edition.edition.cells[k].id));
@@ -50,6 +51,15 @@ export function editionSite(cells: EditionCells, site: StockSite): EditionSite {
   }
   const regions = regionFilter(edition.edition, edition.azimuths, site.designFrequencyHz);
   return { ...site, edition, rule: cells.rule, allowed, regions };
+}
+
+/** A name that the edition does not hold would exclude nothing, unnoticed. */
+function refuseStrangers({ excludedCells }: EditionCells, { edition }: PreparedEdition): void {
+  const known = new Set(edition.cells.map(({ id }) => id));
+  const faults = excludedCells.flatMap((id, i) =>
+    known.has(id) ? [] : [{ pointer: `#/cells/excludedCells/${i}`, detail: `there is no cell ${JSON.stringify(id)} in ${edition.description.name}` }],
+  );
+  if (faults.length > 0) throw new InvalidDesign(faults);
 }
 
 /** Lists the cells allowed at one angle. The same array every time where no region applies. */
