@@ -75,6 +75,10 @@ describe('line of a panel', () => {
     expect(panelRow(overview({ summary: null }))).toMatchObject({ state: 'in-work', gain: 'no prediction' });
   });
 
+  it('says when the figures are still being computed', () => {
+    expect(panelRow(overview({ summary: null, summaryPending: true }))).toMatchObject({ state: 'not-evaluated', stateText: 'being computed', gain: 'being computed' });
+  });
+
   it('tells a draft without revision from one that is its revision', () => {
     expect(panelRow(overview({ latestRevision: null }))).toMatchObject({ revision: 'Draft', revisionNote: 'no revision' });
     expect(panelRow(overview({ draftIsRevision: true }))).toMatchObject({ revision: 'Revision 3' });

@@ -50,8 +50,8 @@ function beamText({ requirement }: DesignDocument): string {
   return second.thetaDeg === first.thetaDeg ? `${one(first)} and ${second.phiDeg.toFixed(1)}°` : `${one(first)} and ${one(second)}`;
 }
 
-function gainText({ summary }: PanelOverview): string {
-  if (summary === null) return 'no prediction';
+function gainText({ summary, summaryPending }: PanelOverview): string {
+  if (summary === null) return summaryPending ? 'being computed' : 'no prediction';
   if (typeof summary.gainDbi !== 'number') return summary.gainDbi.reason;
   const line = summary.verdicts.find(({ line: name }) => name === 'gain');
   const margin = typeof line?.margin === 'number' ? `, margin ${signed(line.margin)} dB` : '';
@@ -60,8 +60,8 @@ function gainText({ summary }: PanelOverview): string {
 
 const signed = (value: number): string => `${value < 0 ? '−' : '+'}${Math.abs(value).toFixed(2)}`;
 
-function stateOf({ summary }: PanelOverview): { state: MarkState; stateText: string } {
-  if (summary === null) return { state: 'in-work', stateText: 'in work' };
+function stateOf({ summary, summaryPending }: PanelOverview): { state: MarkState; stateText: string } {
+  if (summary === null) return summaryPending ? { state: 'not-evaluated', stateText: 'being computed' } : { state: 'in-work', stateText: 'in work' };
   const short = summary.verdicts.filter(({ verdict }) => verdict === 'falls-short');
   if (short.length > 0) return { state: 'falls-short', stateText: `falls short: ${short.map(({ line }) => line).join(', ')}` };
   if (summary.overall === 'meets') return { state: 'meets', stateText: 'meets' };

@@ -38,7 +38,7 @@ export function revisionRows(items: readonly RevisionListItem[]): readonly Revis
     lineage: lineageText(item),
     cells: item.summary ? numberText(item.summary.cellCount, 0) : '–',
     gain: item.summary && typeof item.summary.gainDbi === 'number' ? numberText(item.summary.gainDbi, 2) : '–',
-    requirement: item.summary ? requirementText(countVerdicts(item.summary)) : 'cannot be predicted',
+    requirement: item.summary ? requirementText(countVerdicts(item.summary)) : item.summaryPending ? 'being computed' : 'cannot be predicted',
     overall: item.summary?.overall ?? 'not-evaluated',
     parentId: item.parentId,
   }));
