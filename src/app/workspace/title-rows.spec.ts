@@ -1,7 +1,7 @@
 import type { PanelDetail } from '../../../shared/contracts/projects';
 import { STARTING_DESIGN } from '../../../shared/model/starting-design';
 import type { SaveProgress } from './save-progress';
-import { titleRows } from './title-rows';
+import { standingText, titleRows } from './title-rows';
 
 const author = { id: '6f9619ff-8b86-4d01-b42d-00cf4fc964fd', name: 'Designer' };
 const panel: PanelDetail = {
@@ -46,5 +46,19 @@ describe('titleRows', () => {
 
   it('names the draft of a panel without revisions', () => {
     expect(rows({ latestRevision: null })['Revision']).toBe('Draft, no revision yet');
+  });
+});
+
+describe('standingText', () => {
+  const saved: SaveProgress = { kind: 'saved', at: 0 };
+
+  it('names the revision only while the screen shows it', () => {
+    expect(standingText(panel, saved)).toBe('Draft after 3');
+    expect(standingText({ ...panel, draftIsRevision: true }, saved)).toBe('Revision 3');
+    expect(standingText({ ...panel, draftIsRevision: true }, { kind: 'saving' })).toBe('Draft after 3');
+  });
+
+  it('names a draft without revisions a draft', () => {
+    expect(standingText({ ...panel, latestRevision: null }, saved)).toBe('Draft');
   });
 });

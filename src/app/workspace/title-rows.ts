@@ -6,10 +6,22 @@ import { SHEETS } from './sheets';
 
 const HASH_LETTERS = 12;
 
+/** True when what the screen shows is the latest revision, and the server knows of nothing newer. */
+export function standsAsRevision(panel: PanelDetail, progress: SaveProgress): boolean {
+  return panel.draftIsRevision && panel.latestRevision !== null && (progress.kind === 'saved' || progress.kind === 'view-only');
+}
+
+/** "Revision 4", "Draft after 4" or "Draft", for places as narrow as the foot of a phone. */
+export function standingText(panel: PanelDetail, progress: SaveProgress): string {
+  const number = panel.latestRevision?.number;
+  if (number === undefined) return 'Draft';
+  return standsAsRevision(panel, progress) ? `Revision ${number}` : `Draft after ${number}`;
+}
+
 /** The rows of the title block for a sheet of a draft. */
 export function titleRows(panel: PanelDetail, head: SheetHead, progress: SaveProgress): readonly (readonly TitleBlockEntry[])[] {
   const revision = panel.latestRevision;
-  const isRevision = panel.draftIsRevision && (progress.kind === 'saved' || progress.kind === 'view-only');
+  const isRevision = standsAsRevision(panel, progress);
   const settled = progress.kind === 'saved' || progress.kind === 'view-only';
   return [
     [

@@ -29,7 +29,7 @@ import { SHEETS } from './sheets';
 import type { SheetId } from './sheets';
 import { stripFigures } from './strip-figures';
 import type { StripFigure } from './strip-figures';
-import { titleRows } from './title-rows';
+import { standingText, titleRows } from './title-rows';
 import { workspaceKey } from './workspace-keys';
 import { WORKSPACE_SHORTCUTS } from './workspace-keys';
 import { WORKSPACE_STATE } from './workspace-state';
@@ -106,6 +106,10 @@ export class WorkspacePage {
   protected readonly titleRows = computed(() => {
     const panel = this.store.panel();
     return panel ? titleRows(panel, this.head(), this.store.saveState()) : [];
+  });
+  protected readonly standing = computed(() => {
+    const panel = this.store.panel();
+    return panel ? standingText(panel, this.store.saveState()) : '';
   });
   protected readonly neighbours = computed(() => {
     const place = this.head().number - 1;
