@@ -20,9 +20,10 @@ export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInU
 
 /** Assumptions of the map, as drawing notes. */
 export function phaseNotes({ head, of }: LivePrediction, edition: EditionInUse | null): readonly string[] {
-  const side = of.panel.operation === 'reflect' ? 'Seen from the outward side, where the beams and the horn are.' : 'Seen from the outward side, where the beams are; the horn is behind.';
   const light = of.illumination;
-  const foot = light.kind === 'horn' ? ` Cross and circle: foot of the horn at x ${numberText(light.positionMm[0], 1)}, y ${numberText(light.positionMm[1], 1)}, z ${numberText(light.positionMm[2], 1)} mm.` : '';
+  const horn = light.kind !== 'horn' ? '' : of.panel.operation === 'reflect' ? ' and the horn' : '; the horn is behind';
+  const side = `Seen from the side of the beams${horn}.`;
+  const foot = light.kind === 'horn' ? ` Cross and circle: foot of the horn, x ${numberText(light.positionMm[0], 1)}, y ${numberText(light.positionMm[1], 1)}, z ${numberText(light.positionMm[2], 1)} mm.` : '';
   return [side + foot, ...coverageNote(head.figures.maxIncidenceDeg, edition), 'A prediction is array theory, not a measurement.'];
 }
 
@@ -31,5 +32,5 @@ function coverageNote(maxIncidenceDeg: LivePrediction['head']['figures']['maxInc
   const { thetasRad } = edition.responses;
   const steepest = degFromRad(thetasRad[thetasRad.length - 1]);
   const data = `Cell data ${edition.description.provenance}${steepest === 0 ? ' at normal incidence' : ` up to ${numberText(steepest, 0)}°`}`;
-  return maxIncidenceDeg > steepest + 0.5 ? [`${data}, used up to ${numberText(maxIncidenceDeg, 1)}°: beyond the data the response of the nearest angle holds.`] : [`${data}; the panel needs ${numberText(maxIncidenceDeg, 1)}°.`];
+  return maxIncidenceDeg > steepest + 0.5 ? [`${data}, used up to ${numberText(maxIncidenceDeg, 1)}°: beyond the data the nearest angle holds.`] : [`${data}; the panel needs ${numberText(maxIncidenceDeg, 1)}°.`];
 }
