@@ -165,7 +165,7 @@ export class WorkspacePage {
 
   protected freeze(): void {
     if (this.freezeHindrance() !== null) return;
-    const key = crypto.randomUUID();
+    const key = requestKey();
     const parent = this.store.parentPrediction()?.of ?? null;
     const data: FreezeQuestion = {
       number: this.nextNumber(),
