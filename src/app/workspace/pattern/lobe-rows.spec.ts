@@ -15,6 +15,10 @@ describe('highest lobes', () => {
     expect(rows[0].gain).toBe(gain.toFixed(2).replace('-', '\u2212'));
     expect(rows.some(({ margin }) => /^[+\u2212]\d/.test(margin))).toBe(true);
   });
+  it('write an azimuth of half a turn in one way, from whichever side it was found', () => {
+    const opposite = [180, -180, -179.96, -179.9].map((phiDeg) => ({ levelDb: -20, thetaDeg: 30, phiDeg }));
+    expect(lobeRows({ ...figures, highestLobes: opposite }, MASKED_DESIGN, 30).map(({ phi }) => phi)).toEqual(['180.0', '180.0', '180.0', '\u2212179.9']);
+  });
 });
 
 describe('marked directions', () => {

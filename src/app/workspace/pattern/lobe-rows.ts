@@ -25,7 +25,7 @@ export function lobeRows({ highestLobes }: Figures, design: DesignDocument, beam
       letter: String.fromCharCode(97 + i),
       ...{ thetaDeg, phiDeg },
       theta: numberText(thetaDeg, 1),
-      phi: numberText(phiDeg, 1),
+      phi: numberText(phiDeg > -179.95 ? phiDeg : phiDeg + 360, 1),
       offAxis: numberText(off, 1),
       gain: numberText(gain, 2),
       relative: numberText(levelDb, 2),
