@@ -3,6 +3,7 @@ import { MatDialog } from '@angular/material/dialog';
 import { Router, RouterLink, RouterOutlet } from '@angular/router';
 import { firstValueFrom } from 'rxjs';
 import { designDifferences } from '../../../shared/model/design-diff';
+import { requestKey } from '../api/request-key';
 import { SessionStore } from '../session/session-store';
 import { CommandRegistry } from '../ui/command-registry';
 import { EmptyState } from '../ui/empty-state';
