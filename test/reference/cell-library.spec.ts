@@ -111,7 +111,7 @@ describe('the cell library', () => {
     if (expected.rangeDeg !== undefined)
       it(`reaches the ${expected.rangeDeg} degrees its README states`, () => {
         const detail = family.report.family.find(({ check }) => check === 'phase-range')?.detail ?? '';
-        expect(Math.abs(Number(/Phase range ([\d.]+) deg/.exec(detail)?.[1]) - (expected.rangeDeg ?? 0))).toBeLessThan(0.5);
+        expect(Math.abs(Number(/Phase range ([\d.]+)°/.exec(detail)?.[1]) - (expected.rangeDeg ?? 0))).toBeLessThan(0.5);
       });
   });
 });
