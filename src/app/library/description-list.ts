@@ -55,7 +55,7 @@ export class DescriptionList {
       { label: 'Metal', value: family.metal },
       { label: 'Ports', value: PORTS[family.ports] },
       { label: 'Reference plane', value: family.referencePlane },
-      { label: 'Time convention', value: family.timeConvention },
+      { label: 'Time convention', value: family.timeConvention === 'exp(+jwt)' ? 'exp(+jωt)' : 'exp(−jωt)' },
       { label: 'Provenance', value: `${family.provenance}, ${family.date}` },
       { label: 'Instrument or method', value: family.instrument },
       { label: 'Stated limits', value: family.limits },

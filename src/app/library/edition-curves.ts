@@ -2,6 +2,7 @@ import { curveOverCells, curveOverFrequency, curveOverIncidence } from '../../..
 import type { CurvePolarisation, ResponseCurve } from '../../../shared/antenna/response-curve';
 import type { PreparedEdition } from '../../../shared/antenna/prepare-edition';
 import type { LineFigure } from '../ui/plots/line-figure';
+import { numberText } from '../ui/plots/plot-text';
 
 export type CurveAxis = 'parameter' | 'frequency' | 'incidence';
 
@@ -64,5 +65,6 @@ function magnitudeRange(values: ArrayLike<number>): { from: number; to: number }
 function chosenOf({ edition }: PreparedEdition, wish: CurveWish, curve: ResponseCurve): Pick<LineFigure, 'chosen'> {
   if (wish.axis !== 'parameter' || !('cellIndex' in curve)) return {};
   const at = (curve.cellIndex as Int32Array).indexOf(wish.cellIndex);
-  return at < 0 ? {} : { chosen: { at, label: `${edition.cells[wish.cellIndex].id}, ${curve.phaseDeg[at].toFixed(1)}°` } };
+  const sizes = edition.cells[wish.cellIndex].parametersMm.map((sizeMm) => numberText(sizeMm, 2)).join(' × ');
+  return at < 0 ? {} : { chosen: { at, label: `${sizes} mm, ${numberText(curve.phaseDeg[at], 1)}°` } };
 }

@@ -32,6 +32,12 @@ describe('LinePlot', () => {
     expect(element.querySelector('.chosen-text')?.textContent).toBe('L 2.30, \u2212112.0°');
     expect([...element.querySelectorAll('.level-text')].map((text) => text.textContent)).toEqual(['target \u2212121.9°']);
   });
+  it('writes the name of the chosen sample to the side where it stays inside', async () => {
+    expect(element.querySelector('.chosen-text')?.classList).not.toContain('end');
+    fixture.componentRef.setInput('figure', { ...figure, chosen: { at: 1, label: 'a name that would run out of the plot on the right of its sample' } });
+    await fixture.whenStable();
+    expect(element.querySelector('.chosen-text')?.classList).toContain('end');
+  });
   it('marks the bar of the chosen sample, the tallest being the most used', () => {
     const heights = [...element.querySelectorAll('.bar')].map((bar) => Number(bar.getAttribute('height')));
     expect(Math.max(...heights)).toBe(heights[1]);

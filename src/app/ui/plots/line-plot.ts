@@ -12,6 +12,8 @@ import { PlotThemes } from './plot-theme';
 import { svgSnapshot } from './svg-snapshot';
 
 const MARGIN = { left: 44, right: 10, top: 10, bottom: 32 };
+/** Width of a letter of the mono face at the size of plots. */
+const LETTER_PX = 6.8;
 const LABEL_ROOM = 118;
 const TALLEST_BAR = 0.28;
 
@@ -72,7 +74,7 @@ export class LinePlot implements ExportablePlot {
     if (!chosen || chosen.at < 0 || chosen.at >= lines[0].x.length) return null;
     const x = axisPx(this.x(), lines[0].x[chosen.at]);
     const y = axisPx(this.y(), lines[0].y[chosen.at]);
-    const flip = x > this.x().endPx - 140;
+    const flip = x + 20 + chosen.label.length * LETTER_PX > this.x().endPx;
     // The name stands near the upper edge, away from the curve's own squares.
     return { at: chosen.at, x, y, label: chosen.label, leader: `M${x} ${y}L${x + (flip ? -10 : 10)} ${MARGIN.top + 11}h${flip ? -6 : 6}`, textX: x + (flip ? -20 : 20), textY: MARGIN.top + 15, flip };
   });
