@@ -42,4 +42,9 @@ describe('list of keys', () => {
     expect(['input', 'textarea', 'select', 'button', 'div'].map((name) => isTyping(document.createElement(name)))).toEqual([true, true, true, false, false]);
     expect(isTyping(null)).toBe(false);
   });
+
+  it('takes a round or a box to tick for no field, so that single keys work on after a choice', () => {
+    const ofType = (type: string): HTMLInputElement => Object.assign(document.createElement('input'), { type });
+    expect(['text', 'number', 'radio', 'checkbox'].map((type) => isTyping(ofType(type)))).toEqual([true, true, false, false]);
+  });
 });

@@ -54,7 +54,8 @@ export class ShortcutList {
   }
 }
 
-/** True in fields, where single keys are text and not shortcuts. */
+/** True in fields, where single keys are text and not shortcuts. Rounds and boxes to tick take no text. */
 export function isTyping(target: EventTarget | null): boolean {
+  if (target instanceof HTMLInputElement && /^(radio|checkbox)$/.test(target.type)) return false;
   return target instanceof HTMLElement && (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT)$/.test(target.tagName));
 }
