@@ -19,6 +19,11 @@ describe('balloons', () => {
       expect(balloonX > BALLOON_R && balloonX < 400 - BALLOON_R && balloonY > BALLOON_R && balloonY < 300 - BALLOON_R).toBe(true);
     }
   });
+  it('stay within the plot when the trace crowds every place in it', () => {
+    const obstacles = Array.from({ length: 3000 }, (_, i) => ({ x: 150 + (i % 100), y: 10 * Math.floor(i / 100), r: 2 }));
+    const [{ balloonY }] = placeBalloons([{ name: '1', x: 200, y: 20 }], { ...room, obstacles });
+    expect(balloonY).toBeGreaterThan(BALLOON_R);
+  });
   it('keep off obstacles and go away from the beam first', () => {
     const [placed] = placeBalloons([{ name: 'a', x: 150, y: 150 }], { ...room, awayFrom: { x: 200, y: 150 } });
     expect([placed.balloonX, placed.balloonY]).toEqual([124, 150]);

@@ -23,6 +23,8 @@ const GAP = 4;
 const REACHES = [26, 38, 54, 74];
 const FURTHEST = REACHES[REACHES.length - 1];
 const TURNS = 16;
+/** Dearer than any crowd: a balloon outside the plot is not seen at all. */
+const OUTSIDE = 1e6;
 
 /** Gives each anchor a balloon beside it that covers neither another balloon nor an obstacle, as near as that can be had. */
 export function placeBalloons(anchors: readonly BalloonAnchor[], room: BalloonRoom): readonly PlacedBalloon[] {
@@ -58,7 +60,7 @@ function candidates(anchor: BalloonAnchor, { awayFrom }: BalloonRoom): readonly 
 function cost(spot: Spot, anchor: BalloonAnchor, taken: BalloonRoom['obstacles'], { width, height }: BalloonRoom): number {
   let total = spot.reach / 10 + 3 * spot.turned;
   const edge = BALLOON_R + 1;
-  if (spot.x < edge || spot.y < edge || spot.x > width - edge || spot.y > height - edge) total += 500;
+  if (spot.x < edge || spot.y < edge || spot.x > width - edge || spot.y > height - edge) total += OUTSIDE;
   for (const { x, y, r } of taken) {
     const isOwn = x === anchor.x && y === anchor.y;
     const overlap = BALLOON_R + r + GAP - Math.hypot(spot.x - x, spot.y - y);
