@@ -36,7 +36,8 @@ describe('cuts of two sides', () => {
   });
   it('say how far the earlier one was shifted', () => {
     expect(shiftText(SAMPLE_COMPARISON, cut)).toBe('3 shifted by Δu +0.0082');
-    expect(shiftText(SAMPLE_COMPARISON, { ...cut, shiftU: 0 })).toBe('beams coincide, no shift');
+    expect(shiftText(SAMPLE_COMPARISON, { ...cut, shiftU: 0 })).toBe('angle from each beam');
+    expect(shiftText(SAMPLE_COMPARISON, { ...cut, request: { phiDeg: 0, thetaDeg: [-90, 90, 30] }, shiftU: 0 })).toBe('beams coincide');
     expect(comparisonNotes(SAMPLE_COMPARISON)[0]).toBe('Difference: revision 3 resampled linearly after the shift between the beams; gaps where either lies below \u221215 dBi, clipped at ±10 dB.');
   });
   it('differ over the hemisphere on a scale centred on zero', () => {

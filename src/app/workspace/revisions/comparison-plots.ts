@@ -108,7 +108,8 @@ export function cutDifferenceFigure(comparison: Comparison, cut: CutDifference):
 }
 
 export function shiftText({ before }: Comparison, cut: CutDifference): string {
-  return Math.abs(cut.shiftU) < 5e-5 ? 'beams coincide, no shift' : `${sideMark(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
+  if (Math.abs(cut.shiftU) >= 5e-5) return `${sideMark(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
+  return 'plane' in cut.request ? 'angle from each beam' : 'beams coincide';
 }
 
 /** How the difference was made, and what it leaves out, as drawing notes. */
