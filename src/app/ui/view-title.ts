@@ -23,7 +23,7 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
       line-height: 20px;
       font-weight: 620;
       font-stretch: var(--stretch-heading);
-      white-space: nowrap;
+      overflow-wrap: anywhere;
     }
     .line {
       flex: 1;
