@@ -1,6 +1,6 @@
 /** Properties that decide how a line or a text of ours looks. */
 const DRAWN = [
-  'fill', 'fill-opacity', 'stroke', 'stroke-width', 'stroke-dasharray', 'stroke-opacity', 'stroke-linejoin', 'opacity',
+  'fill', 'fill-opacity', 'stroke', 'stroke-width', 'stroke-dasharray', 'stroke-opacity', 'stroke-linejoin', 'paint-order', 'opacity',
   'font-family', 'font-size', 'font-weight', 'font-stretch', 'text-anchor', 'letter-spacing',
 ] as const;
 
