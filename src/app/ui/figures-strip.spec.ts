@@ -60,4 +60,12 @@ describe('figures strip', () => {
     await fixture.whenStable();
     expect(element().querySelector('section')?.classList).toContain('stale');
   });
+
+  it('says that it is busy while a newer answer is under way', async () => {
+    expect(element().querySelector('section')?.getAttribute('aria-busy')).toBe('false');
+    fixture.componentRef.setInput('waiting', true);
+    await fixture.whenStable();
+    const section = element().querySelector('section');
+    expect([section?.getAttribute('aria-busy'), section?.classList.contains('waiting')]).toEqual(['true', true]);
+  });
 });
