@@ -47,6 +47,15 @@ describe('cut for the plot library', () => {
     for (const place of places) expect(place.x > 8 && place.x < 520 && place.y > 8 && place.y < 300).toBe(true);
     expect(Math.hypot(places[0].x - places[1].x, places[0].y - places[1].y)).toBeGreaterThan(17);
   });
+  it('keeps the centre of every balloon within the axes, outside which the library leaves marks out', () => {
+    for (const topDb of [35, 36, 40]) {
+      const window = { ...size.window, topDb };
+      const balloons = traces({ ...size, window, height: 240 }).find((trace) => trace.mode === 'text+markers');
+      expect(balloons?.y.length).toBeGreaterThan(0);
+      for (const level of balloons?.y ?? []) expect(level !== null && level <= topDb && level >= window.floorDb).toBe(true);
+      for (const angle of balloons?.x ?? []) expect(angle !== null && Math.abs(angle) <= 90).toBe(true);
+    }
+  });
   it('draws no marker that lies outside the window', () => {
     const away = traces({ ...size, window: { ...size.window, fromDeg: -90, toDeg: 0 } });
     expect(away.some((trace) => trace.mode === 'text+markers')).toBe(false);

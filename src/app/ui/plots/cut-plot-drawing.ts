@@ -1,7 +1,8 @@
 import type { Dash, Data, Layout } from 'plotly.js-dist-min';
 import { angleStepDeg, niceStep } from './axis-ticks';
 import type { CutFigure, CutMark, ForbiddenEdge } from './cut-figure';
-import { placeBalloons } from './place-balloons';
+import { BALLOON_R, placeBalloons } from './place-balloons';
+import type { BalloonAnchor, BalloonRoom, PlacedBalloon } from './place-balloons';
 import { axisPx, axisValue } from './plot-axis';
 import type { LinearAxis } from './plot-axis';
 import type { PlotTheme } from './plot-theme';
@@ -88,7 +89,7 @@ function markTraces(figure: CutFigure, { window, width, height }: CutDrawingSize
   if (inside.length === 0) return [];
   const clipped = inside.map((mark) => ({ ...mark, levelDb: Math.max(window.floorDb, mark.levelDb) }));
   const anchors = clipped.map((mark) => ({ name: mark.name, x: axisPx(axes.x, mark.angleDeg), y: axisPx(axes.y, mark.levelDb) }));
-  const placed = placeBalloons(anchors, { width, height: height - CUT_MARGIN.bottom, obstacles: traceObstacles(figure, axes) });
+  const placed = placeInAxes(anchors, traceObstacles(figure, axes), { width, height });
   const balloonX = placed.map(({ balloonX: px }) => axisValue(axes.x, px));
   const balloonY = placed.map(({ balloonY: px }) => axisValue(axes.y, px));
   const leader = (mark: CutMark, i: number): [number | null, number | null][] => [[mark.angleDeg, mark.levelDb], [balloonX[i], balloonY[i]], [null, null]];
@@ -108,6 +109,14 @@ function markTraces(figure: CutFigure, { window, width, height }: CutDrawingSize
       marker: { symbol: 'circle', size: 17, color: theme.paper, line: { color: theme.ink, width: 1.2 } },
     },
   ];
+}
+
+/** The library leaves out a mark whose centre lies outside the axes, so the centres stay within them; rims may stand out. */
+function placeInAxes(anchors: readonly BalloonAnchor[], obstacles: BalloonRoom['obstacles'], { width, height }: { readonly width: number; readonly height: number }): readonly PlacedBalloon[] {
+  const [left, top] = [CUT_MARGIN.left - BALLOON_R, CUT_MARGIN.top - BALLOON_R];
+  const moved = <Point extends { readonly x: number; readonly y: number }>(point: Point): Point => ({ ...point, x: point.x - left, y: point.y - top });
+  const room = { width: width - CUT_MARGIN.right + BALLOON_R - left, height: height - CUT_MARGIN.bottom + BALLOON_R - top, obstacles: obstacles.map(moved) };
+  return placeBalloons(anchors.map(moved), room).map((placed, i) => ({ ...anchors[i], balloonX: placed.balloonX + left, balloonY: placed.balloonY + top }));
 }
 
 /** Balloons keep off the trace, which is what the eye looks for. */
