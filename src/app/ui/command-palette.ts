@@ -64,4 +64,9 @@ export class CommandPalette {
   protected close(): void {
     this.registry.isOpen.set(false);
   }
+
+  /** The event comes a moment after the closing; by then the palette may have been opened again. */
+  protected followClosing(): void {
+    if (!this.dialog().nativeElement.open) this.close();
+  }
 }
