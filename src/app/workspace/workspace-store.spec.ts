@@ -1,6 +1,6 @@
 import { TestBed } from '@angular/core/testing';
 import { Subject } from 'rxjs';
-import type { PredictionRequest } from '../../../shared/contracts/predictions';
+import type { CutRequest, PredictionRequest } from '../../../shared/contracts/predictions';
 import type { PanelDetail, RevisionDetail, RevisionHeader } from '../../../shared/contracts/projects';
 import type { DesignDocument } from '../../../shared/model/design-document';
 import { replacedAt } from '../../../shared/model/design-pointer';
@@ -128,6 +128,24 @@ describe('WorkspaceStore', () => {
     const asked = requests.filter(({ preview }) => preview.startsWith('draft')).at(-1);
     expect(asked?.request).toMatchObject({ uvSize: 129, include: ['cells', 'cuts', 'uv'] });
     expect(asked?.request.cuts?.at(-1)).toEqual({ phiDeg: 45, thetaDeg: [-90, 90, 1] });
+  });
+
+  it('asks once when a sheet names the same cuts again', async () => {
+    const { store, requests, settle, answer } = rig();
+    await store.open(panel.id, null);
+    await settle();
+    const cut = (): readonly CutRequest[] => [{ phiDeg: 30, thetaDeg: [-90, 90, 0.5] }];
+    store.requestCuts(cut());
+    await settle();
+    await answer('draft', predicted);
+    await answer('draft', predicted);
+    const asked = requests.length;
+    store.requestCuts(cut());
+    await settle();
+    expect(requests).toHaveLength(asked);
+    store.requestCuts([]);
+    await settle();
+    expect(requests.length).toBeGreaterThan(asked);
   });
 
   it('fetches the edition that the design names, once', async () => {

@@ -25,7 +25,8 @@ export class WorkspaceStore implements WorkspaceState {
   private readonly predictionClient = inject(PredictionClient);
   private readonly libraryClient = inject(LibraryClient);
 
-  private readonly cutsAsked = signal<readonly CutRequest[]>([]);
+  /** Compared by content: a sheet names its cuts anew with every step of the beam, and each change here is a prediction. */
+  private readonly cutsAsked = signal<readonly CutRequest[]>([], { equal: (a, b) => JSON.stringify(a) === JSON.stringify(b) });
   private readonly uvSizeAsked = signal(0);
   private readonly predictionNow = signal<LivePrediction | null>(null);
   private readonly failureNow = signal<{ readonly problem: Problem; readonly of: DesignDocument } | null>(null);
