@@ -48,12 +48,14 @@ describe('cut for the plot library', () => {
     expect(Math.hypot(places[0].x - places[1].x, places[0].y - places[1].y)).toBeGreaterThan(17);
   });
   it('keeps the centre of every balloon within the axes, outside which the library leaves marks out', () => {
-    for (const topDb of [35, 36, 40]) {
-      const window = { ...size.window, topDb };
+    const [{ angleDeg }] = SAMPLE_CUT.marks;
+    // The first marker in the upper left corner, in the upper right one, and below the middle of the upper edge.
+    for (const [fromDeg, toDeg] of [[angleDeg - 0.5, angleDeg + 40], [angleDeg - 40, angleDeg + 0.5], [-90, 90]]) {
+      const window = { ...size.window, fromDeg, toDeg, topDb: 35.2 };
       const balloons = traces({ ...size, window, height: 240 }).find((trace) => trace.mode === 'text+markers');
-      expect(balloons?.y.length).toBeGreaterThan(0);
-      for (const level of balloons?.y ?? []) expect(level !== null && level <= topDb && level >= window.floorDb).toBe(true);
-      for (const angle of balloons?.x ?? []) expect(angle !== null && Math.abs(angle) <= 90).toBe(true);
+      expect(balloons?.text).toContain('1');
+      for (const level of balloons?.y.map(Number) ?? []) expect(level <= window.topDb && level >= window.floorDb).toBe(true);
+      for (const angle of balloons?.x.map(Number) ?? []) expect(angle >= fromDeg && angle <= toDeg).toBe(true);
     }
   });
   it('draws no marker that lies outside the window', () => {
