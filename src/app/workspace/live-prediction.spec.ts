@@ -55,10 +55,17 @@ describe('livePredictions', () => {
     expect(outcomes).toEqual([{ kind: 'failed', problem: unprocessable, of: ask(20).design }]);
   });
 
-  it('stays silent about a request that a newer one replaced at the server', () => {
-    const { asks, outcomes } = follow(() => of<PredictionAnswer>({ kind: 'superseded' }));
+  it('says nothing of a request that another replaced at the server, and asks again for what is still wanted', () => {
+    const thetas: number[] = [];
+    const { asks, outcomes } = follow((request) => {
+      thetas.push(request.design.requirement.beams[0].thetaDeg);
+      return of<PredictionAnswer>(thetas.length === 1 ? { kind: 'superseded' } : predicted);
+    });
     asks.next(ask(20));
     expect(outcomes).toEqual([]);
+    jest.advanceTimersByTime(1000);
+    expect(thetas).toEqual([20, 20]);
+    expect(outcomes.map(({ kind }) => kind)).toEqual(['predicted']);
   });
 
   it('asks again while the server is out of reach, and for the newest design only', () => {

@@ -1,4 +1,4 @@
-import { EMPTY, concat, of, switchMap, timer } from 'rxjs';
+import { concat, of, switchMap, timer } from 'rxjs';
 import type { Observable } from 'rxjs';
 import type { Problem } from '../../../shared/contracts/common';
 import type { CutRequest, PredictionRequest } from '../../../shared/contracts/predictions';
@@ -11,6 +11,7 @@ import { unpackPrediction } from './unpack-prediction';
 /** Work that is older than this gives way to a newer design. */
 const PATIENCE_MS = 400;
 const RETRY_MS = 3000;
+const AGAIN_MS = 300;
 /** Fine enough that a curve 500 pixels wide over 180 degrees shows every null. */
 const CUT_STEP_DEG = 0.2;
 /** The contract allows eight cuts. */
@@ -58,7 +59,8 @@ export function livePredictions(
     predict(requestOf(ask)).pipe(
       switchMap((answer): Observable<LiveOutcome> => {
         if (answer.kind === 'predicted') return of({ kind: 'predicted', prediction: unpackPrediction(answer.block, ask.design) });
-        if (answer.kind === 'superseded') return EMPTY;
+        // An older request of this tab that arrived late, or another tab, took its place, while this is still what is wanted.
+        if (answer.kind === 'superseded') return timer(AGAIN_MS).pipe(switchMap(() => outcomes(ask)));
         if (answer.kind === 'failed') return of({ kind: 'failed', problem: answer.problem, of: ask.design });
         return concat(of<LiveOutcome>({ kind: 'failed', problem: OUT_OF_REACH, of: ask.design }), timer(RETRY_MS).pipe(switchMap(() => outcomes(ask))));
       }),
