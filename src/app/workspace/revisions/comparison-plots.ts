@@ -8,7 +8,7 @@ import type { MapLayer } from '../../ui/plots/paint-panel-map';
 import { niceStep } from '../../ui/plots/axis-ticks';
 import { numberText, signedNumberText } from '../../ui/plots/plot-text';
 import { maskLevelDbi } from '../pattern/mask-level';
-import { sideMark, sideName } from './comparison-rows';
+import { insidePhrase, sideMark, sideName } from './comparison-rows';
 import type { ComparedCells } from './comparison-rows';
 
 /** Which change of the cells the map shows. */
@@ -46,7 +46,7 @@ export function changeLayer(cells: ComparedCells, change: CellChange): MapLayer 
   const { changed } = cells.arrays;
   const all = of(cells.arrays);
   const values = Float64Array.from(all, (value, i) => (changed[i] === 0 ? Number.NaN : value));
-  const named = change === 'parameter' && cells.parameter ? `Change of ${cells.parameter.label}` : title;
+  const named = change === 'parameter' && cells.parameter ? `Change of ${insidePhrase(cells.parameter.label)}` : title;
   return { title: named, unit, digits, values, scale: centredScale(robustReach(values), most) };
 }
 

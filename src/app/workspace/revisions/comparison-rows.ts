@@ -74,14 +74,19 @@ export function cellRows({ cells }: Comparison): readonly CellRow[] | { readonly
     { label: 'Changed', value: `${numberText(cells.changed, 0)} of ${numberText(cells.total, 0)}, ${numberText(share, 1)}\u00a0%` },
     ...(parameter
       ? [
-          { label: `Larger ${parameter.label}`, value: numberText(parameter.larger, 0) },
-          { label: `Smaller ${parameter.label}`, value: numberText(parameter.smaller, 0) },
-          { label: `Mean |change of ${parameter.label}|`, value: `${numberText(parameter.meanChangeMm, 3)} mm` },
+          { label: `Larger ${insidePhrase(parameter.label)}`, value: numberText(parameter.larger, 0) },
+          { label: `Smaller ${insidePhrase(parameter.label)}`, value: numberText(parameter.smaller, 0) },
+          { label: `Mean |change of ${insidePhrase(parameter.label)}|`, value: `${numberText(parameter.meanChangeMm, 3)} mm` },
         ]
       : []),
     { label: 'Phase error over 15°', value: `${numberText(cells.errorOver15Before, 0)} → ${numberText(cells.errorOver15After, 0)}` },
     { label: 'RMS phase error', value: `${numberText(cells.rmsErrorBeforeDeg, 2)}° → ${numberText(cells.rmsErrorAfterDeg, 2)}°` },
   ];
+}
+
+/** "ring outer side" from "Ring outer side"; a letter that stands alone keeps its case. */
+export function insidePhrase(label: string): string {
+  return /^\p{Lu}\p{Ll}/u.test(label) ? label.charAt(0).toLowerCase() + label.slice(1) : label;
 }
 
 export type ComparedCells = Extract<Comparison['cells'], { arrays: unknown }>;

@@ -45,7 +45,7 @@ export const SAMPLE_COMPARISON: Comparison = {
     kind: 'compared',
     total: 4,
     changed: 3,
-    parameter: { label: 'ring outer side', larger: 2, smaller: 1, meanChangeMm: 0.549 },
+    parameter: { label: 'Ring outer side', larger: 2, smaller: 1, meanChangeMm: 0.549 },
     errorOver15Before: 82,
     errorOver15After: 0,
     rmsErrorBeforeDeg: 7.9,
