@@ -47,7 +47,7 @@ export class Confirm {
   private readonly dialog = inject(MatDialog);
 
   async ask(question: Question): Promise<boolean> {
-    const dialog = this.dialog.open<ConfirmDialog, Question, boolean>(ConfirmDialog, { data: question, width: '420px' });
+    const dialog = this.dialog.open<ConfirmDialog, Question, boolean>(ConfirmDialog, { data: question, width: '420px', ariaLabel: question.title });
     return (await firstValueFrom(dialog.afterClosed())) === true;
   }
 }

@@ -55,7 +55,7 @@ export class AskName {
   private readonly dialog = inject(MatDialog);
 
   ask(question: NameQuestion): Promise<string | undefined> {
-    const dialog = this.dialog.open<NameDialog, NameQuestion, string>(NameDialog, { data: question, width: '420px' });
+    const dialog = this.dialog.open<NameDialog, NameQuestion, string>(NameDialog, { data: question, width: '420px', ariaLabel: question.title });
     return firstValueFrom(dialog.afterClosed());
   }
 }

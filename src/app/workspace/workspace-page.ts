@@ -161,7 +161,7 @@ export class WorkspacePage {
 
   protected explain(id: string): void {
     const figure = this.figures().find((candidate) => candidate.id === id);
-    if (figure) this.dialog.open(HowComputedDialog, { data: figure, width: '560px' });
+    if (figure) this.dialog.open(HowComputedDialog, { data: figure, width: '560px', ariaLabel: `How computed: ${figure.label}` });
   }
 
   protected freeze(): void {
@@ -174,7 +174,7 @@ export class WorkspacePage {
       changes: parent ? designDifferences(parent, this.store.design()) : [],
       freeze: (message) => this.freezer.freeze(message, key),
     };
-    this.dialog.open(FreezeDialog, { data, width: '520px' });
+    this.dialog.open(FreezeDialog, { data, width: '520px', ariaLabel: `Freeze revision ${data.number}` });
   }
 
   protected reopen(): void {
@@ -187,7 +187,7 @@ export class WorkspacePage {
   }
 
   private async decide(conflict: DraftConflict): Promise<void> {
-    const dialog = this.dialog.open<ConflictDialog, DraftConflict, ConflictChoices>(ConflictDialog, { data: conflict, width: '720px' });
+    const dialog = this.dialog.open<ConflictDialog, DraftConflict, ConflictChoices>(ConflictDialog, { data: conflict, width: '720px', ariaLabel: 'Two versions of the draft' });
     const choices = await firstValueFrom(dialog.afterClosed());
     if (choices) this.drafts.resolveConflict(choices);
   }
