@@ -42,7 +42,7 @@ describe('the draft of a panel', () => {
     const { page, problems } = designer;
     await type(page, 'Width', '220');
     await type(page, 'Height', '21 cm');
-    expect(await valueOf(page, 'Height')).toBe('210');
+    await screen.settled(() => valueOf(page, 'Height'), (value) => value === '210');
     await page.getByRole('button', { name: 'Undo' }).click();
     await screen.settled(() => valueOf(page, 'Height'), (value) => value === '200');
     await page.getByRole('heading', { name: 'Panel' }).click();
