@@ -1,6 +1,7 @@
 import type { DesignFault } from '../../shared/antenna/invalid-design';
 import type { CutRequest } from '../../shared/antenna/pattern-cut';
 import type { Prediction } from '../../shared/antenna/predict-design';
+import type { UvShift } from '../../shared/antenna/uv-map';
 import type { CellEdition } from '../../shared/model/cell-family';
 import type { DesignDocument } from '../../shared/model/design-document';
 
@@ -21,6 +22,8 @@ export interface PredictionQuestion {
   readonly cuts?: readonly CutRequest[];
   /** Samples per side of the u-v map; no map when absent. */
   readonly uvSize?: number;
+  /** Moves the map over direction cosines, see `uvMap`. */
+  readonly uvShift?: UvShift;
 }
 
 /** The message to a thread. */

@@ -1,7 +1,7 @@
 import type { Cut } from '../../shared/antenna/pattern-cut';
 import type { DesignDocument } from '../../shared/model/design-document';
 import { STARTING_DESIGN } from '../../shared/model/starting-design';
-import { comparedCuts, comparedPlanes } from './compared-cuts';
+import { beamShift, comparedCuts, comparedPlanes } from './compared-cuts';
 
 const steered = (thetaDeg: number, phiDeg = 0): DesignDocument => ({ ...STARTING_DESIGN, requirement: { ...STARTING_DESIGN.requirement, beams: [{ thetaDeg, phiDeg }] } });
 const sine = (deg: number): number => Math.sin((deg * Math.PI) / 180);
@@ -32,6 +32,21 @@ describe('comparedPlanes', () => {
     const large: DesignDocument = { ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.panel, outline: { kind: 'rectangle', widthMm: 1000, heightMm: 500 } } };
     // 1000 mm at 28 GHz are 93 wavelengths: lobes of 0.6 degrees, twenty samples each.
     expect(comparedPlanes(STARTING_DESIGN, large)[0].request).toMatchObject({ thetaDeg: [-90, 90, 0.02] });
+  });
+});
+
+describe('beamShift', () => {
+  it('leads from one beam to the other over direction cosines, whatever their azimuths', () => {
+    const shift = beamShift(steered(10, 0), steered(30, 90));
+    expect(shift.u).toBeCloseTo(-sine(10), 12);
+    expect(shift.v).toBeCloseTo(0.5, 12);
+    const back = beamShift(steered(30, 90), steered(10, 0));
+    expect([back.u, back.v]).toEqual([-shift.u, -shift.v]);
+  });
+
+  it('is nothing between equal beams, and between two at broadside whatever their azimuths', () => {
+    expect(beamShift(steered(33, 77), steered(33, 77))).toEqual({ u: 0, v: 0 });
+    expect(beamShift(steered(0, 77), steered(0, 12))).toEqual({ u: 0, v: 0 });
   });
 });
 

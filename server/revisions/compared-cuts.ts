@@ -1,8 +1,10 @@
 import { comparisonFloorDbi, cutDifferenceDb } from '../../shared/antenna/compare-cuts';
-import { derivedValues } from '../../shared/antenna/derived-values';
+import { apertureOverWavelength } from '../../shared/antenna/derived-values';
 import type { Cut, CutRequest } from '../../shared/antenna/pattern-cut';
+import type { UvShift } from '../../shared/antenna/uv-map';
 import type { Beam, DesignDocument } from '../../shared/model/design-document';
 import { degFromRad, radFromDeg } from '../../shared/units/angles';
+import { directionOf } from '../../shared/waves/conventions';
 
 /** Which cut to compare, and by how much to shift the earlier side in u so that the first beams coincide. */
 export interface ComparedPlane {
@@ -49,8 +51,14 @@ function sineAlong(beam: Beam, phiDeg: number): number {
   return side * Math.sin(radFromDeg(beam.thetaDeg));
 }
 
+/** From the first beam before to the first beam after, by their tangential direction cosines. */
+export function beamShift(before: DesignDocument, after: DesignDocument): UvShift {
+  const [from, to] = [before, after].map(({ requirement: { beams: [beam] } }) => directionOf(radFromDeg(beam.thetaDeg), radFromDeg(beam.phiDeg)));
+  return { u: to.u - from.u, v: to.v - from.v };
+}
+
 function stepFor(design: DesignDocument): number {
-  const lobeDeg = degFromRad(1 / derivedValues(design).apertureOverWavelength);
+  const lobeDeg = degFromRad(1 / apertureOverWavelength(design));
   return STEPS_DEG.find((stepDeg) => stepDeg <= lobeDeg / SAMPLES_PER_LOBE) ?? STEPS_DEG[STEPS_DEG.length - 1];
 }
 

@@ -6,7 +6,7 @@ import { identitiesOf, sideOf, type ComparedEdition, type ComparedState } from '
 
 const IDS = ['00000000-0000-4000-8000-000000000001', '00000000-0000-4000-8000-000000000002'] as const;
 const { description, cells } = exampleEdition();
-const edition = (number: number, count: number): ComparedEdition => ({ familyName: 'Rings', number, description, cells: cells.slice(0, count) });
+const edition = (number: number, count: number): ComparedEdition => ({ id: IDS[number - 1], familyId: 'rings', familyName: 'Rings', number, description, cells: cells.slice(0, count) });
 const on = (editionId: string): DesignDocument => ({ ...STARTING_DESIGN, cells: { kind: 'edition', editionId, rule: 'nearest-phase', excludedCells: [] } });
 
 function state(design: DesignDocument, of: ComparedEdition | null = null): ComparedState {
@@ -44,6 +44,6 @@ describe('the state of a side', () => {
     expect(identitiesOf(state(STARTING_DESIGN))).toEqual({ kind: 'continuous' });
     expect(identitiesOf(state({ ...STARTING_DESIGN, cells: { kind: 'ideal', levels: 4 } }))).toEqual({ kind: 'table', key: 'ideal 4' });
     expect(identitiesOf(state({ ...STARTING_DESIGN, cells: { kind: 'inline', cells: [{ phaseDeg: 1, magnitude: 1 }] } }))).toEqual({ kind: 'table', key: '[{"magnitude":1,"phaseDeg":1}]' });
-    expect(identitiesOf(state(on(IDS[0]), edition(1, 2)))).toMatchObject({ kind: 'family', familyName: 'Rings', parametersMm: [cells[0].parametersMm, cells[1].parametersMm] });
+    expect(identitiesOf(state(on(IDS[0]), edition(1, 2)))).toMatchObject({ kind: 'family', familyId: 'rings', editionId: IDS[0], parametersMm: [cells[0].parametersMm, cells[1].parametersMm] });
   });
 });

@@ -21,6 +21,8 @@ export interface ComparedState {
 }
 
 export interface ComparedEdition {
+  readonly id: string;
+  readonly familyId: string;
   readonly familyName: string;
   readonly number: number | null;
   readonly description: FamilyDescription;
@@ -49,6 +51,6 @@ export function identitiesOf({ design: { cells }, edition }: ComparedState): Cel
   if (cells.kind === 'ideal') return cells.levels === null ? { kind: 'continuous' } : { kind: 'table', key: `ideal ${cells.levels}` };
   if (cells.kind === 'inline') return { kind: 'table', key: canonicalJson(cells.cells) };
   if (edition === null) throw new Error('a design on an edition came without it');
-  const { familyName, description } = edition;
-  return { kind: 'family', familyName, parameterLabel: description.parameters[0].label, parametersMm: edition.cells.map(({ parametersMm }) => parametersMm) };
+  const { id, familyId, description } = edition;
+  return { kind: 'family', familyId, editionId: id, parameterLabel: description.parameters[0].label, parametersMm: edition.cells.map(({ parametersMm }) => parametersMm) };
 }

@@ -22,7 +22,7 @@ export function comparisonReplyOf({ cells, cuts, uv, ...rest }: ComputedComparis
       ...plainArrays(['angleDeg', 'beforeDbi', 'afterDbi'], cut),
       differenceDb: Array.from(cut.differenceDb, (value) => (Number.isNaN(value) ? null : value)),
     })),
-    uv: { size: uv.size, differenceDb: Array.from(uv.differenceDb) },
+    uv: { ...uv, differenceDb: Array.from(uv.differenceDb) },
   };
 }
 
@@ -32,7 +32,7 @@ export function comparisonBlockOf({ cells, cuts, uv, ...rest }: ComputedComparis
     ...rest,
     cells: isCompared(cells) ? withoutArrays(cells) : cells,
     cuts: cuts.map((cut) => ({ request: requestOf(cut), shiftU: cut.shiftU, floorDbi: cut.floorDbi })),
-    uv: { size: uv.size },
+    uv: { size: uv.size, shiftU: uv.shiftU, shiftV: uv.shiftV },
   };
   return writeBinaryBlock(head, {
     ...(isCompared(cells) ? namedArrays('cells', COMPARED_CELL_ARRAY_NAMES, cells.arrays) : {}),

@@ -3,6 +3,7 @@ import { compareCells, type CellChanges } from '../../shared/antenna/compare-cel
 import { mapDifferenceDb } from '../../shared/antenna/compare-cuts';
 import { compareFigures, decidingFigure, type FigureDifference } from '../../shared/antenna/compare-figures';
 import type { Prediction } from '../../shared/antenna/predict-design';
+import type { UvShift } from '../../shared/antenna/uv-map';
 import { COMPARED_CELL_ARRAY_NAMES, type ParameterDifference, type Side } from '../../shared/contracts/comparisons';
 import { countParameters } from '../../shared/model/design-diff';
 import type { NoFigure } from '../../shared/model/figures';
@@ -11,7 +12,7 @@ import { InvalidInput } from '../http/problems';
 import type { LibraryService } from '../library/library-service';
 import type { PredictionService } from '../predictions/prediction-service';
 import type { DraftService } from '../projects/draft-service';
-import { comparedCuts, comparedPlanes, type ComparedCut } from './compared-cuts';
+import { beamShift, comparedCuts, comparedPlanes, type ComparedCut } from './compared-cuts';
 import { parameterDifferences } from './compared-parameters';
 import { identitiesOf, sideOf, type ComparedEdition, type ComparedState } from './compared-state';
 import type { RevisionService } from './revision-service';
@@ -38,10 +39,12 @@ export interface ComputedComparison {
   readonly parameters: ParameterDifference[];
   readonly cells: CellChanges | NoFigure;
   readonly cuts: readonly ComparedCut[];
-  readonly uv: { readonly size: number; readonly differenceDb: Float32Array };
+  readonly uv: { readonly size: number; readonly shiftU: number; readonly shiftV: number; readonly differenceDb: Float32Array };
   readonly figures: FigureDifference[];
   readonly deciding: string | null;
 }
+
+type SideName = 'before' | 'after';
 
 const UV_SIZE = 129;
 const REFERENCE = /^(revision|draft):([0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12})$/;
@@ -57,12 +60,14 @@ export class ComparisonService {
     return { before: await this.stateOf(teamId, references.before), after: await this.stateOf(teamId, references.after) };
   }
 
-  /** @throws InvalidInput when one of them cannot be predicted */
+  /** @throws InvalidInput when one of them cannot be predicted: each fault points into the design of the side it names */
   async compare(teamId: string, { before, after }: ComparedPair, signal?: AbortSignal): Promise<ComputedComparison> {
     const planes = comparedPlanes(before.design, after.design);
     const cuts = planes.map(({ request }) => request);
-    const predict = ({ design }: ComparedState): Promise<Prediction> => this.parts.predictions.predict(teamId, { design, cells: true, cuts, uvSize: UV_SIZE, signal });
-    const [left, right] = await Promise.all([predict(before), predict(after)]);
+    const shift = beamShift(before.design, after.design);
+    const predict = ({ design }: ComparedState, uvShift?: UvShift): Promise<Prediction> =>
+      this.parts.predictions.predict(teamId, { design, cells: true, cuts, uvSize: UV_SIZE, uvShift, signal });
+    const [left, right] = await bothSides({ before: predict(before, shift), after: predict(after) });
     const arrays = { before: arraysOf(left), after: arraysOf(right) };
     const compared = comparedCuts(planes, arrays.before.cuts, arrays.after.cuts);
     const placed = (state: ComparedState, side: 'before' | 'after') => ({ lattice: state.design.panel.lattice, arrays: arrays[side].cells, identities: identitiesOf(state) });
@@ -74,7 +79,7 @@ export class ComparisonService {
       parameters: parameterDifferences(before, after),
       cells: compareCells(placed(before, 'before'), placed(after, 'after')),
       cuts: compared,
-      uv: { size: UV_SIZE, differenceDb: mapDifferenceDb(arrays.before.uv.gainDbi, arrays.after.uv.gainDbi, compared[0].floorDbi) },
+      uv: { size: UV_SIZE, shiftU: shift.u, shiftV: shift.v, differenceDb: mapDifferenceDb(arrays.before.uv.gainDbi, arrays.after.uv.gainDbi, compared[0].floorDbi) },
       figures,
       deciding: decidingFigure(figures),
     };
@@ -101,6 +106,18 @@ export class ComparisonService {
   private async editionOf(teamId: string, editionId: string | null): Promise<ComparedEdition | null> {
     return editionId === null ? null : this.parts.library.edition(teamId, editionId);
   }
+}
+
+/** Both predictions. Where a design cannot be predicted, the faults of both sides, each with the name of its side. */
+async function bothSides(sides: Readonly<Record<SideName, Promise<Prediction>>>): Promise<[Prediction, Prediction]> {
+  const [before, after] = await Promise.allSettled([sides.before, sides.after]);
+  if (before.status === 'fulfilled' && after.status === 'fulfilled') return [before.value, after.value];
+  const failed = [{ side: 'before' as const, result: before }, { side: 'after' as const, result: after }].flatMap(({ side, result }) =>
+    result.status === 'rejected' ? [{ side, reason: result.reason as unknown }] : [],
+  );
+  const faults = failed.flatMap(({ side, reason }) => (reason instanceof InvalidInput ? reason.faults.map((fault) => ({ ...fault, detail: `${side}: ${fault.detail}` })) : []));
+  const other = failed.find(({ reason }) => !(reason instanceof InvalidInput));
+  throw other === undefined ? new InvalidInput(faults) : other.reason;
 }
 
 /** Numbers in the arrays of a comparison, at most. */

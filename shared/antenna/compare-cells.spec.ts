@@ -8,7 +8,8 @@ import { prepareEdition } from './prepare-edition';
 const edition = prepareEdition(exampleEdition());
 const family: CellIdentities & { kind: 'family' } = {
   kind: 'family',
-  familyName: 'example',
+  familyId: 'family',
+  editionId: 'edition 1',
   parameterLabel: 'Size',
   parametersMm: edition.edition.cells.map(({ parametersMm }) => parametersMm),
 };
@@ -89,11 +90,20 @@ describe('compareCells', () => {
 
   it('tells cells of two editions of a family apart by their sizes, not by their places in the list', () => {
     const before = placed({ cells: onEdition });
-    const reversed = { ...family, parametersMm: [...family.parametersMm].reverse() };
+    const reversed = { ...family, editionId: 'edition 2', parametersMm: [...family.parametersMm].reverse() };
     const last = family.parametersMm.length - 1;
     const after = { ...before, identities: reversed, arrays: { ...before.arrays, cellIndex: before.arrays.cellIndex.map((index) => last - index) } };
     expect(changes(before, after)).toMatchObject({ changed: 0, parameter: { larger: 0, smaller: 0 } });
-    expect(changes(before, { ...after, identities: { ...reversed, familyName: 'another' } })).toMatchObject({ changed: 400 });
+    expect(changes(before, { ...after, identities: { ...reversed, familyId: 'another' } })).toMatchObject({ changed: 400 });
+  });
+
+  it('tells cells of one edition apart by their places in its list, also where their sizes are equal', () => {
+    const before = placed({ cells: onEdition });
+    const alike: CellIdentities = { ...family, parametersMm: family.parametersMm.map(() => [1]) };
+    const after = { ...before, identities: alike, arrays: { ...before.arrays, cellIndex: before.arrays.cellIndex.map((index) => (index + 1) % family.parametersMm.length) } };
+    expect(changes({ ...before, identities: alike }, after)).toMatchObject({ changed: 400, parameter: { larger: 0, smaller: 0, meanChangeMm: 0 } });
+    // Of another edition the sizes are all there is to go by.
+    expect(changes({ ...before, identities: alike }, { ...after, identities: { ...alike, editionId: 'edition 2' } })).toMatchObject({ changed: 0 });
   });
 
   it('measures the error left by four levels: at most 45 degrees, 26 degrees RMS', () => {

@@ -9,8 +9,14 @@ export type CellIdentities =
   | { readonly kind: 'continuous' }
   /** Cells without parameters: ideal levels or a what-if table. Tables of one `key` hold the same cells. */
   | { readonly kind: 'table'; readonly key: string }
-  /** Cells of a family, by the values of its parameters, index by index. */
-  | { readonly kind: 'family'; readonly familyName: string; readonly parameterLabel: string; readonly parametersMm: readonly (readonly number[])[] };
+  /** Cells of an edition of a family, with the values of their parameters, index by index. */
+  | {
+      readonly kind: 'family';
+      readonly familyId: string;
+      readonly editionId: string;
+      readonly parameterLabel: string;
+      readonly parametersMm: readonly (readonly number[])[];
+    };
 
 export interface PlacedCells {
   readonly lattice: Lattice;
@@ -152,7 +158,9 @@ interface Indices {
 function changeTest(before: CellIdentities, after: CellIdentities): (indices: Indices, phaseChangeDeg: number) => boolean {
   if (before.kind === 'continuous' && after.kind === 'continuous') return (_indices, phaseChangeDeg) => Math.abs(phaseChangeDeg) > SAME_PHASE_DEG;
   if (before.kind === 'table' && after.kind === 'table' && before.key === after.key) return (indices) => indices.before !== indices.after;
-  if (before.kind === 'family' && after.kind === 'family' && before.familyName === after.familyName) {
+  if (before.kind === 'family' && after.kind === 'family' && before.familyId === after.familyId) {
+    // Within one edition the index says which cell it is, even where two have the same parameters.
+    if (before.editionId === after.editionId) return (indices) => indices.before !== indices.after;
     return (indices) => {
       const left = before.parametersMm[indices.before];
       const right = after.parametersMm[indices.after];
@@ -163,7 +171,7 @@ function changeTest(before: CellIdentities, after: CellIdentities): (indices: In
 }
 
 function commonFamily(before: CellIdentities, after: CellIdentities): boolean {
-  return before.kind === 'family' && after.kind === 'family' && before.familyName === after.familyName;
+  return before.kind === 'family' && after.kind === 'family' && before.familyId === after.familyId;
 }
 
 function parameterChange(before: CellIdentities, after: CellIdentities): (indices: Indices) => number {

@@ -36,6 +36,12 @@ export interface DerivedValues {
 
 const MM_PER_M = 1000;
 
+/** Largest dimension of the outline in wavelengths at the design frequency. */
+export function apertureOverWavelength(design: DesignDocument): number {
+  const { panel, designFrequencyHz } = siDesign(design);
+  return (largestDimensionM(panel.outline) * wavenumberRadPerM(designFrequencyHz)) / (2 * Math.PI);
+}
+
 /** Never throws for a document whose fields are each valid; what does not exist says why. */
 export function derivedValues(design: DesignDocument): DerivedValues {
   const si = siDesign(design);

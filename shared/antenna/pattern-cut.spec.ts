@@ -50,6 +50,17 @@ describe('the u-v map', () => {
     }
   });
 
+  it('holds at each place the gain of the direction that a shift brought there, and the floor where none did', () => {
+    const shift = { u: 0.13, v: -0.07 };
+    const { gainDbi, floorDbi } = uvMap(pattern, 21, -0.5, shift);
+    for (const [column, row] of [[12, 3], [10, 10], [4, 15]]) {
+      const [u, v] = [-1 + column / 10 - shift.u, -1 + row / 10 - shift.v];
+      expect(gainDbi[row * 21 + column]).toBeCloseTo(flooredDbi(directivityRatio(pattern, { u, v, w: Math.sqrt(1 - u * u - v * v) })) - 0.5, 4);
+    }
+    // u = -0.9 comes from -1.03, where no direction is; u = 1 comes from 0.87.
+    expect([gainDbi[10 * 21 + 1], gainDbi[10 * 21 + 20] > floorDbi]).toEqual([floorDbi, true]);
+  });
+
   it('is that of single directions on a large staggered panel too', () => {
     const large = radiationPattern(exampleField({ columnCount: 90, rowCount: 70, stagger: 'odd' }), 210, 0.5);
     const fine = uvMap(large, 17, 0);

@@ -9,7 +9,7 @@ import { placeCells, type PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
 import { requirementVerdicts } from './requirement-verdicts';
 import { illuminatedState } from './illuminated-state';
-import { uvMap, type UvMap } from './uv-map';
+import { uvMap, type UvMap, type UvShift } from './uv-map';
 import { isNumber } from './no-figure';
 
 export interface PredictionOptions {
@@ -20,7 +20,7 @@ export interface PredictionOptions {
   readonly include: {
     readonly cells?: boolean;
     readonly cuts?: readonly CutRequest[];
-    readonly uv?: { readonly size: number };
+    readonly uv?: { readonly size: number; readonly shift?: UvShift };
   };
 }
 
@@ -67,6 +67,6 @@ export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: P
     }),
     ...(include.cells ? { cells: cellArrays({ ...placed, responses: state.responses }) } : {}),
     ...(include.cuts ? { cuts: include.cuts.map((request) => patternCut(state.pattern, request, beam, gainOffsetDb)) } : {}),
-    ...(include.uv ? { uv: uvMap(state.pattern, include.uv.size, gainOffsetDb) } : {}),
+    ...(include.uv ? { uv: uvMap(state.pattern, include.uv.size, gainOffsetDb, include.uv.shift) } : {}),
   };
 }

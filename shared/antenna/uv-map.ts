@@ -9,18 +9,28 @@ export interface UvMap {
   readonly floorDbi: number;
 }
 
-/** Samples the pattern at uniform u and v. `gainOffsetDb` is gain less directivity. */
-export function uvMap(pattern: RadiationPattern, size: number, gainOffsetDb: number): UvMap {
+/** A move of a pattern over direction cosines, which leaves its form as it is. */
+export interface UvShift {
+  readonly u: number;
+  readonly v: number;
+}
+
+/**
+ * Samples the pattern at uniform u and v. `gainOffsetDb` is gain less directivity. With a shift the map holds at (u, v)
+ * the exact gain in the direction (u - shift.u, v - shift.v), and the floor where that is no direction.
+ */
+export function uvMap(pattern: RadiationPattern, size: number, gainOffsetDb: number, shift: UvShift = { u: 0, v: 0 }): UvMap {
   const gainDbi = new Float32Array(size * size).fill(FLOOR_DBI);
   const coordinates = Float64Array.from({ length: size }, (_, i) => (size === 1 ? 0 : -1 + (2 * i) / (size - 1)));
   const scale = (4 * Math.PI) / pattern.radiatedPower;
-  const powersAt = interpolatedColumn(pattern.spectrum, pattern.wavenumber, coordinates);
+  const vs = coordinates.map((v) => v - shift.v);
+  const powersAt = interpolatedColumn(pattern.spectrum, pattern.wavenumber, vs);
   const powers = new Float64Array(size);
   for (let column = 0; column < size; column++) {
-    const u = coordinates[column];
+    const u = coordinates[column] - shift.u;
     powersAt(u, powers);
     for (let row = 0; row < size; row++) {
-      const wSquared = 1 - u * u - coordinates[row] * coordinates[row];
+      const wSquared = 1 - u * u - vs[row] * vs[row];
       if (wSquared < 0) continue;
       const ratio = powers[row] * elementPower(Math.sqrt(wSquared), pattern.radiateExponent) * scale;
       gainDbi[row * size + column] = Math.max(FLOOR_DBI, flooredDbi(ratio) + gainOffsetDb);

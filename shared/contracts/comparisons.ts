@@ -63,7 +63,11 @@ export const cutDifference = z.strictObject({
   angleDeg: numbers,
   beforeDbi: numbers,
   afterDbi: numbers,
-  /** After minus before once `before` is shifted by shiftU so that the beams coincide; null where either is below the floor. */
+  /**
+   * After minus before once the beams coincide; null where either is below the floor. In a plane of constant phi `before`
+   * is moved by shiftU along the plane; in planes through each side's own beam the angle from that beam is compared and
+   * shiftU is 0.
+   */
   differenceDb: z.array(z.number().nullable()),
   shiftU: z.number(),
   floorDbi: z.number(),
@@ -89,8 +93,11 @@ export const comparison = z.strictObject({
   parameters: z.array(parameterDifference),
   cells: z.union([cellDifference, noFigure]),
   cuts: z.array(cutDifference),
-  /** After minus before in dB, row by row from v = -1; 0 outside the visible circle and below the floor. */
-  uv: z.strictObject({ size: z.number().int(), differenceDb: numbers }),
+  /**
+   * After at (u, v) minus before at (u - shiftU, v - shiftV) in dB, row by row from v = -1, so that the first beams
+   * coincide wherever they point; 0 where either side has no direction or lies below the floor.
+   */
+  uv: z.strictObject({ size: z.number().int(), shiftU: z.number(), shiftV: z.number(), differenceDb: numbers }),
   figures: z.array(figureDifference),
   /** Id of the figure that decides between the two, if one verdict changed. */
   deciding: z.string().nullable(),
@@ -104,7 +111,7 @@ export const COMPARED_CUT_ARRAY_NAMES = ['angleDeg', 'beforeDbi', 'afterDbi', 'd
 export const comparisonHead = comparison.omit({ cells: true, cuts: true, uv: true }).extend({
   cells: z.union([cellDifference.omit({ arrays: true }), noFigure]),
   cuts: z.array(cutDifference.pick({ request: true, shiftU: true, floorDbi: true })),
-  uv: z.strictObject({ size: z.number().int() }),
+  uv: z.strictObject({ size: z.number().int(), shiftU: z.number(), shiftV: z.number() }),
 });
 
 export const comparisonQuery = z.strictObject({ before: z.string().max(80), after: z.string().max(80) });

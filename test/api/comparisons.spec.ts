@@ -99,6 +99,17 @@ describe('comparisons', () => {
     expect(along.afterDbi[centre]).toBeGreaterThan(34);
   });
 
+  it('moves the earlier map by the direction cosines between beams of different azimuth', async () => {
+    const other = await newPanel(designer, steered(20, 50));
+    const { uv } = await compare(revision(second), `draft:${other.id}`);
+    const [sine, turn] = [Math.sin((20 * Math.PI) / 180), (50 * Math.PI) / 180];
+    expect(uv.shiftU).toBeCloseTo(sine * (Math.cos(turn) - 1), 12);
+    expect(uv.shiftV).toBeCloseTo(sine * Math.sin(turn), 12);
+    // The later beam lies at the sample nearest to it; there beam is held against beam, both of ideal cells.
+    const at = (value: number): number => Math.round(((value + 1) * (uv.size - 1)) / 2);
+    expect(Math.abs(uv.differenceDb[at(sine * Math.sin(turn)) * uv.size + at(sine * Math.cos(turn))])).toBeLessThan(0.5);
+  });
+
   it('decides by the figure whose verdict changed', async () => {
     const { figures, deciding } = await compare(revision(first), revision(second));
     const gain = figures.find(({ id }) => id === deciding);
@@ -112,7 +123,7 @@ describe('comparisons', () => {
     for (const name of ['phaseChangeDeg', 'errorChangeDeg', 'parameterChangeMm'] as const) {
       expect(cellsOf(back).arrays[name].map((value) => value + 0)).toEqual(negated(cellsOf(there).arrays[name]));
     }
-    expect(back.uv.differenceDb.map((value) => value + 0)).toEqual(negated(there.uv.differenceDb));
+    expect([back.uv.shiftU, back.uv.shiftV]).toEqual(negated([there.uv.shiftU, there.uv.shiftV]));
     expect(back.cuts[1].differenceDb.map((value) => (value === null ? null : 0 - value + 0))).toEqual(there.cuts[1].differenceDb.map((value) => (value === null ? null : value + 0)));
     expect(back.cuts[0].shiftU).toBe(-there.cuts[0].shiftU);
     expect([back.before, back.after, back.deciding]).toEqual([there.after, there.before, there.deciding]);
@@ -147,7 +158,7 @@ describe('comparisons', () => {
       ...json,
       cells,
       cuts: json.cuts.map(({ request, shiftU, floorDbi }) => ({ request, shiftU, floorDbi })),
-      uv: { size: json.uv.size },
+      uv: { size: json.uv.size, shiftU: json.uv.shiftU, shiftV: json.uv.shiftV },
     });
     for (const name of COMPARED_CELL_ARRAY_NAMES) expect(Array.from(arrays[`cells.${name}`])).toEqual(cellsOf(json).arrays[name]);
     json.cuts.forEach((cut, i) => {
@@ -174,7 +185,11 @@ describe('comparisons', () => {
   it('refuses a draft that cannot be predicted, and more numbers than JSON should carry', async () => {
     const sized = (widthMm: number): DesignDocument => ({ ...STARTING_DESIGN, panel: { ...STARTING_DESIGN.panel, outline: { kind: 'rectangle', widthMm, heightMm: 4000 } } });
     const tooLarge = await newPanel(designer, sized(40_000));
-    expectInvalid(await get(revision(second), `draft:${tooLarge.id}`), [{ pointer: '#/design/panel', detail: 'the panel would have 6400000 cells; the limit is 1000000' }]);
+    const fault = (side: string) => ({ pointer: '#/design/panel', detail: `${side}: the panel would have 6400000 cells; the limit is 1000000` });
+    expectInvalid(await get(revision(second), `draft:${tooLarge.id}`), [fault('after')]);
+    expectInvalid(await get(`draft:${tooLarge.id}`, revision(second)), [fault('before')]);
+    const asBlock = { accept: 'application/octet-stream' };
+    expectInvalid(await get(`draft:${tooLarge.id}`, `draft:${tooLarge.id}`, designer, asBlock), [fault('before'), fault('after')]);
     const large = await newPanel(designer, sized(4000));
     const detail = 'Up to 3856641 numbers are too many for JSON, the limit is 2500000: ask with Accept: application/octet-stream.';
     expectProblem(await get(`draft:${large.id}`, `draft:${large.id}`), problemOf('not-acceptable', 406, detail));

@@ -38,7 +38,19 @@ describe('cuts of two sides', () => {
     expect(shiftText(SAMPLE_COMPARISON, cut)).toBe('3 shifted by Δu +0.0082');
     expect(shiftText(SAMPLE_COMPARISON, { ...cut, shiftU: 0 })).toBe('angle from each beam');
     expect(shiftText(SAMPLE_COMPARISON, { ...cut, request: { phiDeg: 0, thetaDeg: [-90, 90, 30] }, shiftU: 0 })).toBe('beams coincide');
-    expect(comparisonNotes(SAMPLE_COMPARISON)[0]).toBe('Difference: revision 3 resampled linearly after the shift between the beams; gaps where either lies below \u221215 dBi, clipped at ±10 dB.');
+  });
+  it('tell in the notes how the beams were brought together', () => {
+    const rest = 'gaps where either lies below \u221215 dBi, clipped at ±10 dB.';
+    const first = (request: typeof cut.request, shiftU: number): string => comparisonNotes({ ...SAMPLE_COMPARISON, cuts: [{ ...cut, request, shiftU }] })[0];
+    const plane = { phiDeg: 0, thetaDeg: [-90, 90, 30] as [number, number, number] };
+    expect(first(cut.request, 0)).toBe(`Difference of cuts: each side in the plane of its own beam, compared by the angle from that beam; ${rest}`);
+    expect(first(plane, 0)).toBe(`Difference of cuts: both sides in one plane, direction by direction; ${rest}`);
+    expect(first(plane, 0.0082)).toBe(`Difference of cuts: in the plane of both beams revision 3 is moved by Δu +0.0082 onto the other beam and resampled linearly; across, the angle from each beam is compared; ${rest}`);
+  });
+  it('tell in the notes how the map was moved', () => {
+    const second = (shiftU: number, shiftV: number): string => comparisonNotes({ ...SAMPLE_COMPARISON, uv: { ...SAMPLE_COMPARISON.uv, shiftU, shiftV } })[1];
+    expect(second(0, 0)).toBe('Over the hemisphere the directions are subtracted as they are; moved nulls show as pairs.');
+    expect(second(0.25, -0.1)).toBe('Over the hemisphere revision 3 is moved by Δu +0.2500, Δv \u22120.1000 so that the first beams coincide; what has no direction on one side stays bare.');
   });
   it('differ over the hemisphere on a scale centred on zero', () => {
     const { scale, levels } = hemisphereDifference(SAMPLE_COMPARISON);

@@ -107,8 +107,11 @@ export function cutDifferenceFigure(comparison: Comparison, cut: CutDifference):
   };
 }
 
+/** Less than the last digit that is shown. */
+const isNoShift = (shift: number): boolean => Math.abs(shift) < 5e-5;
+
 export function shiftText({ before }: Comparison, cut: CutDifference): string {
-  if (Math.abs(cut.shiftU) >= 5e-5) return `${sideMark(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
+  if (!isNoShift(cut.shiftU)) return `${sideMark(before)} shifted by Δu ${signedNumberText(cut.shiftU, 4)}`;
   return 'plane' in cut.request ? 'angle from each beam' : 'beams coincide';
 }
 
@@ -116,11 +119,24 @@ export function shiftText({ before }: Comparison, cut: CutDifference): string {
 export function comparisonNotes(comparison: Comparison): readonly string[] {
   const [cut] = comparison.cuts;
   return [
-    ...(cut ? [`Difference: ${sideName(comparison.before)} resampled linearly after the shift between the beams; gaps where either lies below ${numberText(cut.floorDbi, 0)} dBi, clipped at ±${CLIPPED_DB} dB.`] : []),
-    'Over the hemisphere the directions are subtracted as they are; moved nulls show as pairs.',
+    ...(cut ? [`Difference of cuts: ${cutAlignment(comparison)}; gaps where either lies below ${numberText(cut.floorDbi, 0)} dBi, clipped at ±${CLIPPED_DB} dB.`] : []),
+    hemisphereAlignment(comparison),
     'A mask margin is taken about the beam of its own side.',
     'A prediction is array theory, not a measurement.',
   ];
+}
+
+/** What was done to bring the beams of the cut along the beam together. */
+function cutAlignment({ before, cuts: [cut] }: Comparison): string {
+  if ('plane' in cut.request) return 'each side in the plane of its own beam, compared by the angle from that beam';
+  if (isNoShift(cut.shiftU)) return 'both sides in one plane, direction by direction';
+  return `in the plane of both beams ${sideName(before)} is moved by Δu ${signedNumberText(cut.shiftU, 4)} onto the other beam and resampled linearly; across, the angle from each beam is compared`;
+}
+
+function hemisphereAlignment({ before, uv: { shiftU, shiftV } }: Comparison): string {
+  if (isNoShift(shiftU) && isNoShift(shiftV)) return 'Over the hemisphere the directions are subtracted as they are; moved nulls show as pairs.';
+  const shift = `Δu ${signedNumberText(shiftU, 4)}, Δv ${signedNumberText(shiftV, 4)}`;
+  return `Over the hemisphere ${sideName(before)} is moved by ${shift} so that the first beams coincide; what has no direction on one side stays bare.`;
 }
 
 export function hemisphereDifference({ uv }: Comparison): { readonly levels: { readonly size: number; readonly levelDb: readonly number[] }; readonly scale: ColourScale } {

@@ -63,7 +63,7 @@ export const SAMPLE_COMPARISON: Comparison = {
       floorDbi: -15,
     },
   ],
-  uv: { size: 2, differenceDb: [0, 1, -1, 0] },
+  uv: { size: 2, shiftU: 0.0082, shiftV: 0, differenceDb: [0, 1, -1, 0] },
   figures: [
     { id: 'gain', label: 'Gain at the peak', unit: 'dBi', before: 34.74, after: 34.76, change: 0.02, limit: '>= 34.0', verdictBefore: 'meets', verdictAfter: 'meets' },
     { id: 'along', label: 'Beamwidth along', unit: '°', before: 3.1274, after: 3.1271, change: -0.0003, limit: null, verdictBefore: null, verdictAfter: null },
