@@ -1,6 +1,7 @@
 import type { SiDesign } from './si-design';
 import { directLaw } from './direct-law';
 import { focusLaw } from './focus-law';
+import { vortexLaw } from './synthesis/vortex-law';
 
 /** The wanted aperture field of a synthesis: what the cells must turn the incident field into. */
 export interface ApertureLaw {
@@ -14,6 +15,7 @@ export interface ApertureLaw {
 const laws: { readonly [Kind in SiDesign['synthesis']['kind']]: (design: SiDesign) => ApertureLaw } = {
   direct: directLaw,
   focus: focusLaw,
+  vortex: vortexLaw,
 };
 
 export function apertureLaw(design: SiDesign): ApertureLaw {

@@ -6,6 +6,7 @@ import { gratingLobes } from './grating-lobes';
 import type { IlluminatedState } from './illuminated-state';
 import { isNumber, noFigure, nothingLit } from './no-figure';
 import { patternFigures, type PatternFigures } from './pattern-figures';
+import { lawFigures } from './synthesis/law-figures';
 import { evanescentCellCount } from './target-phase';
 
 export interface DesignFigures {
@@ -41,6 +42,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     apertureEfficiency: apertureEfficiency(read.gainDbi, lattice.count * lattice.cellAreaM2, wavelengthM),
     referencePhaseDeg: degFromRad(placed.referencePhaseRad),
     uncertainty: radiates ? uncertainties(state, read.peakThetaDeg, peakUncertaintyDeg) : {},
+    ...lawFigures(state),
   };
   return { figures, gratingLobeCount: orders.reduce((sum, order) => sum + order.count, 0), maxIncidence };
 }

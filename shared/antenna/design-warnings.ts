@@ -29,8 +29,8 @@ export function designWarnings(facts: DesignFacts): Warning[] {
 const AS_STRONG_DB = 0.005;
 
 function imageLobeWarning({ synthesis }: DesignDocument, { sidelobeDb: { hemisphere } }: Figures): Warning[] {
-  // A panel focused in its near field has no one beam in the far field that another lobe could rival.
-  if (synthesis.kind === 'focus') return [];
+  // A panel focused in its near field has no one beam in the far field that another lobe could rival, nor has a ring.
+  if (synthesis.kind !== 'direct') return [];
   if (!('levelDb' in hemisphere) || typeof hemisphere.levelDb !== 'number' || hemisphere.levelDb < -AS_STRONG_DB) return [];
   const { levelDb, thetaDeg, phiDeg } = hemisphere as { levelDb: number; thetaDeg: number; phiDeg: number };
   return [

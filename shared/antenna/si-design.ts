@@ -56,7 +56,10 @@ export interface SiPlaneWave {
 
 export type SiIllumination = SiHorn | SiPlaneWave;
 
-export type SiSynthesis = { readonly kind: 'direct' } | { readonly kind: 'focus'; readonly point: SiPosition };
+export type SiSynthesis =
+  | { readonly kind: 'direct' }
+  | { readonly kind: 'focus'; readonly point: SiPosition }
+  | { readonly kind: 'vortex'; readonly order: number };
 
 export interface SiDesign {
   readonly designFrequencyHz: number;
@@ -86,11 +89,15 @@ export function siDesign(design: DesignDocument): SiDesign {
     operation: panel.operation,
     panel: siPanel(panel),
     illumination: siIllumination(design.illumination),
-    synthesis: design.synthesis.kind === 'focus' ? { kind: 'focus', point: siPosition(design.synthesis.pointMm) } : { kind: 'direct' },
+    synthesis: siSynthesis(design.synthesis),
     referencePhaseRad: referencePhaseDeg === 'search' ? 'search' : radFromDeg(referencePhaseDeg),
     receiveExponent: prediction.receiveExponent,
     radiateExponent: prediction.radiateExponent,
   };
+}
+
+function siSynthesis(synthesis: DesignDocument['synthesis']): SiSynthesis {
+  return synthesis.kind === 'focus' ? { kind: 'focus', point: siPosition(synthesis.pointMm) } : synthesis;
 }
 
 /** The panel alone in metres, for counting its cells before anything else is known. */

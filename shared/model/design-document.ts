@@ -89,6 +89,8 @@ export const illumination = z.discriminatedUnion('kind', [
 export const synthesis = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('direct') }),
   z.strictObject({ kind: z.literal('focus'), pointMm: positionMm }),
+  /** Every wanted beam turns its phase this many times about its axis, against the clock for positive orders. */
+  z.strictObject({ kind: z.literal('vortex'), order: z.number().int().min(-50).max(50) }),
 ]);
 
 export const cells = z.discriminatedUnion('kind', [

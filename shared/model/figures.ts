@@ -1,9 +1,9 @@
 import './zod-jitless';
 import * as z from 'zod';
+import { figure, noFigure } from './figure-value';
+import { lawFigures } from './law-figures';
 
-/** A figure that does not exist for a case says why; it is never null or NaN. */
-export const noFigure = z.object({ kind: z.string(), reason: z.string() }).catchall(z.union([z.number(), z.string()]));
-export const figure = z.union([z.number(), noFigure]);
+export { figure, noFigure };
 
 export const lobe = z.strictObject({ levelDb: z.number(), thetaDeg: z.number(), phiDeg: z.number() });
 
@@ -57,6 +57,7 @@ export const figures = z.strictObject({
   beams: z.array(beamFigures),
   /** Numerical uncertainty by name of the figure. */
   uncertainty: z.record(z.string(), z.number()),
+  ...lawFigures,
 });
 
 export const verdictWord = z.enum(['meets', 'falls-short', 'not-evaluated']);

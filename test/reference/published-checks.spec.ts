@@ -6,8 +6,9 @@ import { conventionsChecks } from './tables/conventions-checks';
 import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
+import { synthesisChecks } from './tables/synthesis-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...synthesisChecks };
 const checks = loadChecks();
 const pending = loadPending();
 

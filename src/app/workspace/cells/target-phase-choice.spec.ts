@@ -1,6 +1,10 @@
 import { STARTING_DESIGN } from '../../../../shared/model/starting-design';
 import { sheetRig } from '../fields/sheet-rig';
+import type { PredictedCells } from '../live-prediction-data';
+import { SAMPLE_FIGURES, SAMPLE_HEAD } from '../sample-prediction';
 import { TargetPhaseChoice, firstFocus } from './target-phase-choice';
+
+const NO_CELLS = { xMm: new Float64Array(0) } as unknown as PredictedCells;
 
 describe('target phase', () => {
   it('puts the first focus on the wanted beam, at a third of the far-field distance', () => {
@@ -23,5 +27,26 @@ describe('target phase', () => {
     expect(workspace.design().synthesis).toEqual({ kind: 'direct' });
     await choose('Near-field focus');
     expect(workspace.design().synthesis).toMatchObject({ pointMm: [expect.any(Number), 0, 400] });
+  });
+
+  it('makes vortex beams of a whole order, and refuses half a turn', async () => {
+    const { workspace, choose, enter, text } = await sheetRig(TargetPhaseChoice, STARTING_DESIGN, []);
+    await choose('Vortex beams');
+    expect(workspace.design().synthesis).toEqual({ kind: 'vortex', order: 1 });
+    await enter('Order', '-3');
+    expect(workspace.design().synthesis).toEqual({ kind: 'vortex', order: -3 });
+    await enter('Order', '1.5');
+    expect(text()).toContain('must be a whole number; got 1.5');
+    expect(workspace.stepNames()[0]).toBe('Make vortex beams');
+  });
+
+  it('shows what a focus turned out to do, with how it is computed', async () => {
+    const { workspace, fixture, text } = await sheetRig(TargetPhaseChoice, STARTING_DESIGN, []);
+    expect(text()).not.toContain('What the target phase does');
+    const focus = { distanceMm: 1200, maximumMm: 658.7, shiftMm: -541.3, riseDb: 3.18, halfPowerMm: { from: 444, to: 1176 }, profile: { distanceMm: [300, 658.7, 1200], levelDb: [-7, 0, -3.2] } };
+    workspace.prediction.set({ head: { ...SAMPLE_HEAD, figures: { ...SAMPLE_FIGURES, focus } }, cells: NO_CELLS, cuts: [], uv: null, of: STARTING_DESIGN });
+    await fixture.whenStable();
+    expect(text()).toContain('Highest level on the axis at658.7 mm');
+    expect(text()).toContain('How computed: level along the axis of a focus');
   });
 });

@@ -5,18 +5,25 @@ import { ChoiceRow } from '../fields/choice-row';
 import { DesignField } from '../fields/design-field';
 import { PendingEntries } from '../fields/pending-entries';
 import { RemarkList } from '../fields/remark-list';
+import { LawOutcome } from '../laws/law-outcome';
 import { WORKSPACE_STATE } from '../workspace-state';
 
 const OPTIONS = [
   { value: 'direct', label: 'Far beams' },
   { value: 'focus', label: 'Near-field focus' },
+  { value: 'vortex', label: 'Vortex beams' },
 ] as const;
+const STEP_NAMES: Readonly<Record<Synthesis['kind'], string>> = {
+  direct: 'Steer far beams',
+  focus: 'Focus in the near field',
+  vortex: 'Make vortex beams',
+};
 const MM_PER_WAVELENGTH_GHZ = 299.792458;
 
 /** What the phase of the cells is for: the wanted beams in the far field, or a focus in front of the panel. */
 @Component({
   selector: 'slant-target-phase-choice',
-  imports: [ChoiceRow, DesignField, RemarkList, ViewTitle],
+  imports: [ChoiceRow, DesignField, LawOutcome, RemarkList, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './target-phase-choice.html',
   styleUrl: '../fields/sheet.scss',
@@ -24,21 +31,28 @@ const MM_PER_WAVELENGTH_GHZ = 299.792458;
 export class TargetPhaseChoice {
   private readonly state = inject(WORKSPACE_STATE);
   private readonly pending = inject(PendingEntries);
-  /** The focus that stood before, so that a look at the far field loses nothing. */
-  private left: Synthesis | null = null;
+  /** What each kind held when it was left, so that a look at another loses nothing. */
+  private readonly left = new Map<Synthesis['kind'], Synthesis>();
   protected readonly options = OPTIONS;
   protected readonly axes = ['x', 'y', 'z'] as const;
   protected readonly synthesis = computed(() => this.state.design().synthesis);
   protected readonly canEdit = this.state.canEdit;
 
-  protected choose(kind: string): void {
+  protected choose(picked: string): void {
     const design = this.state.design();
-    if (kind === design.synthesis.kind) return;
-    if (design.synthesis.kind === 'focus') this.left = design.synthesis;
-    const next: Synthesis = kind === 'focus' ? (this.left ?? firstFocus(design)) : { kind: 'direct' };
+    const kind = OPTIONS.find(({ value }) => value === picked)?.value;
+    if (kind === undefined || kind === design.synthesis.kind) return;
+    this.left.set(design.synthesis.kind, design.synthesis);
+    const next = this.left.get(kind) ?? firstSynthesis(design, kind);
     this.pending.dropBelow('/synthesis');
-    this.state.change(kind === 'focus' ? 'Focus in the near field' : 'Steer far beams', (now) => ({ ...now, synthesis: next }));
+    this.state.change(STEP_NAMES[kind], (now) => ({ ...now, synthesis: next }));
   }
+}
+
+/** What a kind starts from. */
+export function firstSynthesis(design: DesignDocument, kind: Synthesis['kind']): Synthesis {
+  if (kind === 'focus') return firstFocus(design);
+  return kind === 'vortex' ? { kind, order: 1 } : { kind };
 }
 
 /** On the first wanted beam, at about a third of the far-field distance: near enough to be a focus worth the name. */

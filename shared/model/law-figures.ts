@@ -1,0 +1,40 @@
+import './zod-jitless';
+import * as z from 'zod';
+import { figure, noFigure } from './figure-value';
+
+/** Figures that only some target phases have. */
+
+/** The level along the line from the panel's centre through the focus. */
+export const focusFigures = z.strictObject({
+  /** Distance of the wanted focus from the panel's centre. */
+  distanceMm: z.number(),
+  /** Where the level on the line really is highest: nearer than the focus. */
+  maximumMm: z.number(),
+  /** Maximum less focus: negative towards the panel. */
+  shiftMm: z.number(),
+  /** Level at the maximum over the level at the focus. */
+  riseDb: z.number(),
+  /** Where the level falls to half of the maximum on either side. */
+  halfPowerMm: z.strictObject({ from: figure, to: figure }),
+  /** Level below the maximum at distances along the line, for drawing. */
+  profile: z.strictObject({ distanceMm: z.array(z.number()), levelDb: z.array(z.number()) }),
+});
+
+/** A beam that turns its phase `order` times about its axis. */
+export const vortexFigures = z.strictObject({
+  order: z.number().int(),
+  /** Angle off the axis at which the mean level about the axis is highest. */
+  ringDeg: z.number(),
+  /** Share of the power on that ring that has the wanted order. */
+  purity: z.number(),
+  /** Level on the axis relative to the ring. */
+  axisDb: figure,
+});
+
+export const lawFigures = {
+  focus: z.union([focusFigures, noFigure]).optional(),
+  vortex: z.union([vortexFigures, noFigure]).optional(),
+};
+
+export type FocusFigures = z.infer<typeof focusFigures>;
+export type VortexFigures = z.infer<typeof vortexFigures>;

@@ -1,0 +1,36 @@
+import type { PredictionReply } from '../../shared/contracts/predictions';
+import type { DesignDocument } from '../../shared/model/design-document';
+import { STARTING_DESIGN } from '../../shared/model/starting-design';
+import { Api } from '../support/api';
+import type { ApiClient } from '../support/api-client';
+import { bodyOf } from '../support/panels';
+
+/** Predictions run in the test's own thread here. */
+jest.setTimeout(30_000);
+
+describe('predicting target phases of every kind', () => {
+  let api: Api;
+  let designer: ApiClient;
+  beforeAll(async () => {
+    api = await Api.start();
+    designer = await api.signedIn('designer');
+  }, 60_000);
+  afterAll(() => api.close());
+
+  const figuresOf = async (change: Partial<DesignDocument>): Promise<PredictionReply['figures']> =>
+    bodyOf<PredictionReply>(await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, ...change } }), 200).figures;
+
+  it('answers ring and purity of a vortex, and the real maximum of a focus', async () => {
+    const vortex = await figuresOf({ synthesis: { kind: 'vortex', order: 2 } });
+    expect(vortex.vortex).toMatchObject({ order: 2, purity: expect.any(Number) as number });
+    const focus = await figuresOf({ synthesis: { kind: 'focus', pointMm: [0, 0, 400] } });
+    expect(focus.focus).toMatchObject({ distanceMm: 400, maximumMm: expect.any(Number) as number });
+    expect((await figuresOf({})).focus).toBeUndefined();
+  });
+
+  it('refuses a vortex of half an order by its pointer', async () => {
+    const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, synthesis: { kind: 'vortex', order: 0.5 } } });
+    const { errors } = answer.json as { errors: { pointer: string }[] };
+    expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/synthesis/order']]);
+  });
+});
