@@ -22,7 +22,8 @@ module.exports = {
     node('architecture', ['<rootDir>/test/architecture/**/*.spec.ts']),
     node('reference', ['<rootDir>/test/reference/**/*.spec.ts']),
     node('api', ['<rootDir>/test/api/**/*.spec.ts']),
-    node('e2e', ['<rootDir>/test/e2e/**/*.spec.ts']),
+    // A busy machine may need minutes for what takes seconds: the checks wait for what they want to see, not for a time.
+    node('e2e', ['<rootDir>/test/e2e/**/*.spec.ts'], { setupFilesAfterEnv: ['<rootDir>/test/e2e/support/patience.ts'] }),
     require('./jest.client.cjs'),
   ],
 };

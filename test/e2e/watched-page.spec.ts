@@ -4,6 +4,7 @@ import { createServer } from 'node:http';
 import type { Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
+import { eventually } from './support/eventually';
 import { TestBrowser, screenshotFolder, seriousAccessFaults, takePicture } from '../support/browser';
 
 const pageOf = (body: string): string => `<!doctype html><html lang="en"><head><title>Planted</title></head><body><main><h1>Planted</h1>${body}</main></body></html>`;
@@ -38,7 +39,7 @@ describe('a watched page', () => {
     server.listen(0, '127.0.0.1');
     await once(server, 'listening');
     browser = await TestBrowser.launch(`http://127.0.0.1:${(server.address() as AddressInfo).port}`);
-  }, 30_000);
+  });
 
   afterEach(() => browser.closePages());
 
@@ -64,7 +65,8 @@ describe('a watched page', () => {
     ['a request to another origin', '/leaving', /^request leaves the origin: http:\/\/127\.0\.0\.1:9\/elsewhere\.png$/],
     ['a reply that failed', '/missing-part', /^reply 404 for \/no-such-picture\.png$/],
   ])('reports %s', async (_what, path, message) => {
-    expect(await problemsOn(path)).toContainEqual(expect.stringMatching(message));
+    const problems = await problemsOn(path);
+    await eventually(async () => expect(problems).toContainEqual(expect.stringMatching(message)));
   });
 
   it('lets a failing reply pass that the test has announced', async () => {

@@ -83,7 +83,8 @@ export class TestBrowser {
       locale: 'en-GB',
       timezoneId: 'UTC',
     });
-    context.setDefaultTimeout(15_000);
+    // A busy machine takes its time; a test fails by what it sees, not by how soon.
+    context.setDefaultTimeout(30_000);
     this.contexts.push(context);
     await context.addInitScript(() => {
       document.addEventListener('securitypolicyviolation', (event) =>

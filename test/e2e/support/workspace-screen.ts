@@ -1,4 +1,5 @@
 import type { Locator, Page } from 'playwright-core';
+import { PATIENCE_MS, eventually } from './eventually';
 
 /** A number as the screens write it: true minus sign, spaces between thousands, a unit behind. */
 export function shownNumber(text: string): number {
@@ -13,6 +14,22 @@ export class WorkspaceScreen {
   async open(panelId: string, sheet: string): Promise<void> {
     await this.page.goto(`/panels/${panelId}/${sheet}`);
     await this.strip('Gain at the peak').waitFor();
+  }
+
+  /** The line of a sheet in the rail; its number is the place of the sheet, which grows with the product. */
+  sheet(title: string): Locator {
+    return this.page.getByRole('navigation', { name: 'Sheets of the panel' }).getByRole('link', { name: new RegExp(`^\\d+\\s*${title}`) });
+  }
+
+  /** The key that opens a sheet, as the rail names it. */
+  async keyOf(title: string): Promise<string> {
+    return (await this.sheet(title).locator('.number').innerText()).trim();
+  }
+
+  /** What stands in a field once it stands there. */
+  async fieldShows(label: string, text: string): Promise<void> {
+    const field = this.page.getByLabel(label, { exact: true });
+    await eventually(async () => expect([label, await field.inputValue()]).toEqual([label, text]));
   }
 
   /** A figure of the strip. */
@@ -36,6 +53,7 @@ export class WorkspaceScreen {
     return { angleDeg: shownNumber(angle ?? ''), levelDbi: shownNumber(level ?? '') };
   }
 
+  /** Every change that the screen shows has reached the server. */
   async saved(): Promise<void> {
     await this.page.getByRole('status').filter({ hasText: /^\s*Saved \d\d:\d\d:\d\d UTC\s*$/ }).waitFor();
   }
@@ -48,7 +66,9 @@ export class WorkspaceScreen {
   /** Freezes the draft with a message, by the dialog. */
   async freeze(number: number, message: string): Promise<void> {
     await this.saved();
-    await this.page.getByRole('button', { name: `Freeze revision ${number}` }).click();
+    const freeze = this.page.getByRole('button', { name: `Freeze revision ${number}` });
+    await eventually(async () => expect(await freeze.getAttribute('title')).toBeNull()); // what would hinder it
+    await freeze.click();
     const dialog = this.page.getByRole('dialog');
     await dialog.getByLabel('What is this revision about?').fill(message);
     await dialog.getByRole('button', { name: `Freeze revision ${number}` }).click();
@@ -56,7 +76,7 @@ export class WorkspaceScreen {
   }
 
   async settled<T>(read: () => Promise<T>, isWanted: (value: T) => boolean): Promise<T> {
-    const end = Date.now() + 15_000;
+    const end = Date.now() + PATIENCE_MS;
     for (;;) {
       const value = await read();
       if (isWanted(value)) return value;
