@@ -55,7 +55,7 @@ function statesOf(placed: ChoiceSite, position: number, edition?: PreparedEditio
   if (cells.kind === 'edition') {
     const site = editionSite(cells, { light: placed.light, designFrequencyHz: placed.si.designFrequencyHz, si: placed.si, edition });
     const states = newCellStates(site.edition.edition.cells.length);
-    stateFiller(site, site.edition.atFrequency(site.designFrequencyHz))(position, states);
+    stateFiller(site, site.permitted.at)(position, states);
     return states;
   }
   if (cells.kind === 'inline') {

@@ -12,8 +12,8 @@ export interface IncidenceWeights {
 }
 
 /** Polynomials through more points than this swing between them; nearer nodes are taken. */
-const MOST_THETA_NODES = 5;
-const MOST_AZIMUTH_NODES = 3;
+export const MOST_THETA_NODES = 5;
+export const MOST_AZIMUTH_NODES = 3;
 
 /**
  * Gives the weights of an angle of incidence: Lagrange's polynomial in sin^2 theta, and in cos 4 phi (or cos 2 phi) of
@@ -68,7 +68,7 @@ function fillShares(shares: Float64Array, kind: PreparedEdition['ports']['kind']
 }
 
 /** Lagrange weights through the `most` nodes about `x`, zero for the others. */
-function windowedWeights(nodes: Float64Array, x: number, most: number, weights: Float64Array): void {
+export function windowedWeights(nodes: Float64Array, x: number, most: number, weights: Float64Array): void {
   if (nodes.length <= most) {
     lagrangeWeights(nodes, x, weights);
     return;
@@ -90,7 +90,7 @@ export function entryLogMagnitude(at: EditionAtFrequency, cell: number, entry: n
 }
 
 /** Three running sums, so that an addition need not wait for the one before. */
-function weightedSum(values: Float64Array, from: number, weights: Float64Array): number {
+export function weightedSum(values: Float64Array, from: number, weights: Float64Array): number {
   const { length } = weights;
   const even = length - (length % 3);
   let a = 0;

@@ -4,11 +4,13 @@ import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-re
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
 import { editionChooser } from './edition-choice';
 import { editionWarnings } from './edition-warnings';
+import { permittedNodes, type PermittedNodes } from './excluded-nodes';
 import { regionFilter, type RegionFilter } from './excluded-regions';
-import { InvalidDesign } from './invalid-design';
+import { InvalidDesign, type DesignFault } from './invalid-design';
 import { nearestPhaseTable } from './nearest-phase-table';
 import type { PreparedEdition } from './prepare-edition';
 import { searchStateReferenceRad, type CellRule, type CellStates } from './reference-search';
+import type { SiDesign } from './si-design';
 
 type EditionCells = Extract<Cells, { kind: 'edition' }>;
 
@@ -19,6 +21,8 @@ export interface EditionSite extends StockSite {
   /** Indices of cells that may be used at the design frequency, rising; regions by angle come on top. */
   readonly allowed: Int32Array;
   readonly regions: RegionFilter;
+  /** The edition at the design frequency, with no excluded angle in it. */
+  readonly permitted: PermittedNodes;
 }
 
 /** Cells of a published edition, each at its own angle of incidence and with the illumination's polarisation. */
@@ -37,29 +41,30 @@ export function editionSite(cells: EditionCells, site: StockSite): EditionSite {
   const { edition } = site;
   if (!edition) throw new InvalidDesign([{ pointer: '#/cells/editionId', detail: `edition ${cells.editionId} is not at hand` }]);
   const { description } = edition.edition;
-  if (description.operation !== site.si.operation) {
-    const detail = `the cells of ${description.name} ${description.operation}, the panel is to ${site.si.operation}`;
-    throw new InvalidDesign([{ pointer: '#/cells/editionId', detail }]);
-  }
-  refuseStrangers(cells, edition);
+  const faults = [...operationFaults(edition, site.si.operation), ...strangers(cells, edition)];
+  if (faults.length > 0) throw new InvalidDesign(faults);
   const excluded = new Set(cells.excludedCells);
-  const { usable } = edition.atFrequency(site.designFrequencyHz);
-  const allowed = Int32Array.from(edition.edition.cells.keys()).filter((k) => usable[k] === 1 && !excluded.has(edition.edition.cells[k].id));
+  const at = edition.atFrequency(site.designFrequencyHz);
+  const allowed = Int32Array.from(edition.edition.cells.keys()).filter((k) => at.usable[k] === 1 && !excluded.has(edition.edition.cells[k].id));
   if (allowed.length === 0) {
     const detail = `no cell of ${description.name} is left at ${site.designFrequencyHz / 1e9} GHz: ${excluded.size} are excluded, the others have missing points`;
     throw new InvalidDesign([{ pointer: '#/cells/excludedCells', detail }]);
   }
   const regions = regionFilter(edition.edition, edition.azimuths, site.designFrequencyHz);
-  return { ...site, edition, rule: cells.rule, allowed, regions };
+  return { ...site, edition, rule: cells.rule, allowed, regions, permitted: permittedNodes(edition, regions, at) };
+}
+
+function operationFaults({ edition: { description } }: PreparedEdition, operation: SiDesign['operation']): DesignFault[] {
+  if (description.operation === operation) return [];
+  return [{ pointer: '#/cells/editionId', detail: `the cells of ${description.name} ${description.operation}, the panel is to ${operation}` }];
 }
 
 /** A name that the edition does not hold would exclude nothing, unnoticed. */
-function refuseStrangers({ excludedCells }: EditionCells, { edition }: PreparedEdition): void {
+function strangers({ excludedCells }: EditionCells, { edition }: PreparedEdition): DesignFault[] {
   const known = new Set(edition.cells.map(({ id }) => id));
-  const faults = excludedCells.flatMap((id, i) =>
+  return excludedCells.flatMap((id, i) =>
     known.has(id) ? [] : [{ pointer: `#/cells/excludedCells/${i}`, detail: `there is no cell ${JSON.stringify(id)} in ${edition.description.name}` }],
   );
-  if (faults.length > 0) throw new InvalidDesign(faults);
 }
 
 /** Lists the cells allowed at one angle. The same array every time where no region applies. */
@@ -74,8 +79,7 @@ export function allowedLister(site: EditionSite): (incidenceRad: number, azimuth
 }
 
 function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment {
-  const { light, edition, rule } = site;
-  const at = edition.atFrequency(site.designFrequencyHz);
+  const { light, edition, rule, permitted: { at } } = site;
   const weigh = incidenceWeigher(edition, site.si.illumination.polarisation);
   const candidatesAt = candidateLister(site, targetRad.length);
   const choose = edition.sineSquaredNodes.length === 1 && at.nodeCount === 1 && at.entryCount === 1 && rule === 'nearest-phase' ? tableChooser(site) : editionChooser(at, rule);
@@ -127,8 +131,12 @@ function tableChooser(site: EditionSite): (targetRad: number, weights: unknown, 
   };
 }
 
+/** Inside a region of the other frequency, cells are placed already: there they do what the laboratory gave, as `editionWarnings` says. */
 function respondAt(site: EditionSite, assignment: CellAssignment, frequencyHz: number): CellResponses {
-  const at = site.edition.atFrequency(frequencyHz);
+  const given = site.edition.atFrequency(frequencyHz);
+  const regions = regionFilter(site.edition.edition, site.edition.azimuths, frequencyHz);
+  const permitted = regions.isEmpty ? given : permittedNodes(site.edition, regions, given).at;
+  const barred = new Uint8Array(site.edition.edition.cells.length);
   const weigh = incidenceWeigher(site.edition, site.si.illumination.polarisation);
   const { cellIndex } = assignment;
   const phaseRad = new Float64Array(cellIndex.length);
@@ -136,7 +144,10 @@ function respondAt(site: EditionSite, assignment: CellAssignment, frequencyHz: n
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
   for (let n = 0; n < cellIndex.length; n++) {
     if (cellIndex[n] < 0) continue;
-    coPolarResponse(at, cellIndex[n], weigh(site.light.incidenceRad[n], site.light.azimuthRad[n]), response);
+    const [incidenceRad, azimuthRad] = [site.light.incidenceRad[n], site.light.azimuthRad[n]];
+    barred.fill(0);
+    const at = regions.mark(incidenceRad, azimuthRad, barred) && barred[cellIndex[n]] ? given : permitted;
+    coPolarResponse(at, cellIndex[n], weigh(incidenceRad, azimuthRad), response);
     phaseRad[n] = response.phaseRad;
     magnitude[n] = response.magnitude;
   }
@@ -144,8 +155,8 @@ function respondAt(site: EditionSite, assignment: CellAssignment, frequencyHz: n
 }
 
 function searchReferenceRad(site: EditionSite, query: ReferenceQuery): number {
-  const at = site.edition.atFrequency(site.designFrequencyHz);
-  return searchStateReferenceRad({ query, rule: site.rule, capacity: site.edition.edition.cells.length, statesAt: stateFiller(site, at) });
+  const capacity = site.edition.edition.cells.length;
+  return searchStateReferenceRad({ query, rule: site.rule, capacity, statesAt: stateFiller(site, site.permitted.at) });
 }
 
 /** Fills in the responses of all allowed cells at a position. */

@@ -3,7 +3,8 @@ import { degFromRad } from '../units/angles';
 import { degreesText } from './angle-text';
 import type { CellAssignment } from './cell-stock';
 import type { EditionSite } from './edition-stock';
-import { regionFilter } from './excluded-regions';
+import { permittedNodes, type PermittedNodes } from './excluded-nodes';
+import { nearestAzimuth, regionFilter } from './excluded-regions';
 
 /** Angles this little beyond the data are rounding, not a gap. */
 const SLACK_RAD = 1e-6;
@@ -92,26 +93,43 @@ function regionWarning(site: EditionSite, { cellIndex }: CellAssignment, frequen
   const { edition, light } = site;
   const filter = frequencyHz === site.designFrequencyHz ? site.regions : regionFilter(edition.edition, edition.azimuths, frequencyHz);
   if (filter.isEmpty && site.regions.isEmpty) return [];
+  const permitted = filter === site.regions ? site.permitted : permittedNodes(edition, filter, edition.atFrequency(frequencyHz));
   const barred = new Uint8Array(edition.edition.cells.length);
-  let [narrowed, used, empty] = [0, 0, 0];
+  let [narrowed, used, empty, carried, carriedRad] = [0, 0, 0, 0, 0];
   for (let n = 0; n < cellIndex.length; n++) {
     barred.fill(0);
     if (filter.mark(light.incidenceRad[n], light.azimuthRad[n], barred)) narrowed += 1;
     if (cellIndex[n] < 0) empty += 1;
     else if (barred[cellIndex[n]]) used += 1;
+    else {
+      const beyondRad = beyondPermittedRad(site, permitted, { cell: cellIndex[n], incidenceRad: light.incidenceRad[n], azimuthRad: light.azimuthRad[n] });
+      carriedRad = Math.max(carriedRad, beyondRad);
+      if (beyondRad > SLACK_RAD) carried += 1;
+    }
   }
-  if (narrowed === 0 && empty === 0) return [];
+  if (narrowed === 0 && empty === 0 && carried === 0) return [];
   const left = empty > 0 ? ` At ${empty} positions no cell is left; they return nothing.` : '';
   const spent = used > 0 ? ` ${used} placed cells are used inside such a region at ${frequencyHz / 1e9} GHz.` : '';
+  const onward = carried > 0 ? ` At ${carried} positions the response is carried on from the angles described, by up to ${degreesText(degFromRad(carriedRad))}, because the next one is excluded.` : '';
   return [
     {
       code: 'region-excluded',
       pointer: '#/cells',
       severity: empty > 0 ? 'serious' : used > 0 ? 'warn' : 'note',
-      message: `At ${narrowed} of ${cellIndex.length} positions the laboratory excludes some of the cells, and they were not chosen there.${left}${spent}`,
-      numbers: { positions: narrowed, usedCells: used, emptyPositions: empty },
+      message: `At ${narrowed} of ${cellIndex.length} positions the laboratory excludes some of the cells, and they were not chosen there.${left}${spent}${onward}`,
+      numbers: { positions: narrowed, usedCells: used, emptyPositions: empty, carriedPositions: carried, carriedDeg: degFromRad(carriedRad) },
     },
   ];
+}
+
+/** How far an angle lies beyond the angles of a cell that are described and not excluded, at the azimuth nearest to it. */
+function beyondPermittedRad({ edition }: EditionSite, permitted: PermittedNodes, at: { cell: number; incidenceRad: number; azimuthRad: number }): number {
+  const { azimuths, smallestThetaRad, largestThetaRad } = edition;
+  const range = at.cell * azimuths.cosines.length + nearestAzimuth(azimuths, at.azimuthRad);
+  // Beyond all data the nearest angle stands in, which `incidenceWarning` counts.
+  const incidenceRad = Math.min(largestThetaRad, Math.max(smallestThetaRad, at.incidenceRad));
+  const beyondRad = Math.max(permitted.lowestRad[range] - incidenceRad, incidenceRad - permitted.highestRad[range], 0);
+  return Number.isFinite(beyondRad) ? beyondRad : 0;
 }
 
 function periodWarning({ edition, si }: EditionSite): Warning[] {

@@ -59,7 +59,10 @@ function activeRegion(region: Region, edition: CellEdition, azimuths: AzimuthNod
   };
 }
 
-function nearestNode({ cosines, fold }: AzimuthNodes, azimuthRad: number): number {
+const nearestNode = (azimuths: AzimuthNodes, azimuthRad: number): number => azimuths.cosines[nearestAzimuth(azimuths, azimuthRad)];
+
+/** Index of the node that an azimuth belongs to; of two equally near ones the first. */
+export function nearestAzimuth({ cosines, fold }: AzimuthNodes, azimuthRad: number): number {
   const cosine = Math.cos(fold * azimuthRad);
-  return cosines.reduce((best, node) => (Math.abs(node - cosine) < Math.abs(best - cosine) ? node : best));
+  return cosines.reduce((best, node, i) => (Math.abs(node - cosine) < Math.abs(cosines[best] - cosine) ? i : best), 0);
 }
