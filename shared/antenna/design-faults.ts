@@ -1,6 +1,7 @@
 import type { DesignDocument, Outline } from '../model/design-document';
 import { cellCountFault } from './cell-count';
 import { InvalidDesign, type DesignFault } from './invalid-design';
+import { maskFaults } from './masks/mask-faults';
 import { polygonFault } from './polygon-fault';
 
 /** A horn nearer than this to the plane of the panel lights it at grazing incidence everywhere. */
@@ -22,14 +23,7 @@ function requirementFaults({ requirement }: DesignDocument): DesignFault[] {
   const faults: DesignFault[] = [];
   const band = requirement.bandGHz;
   if (band && band[0] > band[1]) faults.push({ pointer: '#/requirement/bandGHz', detail: `must rise; got ${band[0]} to ${band[1]} GHz` });
-  if (requirement.mask?.kind === 'custom') {
-    requirement.mask.points.forEach(([angle], i, points) => {
-      if (i > 0 && angle <= points[i - 1][0]) {
-        faults.push({ pointer: `#/requirement/mask/points/${i}/0`, detail: `angles must rise; got ${angle} after ${points[i - 1][0]}°` });
-      }
-    });
-  }
-  return faults;
+  return [...faults, ...maskFaults(requirement.mask, '#/requirement/mask')];
 }
 
 function shapeFaults({ panel }: DesignDocument): DesignFault[] {

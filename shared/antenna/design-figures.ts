@@ -5,6 +5,7 @@ import { edgeTaperDb, maxIncidenceRad } from './aperture-figures';
 import { gratingLobes } from './grating-lobes';
 import type { IlluminatedState } from './illuminated-state';
 import { isNumber, noFigure, nothingLit } from './no-figure';
+import { largestDimensionM } from './outline';
 import { patternFigures, type PatternFigures } from './pattern-figures';
 import { lawFigures } from './synthesis/law-figures';
 import { evanescentCellCount } from './target-phase';
@@ -26,7 +27,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
   // The wanted directions as written, not as they come back from direction cosines.
   const { mask, beams: wanted } = placed.design.requirement;
   const radiates = pattern.radiatedPower > 0;
-  const { peakUncertaintyDeg, ...read } = radiates ? patternFigures({ pattern, beams, mask, gainOffsetDb: state.gainOffsetDb }) : darkFigures(state);
+  const { peakUncertaintyDeg, ...read } = radiates ? patternFigures({ pattern, beams, mask, gainOffsetDb: state.gainOffsetDb, largestDimensionM: largestDimensionM(si.panel.outline) }) : darkFigures(state);
   const figures: Figures = {
     frequencyGHz: frequencyHz / 1e9,
     wavelengthMm: wavelengthM * 1000,

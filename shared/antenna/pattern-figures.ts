@@ -5,14 +5,15 @@ import { powerRatioToDb } from '../units/decibels';
 import { angleBetweenRad, anglesOf, outwardDirection, type Direction } from '../waves/conventions';
 import { cutMetrics, type CutMetrics } from './cut-metrics';
 import { greatCircle, visibleArcRad, type CutPlane } from './great-circle';
-import { maskMargin } from './mask-margin';
+import { maskEnvelope, maskFacts } from './masks/mask-envelope';
+import { judgeMask, type MaskOutcome } from './masks/mask-margin';
 import { isNumber, noFigure, sumFigures } from './no-figure';
 import { lobeRelativeTo, patternLobes, peakAnglesDeg, type PatternLobes } from './pattern-lobes';
 import { directivityRatio, type RadiationPattern } from './radiation-pattern';
 
 type FromPattern =
   | 'directivityDbi' | 'peakThetaDeg' | 'peakPhiDeg' | 'directivityAtBeamDbi' | 'gainDbi' | 'gainAtBeamDbi' | 'pointingErrorDeg'
-  | 'halfPowerBeamwidthDeg' | 'sidelobeDb' | 'maskMargin' | 'highestLobes' | 'beams';
+  | 'halfPowerBeamwidthDeg' | 'sidelobeDb' | 'maskMargin' | 'maskFindings' | 'highestLobes' | 'beams';
 
 export type PatternFigures = Pick<Figures, FromPattern> & { readonly peakUncertaintyDeg: number };
 
@@ -26,10 +27,12 @@ export interface PatternQuery {
   readonly mask: Mask | undefined;
   /** Gain less directivity: spillover and cell loss. */
   readonly gainOffsetDb: Figure;
+  /** Of the panel: what published masks call D. */
+  readonly largestDimensionM: number;
 }
 
 /** Every figure that is read off the pattern. */
-export function patternFigures({ pattern, beams, mask, gainOffsetDb }: PatternQuery): PatternFigures {
+export function patternFigures({ pattern, beams, mask, gainOffsetDb, largestDimensionM }: PatternQuery): PatternFigures {
   const lobes = patternLobes(pattern, beams);
   const directivityDbi = powerRatioToDb(lobes.highest.directivityRatio);
   const perBeam = beams.map((beam, i) => beamFigures(pattern, beam, lobes.ofBeams[i], gainOffsetDb));
@@ -46,11 +49,19 @@ export function patternFigures({ pattern, beams, mask, gainOffsetDb }: PatternQu
     pointingErrorDeg: first.pointingErrorDeg,
     halfPowerBeamwidthDeg: { along: along.halfPowerBeamwidthDeg, across: across.halfPowerBeamwidthDeg },
     sidelobeDb: { along: along.sidelobeDb, across: across.sidelobeDb, hemisphere: hemisphereSidelobe(lobes) },
-    maskMargin: isNumber(gainOffsetDb) ? maskMargin(pattern, mask, beams, gainOffsetDb) : gainOffsetDb,
+    ...maskOutcome({ pattern, beams, mask, gainOffsetDb, largestDimensionM }, directivityDbi),
     highestLobes: lobes.others.slice(0, LISTED_LOBES).map((lobe) => lobeRelativeTo(lobe, lobes.ofBeams[0])),
     beams: perBeam,
     peakUncertaintyDeg: peakUncertaintyDeg(pattern, lobes.highest, thetaDeg),
   };
+}
+
+/** The mask is held against the gain; where that does not exist, neither does the margin. */
+function maskOutcome({ pattern, beams, mask, gainOffsetDb, largestDimensionM }: PatternQuery, directivityDbi: number): MaskOutcome {
+  if (mask === undefined) return { maskMargin: noFigure('no-mask', 'the requirement has no mask') };
+  if (!isNumber(gainOffsetDb)) return { maskMargin: gainOffsetDb };
+  const envelope = maskEnvelope(mask, maskFacts(largestDimensionM, pattern.wavenumber, directivityDbi + gainOffsetDb));
+  return judgeMask({ pattern, envelope, beams, gainOffsetDb });
 }
 
 /** Share of lambda over the panel's side by which the interpolated field moves a peak: up to 256 cells a side, and beyond. */

@@ -30,11 +30,24 @@ export const beam = z.strictObject({
 });
 
 export const mask = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('published'), id: z.string().min(1).max(64) }),
+  z.strictObject({
+    kind: z.literal('published'),
+    id: z.string().min(1).max(64),
+    /** Angles off the beam between which the main reflector spills over, for envelopes that allow more there. */
+    spilloverDeg: z.tuple([z.number().min(0).max(180), z.number().min(0).max(180)]).optional(),
+  }),
   z.strictObject({
     kind: z.literal('custom'),
     /** Pairs of angle off the wanted beam (degrees, rising) and highest allowed level (dBi), joined by straight lines. */
     points: z.array(z.tuple([z.number().min(0).max(180), z.number().min(-200).max(200)])).min(2).max(500),
+  }),
+  z.strictObject({
+    kind: z.literal('formula'),
+    /** Stretches of angles off the wanted beam, rising; the expression gives dBi from `theta` in degrees. Undefined between and outside them. */
+    segments: z
+      .array(z.strictObject({ fromDeg: z.number().min(0).max(180), toDeg: z.number().min(0).max(180), expression: z.string().min(1).max(200) }))
+      .min(1)
+      .max(12),
   }),
 ]);
 

@@ -2,6 +2,7 @@ import './zod-jitless';
 import * as z from 'zod';
 import { figure, noFigure } from './figure-value';
 import { lawFigures } from './law-figures';
+import { maskFindings, maskMargin } from './mask-figures';
 
 export { figure, noFigure };
 
@@ -51,7 +52,9 @@ export const figures = z.strictObject({
   /** The reference phase in use: the number given, or the one the search found. */
   referencePhaseDeg: z.number(),
   /** Least margin to the mask over the hemisphere outside the beam's own allowance, and where. */
-  maskMargin: z.union([z.strictObject({ marginDb: z.number(), thetaDeg: z.number(), phiDeg: z.number() }), noFigure]),
+  maskMargin: z.union([maskMargin, noFigure]),
+  /** Stretches above the mask and what its rule counts; absent where no mask was judged. */
+  maskFindings: maskFindings.optional(),
   /** The highest lobes outside the wanted beam, strongest first, relative to it. */
   highestLobes: z.array(lobe),
   beams: z.array(beamFigures),
