@@ -61,6 +61,22 @@ describe('PredictionService', () => {
     expect(second).toBe(first);
   });
 
+  it('names all faults of a design at once with the edition that it does not know', async () => {
+    const { requirement, panel } = STARTING_DESIGN;
+    const faulty: DesignDocument = {
+      ...onEdition,
+      requirement: { ...requirement, bandGHz: [29, 27] },
+      panel: { ...panel, keepOuts: [{ kind: 'polygon', centreMm: [0, 0], pointsMm: [[0, 0], [9, 9], [9, 0], [0, 9]] }] },
+    };
+    await expect(serviceWith(new WatchedRunner()).predict('another team', { design: faulty })).rejects.toMatchObject({
+      faults: [
+        { pointer: '#/design/requirement/bandGHz', detail: 'must rise; got 29 to 27 GHz' },
+        { pointer: '#/design/panel/keepOuts/0/pointsMm', detail: expect.stringContaining('crosses itself') },
+        { pointer: '#/design/cells/editionId', detail: 'there is no such published edition' },
+      ],
+    });
+  });
+
   it('knows no edition of another team', async () => {
     const runner = new WatchedRunner();
     await expect(serviceWith(runner).predict('other team', { design: onEdition })).rejects.toMatchObject({

@@ -1,7 +1,10 @@
+import { designFaults } from '../../shared/antenna/design-faults';
+import { InvalidDesign } from '../../shared/antenna/invalid-design';
 import type { Prediction } from '../../shared/antenna/predict-design';
+import type { DesignDocument } from '../../shared/model/design-document';
 import type { PredictionEngine } from '../engine/prediction-engine';
 import type { EngineEdition, PredictionQuestion } from '../engine/prediction-task';
-import { InvalidInput, NotFound } from '../http/problems';
+import { NotFound } from '../http/problems';
 import { EditionShelf } from './edition-shelf';
 import type { EditionSource } from './edition-source';
 import { problemOfEngine } from './engine-problems';
@@ -29,7 +32,7 @@ export class PredictionService {
    */
   async predict(teamId: string, { preview, patient, signal, ...question }: PredictionWish): Promise<Prediction> {
     const { cells } = question.design;
-    const edition = cells.kind === 'edition' ? () => this.editionOf(teamId, cells.editionId) : undefined;
+    const edition = cells.kind === 'edition' ? () => this.editionOf(teamId, cells.editionId, question.design) : undefined;
     try {
       return await this.engine.predict({ teamId, question, edition, preview, patient, signal });
     } catch (error) {
@@ -37,11 +40,17 @@ export class PredictionService {
     }
   }
 
-  private async editionOf(teamId: string, editionId: string): Promise<EngineEdition> {
+  /** The edition that a design names, as the engine takes it; null where its cells come from none. @throws InvalidDesign when there is no such edition */
+  async editionFor(teamId: string, design: DesignDocument): Promise<EngineEdition | null> {
+    return design.cells.kind === 'edition' ? this.editionOf(teamId, design.cells.editionId, design) : null;
+  }
+
+  /** Without its edition a design never reaches the engine, so its other faults are looked for here: all are told at once. */
+  private async editionOf(teamId: string, editionId: string, design: DesignDocument): Promise<EngineEdition> {
     try {
       return await this.shelf.take(teamId, editionId);
     } catch (error) {
-      if (error instanceof NotFound) throw new InvalidInput([{ pointer: '#/design/cells/editionId', detail: 'there is no such published edition' }]);
+      if (error instanceof NotFound) throw new InvalidDesign([...designFaults(design), { pointer: '#/cells/editionId', detail: 'there is no such published edition' }]);
       throw error;
     }
   }

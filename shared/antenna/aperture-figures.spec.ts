@@ -1,5 +1,5 @@
 import { radFromDeg } from '../units/angles';
-import { apertureLosses, edgeTaperDb, phaseErrorsRad } from './aperture-figures';
+import { apertureLosses, commonPhaseRad, edgeTaperDb, phaseErrorsRad } from './aperture-figures';
 import { EXAMPLE_DESIGN, planeWaveDesign } from './example-design';
 import type { CellIllumination } from './illumination';
 import { panelLattice } from './panel-lattice';
@@ -50,13 +50,16 @@ describe('the losses of an aperture', () => {
 
 describe('phase errors', () => {
   it('are wrapped, achieved less needed', () => {
-    const errors = phaseErrorsRad(Float64Array.of(radFromDeg(1), radFromDeg(359)), Float64Array.of(radFromDeg(359), radFromDeg(1)), false);
+    const errors = phaseErrorsRad(Float64Array.of(radFromDeg(1), radFromDeg(359)), Float64Array.of(radFromDeg(359), radFromDeg(1)));
     expect(Array.from(errors)).toEqual([expect.closeTo(radFromDeg(2), 12), expect.closeTo(radFromDeg(-2), 12)]);
   });
 
-  it('lose a constant that all cells share when asked to', () => {
-    const errors = phaseErrorsRad(Float64Array.of(3.1, 3.3), Float64Array.of(0, 0), true);
+  it('have a part that all cells share, over the wrap too; what is left of it is 0', () => {
+    const [achieved, needed] = [Float64Array.of(3.1, 3.3), Float64Array.of(0, 2 * Math.PI)];
+    expect(commonPhaseRad(achieved, needed)).toBeCloseTo(3.2 - 2 * Math.PI, 12);
+    const errors = phaseErrorsRad(achieved, needed.map((rad) => rad + commonPhaseRad(achieved, needed)));
     expect(Array.from(errors)).toEqual([expect.closeTo(-0.1, 12), expect.closeTo(0.1, 12)]);
+    expect(commonPhaseRad(errors, new Float64Array(2))).toBeCloseTo(0, 12);
   });
 });
 

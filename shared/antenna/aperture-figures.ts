@@ -53,21 +53,20 @@ function lossDb(ratio: number): number {
   return Math.min(0, powerRatioToDb(ratio));
 }
 
-/** Phase errors achieved less needed, in (-pi, pi]; with `removeMean`, less the constant part, which costs nothing. */
-export function phaseErrorsRad(achievedRad: Float64Array, neededRad: Float64Array, removeMean: boolean): Float64Array {
-  const errorRad = new Float64Array(achievedRad.length);
+/** Phase errors achieved less needed, in (-pi, pi]. */
+export function phaseErrorsRad(achievedRad: Float64Array, neededRad: Float64Array): Float64Array {
+  return achievedRad.map((rad, n) => wrapRad(rad - neededRad[n]));
+}
+
+/** The part of achieved less needed that all cells share: the phase of the sum of exp(j difference). */
+export function commonPhaseRad(achievedRad: Float64Array, neededRad: Float64Array): number {
   let re = 0;
   let im = 0;
-  for (let n = 0; n < errorRad.length; n++) {
-    errorRad[n] = wrapRad(achievedRad[n] - neededRad[n]);
-    re += Math.cos(errorRad[n]);
-    im += Math.sin(errorRad[n]);
+  for (let n = 0; n < achievedRad.length; n++) {
+    re += Math.cos(achievedRad[n] - neededRad[n]);
+    im += Math.sin(achievedRad[n] - neededRad[n]);
   }
-  if (removeMean) {
-    const mean = Math.atan2(im, re);
-    for (let n = 0; n < errorRad.length; n++) errorRad[n] = wrapRad(errorRad[n] - mean);
-  }
-  return errorRad;
+  return Math.atan2(im, re);
 }
 
 /**
@@ -75,6 +74,7 @@ export function phaseErrorsRad(achievedRad: Float64Array, neededRad: Float64Arra
  * cells' receive factor not. 0 dB for a plane wave.
  */
 export function edgeTaperDb(illumination: SiIllumination, panel: SiPanel, lattice: PanelLattice): Figure {
+  if (illumination.kind === 'guided-wave') return noFigure('guided-wave', 'a guided wave falls off along its way, not towards an edge');
   if (illumination.kind !== 'horn') return 0;
   const sampleAt = hornSampler(illumination);
   let edge = 0;

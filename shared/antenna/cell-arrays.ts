@@ -11,11 +11,11 @@ export interface CellArrays {
   readonly yMm: Float64Array;
   readonly column: Int32Array;
   readonly row: Int32Array;
-  /** At the design frequency, reference phase included. */
+  /** Reference phase included; away from the design frequency what that frequency needs, see `IlluminatedState.targetRad`. */
   readonly targetPhaseDeg: Float32Array;
   readonly cellIndex: Int32Array;
   readonly phaseDeg: Float32Array;
-  /** Achieved minus target. */
+  /** Achieved minus target; `phaseErrorRmsDeg` is over these. */
   readonly errorDeg: Float32Array;
   readonly amplitude: Float32Array;
   readonly responseDb: Float32Array;
@@ -27,7 +27,7 @@ export interface CellArrays {
 export interface CellSources {
   readonly lattice: PanelLattice;
   readonly light: CellIllumination;
-  /** Reference phase included. */
+  /** At the frequency of the responses, reference phase included. */
   readonly targetRad: Float64Array;
   readonly assignment: CellAssignment;
   readonly responses: CellResponses;

@@ -2,6 +2,7 @@ import type { DesignDocument } from '../model/design-document';
 import type { Figures, Warning } from '../model/figures';
 import { directionText } from './angle-text';
 import { illuminationWarnings } from './illumination-warnings';
+import { keepOutWarning } from './keep-out-warning';
 import { latticeWarnings, type LatticeFacts } from './lattice-warnings';
 
 export interface DesignFacts extends LatticeFacts {
@@ -17,6 +18,7 @@ const RANK: Readonly<Record<Warning['severity'], number>> = { serious: 0, warn: 
 export function designWarnings(facts: DesignFacts): Warning[] {
   const warnings = [
     ...illuminationWarnings(facts.si, facts.litCount),
+    ...keepOutWarning(facts.si, facts.figures.spilloverDb),
     ...facts.cellWarnings,
     ...latticeWarnings(facts),
     ...imageLobeWarning(facts.design, facts.figures),

@@ -2,7 +2,7 @@ import type { Figure } from '../model/figures';
 import { powerRatioToDb } from '../units/decibels';
 import { wavenumberRadPerM } from '../waves/conventions';
 import { apertureField } from './aperture-field';
-import { apertureLosses, phaseErrorsRad, type ApertureLosses } from './aperture-figures';
+import { apertureLosses, commonPhaseRad, phaseErrorsRad, type ApertureLosses } from './aperture-figures';
 import type { CellResponses } from './cell-stock';
 import { hornCapturedShare } from './horn-spillover';
 import { noFigure, nothingLit, sumFigures } from './no-figure';
@@ -17,6 +17,11 @@ export interface IlluminatedState {
   readonly wavenumber: number;
   readonly wavelengthM: number;
   readonly responses: CellResponses;
+  /**
+   * What this frequency needs of the cells: at the design frequency the target phase, elsewhere the phase of the same law
+   * there with the reference phase that fits the cells best, since a constant common to all costs nothing.
+   */
+  readonly targetRad: Float64Array;
   readonly pattern: RadiationPattern;
   readonly losses: ApertureLosses;
   readonly spilloverDb: Figure;
@@ -31,7 +36,8 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
   const frequencyHz = frequencyGHz === undefined ? si.designFrequencyHz : frequencyGHz * 1e9;
   const wavenumber = wavenumberRadPerM(frequencyHz);
   const responses = stock.respond(assignment, frequencyHz);
-  const losses = apertureLosses(light, responses, errorsInUse(placed, responses, frequencyHz));
+  const targetRad = targetInUse(placed, responses, frequencyHz);
+  const losses = apertureLosses(light, responses, phaseErrorsRad(responses.phaseRad, targetRad));
   const spillover = spilloverOf(placed);
   const captured = si.illumination.kind === 'horn' ? spillover.spilloverDb : 0;
   return {
@@ -40,6 +46,7 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
     wavenumber,
     wavelengthM: (2 * Math.PI) / wavenumber,
     responses,
+    targetRad,
     pattern: radiationPattern(apertureField(lattice, light, responses, wavenumber), wavenumber, si.radiateExponent),
     losses,
     ...spillover,
@@ -48,14 +55,12 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
   };
 }
 
-/**
- * Errors against what this frequency would need. Away from the design frequency all cells share a large constant, which
- * costs nothing and is left out.
- */
-function errorsInUse(placed: PlacedDesign, responses: CellResponses, frequencyHz: number): Float64Array {
-  const { si, law, lattice, light, targetRad } = placed;
-  if (frequencyHz === si.designFrequencyHz) return phaseErrorsRad(responses.phaseRad, targetRad, false);
-  return phaseErrorsRad(responses.phaseRad, targetPhasesRad(law, lattice, light, wavenumberRadPerM(frequencyHz)), true);
+function targetInUse(placed: PlacedDesign, responses: CellResponses, frequencyHz: number): Float64Array {
+  const { si, law, lattice, light } = placed;
+  if (frequencyHz === si.designFrequencyHz) return placed.targetRad;
+  const bareRad = targetPhasesRad(law, lattice, light, wavenumberRadPerM(frequencyHz));
+  const referenceRad = commonPhaseRad(responses.phaseRad, bareRad);
+  return bareRad.map((rad) => rad + referenceRad);
 }
 
 function spilloverOf({ si }: PlacedDesign): { spilloverDb: Figure; spilloverUncertaintyDb: number } {

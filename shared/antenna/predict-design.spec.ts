@@ -78,6 +78,21 @@ describe('predicting a design', () => {
     });
   });
 
+  it('holds at every frequency the errors that the phase error is the RMS of, and targets they are against', () => {
+    const placed = placeCells(exampleDesign({ cells: { kind: 'ideal', levels: 4 } }));
+    for (const frequencyGHz of [9.5, 10, 10.5]) {
+      const { cells, figures } = predictPlaced(placed, { frequencyGHz, include: { cells: true } });
+      if (!cells) throw new Error('cells were asked for');
+      const rmsDeg = Math.sqrt(cells.errorDeg.reduce((sum, error) => sum + error * error, 0) / cells.errorDeg.length);
+      // The cells come in single precision.
+      expect(rmsDeg).toBeCloseTo(Number(figures.phaseErrorRmsDeg), 4);
+      cells.errorDeg.forEach((error, n) => {
+        const difference = cells.phaseDeg[n] - cells.targetPhaseDeg[n] - error;
+        expect(Math.abs(difference - 360 * Math.round(difference / 360))).toBeLessThan(1e-3);
+      });
+    }
+  });
+
   it('has a reason instead of figures when the horn lights nothing', () => {
     const dark = exampleDesign({ illumination: { kind: 'horn', positionMm: [0, 0, 200], aimMm: [0, 0, 400], exponentE: 6, exponentH: 6, polarisation: 'x' } });
     const prediction = predictDesign(dark, { include: everything });

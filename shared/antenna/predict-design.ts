@@ -65,7 +65,7 @@ export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: P
       litCount: state.litCount,
       cellWarnings: placed.stock.warnings(placed.assignment, state.frequencyHz),
     }),
-    ...(include.cells ? { cells: cellArrays({ ...placed, responses: state.responses }) } : {}),
+    ...(include.cells ? { cells: cellArrays({ ...placed, targetRad: state.targetRad, responses: state.responses }) } : {}),
     ...(include.cuts ? { cuts: include.cuts.map((request) => patternCut(state.pattern, request, beam, gainOffsetDb)) } : {}),
     ...(include.uv ? { uv: uvMap(state.pattern, include.uv.size, gainOffsetDb, include.uv.shift) } : {}),
   };

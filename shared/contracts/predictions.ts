@@ -35,10 +35,12 @@ export const cellArrays = z.strictObject({
   yMm: numbers,
   column: numbers,
   row: numbers,
+  /** At another frequency than the design's: what the law needs there, with the reference phase that fits the cells best. */
   targetPhaseDeg: numbers,
   /** Index into the edition's cells, the inline table or the ideal levels; -1 for a continuous ideal phase. */
   cellIndex: numbers,
   phaseDeg: numbers,
+  /** Achieved minus target, wrapped; figures.phaseErrorRmsDeg is the RMS of these over cells that return anything. */
   errorDeg: numbers,
   amplitude: numbers,
   responseDb: numbers,

@@ -91,6 +91,8 @@ export const warning = z.strictObject({
     'region-excluded',
     'image-lobe',
     'period-differs',
+    'cross-response',
+    'keep-out-power',
     'illumination-misses',
     'behind-panel',
     'provenance',

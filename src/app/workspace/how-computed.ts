@@ -26,7 +26,7 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
     ],
     meaning: 'The highest lobe anywhere in the hemisphere, refined between samples. Directivity already holds taper and phase error, so neither is counted again.',
     conventions: `${GEOMETRY}; b is the radiate exponent, in field`,
-    validity: `${ARRAY_LIMITS}. Spillover is the share of the power of a cos^q horn (power cos^2q) that misses the outline.`,
+    validity: `${ARRAY_LIMITS}. Spillover is the share of the power of a cos^q horn (power cos^2q) that misses the outline; what hits a keep-out counts as hitting the panel, and a remark on the Panel sheet says how many dB that is.`,
     source: ARRAY_SOURCE,
   },
   beamwidth: {
@@ -73,7 +73,7 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
     title: 'RMS phase error',
     formula: ['σ = √(Σ eₙ² / N),  eₙ = wrap(φ achieved − φ target)', 'phase loss = |Σ A exp(je)|² / |Σ A|²'],
     meaning: 'What the choice of cells leaves of the target phase, each cell counted once. The phase loss beside it is weighted by the illumination.',
-    conventions: 'Wrapped to ±180°; positive when the achieved phase leads',
+    conventions: 'Wrapped to ±180°; positive when the achieved phase leads. At another frequency the target is what the same law needs there, with the reference phase that fits the cells best: the constant that all cells share costs nothing. Map, table and RMS hold the same errors',
     validity: 'Of the cell data at the incidence of each position, where the edition covers it; the Cells sheet says where it does not.',
     source: 'Definition',
   },

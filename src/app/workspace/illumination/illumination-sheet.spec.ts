@@ -26,6 +26,8 @@ describe('IlluminationSheet', () => {
     await fixture.whenStable();
     expect(text()).toContain('Edge taper−9.40 dB');
     expect(text()).toContain('Spillover−0.41 dB');
+    expect(text()).toContain('Edge taper: the strongest field of the horn on the edge of the outline against the strongest on the panel');
+    expect(text()).toContain('Keep-outs count as hit; a remark says how many dB they take.');
   });
 
   it('keeps the place of the horn in mind when a wave takes over', async () => {
