@@ -15,17 +15,14 @@ async function type(page: Page, label: string, text: string): Promise<void> {
 }
 
 /** Keeps what this page saves from the server until released. */
-async function holdSaving(page: Page): Promise<() => Promise<void>> {
+async function holdSaving(page: Page): Promise<() => void> {
   let release = (): void => undefined;
   const released = new Promise<void>((resolve) => (release = resolve));
   await page.route('**/draft', async (route) => {
     await released;
     await route.continue();
   });
-  return async () => {
-    release();
-    await page.unroute('**/draft');
-  };
+  return release;
 }
 
 describe('the draft of a panel', () => {
@@ -107,7 +104,7 @@ describe('the draft of a panel', () => {
     await type(page, 'Width', '240');
     await type(page, 'Height', '180');
     await screen.fieldShows('Height', '180');
-    await release();
+    release();
     const dialog = page.getByRole('dialog');
     await dialog.getByRole('heading', { name: /changed this draft as well$/ }).waitFor();
     await eventually(async () => {

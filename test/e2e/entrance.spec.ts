@@ -133,6 +133,7 @@ describe('the entrance', () => {
     await guest.page.getByRole('menuitem', { name: 'Sign out' }).click();
 
     await guest.page.getByRole('link', { name: 'Forgotten password' }).click();
+    await guest.page.getByRole('heading', { name: 'Forgotten password' }).waitFor(); // the page before it has a field E-mail too
     await guest.page.getByLabel('E-mail').fill(email);
     await guest.page.getByRole('button', { name: 'Send the letter' }).click();
     await guest.page.getByRole('status').filter({ hasText: 'a letter with a link is on its way' }).waitFor();
