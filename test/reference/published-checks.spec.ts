@@ -3,12 +3,13 @@ import { arrayChecks } from './tables/array-checks';
 import { apertureChecks } from './tables/aperture-checks';
 import { cellChecks } from './tables/cell-checks';
 import { conventionsChecks } from './tables/conventions-checks';
+import { maskChecks } from './tables/mask-checks';
 import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
 import { synthesisChecks } from './tables/synthesis-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...synthesisChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...synthesisChecks };
 const checks = loadChecks();
 const pending = loadPending();
 

@@ -47,11 +47,15 @@ export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
   },
   mask: {
     title: 'Mask margin',
-    formula: ['margin = min over directions outside the beam of [mask(α) − G(θ, φ)]'],
+    formula: [
+      'margin = min over directions outside the beam of [mask(α) − G(θ, φ)]',
+      'S.580-6: margin of the peak that leaves one sidelobe peak in ten worse',
+      '25.209: + 3 dB from 7° on, and the excess passed in 10 % of 7° to 180°; + 6 dB in a declared spillover region',
+    ],
     meaning: 'The least distance in dB between the mask and the gain over the hemisphere; α is the angle off the wanted beam. Negative when the pattern reaches into the mask.',
-    conventions: 'Absolute level in dBi; between the points of a custom mask straight lines in angle and dB',
-    validity: 'A published envelope is judged only from its own smallest angle outward.',
-    source: 'The envelope named on the Requirement sheet; custom points as entered',
+    conventions: 'Absolute level in dBi; between the points of a custom mask straight lines in angle and dB; theta of a formula in degrees; D of a published envelope is the largest dimension of the panel',
+    validity: 'Judged only where the mask is defined, in front of the panel alone; F.699 from φm on, because inside it describes the main lobe. Share of angles: the highest level of all planes at each angle, in rings of one and a half samples. Blockage, specular and spillover radiation as far as the pattern holds them.',
+    source: 'ITU-R S.465-6, S.580-6, F.699-8, 47 CFR 25.209(a), each with edition and state of checking on the Requirement sheet; checks mask-01 to mask-05 and mask-margin.spec.ts',
   },
   pointing: {
     title: 'Pointing error',

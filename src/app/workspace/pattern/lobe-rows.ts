@@ -1,3 +1,4 @@
+import { designMask } from '../../../../shared/antenna/masks/design-mask';
 import type { DesignDocument } from '../../../../shared/model/design-document';
 import type { Figures } from '../../../../shared/model/figures';
 import type { LetteredLobe, MarkedDirection } from '../../ui/plots/uv-map';
@@ -15,9 +16,10 @@ export interface LobeRow extends LetteredLobe {
 }
 
 /** The highest lobes outside the wanted beam with letters. `beamPeakDbi` is the level they are given against. */
-export function lobeRows({ highestLobes }: Figures, design: DesignDocument, beamPeakDbi: number): readonly LobeRow[] {
-  const { mask, beams } = design.requirement;
-  return highestLobes.map(({ thetaDeg, phiDeg, levelDb }, i) => {
+export function lobeRows(figures: Figures, design: DesignDocument, beamPeakDbi: number): readonly LobeRow[] {
+  const { beams } = design.requirement;
+  const mask = designMask(design, figures);
+  return figures.highestLobes.map(({ thetaDeg, phiDeg, levelDb }, i) => {
     const off = offAxisDeg({ thetaDeg, phiDeg }, beams);
     const allowed = maskLevelDbi(mask, off);
     const gain = beamPeakDbi + levelDb;

@@ -1,3 +1,4 @@
+import { designMask } from '../../../../shared/antenna/masks/design-mask';
 import { cutMarkers } from './cut-markers';
 import { deltaText, markerRows, markersOf } from './marker-rows';
 import { MASKED_DESIGN, sampleCut } from './sample-pattern';
@@ -5,7 +6,8 @@ import { MASKED_DESIGN, sampleCut } from './sample-pattern';
 const cut = sampleCut();
 const found = cutMarkers({ label: '', angleDeg: cut.angleDeg, levelDb: cut.gainDbi }, cut.beamDeg);
 if (!found) throw new Error('the sample has no markers');
-const markers = markersOf({ cut, found, design: MASKED_DESIGN, ownDeg: [-40.05, 12] });
+const mask = designMask(MASKED_DESIGN, { frequencyGHz: 28, gainDbi: 28 });
+const markers = markersOf({ cut, found, design: MASKED_DESIGN, mask, ownDeg: [-40.05, 12] });
 
 describe('markers', () => {
   it('are numbered from the peak on, with one\'s own last', () => {
@@ -28,6 +30,6 @@ describe('markers', () => {
     expect(deltaText(markers.slice(0, 9))).toBeNull();
   });
   it('leave out what lies outside the cut', () => {
-    expect(markersOf({ cut, found, design: MASKED_DESIGN, ownDeg: [120] }).some(({ own }) => own)).toBe(false);
+    expect(markersOf({ cut, found, design: MASKED_DESIGN, mask, ownDeg: [120] }).some(({ own }) => own)).toBe(false);
   });
 });

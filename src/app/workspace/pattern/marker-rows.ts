@@ -1,3 +1,4 @@
+import type { MaskEnvelope } from '../../../../shared/antenna/masks/mask-envelope';
 import type { DesignDocument } from '../../../../shared/model/design-document';
 import { levelAt } from '../../ui/plots/cut-figure';
 import { numberText, signedNumberText } from '../../ui/plots/plot-text';
@@ -22,13 +23,14 @@ export interface MarkerSource {
   readonly cut: ShownCut;
   readonly found: CutMarkers;
   readonly design: DesignDocument;
+  readonly mask: MaskEnvelope | null;
   /** Angles at which a person has set markers. */
   readonly ownDeg: readonly number[];
 }
 
 /** Peak, half power, sidelobes, least margin to the mask, first nulls, then one's own; numbered in this order. */
-export function markersOf({ cut, found, design, ownDeg }: MarkerSource): readonly Marker[] {
-  const { mask, beams, minGainDbi } = design.requirement;
+export function markersOf({ cut, found, design, mask, ownDeg }: MarkerSource): readonly Marker[] {
+  const { beams, minGainDbi } = design.requirement;
   const toMask = ({ angleDeg, levelDb }: CutPlace): number | null => {
     const level = maskLevelDbi(mask, offAxisDeg(directionAt(cut, angleDeg), beams));
     return level === null ? null : level - levelDb;

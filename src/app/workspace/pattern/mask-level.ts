@@ -1,8 +1,9 @@
-import { linearThrough } from '../../../../shared/math/interpolate';
+import { maskLevelDb } from '../../../../shared/antenna/masks/mask-envelope';
+import type { MaskEnvelope } from '../../../../shared/antenna/masks/mask-envelope';
 import { degFromRad, radFromDeg } from '../../../../shared/units/angles';
 import { angleBetweenRad, directionOf } from '../../../../shared/waves/conventions';
 import type { Direction } from '../../../../shared/waves/conventions';
-import type { Beam, Mask } from '../../../../shared/model/design-document';
+import type { Beam } from '../../../../shared/model/design-document';
 import type { ForbiddenEdge } from '../../ui/plots/cut-figure';
 
 export interface DirectionDeg {
@@ -16,17 +17,9 @@ export function offAxisDeg(direction: DirectionDeg, beams: readonly DirectionDeg
   return degFromRad(Math.min(...beams.map((beam) => angleBetweenRad(at, unitOf(beam)))));
 }
 
-/** The highest level a mask allows at an angle off the wanted beam; null inside its first angle, and for masks given by name alone. */
-export function maskLevelDbi(mask: Mask | undefined, offDeg: number): number | null {
-  return maskReader(mask)(offDeg);
-}
-
-/** The same for many angles. */
-function maskReader(mask: Mask | undefined): (offDeg: number) => number | null {
-  if (mask?.kind !== 'custom') return () => null;
-  const angles = mask.points.map(([angle]) => angle);
-  const levels = mask.points.map(([, level]) => level);
-  return (offDeg) => (offDeg < angles[0] ? null : linearThrough(angles, levels, offDeg));
+/** The highest level a mask allows at an angle off the wanted beam; null where it is undefined. */
+export function maskLevelDbi(mask: MaskEnvelope | null, offDeg: number): number | null {
+  return mask === null ? null : maskLevelDb(mask, offDeg);
 }
 
 /** Angle of each direction of a cut to the nearest of the beams; their unit vectors are worked out once. */
@@ -52,12 +45,12 @@ export interface CutDirections {
 }
 
 /** Where a mask forbids along a cut, one edge for each stretch. `shiftDb` is taken from every level, for relative cuts. */
-export function forbiddenEdges(mask: Mask | undefined, beams: readonly Beam[], cut: CutDirections, shiftDb: number): readonly ForbiddenEdge[] {
+export function forbiddenEdges(mask: MaskEnvelope | null, beams: readonly Beam[], cut: CutDirections, shiftDb: number): readonly ForbiddenEdge[] {
   const edges: { angleDeg: number[]; levelDb: number[] }[] = [];
-  const [allowed, offAxis] = [maskReader(mask), offAxisReader(beams, cut)];
+  const offAxis = offAxisReader(beams, cut);
   let open = false;
   for (let i = 0; i < cut.angleDeg.length; i++) {
-    const level = allowed(offAxis(i));
+    const level = maskLevelDbi(mask, offAxis(i));
     if (level === null) {
       open = false;
       continue;
@@ -71,11 +64,11 @@ export function forbiddenEdges(mask: Mask | undefined, beams: readonly Beam[], c
 }
 
 /** Where the gain comes nearest to a mask along a cut, or reaches furthest into it. */
-export function leastMargin(mask: Mask | undefined, beams: readonly Beam[], cut: CutDirections & { readonly gainDbi: ArrayLike<number> }): { readonly at: number; readonly marginDb: number } | null {
-  const [allowed, offAxis] = [maskReader(mask), offAxisReader(beams, cut)];
+export function leastMargin(mask: MaskEnvelope | null, beams: readonly Beam[], cut: CutDirections & { readonly gainDbi: ArrayLike<number> }): { readonly at: number; readonly marginDb: number } | null {
+  const offAxis = offAxisReader(beams, cut);
   let least: { readonly at: number; readonly marginDb: number } | null = null;
   for (let i = 0; i < cut.angleDeg.length; i++) {
-    const level = allowed(offAxis(i));
+    const level = maskLevelDbi(mask, offAxis(i));
     if (level !== null && (least === null || level - cut.gainDbi[i] < least.marginDb)) least = { at: i, marginDb: level - cut.gainDbi[i] };
   }
   return least;

@@ -1,3 +1,4 @@
+import { designMask } from '../../../../shared/antenna/masks/design-mask';
 import { patternCutFigure } from './pattern-cut-figure';
 import type { CutFigureSource } from './pattern-cut-figure';
 import { MASKED_DESIGN, sampleCut } from './sample-pattern';
@@ -5,7 +6,7 @@ import { MASKED_DESIGN, sampleCut } from './sample-pattern';
 const cut = sampleCut();
 const source: CutFigureSource = {
   title: 'Cut along the beam', cut, design: MASKED_DESIGN, peakDbi: 28, form: 'absolute', depthDb: 50,
-  parent: { label: 'revision 3, beam at 19.5°', cut, peakDbi: 27 }, withMask: true, marks: [{ name: '1', angleDeg: 20, levelDb: 28 }],
+  parent: { label: 'revision 3, beam at 19.5°', cut, peakDbi: 27 }, mask: designMask(MASKED_DESIGN, { frequencyGHz: 28, gainDbi: 28 }), marks: [{ name: '1', angleDeg: 20, levelDb: 28 }],
 };
 
 describe('figure of a cut', () => {
@@ -27,6 +28,6 @@ describe('figure of a cut', () => {
     expect(overlay?.levelDb[500]).toBeCloseTo(cut.gainDbi[500] - 27, 9);
   });
   it('shows no mask when it is switched off', () => {
-    expect(patternCutFigure({ ...source, withMask: false }).forbidden).toEqual([]);
+    expect(patternCutFigure({ ...source, mask: null }).forbidden).toEqual([]);
   });
 });

@@ -1,3 +1,4 @@
+import type { MaskEnvelope } from '../../../../shared/antenna/masks/mask-envelope';
 import type { DesignDocument } from '../../../../shared/model/design-document';
 import type { CutFigure, CutMark } from '../../ui/plots/cut-figure';
 import { numberText } from '../../ui/plots/plot-text';
@@ -10,13 +11,14 @@ export interface CutFigureSource {
   readonly title: string;
   readonly cut: ShownCut;
   readonly design: DesignDocument;
+  /** Null where none is to be drawn. */
+  readonly mask: MaskEnvelope | null;
   /** Of the lobe of the wanted beam on this cut. */
   readonly peakDbi: number;
   readonly form: LevelForm;
   /** How far below the peak the plot reaches, in dB, positive. */
   readonly depthDb: number;
   readonly parent: { readonly label: string; readonly cut: ShownCut; readonly peakDbi: number } | null;
-  readonly withMask: boolean;
   readonly marks: readonly CutMark[];
 }
 
@@ -26,7 +28,7 @@ export function patternCutFigure(source: CutFigureSource): CutFigure {
   const relative = form === 'relative';
   const shiftDb = relative ? peakDbi : 0;
   const shifted = (levels: ArrayLike<number>, by: number): ArrayLike<number> => (by === 0 ? levels : Float64Array.from(levels, (level) => level - by));
-  const { mask, minGainDbi, beams } = design.requirement;
+  const { minGainDbi, beams } = design.requirement;
   const top = Math.ceil(((relative ? 0 : peakDbi) + 3) / 10) * 10;
   const lowest = (relative ? 0 : peakDbi) - source.depthDb;
   return {
@@ -35,7 +37,7 @@ export function patternCutFigure(source: CutFigureSource): CutFigure {
     levelTitle: relative ? 'gain relative to the peak, dB' : 'gain, dBi',
     main: { label: 'draft', angleDeg: cut.angleDeg, levelDb: shifted(cut.gainDbi, shiftDb) },
     overlay: parent ? { label: parent.label, angleDeg: parent.cut.angleDeg, levelDb: shifted(parent.cut.gainDbi, relative ? parent.peakDbi : 0) } : null,
-    forbidden: source.withMask ? forbiddenEdges(mask, beams, cut, shiftDb) : [],
+    forbidden: forbiddenEdges(source.mask, beams, cut, shiftDb),
     forbiddenLabel: 'forbidden by the mask',
     least: minGainDbi === undefined ? null : { label: `least gain, ${numberText(minGainDbi, 1)} dBi`, angleDeg: cut.beamDeg, levelDb: minGainDbi - shiftDb },
     marks: source.marks.map((mark) => ({ ...mark, levelDb: mark.levelDb - shiftDb })),

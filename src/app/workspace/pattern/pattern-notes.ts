@@ -15,6 +15,6 @@ export function patternNotes(prediction: LivePrediction | null): readonly string
     'Cross-polar: not evaluated, the scalar model has no cross-polar part.',
     'A range test is a transmission: confirm authorisation for frequency, power, place and dates.',
   ];
-  if (mask && 'kind' in mask && mask.kind === 'mask-not-built') return [...notes, `The mask is not drawn: ${mask.reason}.`];
+  if (mask && 'kind' in mask && /^mask-(?:not-applicable|unknown)$/.test(mask.kind)) return [...notes, `The mask is not drawn: ${mask.reason}.`];
   return notes;
 }

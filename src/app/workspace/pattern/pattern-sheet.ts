@@ -1,4 +1,5 @@
 import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, signal } from '@angular/core';
+import { designMask } from '../../../../shared/antenna/masks/design-mask';
 import { EmptyState } from '../../ui/empty-state';
 import { ColourKey } from '../../ui/plots/colour-key';
 import { CutPlot } from '../../ui/plots/cut-plot';
@@ -57,6 +58,10 @@ export class PatternSheet {
   private readonly wish = computed((): CutWish => ({ choice: this.choice(), beam: this.beam(), planePhiDeg: this.planePhiDeg() }));
   /** What was predicted is drawn against the requirement it was predicted for, so a drag redraws once for each answer. */
   private readonly drawnDesign = computed(() => this.prediction()?.of ?? this.design());
+  private readonly mask = computed(() => {
+    const prediction = this.prediction();
+    return prediction ? designMask(prediction.of, prediction.head.figures) : null;
+  });
   protected readonly cut = computed(() => {
     const prediction = this.prediction();
     return prediction ? this.cutOf(prediction) : null;
@@ -76,7 +81,7 @@ export class PatternSheet {
   });
   private readonly markers = computed(() => {
     const [cut, found] = [this.cut(), this.found()];
-    return cut && found ? markersOf({ cut, found, design: this.drawnDesign(), ownDeg: this.link().marksDeg }) : [];
+    return cut && found ? markersOf({ cut, found, design: this.drawnDesign(), mask: this.mask(), ownDeg: this.link().marksDeg }) : [];
   });
   protected readonly rows = computed(() => markerRows(this.markers()));
   protected readonly delta = computed(() => deltaText(this.markers()));
@@ -85,7 +90,7 @@ export class PatternSheet {
     if (!cut || !found) return null;
     const marks = this.markers().map(({ name, angleDeg, levelDbi }) => ({ name, angleDeg, levelDb: levelDbi }));
     const parent = link.show.parent ? this.parentCut() : null;
-    return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, withMask: link.show.mask, marks });
+    return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, mask: link.show.mask ? this.mask() : null, marks });
   });
   /** By itself, because every save brings a new panel and the plot must not be drawn again for that. */
   private readonly parentNumber = computed(() => this.state.panel()?.latestRevision?.number ?? null);

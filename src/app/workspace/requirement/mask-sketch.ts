@@ -15,6 +15,8 @@ let nextPattern = 0;
 export class MaskSketch {
   readonly points = input.required<readonly (readonly [number, number])[]>();
   readonly traces = input<readonly OffAxisTrace[]>([]);
+  /** Draws a square at every point: for points that a person has set. */
+  readonly marked = input(true);
   readonly height = input(240);
   private readonly measured = hostWidth();
   protected readonly hatchId = `slant-mask-hatch-${(nextPattern += 1)}`;

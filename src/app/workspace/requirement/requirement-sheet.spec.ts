@@ -51,14 +51,6 @@ describe('RequirementSheet', () => {
     expect(workspace.design().requirement).not.toHaveProperty('bandGHz');
   });
 
-  it('draws a mask once one is set', async () => {
-    const { workspace, press, element } = await sheetRig(RequirementSheet);
-    expect(element.querySelector('slant-mask-sketch')).toBeNull();
-    await press('Set a mask');
-    expect(workspace.design().requirement.mask).toMatchObject({ kind: 'custom' });
-    expect(element.querySelector('slant-mask-sketch .forbidden-edge')?.getAttribute('d')).toMatch(/^M/);
-  });
-
   it('says what it is in the bar', async () => {
     const { header, enter } = await sheetRig(RequirementSheet);
     expect(header.head()).toMatchObject({ number: 1, title: 'Requirement', subtitle: 'one beam at 28 GHz, 3 limits' });

@@ -3,12 +3,9 @@ import { toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router } from '@angular/router';
 import { map } from 'rxjs';
 import { derivedValues } from '../../../../shared/antenna/derived-values';
-import type { Mask } from '../../../../shared/model/design-document';
 import { editValue } from '../design-field-edit';
 import { DesignChoice } from '../fields/design-choice';
 import { DesignField } from '../fields/design-field';
-import { DesignTable } from '../fields/design-table';
-import type { DesignColumn } from '../fields/design-table';
 import { PendingEntries } from '../fields/pending-entries';
 import { RemarkList } from '../fields/remark-list';
 import { SheetHeader } from '../sheet-header';
@@ -18,15 +15,10 @@ import { ChoiceTabs } from '../../ui/choice-tabs';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { BeamsTable } from './beams-table';
-import { MaskSketch } from './mask-sketch';
-import { offAxisTraces } from './mask-drawing';
+import { MaskSection } from './mask-section';
 import { requirementLines } from './requirement-lines';
 import { VerdictTable } from './verdict-table';
 
-const MASK_COLUMNS: readonly DesignColumn[] = [
-  { key: '0', label: 'Off axis', dimension: 'angle', unit: '°' },
-  { key: '1', label: 'Level', dimension: 'level', unit: 'dBi' },
-];
 const ANGLE_CHOICES = [
   { id: 'polar', label: 'θ and φ' },
   { id: 'az-el', label: 'Azimuth and elevation' },
@@ -37,7 +29,7 @@ const FIRST_BAND_SHARE = 0.02;
 /** What must be met: beams, band, limits and mask, each with the verdict of the prediction. */
 @Component({
   selector: 'slant-requirement-sheet',
-  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, DesignTable, MaskSketch, RemarkList, SheetNotes, VerdictTable, ViewTitle],
+  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, MaskSection, RemarkList, SheetNotes, VerdictTable, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './requirement-sheet.html',
   styleUrl: '../fields/sheet.scss',
@@ -60,19 +52,6 @@ export class RequirementSheet {
     requirementLines(this.requirement(), { verdicts: this.state.prediction()?.head.verdicts ?? null, stale: this.state.failure() !== null }),
   );
   protected readonly angleChoices = ANGLE_CHOICES;
-  protected readonly maskColumns = MASK_COLUMNS;
-  protected readonly maskPoints = computed(() => {
-    const { mask } = this.requirement();
-    return mask?.kind === 'custom' ? mask.points : [];
-  });
-  protected readonly maskTraces = computed(() => {
-    const prediction = this.state.prediction();
-    return prediction ? prediction.cuts.slice(0, 2).flatMap((cut, place) => offAxisTraces(cut, prediction.of.requirement.beams, place === 1)) : [];
-  });
-  protected readonly nextMaskPoint = (rows: readonly (readonly number[])[]): readonly number[] => {
-    const last = rows.at(-1) ?? [0, 20];
-    return [Math.min(180, last[0] + 10), last[1] - 5];
-  };
 
   constructor() {
     const header = inject(SheetHeader);
@@ -102,24 +81,6 @@ export class RequirementSheet {
   protected removeBand(): void {
     this.pending.dropBelow('/requirement/bandGHz');
     this.put('/requirement/bandGHz', undefined, 'Remove band');
-  }
-
-  protected setMask(): void {
-    const gain = this.requirement().minGainDbi ?? 30;
-    const first: Mask = {
-      kind: 'custom',
-      points: [
-        [5, gain - 12],
-        [30, gain - 28],
-        [90, gain - 34],
-      ],
-    };
-    this.put('/requirement/mask', first, 'Set mask');
-  }
-
-  protected removeMask(): void {
-    this.pending.dropBelow('/requirement/mask');
-    this.put('/requirement/mask', undefined, 'Remove mask');
   }
 
   private put(pointer: string, value: unknown, name: string): void {

@@ -1,3 +1,5 @@
+import { designMask } from '../../../../shared/antenna/masks/design-mask';
+import type { MaskEnvelope } from '../../../../shared/antenna/masks/mask-envelope';
 import type { Comparison, CutDifference } from '../../../../shared/contracts/comparisons';
 import type { DesignDocument } from '../../../../shared/model/design-document';
 import type { ColourScale } from '../../ui/plots/colour-maps';
@@ -74,7 +76,7 @@ export function overlaidCut(comparison: Comparison, cut: CutDifference, design: 
     levelTitle: 'gain, dBi',
     main: { label: sideName(after), angleDeg: cut.angleDeg, levelDb: cut.afterDbi },
     overlay: { label: sideName(before), angleDeg: cut.angleDeg, levelDb: cut.beforeDbi },
-    forbidden: forbiddenAbout(requirement.mask, cut.angleDeg, beamDeg),
+    forbidden: forbiddenAbout(maskOfLater(comparison, design), cut.angleDeg, beamDeg),
     forbiddenLabel: `forbidden, beam of ${sideName(after)}`,
     least: requirement.minGainDbi === undefined ? null : { label: `least gain, ${numberText(requirement.minGainDbi, 1)} dBi`, angleDeg: beamDeg, levelDb: requirement.minGainDbi },
     marks: [],
@@ -85,8 +87,14 @@ export function overlaidCut(comparison: Comparison, cut: CutDifference, design: 
   };
 }
 
+/** The gain that a mask may depend on is that of its own side. */
+function maskOfLater({ figures }: Comparison, design: DesignDocument): MaskEnvelope | null {
+  const gainDbi = figures.find(({ id }) => id === 'gain-at-peak')?.after ?? { kind: 'no-figure', reason: 'the comparison has no gain' };
+  return designMask(design, { frequencyGHz: design.requirement.designFrequencyGHz, gainDbi });
+}
+
 /** On a plane through the beam the angle off it is the difference of angles. */
-function forbiddenAbout(mask: DesignDocument['requirement']['mask'], angleDeg: readonly number[], beamDeg: number): CutFigure['forbidden'] {
+function forbiddenAbout(mask: MaskEnvelope | null, angleDeg: readonly number[], beamDeg: number): CutFigure['forbidden'] {
   return [-1, 1].flatMap((side) => {
     const angles = angleDeg.filter((angle) => side * (angle - beamDeg) >= 0);
     const levels = angles.map((angle) => maskLevelDbi(mask, Math.abs(angle - beamDeg)));
