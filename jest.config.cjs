@@ -15,13 +15,16 @@ const node = (name, testMatch, more = {}) => ({
   ...more,
 });
 
+/** Predictions of the server run in the vector kernel, which is compiled first where its sources have changed. */
+const withKernel = { globalSetup: path.join(__dirname, 'scripts/jest-kernel.mjs') };
+
 module.exports = {
   projects: [
     node('shared', ['<rootDir>/shared/**/*.spec.ts']),
-    node('server', ['<rootDir>/server/**/*.spec.ts']),
+    node('server', ['<rootDir>/server/**/*.spec.ts'], withKernel),
     node('architecture', ['<rootDir>/test/architecture/**/*.spec.ts']),
     node('reference', ['<rootDir>/test/reference/**/*.spec.ts']),
-    node('api', ['<rootDir>/test/api/**/*.spec.ts']),
+    node('api', ['<rootDir>/test/api/**/*.spec.ts'], withKernel),
     // A busy machine may need minutes for what takes seconds: the checks wait for what they want to see, not for a time.
     node('e2e', ['<rootDir>/test/e2e/**/*.spec.ts'], { setupFilesAfterEnv: ['<rootDir>/test/e2e/support/patience.ts'] }),
     require('./jest.client.cjs'),

@@ -1,8 +1,9 @@
-/** Builds client and server into dist/, each only when something it is made of has changed. */
+/** Builds client, server and the server's kernel into dist/, each only when something it is made of has changed. */
 import { createHash } from 'node:crypto';
 import { copyFileSync, existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join, relative } from 'node:path';
 import { projectFolder } from './dependencies.mjs';
+import { kernelFile, kernelSources, makeKernel } from './kernel.mjs';
 import { exclusively, run } from './processes.mjs';
 
 export const clientFolder = join(projectFolder, 'dist/client');
@@ -15,7 +16,14 @@ const parts = {
     product: join(clientFolder, 'index.html'),
     make: () => program('ng', ['build', '--progress=false']),
   },
+  kernel: {
+    sources: [kernelSources],
+    settings: ['scripts/kernel.mjs', 'package-lock.json'],
+    product: kernelFile,
+    make: makeKernel,
+  },
   server: {
+    needs: ['kernel'],
     sources: ['server', 'shared'],
     settings: ['tsconfig.base.json', 'tsconfig.server.json', 'package-lock.json'],
     product: join(serverFolder, 'server/main.js'),
@@ -78,7 +86,8 @@ function isCurrent(name) {
 export const forgetBuild = (name) => rmSync(stampFile(name), { force: true });
 
 /** Builds what is out of date; says so, since a person waits for it. */
-export async function provideBuild(...names) {
+export async function provideBuild(...asked) {
+  const names = [...new Set(asked.flatMap((name) => [...(parts[name].needs ?? []), name]))];
   const stale = () => names.filter((name) => !isCurrent(name));
   if (stale().length === 0) return;
   await exclusively(join(projectFolder, '.cache/locks/build'), async () => {

@@ -1,4 +1,6 @@
-import { nextPowerOfTwo, radixFourTransform, type FourierTransformFactory } from '../math/fourier-transform';
+import { fourierEngine } from '../math/active-fourier-engine';
+import type { ComplexSamples, FourierEngine } from '../math/fourier-engine';
+import { nextPowerOfTwo } from '../math/fourier-transform';
 import type { ApertureField } from './aperture-field';
 import { rowShiftM, type LatticeGrid } from './panel-lattice';
 
@@ -27,70 +29,42 @@ export function spectrumSize(cellsAlongSide: number): number {
   return Math.max(FEWEST_SAMPLES, nextPowerOfTwo((cellsAlongSide <= FINE_SIDE ? 3 : 2) * cellsAlongSide));
 }
 
-/** Two-dimensional transform of the aperture, rows of cells first; the empty part of the grid is not transformed. */
-export function apertureSpectrum(field: ApertureField, makeTransform: FourierTransformFactory = radixFourTransform): ApertureSpectrum {
-  const { grid } = field;
+/** Two-dimensional transform of the aperture; the empty part of the grid is not transformed. */
+export function apertureSpectrum(field: ApertureField, engine: FourierEngine = fourierEngine()): ApertureSpectrum {
+  const { grid, re, im } = field;
   const periodU = spectrumSize(grid.columnCount);
-  const columns = grid.stagger === 'none' ? periodU : 2 * periodU;
   const rows = spectrumSize(grid.rowCount);
-  const rowSpectra = transformRows(field, { periodU, columns }, makeTransform);
-  const re = new Float64Array(columns * rows);
-  const im = new Float64Array(columns * rows);
-  const transform = makeTransform(rows);
-  const lineRe = new Float64Array(rows);
-  const lineIm = new Float64Array(rows);
-  const turns = centringTurns(grid.rowCount, rows);
-  for (let m = 0; m < columns; m++) {
-    const from = m * grid.rowCount;
-    lineRe.fill(0, grid.rowCount);
-    lineIm.fill(0, grid.rowCount);
-    lineRe.set(rowSpectra.re.subarray(from, from + grid.rowCount));
-    lineIm.set(rowSpectra.im.subarray(from, from + grid.rowCount));
-    transform.transform(lineRe, lineIm);
-    const to = m * rows;
-    for (let n = 0; n < rows; n++) {
-      re[to + n] = lineRe[n] * turns.cosines[n] - lineIm[n] * turns.sines[n];
-      im[to + n] = lineRe[n] * turns.sines[n] + lineIm[n] * turns.cosines[n];
-    }
-  }
-  return { grid, periodU, columns, rows, re, im };
+  const middle = { originColumn: (grid.columnCount - 1) / 2, originRow: (grid.rowCount - 1) / 2 };
+  const query = { columnCount: grid.columnCount, rowCount: grid.rowCount, columns: periodU, rows, ...middle };
+  if (grid.stagger === 'none') return { grid, periodU, columns: periodU, rows, ...engine.spectrum({ ...query, re, im }) };
+  const still = engine.spectrum({ ...query, ...rowsAlone(field, 0) });
+  // Half a step to the right is the middle moved half a step to the left.
+  const shifted = engine.spectrum({ ...query, ...rowsAlone(field, grid.stepXM / 2), originColumn: middle.originColumn - 0.5 });
+  return { grid, periodU, columns: 2 * periodU, rows, ...twoPeriods(still, shifted, grid.columnCount) };
 }
 
-/** exp(-j 2 pi middle i / size): moves the phase origin from the first cell of a side to its middle. */
-function centringTurns(cells: number, size: number, count = size): { cosines: Float64Array; sines: Float64Array } {
-  const step = (-Math.PI * (cells - 1)) / size;
-  return {
-    cosines: Float64Array.from({ length: count }, (_, i) => Math.cos(step * i)),
-    sines: Float64Array.from({ length: count }, (_, i) => Math.sin(step * i)),
+/** The field of the rows that are shifted by so much, zero in the others. */
+function rowsAlone({ grid, re, im }: ApertureField, shiftM: number): ComplexSamples {
+  const stands = (i: number): boolean => rowShiftM(grid, Math.floor(i / grid.columnCount)) === shiftM;
+  return { re: re.map((a, i) => (stands(i) ? a : 0)), im: im.map((b, i) => (stands(i) ? b : 0)) };
+}
+
+/**
+ * One period on, the centred phase of the rows that stand still has turned by -pi (cells - 1), that of the shifted ones
+ * by -pi (cells - 2).
+ */
+function twoPeriods(still: ComplexSamples, shifted: ComplexSamples, cells: number): ComplexSamples {
+  const count = still.re.length;
+  const sign = cells % 2 === 1 ? 1 : -1;
+  const joined = (a: Float64Array, b: Float64Array): Float64Array => {
+    const both = new Float64Array(2 * count);
+    for (let i = 0; i < count; i++) {
+      both[i] = a[i] + b[i];
+      both[count + i] = sign * (a[i] - b[i]);
+    }
+    return both;
   };
-}
-
-/** Transforms along x, centred, half-step shifts included: row r at sample m stands at m rowCount + r. */
-function transformRows(field: ApertureField, size: { periodU: number; columns: number }, makeTransform: FourierTransformFactory): { re: Float64Array; im: Float64Array } {
-  const { columnCount, rowCount } = field.grid;
-  const { periodU, columns } = size;
-  const spectraRe = new Float64Array(columns * rowCount);
-  const spectraIm = new Float64Array(columns * rowCount);
-  const transform = makeTransform(periodU);
-  const re = new Float64Array(periodU);
-  const im = new Float64Array(periodU);
-  const still = centringTurns(columnCount, periodU, columns);
-  // Half a step to the right is the middle moved half a step to the left: exp(j 2 pi m / (2 periodU)) on top.
-  const shifted = centringTurns(columnCount - 1, periodU, columns);
-  for (let r = 0; r < rowCount; r++) {
-    re.fill(0, columnCount);
-    im.fill(0, columnCount);
-    re.set(field.re.subarray(r * columnCount, (r + 1) * columnCount));
-    im.set(field.im.subarray(r * columnCount, (r + 1) * columnCount));
-    transform.transform(re, im);
-    const { cosines, sines } = rowShiftM(field.grid, r) === 0 ? still : shifted;
-    for (let m = 0; m < columns; m++) {
-      const at = m < periodU ? m : m - periodU;
-      spectraRe[m * rowCount + r] = re[at] * cosines[m] - im[at] * sines[m];
-      spectraIm[m * rowCount + r] = re[at] * sines[m] + im[at] * cosines[m];
-    }
-  }
-  return { re: spectraRe, im: spectraIm };
+  return { re: joined(still.re, shifted.re), im: joined(still.im, shifted.im) };
 }
 
 /** |F|^2 at any whole sample, inside or outside the stored period. */

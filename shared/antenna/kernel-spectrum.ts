@@ -1,4 +1,4 @@
-import { radixFourTransform } from '../math/fourier-transform';
+import { fourierEngine } from '../math/active-fourier-engine';
 import { hemisphereKernel } from './hemisphere-kernel';
 import type { LatticeGrid } from './panel-lattice';
 
@@ -25,7 +25,7 @@ export function kernelSpectrum(query: KernelQuery): Float64Array {
   const key = [...sides, wavenumber * grid.stepXM, wavenumber * grid.stepYM, powerExponent].join(' ');
   const known = recent.get(key);
   if (known) return known;
-  const spectrum = columnTransforms(rowTransforms(query), query);
+  const spectrum = evenTransform(query);
   recent.set(key, spectrum);
   const [oldest] = recent.keys();
   if (recent.size > KEPT) recent.delete(oldest);
@@ -33,78 +33,40 @@ export function kernelSpectrum(query: KernelQuery): Float64Array {
 }
 
 /**
- * Real transforms along x for the lags of y = 0, 1, ...: lag row d, column m at m rowCount + d. Two real even rows
- * share one complex transform. On a staggered lattice odd lag rows hold the lags (c + 1/2) stepX.
+ * From the lags of one quarter, those on an axis halved: the sum over all four signs of exp(j (a + b)) is
+ * 2 Re(exp(j (a + b)) + exp(j (a - b))). On a staggered lattice odd lag rows hold the lags (c + 1/2) stepX, none on an axis.
  */
-function rowTransforms({ grid, columns, wavenumber, powerExponent }: KernelQuery): Float64Array {
-  const lagRows = grid.rowCount;
-  const staggered = grid.stagger !== 'none';
-  const result = new Float64Array(columns * lagRows);
-  const transform = radixFourTransform(columns);
-  const planes = [new Float64Array(columns), new Float64Array(columns)];
-  const fill = (plane: Float64Array, lagRow: number, offset: number): void => {
-    plane.fill(0);
-    if (lagRow >= lagRows) return;
-    const y = lagRow * grid.stepYM;
-    for (let c = 0; c < grid.columnCount; c++) {
-      const value = hemisphereKernel(powerExponent, wavenumber * Math.hypot((c + offset) * grid.stepXM, y));
-      plane[c] = value;
-      // Lag -c without offset, lag -(c + 1/2) = (-c - 1) + 1/2 with it.
-      const mirrored = offset === 0 ? (columns - c) % columns : columns - c - 1;
-      plane[mirrored] = value;
-    }
-  };
-  const step = staggered ? 2 : 1;
-  for (let pair = 0; pair < lagRows; pair += 2 * step) {
-    for (let start = 0; start < step; start++) {
-      const offset = start === 1 ? 0.5 : 0;
-      fill(planes[0], pair + start, offset);
-      fill(planes[1], pair + start + step, offset);
-      transform.transform(planes[0], planes[1]);
-      storePair({ result, lagRows, columns, offset }, planes, pair + start, step);
-    }
+function evenTransform(query: KernelQuery): Float64Array {
+  const { grid, columns, rows } = query;
+  const lines = { columnCount: grid.columnCount, rowCount: grid.rowCount, columns, rows, originRow: 0, im: new Float64Array(grid.columnCount * grid.rowCount) };
+  const result = new Float64Array(columns * (rows / 2 + 1));
+  const steps = grid.stagger === 'none' ? 1 : 2;
+  for (let first = 0; first < steps; first++) {
+    const re = quarterLags(query, first, steps);
+    addEven(result, fourierEngine().spectrum({ ...lines, re, originColumn: first === 0 ? 0 : -0.5 }).re, { columns, rows });
   }
   return result;
 }
 
-/** The even rows' transforms are real: the two planes hold one each, once the half-step offset is turned out of them. */
-function storePair(
-  target: { result: Float64Array; lagRows: number; columns: number; offset: number },
-  [first, second]: Float64Array[],
-  row: number,
-  step: number,
-): void {
-  const { result, lagRows, columns, offset } = target;
-  for (let m = 0; m < columns; m++) {
-    const cosine = Math.cos((2 * Math.PI * offset * m) / columns);
-    const sine = Math.sin((2 * Math.PI * offset * m) / columns);
-    if (row < lagRows) result[m * lagRows + row] = first[m] * cosine - second[m] * sine;
-    if (row + step < lagRows) result[m * lagRows + row + step] = first[m] * sine + second[m] * cosine;
+/** Kernel at the lags of rows `first`, `first` + `step`, ..., zero in the others; row by row. */
+function quarterLags({ grid, wavenumber, powerExponent }: KernelQuery, first: number, step: number): Float64Array {
+  const { columnCount, rowCount, stepXM, stepYM } = grid;
+  const lags = new Float64Array(columnCount * rowCount);
+  const offset = first === 0 ? 0 : 0.5;
+  for (let d = first; d < rowCount; d += step) {
+    for (let c = 0; c < columnCount; c++) {
+      const halved = (d === 0 ? 0.5 : 1) * (c + offset === 0 ? 0.5 : 1);
+      lags[d * columnCount + c] = halved * hemisphereKernel(powerExponent, wavenumber * Math.hypot((c + offset) * stepXM, d * stepYM));
+    }
   }
+  return lags;
 }
 
-/** Transforms along y of the even extension of the lag rows, two columns at a time. */
-function columnTransforms(lagSpectra: Float64Array, { grid, columns, rows }: KernelQuery): Float64Array {
-  const lagRows = grid.rowCount;
+function addEven(result: Float64Array, quarter: Float64Array, { columns, rows }: { columns: number; rows: number }): void {
   const half = rows / 2;
-  const result = new Float64Array(columns * (half + 1));
-  const transform = radixFourTransform(rows);
-  const first = new Float64Array(rows);
-  const second = new Float64Array(rows);
-  for (let m = 0; m < columns; m += 2) {
-    first.fill(0);
-    second.fill(0);
-    for (let d = 0; d < lagRows; d++) {
-      first[d] = lagSpectra[m * lagRows + d];
-      second[d] = lagSpectra[(m + 1) * lagRows + d];
-      first[(rows - d) % rows] = first[d];
-      second[(rows - d) % rows] = second[d];
-    }
-    transform.transform(first, second);
-    for (let n = 0; n <= half; n++) {
-      result[m * (half + 1) + n] = first[n];
-      result[(m + 1) * (half + 1) + n] = second[n];
-    }
+  for (let m = 0; m < columns; m++) {
+    const from = m * rows;
+    const to = m * (half + 1);
+    for (let n = 0; n <= half; n++) result[to + n] += 2 * (quarter[from + n] + quarter[from + ((rows - n) % rows)]);
   }
-  return result;
 }
