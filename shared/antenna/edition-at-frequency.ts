@@ -54,7 +54,8 @@ export function editionAtFrequency(source: FrequencySource, frequencyHz: number)
   return { frequencyHz, outside, entryCount: entries.length, nodeCount, ...table, usable };
 }
 
-interface Neighbours {
+/** Where a frequency falls among the points of one series. */
+export interface Neighbours {
   /** Point indices into the table of values. */
   readonly below: number;
   readonly above: number;
@@ -63,7 +64,7 @@ interface Neighbours {
 }
 
 /** The given points on both sides of a frequency in one series; missing points are stepped over. */
-function neighbours(responses: CellResponseTable, series: number, frequencyHz: number): Neighbours | undefined {
+export function neighbours(responses: CellResponseTable, series: number, frequencyHz: number): Neighbours | undefined {
   const { frequenciesHz, present } = responses;
   const count = frequenciesHz.length;
   const { lower, fraction } = bracket(frequenciesHz, frequencyHz);

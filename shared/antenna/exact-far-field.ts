@@ -1,5 +1,6 @@
 import type { ApertureField } from './aperture-field';
 import { newFarFieldSample, type FarField, type FarFieldSample } from './far-field';
+import type { FieldValue } from './interpolated-far-field';
 import { rowShiftM } from './panel-lattice';
 
 /** Exact sums over the cells, row by row with the powers of exp(j k stepX u) shared by all rows. */
@@ -53,17 +54,25 @@ export function exactFarField(field: ApertureField, wavenumber: number): FarFiel
     }
   };
 
-  const powerAt = (u: number, v: number): number => {
+  const value: FieldValue = { re: 0, im: 0 };
+  const alongLine = (v: number): FieldValue =>
+    columnSum({ re: rowRe, im: rowIm }, { startRad: wavenumber * grid.firstYM * v, stepRad: wavenumber * grid.stepYM * v }, value);
+  const lineAt = (u: number): ((v: number) => FieldValue) => {
     fillRowSums(u);
-    return columnPower({ re: rowRe, im: rowIm }, wavenumber * grid.firstYM * v, wavenumber * grid.stepYM * v);
+    return alongLine;
+  };
+  const fieldAt = (u: number, v: number): FieldValue => lineAt(u)(v);
+  const powerAt = (u: number, v: number): number => {
+    const { re, im } = fieldAt(u, v);
+    return re * re + im * im;
   };
 
   const derivatives = derivativeSums(field, wavenumber, { cosines, sines, fillPowers, middle });
-  return { powerAt, derivativesAt: derivatives };
+  return { powerAt, fieldAt, lineAt, derivativesAt: derivatives };
 }
 
-/** |sum over rows of G_r exp(j (start + r step))|^2. */
-function columnPower(rows: { re: Float64Array; im: Float64Array }, startRad: number, stepRad: number): number {
+/** Sum over rows of G_r exp(j (start + r step)), written into `out`. */
+function columnSum(rows: { re: Float64Array; im: Float64Array }, { startRad, stepRad }: { startRad: number; stepRad: number }, out: FieldValue): FieldValue {
   let sumRe = 0;
   let sumIm = 0;
   let cosine = Math.cos(startRad);
@@ -77,7 +86,9 @@ function columnPower(rows: { re: Float64Array; im: Float64Array }, startRad: num
     sine = cosine * stepSin + sine * stepCos;
     cosine = turned;
   }
-  return sumRe * sumRe + sumIm * sumIm;
+  out.re = sumRe;
+  out.im = sumIm;
+  return out;
 }
 
 interface PowerTable {

@@ -1,7 +1,7 @@
 import type { ApertureField } from './aperture-field';
 import type { ApertureSpectrum } from './aperture-spectrum';
 import { exactFarField } from './exact-far-field';
-import { interpolatedFarField } from './interpolated-far-field';
+import { interpolatedFarField, interpolatedLine, type FieldValue } from './interpolated-far-field';
 
 /** Array factor and its derivatives to u and v at one direction. Reused between calls. */
 export interface FarFieldSample {
@@ -27,6 +27,10 @@ export function newFarFieldSample(): FarFieldSample {
 export interface FarField {
   /** |F|^2. */
   powerAt(u: number, v: number): number;
+  /** F itself, up to a phase that all fields on one grid share; the same object every time. */
+  fieldAt(u: number, v: number): FieldValue;
+  /** Fixes u; what it gives is F at any v of that line, at a fraction of the cost. Valid until the next line is asked for. */
+  lineAt(u: number): (v: number) => FieldValue;
   /** F with first and second derivatives; the same object every time. */
   derivativesAt(u: number, v: number): FarFieldSample;
 }
@@ -48,6 +52,8 @@ export function farFieldOf(field: ApertureField, spectrum: ApertureSpectrum, wav
       const { re, im } = at(u, v);
       return re * re + im * im;
     },
+    fieldAt: at,
+    lineAt: interpolatedLine(spectrum, wavenumber),
     derivativesAt: differenceQuotients(at, stepU, stepV),
   };
 }

@@ -1,4 +1,4 @@
-import { elementPower, type RadiationPattern } from './radiation-pattern';
+import { blendedPower, elementPower, type PatternBlend, type RadiationPattern } from './radiation-pattern';
 
 /** A local maximum on the samples of the hemisphere; its power is relative, element factor included. */
 export interface SampledPeak {
@@ -32,6 +32,10 @@ export function sampleCount({ uReach, vReach }: SampleGrid): number {
 
 /** Power times element factor along one line of samples of constant u, v rising; -1 outside the circle. */
 export function sampleLine(pattern: RadiationPattern, samples: SampleGrid, m: number, line: Float64Array): void {
+  if (pattern.blend) {
+    sampleBlend(pattern, pattern.blend, { samples, m }, line);
+    return;
+  }
   const { vReach, uStep, vStep } = samples;
   const { columns, rows, re, im } = pattern.spectrum;
   const column = (m - columns * Math.floor(m / columns)) * rows;
@@ -42,6 +46,22 @@ export function sampleLine(pattern: RadiationPattern, samples: SampleGrid, m: nu
     const at = column + row;
     line[n + vReach] = wSquared < 0 ? -1 : (re[at] * re[at] + im[at] * im[at]) * elementPower(Math.sqrt(wSquared), pattern.radiateExponent);
     row = row + 1 === rows ? 0 : row + 1;
+  }
+}
+
+function sampleBlend({ spectrum }: RadiationPattern, blend: PatternBlend, { samples, m }: { samples: SampleGrid; m: number }, line: Float64Array): void {
+  const { vReach, uStep, vStep } = samples;
+  const { columns, rows } = spectrum;
+  const column = (m - columns * Math.floor(m / columns)) * rows;
+  const u = m * uStep;
+  const own = { re: 0, im: 0 };
+  const other = { re: 0, im: 0 };
+  for (let n = -vReach; n <= vReach; n++) {
+    const v = n * vStep;
+    const wSquared = 1 - u * u - v * v;
+    const at = column + n - rows * Math.floor(n / rows);
+    [own.re, own.im, other.re, other.im] = [spectrum.re[at], spectrum.im[at], blend.spectrum.re[at], blend.spectrum.im[at]];
+    line[n + vReach] = wSquared < 0 ? -1 : blendedPower(blend, { u, v, w: Math.sqrt(wSquared) }, own, other);
   }
 }
 

@@ -18,10 +18,14 @@ export interface CapturedShare {
 export function hornCapturedShare(horn: SiHorn, outline: SiOutline): CapturedShare {
   const sampleAt = hornSampler(horn);
   const power = hornPower(horn);
-  const density = (xM: number, yM: number): number => {
+  return capturedShare(horn, outline, (xM, yM) => {
     const sample = sampleAt(xM, yM);
     return (sample.field * sample.field * sample.cosIncidence) / power;
-  };
+  });
+}
+
+/** Integral over the outline of a density of the horn's power on the plane of the panel, given as a share of that power. */
+export function capturedShare(horn: SiHorn, outline: SiOutline, density: (xM: number, yM: number) => number): CapturedShare {
   const pivot = brightestPoint(horn, outline);
   // The footprint of cos^2q seen from height h falls off over about h / sqrt(q + 1).
   const partM = Math.abs(horn.position.zM) / Math.sqrt(Math.max(horn.exponentE, horn.exponentH) + 1);

@@ -89,6 +89,71 @@ export function interpolatedColumn(spectrum: ApertureSpectrum, wavenumber: numbe
   };
 }
 
+/** |F|^2 of any spectrum of one shape at fixed directions: their weights are worked out once. */
+export function interpolatedDirections(
+  shape: ApertureSpectrum,
+  wavenumber: number,
+  directions: readonly { readonly u: number; readonly v: number }[],
+): (spectrum: ApertureSpectrum, power: Float64Array) => void {
+  const { alongU, alongV, samplesPerU, samplesPerV } = axes(shape, wavenumber);
+  const copy = ({ weights, indices }: AxisWeights): AxisWeights => ({ weights: weights.slice(), indices: indices.slice() });
+  const fixed = directions.map(({ u, v }) => ({ along: copy(alongU(u * samplesPerU)), across: copy(alongV(v * samplesPerV)) }));
+  return ({ rows, re, im }, power) => {
+    fixed.forEach(({ along, across }, k) => {
+      let sumRe = 0;
+      let sumIm = 0;
+      for (let i = 0; i < along.weights.length; i++) {
+        const column = along.indices[i] * rows;
+        let lineRe = 0;
+        let lineIm = 0;
+        for (let j = 0; j < across.weights.length; j++) {
+          const at = column + across.indices[j];
+          lineRe += across.weights[j] * re[at];
+          lineIm += across.weights[j] * im[at];
+        }
+        sumRe += along.weights[i] * lineRe;
+        sumIm += along.weights[i] * lineIm;
+      }
+      power[k] = sumRe * sumRe + sumIm * sumIm;
+    });
+  };
+}
+
+/** F along lines of constant u: interpolates the samples along u once for the line, then along v for each point. */
+export function interpolatedLine(spectrum: ApertureSpectrum, wavenumber: number): (u: number) => (v: number) => FieldValue {
+  const { rows, re, im } = spectrum;
+  const { alongU, alongV, samplesPerU, samplesPerV } = axes(spectrum, wavenumber);
+  const lineRe = new Float64Array(rows);
+  const lineIm = new Float64Array(rows);
+  const value: FieldValue = { re: 0, im: 0 };
+  const alongLine = (v: number): FieldValue => {
+    const { weights, indices } = alongV(v * samplesPerV);
+    let sumRe = 0;
+    let sumIm = 0;
+    for (let j = 0; j < weights.length; j++) {
+      sumRe += weights[j] * lineRe[indices[j]];
+      sumIm += weights[j] * lineIm[indices[j]];
+    }
+    value.re = sumRe;
+    value.im = sumIm;
+    return value;
+  };
+  return (u) => {
+    lineRe.fill(0);
+    lineIm.fill(0);
+    const { weights, indices } = alongU(u * samplesPerU);
+    for (let i = 0; i < weights.length; i++) {
+      const weight = weights[i];
+      const column = indices[i] * rows;
+      for (let n = 0; n < rows; n++) {
+        lineRe[n] += weight * re[column + n];
+        lineIm[n] += weight * im[column + n];
+      }
+    }
+    return alongLine;
+  };
+}
+
 interface Axes {
   readonly samplesPerU: number;
   readonly samplesPerV: number;

@@ -49,15 +49,7 @@ export function refinePeak(pattern: RadiationPattern, startU: number, startV: nu
 
 /** Newton's step where the logarithm curves down in every direction, else one along its gradient. */
 function climbStep(pattern: RadiationPattern, u: number, v: number, longestStep: number): [number, number] {
-  const slope = logSlope(pattern.farField.derivativesAt(u, v));
-  const wSquared = Math.max(1 - u * u - v * v, 1e-12);
-  // ln cos^2b(theta) = b ln(1 - u^2 - v^2)
-  const b = pattern.radiateExponent;
-  const gu = slope.gu - (2 * b * u) / wSquared;
-  const gv = slope.gv - (2 * b * v) / wSquared;
-  const huu = slope.huu - 2 * b * (1 / wSquared + (2 * u * u) / (wSquared * wSquared));
-  const hvv = slope.hvv - 2 * b * (1 / wSquared + (2 * v * v) / (wSquared * wSquared));
-  const huv = slope.huv - (4 * b * u * v) / (wSquared * wSquared);
+  const { gu, gv, huu, huv, hvv } = pattern.blend ? blendedSlope(pattern, u, v, longestStep) : elementSlope(pattern, u, v);
   const determinant = huu * hvv - huv * huv;
   if (huu < 0 && determinant > 1e-12 * huu * huu) {
     return [(huv * gv - hvv * gu) / determinant, (huv * gu - huu * gv) / determinant];
@@ -66,8 +58,44 @@ function climbStep(pattern: RadiationPattern, u: number, v: number, longestStep:
   return steepness === 0 ? [0, 0] : [(gu / steepness) * longestStep, (gv / steepness) * longestStep];
 }
 
+interface LogSlope {
+  readonly gu: number;
+  readonly gv: number;
+  readonly huu: number;
+  readonly huv: number;
+  readonly hvv: number;
+}
+
+function elementSlope(pattern: RadiationPattern, u: number, v: number): LogSlope {
+  const slope = logSlope(pattern.farField.derivativesAt(u, v));
+  const wSquared = Math.max(1 - u * u - v * v, 1e-12);
+  // ln cos^2b(theta) = b ln(1 - u^2 - v^2)
+  const b = pattern.radiateExponent;
+  return {
+    gu: slope.gu - (2 * b * u) / wSquared,
+    gv: slope.gv - (2 * b * v) / wSquared,
+    huu: slope.huu - 2 * b * (1 / wSquared + (2 * u * u) / (wSquared * wSquared)),
+    hvv: slope.hvv - 2 * b * (1 / wSquared + (2 * v * v) / (wSquared * wSquared)),
+    huv: slope.huv - (4 * b * u * v) / (wSquared * wSquared),
+  };
+}
+
+/** Central differences over a thirtieth of the longest step, itself a quarter of a beamwidth: they steer the climb and do not move its end. */
+function blendedSlope(pattern: RadiationPattern, u: number, v: number, longestStep: number): LogSlope {
+  const step = longestStep / 30;
+  const at = (i: number, j: number): number => Math.log(Math.max(1e-300, directivityRatioAt(pattern, u + i * step, v + j * step)));
+  const [middle, right, left, above, below] = [at(0, 0), at(1, 0), at(-1, 0), at(0, 1), at(0, -1)];
+  return {
+    gu: (right - left) / (2 * step),
+    gv: (above - below) / (2 * step),
+    huu: (right - 2 * middle + left) / (step * step),
+    hvv: (above - 2 * middle + below) / (step * step),
+    huv: (at(1, 1) - at(1, -1) - at(-1, 1) + at(-1, -1)) / (4 * step * step),
+  };
+}
+
 /** Gradient and second derivatives of ln |F|^2: 2 Re(F_u / F) and 2 Re(F_uv / F - F_u F_v / F^2). */
-function logSlope(s: FarFieldSample): { gu: number; gv: number; huu: number; huv: number; hvv: number } {
+function logSlope(s: FarFieldSample): LogSlope {
   const power = Math.max(s.re * s.re + s.im * s.im, 1e-300);
   const over = (re: number, im: number): [number, number] => [(re * s.re + im * s.im) / power, (im * s.re - re * s.im) / power];
   const [uRe, uIm] = over(s.uRe, s.uIm);

@@ -1,6 +1,6 @@
 import { interpolatedColumn } from './interpolated-far-field';
 import { FLOOR_DBI, flooredDbi } from './pattern-cut';
-import { elementPower, type RadiationPattern } from './radiation-pattern';
+import { blendedLine, elementPower, type RadiationPattern } from './radiation-pattern';
 
 /** Gain over the unit square of (u, v): rows from v = -1 to 1, within a row from u = -1 to 1; the floor outside the visible circle. */
 export interface UvMap {
@@ -24,15 +24,17 @@ export function uvMap(pattern: RadiationPattern, size: number, gainOffsetDb: num
   const coordinates = Float64Array.from({ length: size }, (_, i) => (size === 1 ? 0 : -1 + (2 * i) / (size - 1)));
   const scale = (4 * Math.PI) / pattern.radiatedPower;
   const vs = coordinates.map((v) => v - shift.v);
-  const powersAt = interpolatedColumn(pattern.spectrum, pattern.wavenumber, vs);
+  const powersAt = pattern.blend ? undefined : interpolatedColumn(pattern.spectrum, pattern.wavenumber, vs);
   const powers = new Float64Array(size);
   for (let column = 0; column < size; column++) {
     const u = coordinates[column] - shift.u;
-    powersAt(u, powers);
+    powersAt?.(u, powers);
+    const lines = pattern.blend ? blendedLine(pattern, pattern.blend, u) : () => 0;
     for (let row = 0; row < size; row++) {
       const wSquared = 1 - u * u - vs[row] * vs[row];
       if (wSquared < 0) continue;
-      const ratio = powers[row] * elementPower(Math.sqrt(wSquared), pattern.radiateExponent) * scale;
+      const w = Math.sqrt(wSquared);
+      const ratio = scale * (powersAt ? powers[row] * elementPower(w, pattern.radiateExponent) : lines(vs[row], w));
       gainDbi[row * size + column] = Math.max(FLOOR_DBI, flooredDbi(ratio) + gainOffsetDb);
     }
   }
