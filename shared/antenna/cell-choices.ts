@@ -1,9 +1,9 @@
-import type { DesignDocument } from '../model/design-document';
 import { degFromRad, wrapRad } from '../units/angles';
 import { amplitudeRatioToDb } from '../units/decibels';
 import { phaseInTurnDeg } from './cell-arrays';
 import { complexError } from './edition-choice';
 import { editionSite, stateFiller } from './edition-stock';
+import { coupledField } from './guided-wave/resonant-cell';
 import { FLOOR_DBI } from './pattern-cut';
 import type { PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
@@ -31,7 +31,8 @@ export function cellChoices(placed: ChoiceSite, position: number, edition?: Prep
   }
   const targetRad = placed.targetRad[position];
   const states = statesOf(placed, position, edition);
-  const byLoss = placed.design.cells.kind === 'edition' && placed.design.cells.rule === 'least-error';
+  const { cells } = placed.design;
+  const byLoss = cells.kind === 'resonant' || (cells.kind === 'edition' && cells.rule === 'least-error');
   const choices = Array.from({ length: states.count }, (_, i) => choiceOf(states, i, targetRad));
   const measure = (choice: CellChoice): number => (byLoss ? choice.complexError : Math.abs(choice.errorDeg));
   // Equal up to rounding: the smallest index first, as in the assignment.
@@ -61,9 +62,14 @@ function statesOf(placed: ChoiceSite, position: number, edition?: PreparedEditio
   if (cells.kind === 'inline') {
     return tableStates(cells.cells.map((cell) => radFromDeg(cell.phaseDeg)), cells.cells.map((cell) => cell.magnitude));
   }
-  const levels: DesignDocument['cells'] & { kind: 'ideal' } = cells;
-  const count = levels.levels ?? 0;
+  if (cells.kind === 'resonant') return resonantStates(cells.states ?? 0);
+  const count = cells.levels ?? 0;
   return tableStates(Array.from({ length: count }, (_, i) => (2 * Math.PI * i) / count), new Array<number>(count).fill(1));
+}
+
+function resonantStates(count: number): CellStates {
+  const fields = Array.from({ length: count }, (_, k) => coupledField((2 * Math.PI * k) / count, { magnitude: 0, phaseRad: 0 }));
+  return tableStates(fields.map(({ phaseRad }) => phaseRad), fields.map(({ magnitude }) => magnitude));
 }
 
 function tableStates(phasesRad: readonly number[], magnitudes: readonly number[]): CellStates {

@@ -1,6 +1,7 @@
 import type { Cells } from '../model/design-document';
 import type { Warning } from '../model/figures';
 import { editionStock } from './edition-stock';
+import { resonantStock } from './guided-wave/resonant-stock';
 import { idealStock } from './ideal-stock';
 import type { CellIllumination } from './illumination';
 import { inlineStock } from './inline-stock';
@@ -54,6 +55,7 @@ const stocks: { readonly [Kind in Cells['kind']]: StockMaker<Kind> } = {
   ideal: idealStock,
   inline: inlineStock,
   edition: editionStock,
+  resonant: resonantStock,
 };
 
 export function cellStock(cells: Cells, site: StockSite): CellStock {

@@ -28,7 +28,7 @@ export interface DerivedValues {
   readonly maxIncidenceDeg: Figure;
   /** Largest spacing without a grating lobe of any wanted beam, lambda / (1 + sin theta). */
   readonly largestFreeSpacingMm: number;
-  /** Largest spacing at which the cell sends back one order only, lambda / (1 + sin incidence). */
+  /** Largest spacing at which the cell sends back one order only: lambda / (1 + sin incidence), lambda / (1 + n) on a guided wave. */
   readonly largestCellSpacingMm: Figure;
   /** The lattice's own spacing to hold against both: 1 over its shortest reciprocal vector. */
   readonly spacingMm: number;
@@ -49,7 +49,7 @@ export function derivedValues(design: DesignDocument): DerivedValues {
   const largestM = largestDimensionM(si.panel.outline);
   const steepestSine = Math.max(...si.beams.map(({ direction }) => Math.hypot(direction.u, direction.v)));
   const incidenceRad = steepestIncidenceRad(si);
-  const noHorn = noFigure('plane-wave', 'the panel is lit by a plane wave');
+  const noHorn = si.illumination.kind === 'guided-wave' ? noFigure('guided-wave', 'the panel is lit by a guided wave') : noFigure('plane-wave', 'the panel is lit by a plane wave');
   const horn = si.illumination.kind === 'horn' ? si.illumination : undefined;
   return {
     wavelengthMm: wavelengthM * MM_PER_M,
@@ -61,9 +61,9 @@ export function derivedValues(design: DesignDocument): DerivedValues {
     focalRatio: horn ? distanceToAimM(horn) / largestM : noHorn,
     hornGainDbi: horn ? powerRatioToDb((4 * Math.PI) / hornPower(horn)) : noHorn,
     hornBeamwidthDeg: horn ? { e: halfPowerWidthDeg(horn.exponentE), h: halfPowerWidthDeg(horn.exponentH) } : { e: noHorn, h: noHorn },
-    maxIncidenceDeg: degFromRad(incidenceRad),
+    maxIncidenceDeg: si.illumination.kind === 'guided-wave' ? noHorn : degFromRad(incidenceRad),
     largestFreeSpacingMm: (wavelengthM / (1 + steepestSine)) * MM_PER_M,
-    largestCellSpacingMm: (wavelengthM / (1 + Math.sin(incidenceRad))) * MM_PER_M,
+    largestCellSpacingMm: (wavelengthM / (1 + (si.illumination.kind === 'guided-wave' ? si.illumination.effectiveIndex : Math.sin(incidenceRad)))) * MM_PER_M,
     spacingMm: MM_PER_M / shortestReciprocalPerM(si.panel.lattice),
   };
 }
@@ -88,6 +88,7 @@ function distanceToAimM({ position, aim }: SiHorn): number {
 
 /** Largest angle of incidence over the outline; the farthest point of an outline from the horn lies on its edge. */
 function steepestIncidenceRad({ illumination, panel }: SiDesign): number {
+  if (illumination.kind === 'guided-wave') return 0;
   if (illumination.kind === 'plane-wave') return Math.acos(Math.min(1, illumination.source.w));
   const { xM, yM, zM } = illumination.position;
   const farthest = outlineTrace(panel.outline, 720).reduce((far, point) => Math.max(far, Math.hypot(point.xM - xM, point.yM - yM)), 0);

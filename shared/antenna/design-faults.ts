@@ -42,6 +42,19 @@ function countFaults({ panel }: DesignDocument): DesignFault[] {
   return detail ? [{ pointer: '#/panel', detail }] : [];
 }
 
+/** Cells that cannot be lit in the given way. */
+function guidedWaveFaults(illumination: DesignDocument['illumination'], cells: DesignDocument['cells']): DesignFault[] {
+  const guided = illumination.kind === 'guided-wave';
+  if (guided && cells.kind === 'edition') {
+    return [{ pointer: '#/cells/kind', detail: 'cells of an edition are measured under waves from outside; under a guided wave use resonant, ideal or what-if cells' }];
+  }
+  if (!guided && cells.kind === 'resonant') return [{ pointer: '#/cells/kind', detail: `resonant cells need a guided wave under the panel; got illumination ${illumination.kind}` }];
+  if (cells.kind === 'resonant' && cells.rule === 'phase-only' && cells.states !== null) {
+    return [{ pointer: '#/cells/states', detail: 'the rule phase-only needs a continuous tuning, states null' }];
+  }
+  return [];
+}
+
 function sourceFaults({ illumination, synthesis, cells }: DesignDocument): DesignFault[] {
   const faults: DesignFault[] = [];
   if (illumination.kind === 'horn') {
@@ -56,6 +69,7 @@ function sourceFaults({ illumination, synthesis, cells }: DesignDocument): Desig
   if (synthesis.kind === 'focus' && synthesis.pointMm[2] <= 0) {
     faults.push({ pointer: '#/synthesis/pointMm/2', detail: `the focus must lie in front of the panel, z > 0; got z = ${synthesis.pointMm[2]} mm` });
   }
+  faults.push(...guidedWaveFaults(illumination, cells));
   if (cells.kind === 'inline' && cells.cells.every((cell) => cell.magnitude === 0)) {
     faults.push({ pointer: '#/cells/cells', detail: 'at least one cell must have a magnitude above 0' });
   }

@@ -32,7 +32,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     frequencyGHz: frequencyHz / 1e9,
     wavelengthMm: wavelengthM * 1000,
     cellCount: lattice.count,
-    maxIncidenceDeg: degFromRad(maxIncidence),
+    maxIncidenceDeg: si.illumination.kind === 'guided-wave' ? noFigure('guided-wave', 'a guided wave has no angle of incidence') : degFromRad(maxIncidence),
     evanescentCells: evanescentCellCount({ law, lattice, light, designWavenumber, wavenumber: state.wavenumber }),
     gratingLobes: orders.flatMap((order) => order.lobes),
     edgeTaperDb: edgeTaperDb(si.illumination, si.panel, lattice),

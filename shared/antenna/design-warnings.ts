@@ -1,6 +1,7 @@
 import type { DesignDocument } from '../model/design-document';
 import type { Figures, Warning } from '../model/figures';
 import { directionText } from './angle-text';
+import { guidedWaveWarnings } from './guided-wave/guided-wave-warnings';
 import { illuminationWarnings } from './illumination-warnings';
 import { keepOutWarning } from './keep-out-warning';
 import { latticeWarnings, type LatticeFacts } from './lattice-warnings';
@@ -21,6 +22,7 @@ export function designWarnings(facts: DesignFacts): Warning[] {
     ...keepOutWarning(facts.si, facts.figures.spilloverDb),
     ...facts.cellWarnings,
     ...latticeWarnings(facts),
+    ...guidedWaveWarnings(facts.si, facts.wavelengthM, facts.design.cells.kind === 'resonant'),
     ...imageLobeWarning(facts.design, facts.figures),
     ...tableWarning(facts.design),
   ];

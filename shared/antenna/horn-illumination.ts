@@ -1,10 +1,10 @@
 import { hornSampler } from './horn-field';
 import type { CellIllumination } from './illumination';
-import type { PanelLattice } from './panel-lattice';
+import type { CellPlaces } from './panel-lattice';
 import type { SiHorn } from './si-design';
 
 /** Lights the cells by a horn: amplitude cos^q / R times cos^a of the angle of incidence, a the receive exponent. */
-export function hornIllumination(horn: SiHorn, lattice: PanelLattice, receiveExponent: number): CellIllumination {
+export function hornIllumination(horn: SiHorn, lattice: CellPlaces, receiveExponent: number): CellIllumination {
   const { count, xM, yM } = lattice;
   const amplitude = new Float64Array(count);
   const pathM = new Float64Array(count);

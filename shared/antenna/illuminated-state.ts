@@ -1,11 +1,10 @@
 import type { Figure } from '../model/figures';
-import { powerRatioToDb } from '../units/decibels';
 import { wavenumberRadPerM } from '../waves/conventions';
 import { apertureField } from './aperture-field';
 import { apertureLosses, commonPhaseRad, phaseErrorsRad, type ApertureLosses } from './aperture-figures';
+import { capturedPower, countedCellLossDb } from './captured-power';
 import type { CellResponses } from './cell-stock';
-import { hornCapturedShare } from './horn-spillover';
-import { noFigure, nothingLit, sumFigures } from './no-figure';
+import { sumFigures } from './no-figure';
 import type { PlacedDesign } from './place-cells';
 import { radiationPattern, type RadiationPattern } from './radiation-pattern';
 import { targetPhasesRad } from './target-phase';
@@ -38,8 +37,8 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
   const responses = stock.respond(assignment, frequencyHz);
   const targetRad = targetInUse(placed, responses, frequencyHz);
   const losses = apertureLosses(light, responses, phaseErrorsRad(responses.phaseRad, targetRad));
-  const spillover = spilloverOf(placed);
-  const captured = si.illumination.kind === 'horn' ? spillover.spilloverDb : 0;
+  const { capturedDb, ...spillover } = capturedPower(si);
+  const cellLossDb = countedCellLossDb(placed.design.cells, losses.cellLossDb);
   return {
     placed,
     frequencyHz,
@@ -48,9 +47,9 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
     responses,
     targetRad,
     pattern: radiationPattern(apertureField(lattice, light, responses, wavenumber), wavenumber, si.radiateExponent),
-    losses,
+    losses: { ...losses, cellLossDb },
     ...spillover,
-    gainOffsetDb: sumFigures(captured, losses.cellLossDb),
+    gainOffsetDb: placed.design.cells.kind === 'resonant' ? capturedDb : sumFigures(capturedDb, cellLossDb),
     litCount: light.amplitude.reduce((count, amplitude) => count + (amplitude > 0 ? 1 : 0), 0),
   };
 }
@@ -61,13 +60,4 @@ function targetInUse(placed: PlacedDesign, responses: CellResponses, frequencyHz
   const bareRad = targetPhasesRad(law, lattice, light, wavenumberRadPerM(frequencyHz));
   const referenceRad = commonPhaseRad(responses.phaseRad, bareRad);
   return bareRad.map((rad) => rad + referenceRad);
-}
-
-function spilloverOf({ si }: PlacedDesign): { spilloverDb: Figure; spilloverUncertaintyDb: number } {
-  if (si.illumination.kind !== 'horn') {
-    return { spilloverDb: noFigure('plane-wave', 'a plane wave fills all space, so no share of it misses the panel'), spilloverUncertaintyDb: 0 };
-  }
-  const { fraction, uncertainty } = hornCapturedShare(si.illumination, si.panel.outline);
-  if (fraction <= 0) return { spilloverDb: nothingLit(), spilloverUncertaintyDb: 0 };
-  return { spilloverDb: Math.min(0, powerRatioToDb(fraction)), spilloverUncertaintyDb: powerRatioToDb(1 + uncertainty / fraction) };
 }

@@ -1,5 +1,6 @@
+import { guidedWaveIllumination } from './guided-wave/guided-wave-illumination';
 import { hornIllumination } from './horn-illumination';
-import type { PanelLattice } from './panel-lattice';
+import type { CellPlaces } from './panel-lattice';
 import { planeWaveIllumination } from './plane-wave-illumination';
 import type { SiIllumination } from './si-design';
 
@@ -12,11 +13,13 @@ export interface CellIllumination {
   readonly pathM: Float64Array;
   readonly incidenceRad: Float64Array;
   readonly azimuthRad: Float64Array;
+  /** Tangential wavenumber over k of a wave that does not come through free space; the sine of the incidence otherwise. */
+  readonly tangentialIndex?: number;
 }
 
 type Illuminator<Kind extends SiIllumination['kind']> = (
   illumination: Extract<SiIllumination, { kind: Kind }>,
-  lattice: PanelLattice,
+  lattice: CellPlaces,
   receiveExponent: number,
 ) => CellIllumination;
 
@@ -24,10 +27,11 @@ type Illuminator<Kind extends SiIllumination['kind']> = (
 const illuminators: { readonly [Kind in SiIllumination['kind']]: Illuminator<Kind> } = {
   horn: hornIllumination,
   'plane-wave': planeWaveIllumination,
+  'guided-wave': guidedWaveIllumination,
 };
 
 /** Amplitude, path and incidence at every cell. */
-export function illuminateCells(illumination: SiIllumination, lattice: PanelLattice, receiveExponent: number): CellIllumination {
-  const illuminate = illuminators[illumination.kind] as (i: SiIllumination, l: PanelLattice, a: number) => CellIllumination;
+export function illuminateCells(illumination: SiIllumination, lattice: CellPlaces, receiveExponent: number): CellIllumination {
+  const illuminate = illuminators[illumination.kind] as (i: SiIllumination, l: CellPlaces, a: number) => CellIllumination;
   return illuminate(illumination, lattice, receiveExponent);
 }

@@ -41,6 +41,7 @@ function gratingLobeWarning({ si, wavelengthM, gratingLobeCount, figures }: Latt
 }
 
 function cellPeriodWarning({ si, wavelengthM, maxIncidenceRad }: LatticeFacts): Warning[] {
+  if (si.illumination.kind === 'guided-wave') return [];
   // The cell itself must send back one order only at the steepest incidence: d < lambda / (1 + sin theta_inc).
   const limitMm = mm(wavelengthM / (1 + Math.sin(maxIncidenceRad)));
   const spacingMm = mm(1 / shortestReciprocalPerM(si.panel.lattice));

@@ -16,13 +16,17 @@ export interface LatticeGrid {
   readonly stagger: 'none' | 'even' | 'odd';
 }
 
-/** Cells in order: row by row from the lowest y, within a row from the lowest x. */
-export interface PanelLattice {
-  readonly grid: LatticeGrid;
+/** Where cells stand. */
+export interface CellPlaces {
   readonly count: number;
-  readonly cellAreaM2: number;
   readonly xM: Float64Array;
   readonly yM: Float64Array;
+}
+
+/** Cells in order: row by row from the lowest y, within a row from the lowest x. */
+export interface PanelLattice extends CellPlaces {
+  readonly grid: LatticeGrid;
+  readonly cellAreaM2: number;
   readonly column: Int32Array;
   readonly row: Int32Array;
 }

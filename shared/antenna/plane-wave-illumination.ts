@@ -1,9 +1,9 @@
 import type { CellIllumination } from './illumination';
-import type { PanelLattice } from './panel-lattice';
+import type { CellPlaces } from './panel-lattice';
 import type { SiPlaneWave } from './si-design';
 
 /** Lights the cells by a plane wave: amplitude 1, path -r.i for a wave that comes from direction i. */
-export function planeWaveIllumination(wave: SiPlaneWave, lattice: PanelLattice): CellIllumination {
+export function planeWaveIllumination(wave: SiPlaneWave, lattice: CellPlaces): CellIllumination {
   const { count, xM, yM } = lattice;
   const { u, v, w } = wave.source;
   const pathM = new Float64Array(count);

@@ -2,6 +2,7 @@ import type { DesignDocument, KeepOut, Lattice, Outline, Polarisation } from '..
 import { radFromDeg } from '../units/angles';
 import { dbToAmplitudeRatio } from '../units/decibels';
 import { directionOf, type Direction } from '../waves/conventions';
+import { feedEdgeM } from './guided-wave/guided-wave-illumination';
 
 /*
  * The design in SI and radians. Millimetres, degrees and gigahertz end here: everything below this arrow of the
@@ -54,7 +55,17 @@ export interface SiPlaneWave {
   readonly polarisation: Polarisation;
 }
 
-export type SiIllumination = SiHorn | SiPlaneWave;
+export interface SiGuidedWave {
+  readonly kind: 'guided-wave';
+  readonly launch:
+    | { readonly kind: 'plane'; readonly directionRad: number; readonly feedEdgeM: number }
+    | { readonly kind: 'radial'; readonly centre: SiPoint; readonly radiusM: number };
+  readonly effectiveIndex: number;
+  readonly leakageNpPerM: number;
+  readonly polarisation: Polarisation;
+}
+
+export type SiIllumination = SiHorn | SiPlaneWave | SiGuidedWave;
 
 export type SiSynthesis =
   | { readonly kind: 'direct' }
@@ -88,7 +99,7 @@ export function siDesign(design: DesignDocument): SiDesign {
     })),
     operation: panel.operation,
     panel: siPanel(panel),
-    illumination: siIllumination(design.illumination),
+    illumination: siIllumination(design.illumination, siOutline(panel.outline, [0, 0])),
     synthesis: siSynthesis(design.synthesis),
     referencePhaseRad: referencePhaseDeg === 'search' ? 'search' : radFromDeg(referencePhaseDeg),
     receiveExponent: prediction.receiveExponent,
@@ -122,13 +133,29 @@ function siOutline(outline: Outline, centreMm: readonly [number, number]): SiOut
   return { kind: outline.kind, centre, widthM: outline.widthMm * M_PER_MM, heightM: outline.heightMm * M_PER_MM };
 }
 
-function siIllumination(illumination: DesignDocument['illumination']): SiIllumination {
+function siIllumination(illumination: DesignDocument['illumination'], outline: SiOutline): SiIllumination {
+  if (illumination.kind === 'guided-wave') return siGuidedWave(illumination, outline);
   if (illumination.kind === 'plane-wave') {
     const source = directionOf(radFromDeg(illumination.thetaDeg), radFromDeg(illumination.phiDeg));
     return { kind: 'plane-wave', source, polarisation: illumination.polarisation };
   }
   const { exponentE, exponentH, polarisation, positionMm, aimMm } = illumination;
   return { kind: 'horn', position: siPosition(positionMm), aim: siPosition(aimMm), exponentE, exponentH, polarisation };
+}
+
+function siGuidedWave(wave: Extract<DesignDocument['illumination'], { kind: 'guided-wave' }>, outline: SiOutline): SiGuidedWave {
+  const { launch, effectiveIndex, leakageNpPerM, polarisation } = wave;
+  const directionRad = launch.kind === 'plane' ? radFromDeg(launch.directionDeg) : 0;
+  return {
+    kind: 'guided-wave',
+    launch:
+      launch.kind === 'plane'
+        ? { kind: 'plane', directionRad, feedEdgeM: feedEdgeM(outline, directionRad) }
+        : { kind: 'radial', centre: { xM: launch.centreMm[0] * M_PER_MM, yM: launch.centreMm[1] * M_PER_MM }, radiusM: launch.radiusMm * M_PER_MM },
+    effectiveIndex,
+    leakageNpPerM,
+    polarisation,
+  };
 }
 
 function siPosition([x, y, z]: readonly [number, number, number]): SiPosition {

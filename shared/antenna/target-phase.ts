@@ -35,7 +35,7 @@ export function evanescentCellCount(query: OutgoingQuery): number {
   let count = 0;
   for (let n = 0; n < lattice.count; n++) {
     law.tangential(designWavenumber, lattice.xM[n], lattice.yM[n], wanted);
-    const sine = Math.sin(light.incidenceRad[n]);
+    const sine = light.tangentialIndex ?? Math.sin(light.incidenceRad[n]);
     const inU = sine * Math.cos(light.azimuthRad[n]);
     const inV = sine * Math.sin(light.azimuthRad[n]);
     const u = inU + ratio * (wanted.u - inU);

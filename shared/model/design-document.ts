@@ -97,6 +97,21 @@ export const illumination = z.discriminatedUnion('kind', [
     polarisation,
   }),
   z.strictObject({ kind: z.literal('plane-wave'), thetaDeg, phiDeg, polarisation }),
+  /** A wave that runs under the panel and leaks through the cells. */
+  z.strictObject({
+    kind: z.literal('guided-wave'),
+    launch: z.discriminatedUnion('kind', [
+      /** From the edge of the outline across the panel; the azimuth is that of its direction of travel. */
+      z.strictObject({ kind: z.literal('plane'), directionDeg: phiDeg }),
+      /** From a point outward; nothing is lit within the radius of the launch. */
+      z.strictObject({ kind: z.literal('radial'), centreMm: pointMm, radiusMm: lengthMm }),
+    ]),
+    /** Wavenumber of the guided wave over that of free space, at every frequency. */
+    effectiveIndex: z.number().min(0.05).max(20),
+    /** Decay of the field along the way by leaking, 1/m. */
+    leakageNpPerM: z.number().gt(0).max(1000),
+    polarisation,
+  }),
 ]);
 
 export const synthesis = z.discriminatedUnion('kind', [
@@ -120,6 +135,13 @@ export const cells = z.discriminatedUnion('kind', [
       .array(z.strictObject({ phaseDeg: z.number().min(-36_000).max(36_000), magnitude: z.number().min(0).max(1) }))
       .min(1)
       .max(10_000),
+  }),
+  /** Resonant cells on a guided wave: strength and phase lie on one circle. */
+  z.strictObject({
+    kind: z.literal('resonant'),
+    rule: z.enum(['projection', 'nearest', 'phase-only']),
+    /** States evenly spaced round the circle; null for a continuous tuning. */
+    states: z.number().int().min(2).max(4096).nullable(),
   }),
 ]);
 

@@ -47,11 +47,15 @@ const BY_KIND: Readonly<Record<string, (fields: Fields) => string>> = {
   triangular: (fields) => `triangular ${fields['periodXMm']} × ${fields['rowSpacingMm']} mm`,
   horn: (fields) => `horn at ${designPartText(fields['positionMm'])} mm`,
   'plane-wave': (fields) => `plane wave from θ ${fields['thetaDeg']}° φ ${fields['phiDeg']}°`,
+  'guided-wave': (fields) => `guided wave, ${designPartText(fields['launch'])}, index ${fields['effectiveIndex']}`,
+  plane: (fields) => `plane towards ${fields['directionDeg']}°`,
+  radial: (fields) => `radial, launch radius ${fields['radiusMm']} mm`,
   direct: () => 'direct',
   focus: (fields) => `focus at ${designPartText(fields['pointMm'])} mm`,
   vortex: (fields) => `vortex of order ${fields['order']}`,
   ideal: (fields) => (fields['levels'] === null ? 'ideal, continuous' : `ideal, ${fields['levels']} levels`),
   edition: (fields) => `edition ${fields['editionId']}, ${fields['rule']}`,
+  resonant: (fields) => `resonant, ${fields['rule']}${fields['states'] === null ? '' : `, ${fields['states']} states`}`,
   inline: (fields) => `what-if table of ${lengthOf(fields['cells'])} cells`,
 };
 

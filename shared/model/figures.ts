@@ -95,6 +95,7 @@ export const warning = z.strictObject({
     'keep-out-power',
     'illumination-misses',
     'behind-panel',
+    'unmodulated-lobe',
     'provenance',
   ]),
   /** JSON pointer of the field it concerns. */

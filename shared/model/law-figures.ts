@@ -31,10 +31,26 @@ export const vortexFigures = z.strictObject({
   axisDb: figure,
 });
 
+/** A wave that runs under the panel. */
+export const guidedWaveFigures = z.strictObject({
+  /** Way under the panel over which it leaks. */
+  lengthMm: z.number(),
+  /** 1 - exp(-2 alpha L): counts in the gain as the spillover of a horn does. */
+  leakedShare: z.number(),
+  /** Field in the beam against cells of free phase and full strength. */
+  beamRelativeDb: figure,
+  /** Share of what the cells couple that is in the beam; the rest is scattered by the unwanted part of their response. */
+  modulationEfficiency: z.number(),
+  /** Where the constant part of resonant cells sends a plane guided wave by itself. */
+  unmodulatedLobes: z.array(z.strictObject({ thetaDeg: z.number(), phiDeg: z.number() })),
+});
+
 export const lawFigures = {
+  guidedWave: guidedWaveFigures.optional(),
   focus: z.union([focusFigures, noFigure]).optional(),
   vortex: z.union([vortexFigures, noFigure]).optional(),
 };
 
 export type FocusFigures = z.infer<typeof focusFigures>;
+export type GuidedWaveFigures = z.infer<typeof guidedWaveFigures>;
 export type VortexFigures = z.infer<typeof vortexFigures>;

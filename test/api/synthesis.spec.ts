@@ -28,6 +28,15 @@ describe('predicting target phases of every kind', () => {
     expect((await figuresOf({})).focus).toBeUndefined();
   });
 
+  it('answers leaked share and modulation of a guided wave, and refuses cells that it cannot light', async () => {
+    const illumination = { kind: 'guided-wave', launch: { kind: 'plane', directionDeg: 0 }, effectiveIndex: 1.6, leakageNpPerM: 6.28, polarisation: 'x' } as const;
+    const { guidedWave } = await figuresOf({ illumination, cells: { kind: 'resonant', rule: 'projection', states: 8 } });
+    expect(guidedWave).toMatchObject({ lengthMm: expect.closeTo(200, 6) as number, leakedShare: expect.closeTo(1 - Math.exp(-2 * 1.256), 6) as number });
+    const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, cells: { kind: 'resonant', rule: 'projection', states: 8 } } });
+    const { errors } = answer.json as { errors: { pointer: string }[] };
+    expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/cells/kind']]);
+  });
+
   it('refuses a vortex of half an order by its pointer', async () => {
     const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, synthesis: { kind: 'vortex', order: 0.5 } } });
     const { errors } = answer.json as { errors: { pointer: string }[] };

@@ -4,12 +4,13 @@ import { apertureChecks } from './tables/aperture-checks';
 import { cellChecks } from './tables/cell-checks';
 import { conventionsChecks } from './tables/conventions-checks';
 import { maskChecks } from './tables/mask-checks';
+import { guidedWaveChecks } from './tables/guided-wave-checks';
 import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
 import { synthesisChecks } from './tables/synthesis-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...synthesisChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...guidedWaveChecks, ...synthesisChecks };
 const checks = loadChecks();
 const pending = loadPending();
 

@@ -1,7 +1,7 @@
 import type { HowComputed } from './how-computed';
 
 /** Figures of one target phase or one way of lighting, each with how it is computed. */
-export type LawFigureId = 'focus' | 'vortex';
+export type LawFigureId = 'focus' | 'vortex' | 'guidedWave';
 
 const EDGES = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction';
 
@@ -13,6 +13,19 @@ export const HOW_LAWS_COMPUTED: Readonly<Record<LawFigureId, HowComputed>> = {
     conventions: 'rₙ from cell n to the point at distance s; aₙ the field of the cells in use, losses and phase errors included; b the radiate exponent, in field',
     validity: `${EDGES}. Spherical waves from every cell: not within about a wavelength of the panel.`,
     source: 'J. W. Sherman, IRE Trans. AP 10(4), 399–408, 1962 (from memory); checks foc-01 and foc-02',
+  },
+  guidedWave: {
+    title: 'A guided wave under the panel',
+    formula: [
+      'plane: exp(−(α + jkn)s);  radial: exp(−(α + jkn)ρ) / √ρ',
+      'leaked share = 1 − exp(−2αL),  G = D + leaked share',
+      'resonant cell: (j + exp(jψ)) / 2 = sin ζ exp(jζ)',
+      'modulation efficiency = |Σ Aα exp(−jφ)|² / (Σ A)² over Σ A²|α|² / Σ A²',
+    ],
+    meaning: 'L is the way of the wave across the outline, or from the launch to its farthest point. Taper is that of the amplitudes on the cells, |ΣA|² / (N ΣA²), and stands in the directivity, as the modulation does. Spillover and edge taper belong to horns. The constant j/2 of resonant cells sends the guided wave out at u = n − mλ/d.',
+    conventions: 'Target phase φ = kns − k r·b. Rules: projection ψ = φ gives the most field in the beam; nearest ψ = arg(exp(jφ) − j/2) the least distance; phase only takes ζ = φ below 180° and is off elsewhere',
+    validity: 'Even leakage, whatever the cells are tuned to; one index at every frequency; no wave back from the far end; power left in the guide is lost',
+    source: 'Leaky-wave theory and the circle of a resonance, derived; checks gw-01 to gw-05',
   },
   vortex: {
     title: 'Ring and purity of a vortex',

@@ -21,12 +21,14 @@ import { EditionCells } from './edition-cells';
 import { EditionChooser } from './edition-chooser';
 import { editionCurve } from './edition-curve';
 import { cellUse, phaseCoverage } from './phase-coverage';
+import { ResonantFields } from './resonant-fields';
 import { TargetPhaseChoice } from './target-phase-choice';
 
 const KIND_OPTIONS = [
   { value: 'ideal', label: 'Ideal' },
   { value: 'edition', label: 'Library edition' },
   { value: 'inline', label: 'What-if table' },
+  { value: 'resonant', label: 'Resonant' },
 ] as const;
 const RULE_OPTIONS = [
   { value: 'nearest-phase', label: 'Nearest phase' },
@@ -41,10 +43,18 @@ const FIRST_TABLE: Cells = {
   cells: [0, 90, 180, 270].map((phaseDeg) => ({ phaseDeg, magnitude: 1 })),
 };
 
+/** What each kind starts from; an edition is chosen from the table. */
+const FIRST_CELLS: Readonly<Record<Cells['kind'], Cells | null>> = {
+  ideal: { kind: 'ideal', levels: null },
+  inline: FIRST_TABLE,
+  resonant: { kind: 'resonant', rule: 'projection', states: null },
+  edition: null,
+};
+
 /** Which cells stand on the panel: ideal ones, an edition of the library, or a what-if table; and what the choice costs. */
 @Component({
   selector: 'slant-cells-sheet',
-  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, SheetNotes, TargetPhaseChoice, ViewTitle],
+  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, ResonantFields, SheetNotes, TargetPhaseChoice, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './cells-sheet.html',
   styleUrl: '../fields/sheet.scss',
@@ -55,7 +65,11 @@ export class CellsSheet {
   /** What each kind held when it was left, so that looking at another kind loses nothing. */
   private readonly left = new Map<Cells['kind'], Cells>();
 
-  protected readonly kindOptions = KIND_OPTIONS;
+  /** Resonant cells stand on a guided wave, those of an edition are measured under waves from outside. */
+  protected readonly kindOptions = computed(() => {
+    const barred = this.state.design().illumination.kind === 'guided-wave' ? 'edition' : 'resonant';
+    return KIND_OPTIONS.filter(({ value }) => value !== barred || value === this.cells().kind);
+  });
   protected readonly ruleOptions = RULE_OPTIONS;
   protected readonly inlineColumns = INLINE_COLUMNS;
   protected readonly levelOptions = [
@@ -125,6 +139,7 @@ export class CellsSheet {
     const cells = this.cells();
     if (cells.kind === 'ideal') return cells.levels === null ? 'ideal, continuous phase' : `ideal, ${cells.levels} levels ${figureText(360 / cells.levels, 2)}° apart`;
     if (cells.kind === 'inline') return `what-if table of ${cells.cells.length} cells`;
+    if (cells.kind === 'resonant') return `resonant, ${cells.states === null ? 'continuous tuning' : `${cells.states} states`}`;
     const edition = this.edition();
     const name = edition ? `edition ${edition.number ?? 'unpublished'} of ${edition.familyName}` : 'an edition of the library';
     return `${name}, ${cells.rule === 'nearest-phase' ? 'nearest phase' : 'least complex error'}`;
@@ -135,7 +150,7 @@ export class CellsSheet {
     this.wantsEdition.set(false);
     if (!option || option.value === this.cells().kind) return;
     this.left.set(this.cells().kind, this.cells());
-    const next = this.left.get(option.value) ?? (option.value === 'ideal' ? { kind: 'ideal' as const, levels: null } : option.value === 'inline' ? FIRST_TABLE : null);
+    const next = this.left.get(option.value) ?? FIRST_CELLS[option.value];
     if (next) this.put('/cells', next, `Cells: ${option.label}`);
     else this.wantsEdition.set(true);
   }

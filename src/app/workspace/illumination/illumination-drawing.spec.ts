@@ -44,6 +44,16 @@ describe('illuminationDrawing', () => {
     expect(horn?.at.y).toBeGreaterThan(origin.y);
   });
 
+  it('draws a guided wave as an arrow under the panel, from a launch to both sides', () => {
+    const wave = { kind: 'guided-wave', launch: { kind: 'plane', directionDeg: 180 }, effectiveIndex: 1.6, leakageNpPerM: 6, polarisation: 'x' } as const;
+    const plane = illuminationDrawing({ ...STARTING_DESIGN, illumination: wave }, space);
+    expect([plane.horn, plane.wavefronts, plane.planePhiDeg]).toEqual([null, null, 0]);
+    // Towards -x: from the right edge to the left.
+    expect(plane.axis.startsWith(`M${Math.round(plane.panelTo.x * 100) / 100} `)).toBe(true);
+    const radial = illuminationDrawing({ ...STARTING_DESIGN, illumination: { ...wave, launch: { kind: 'radial', centreMm: [10, 0], radiusMm: 5 } } }, space);
+    expect(radial.axis.match(/M/g)).toHaveLength(4);
+  });
+
   it('needs no offset figure for a centred horn', () => {
     const { dimensions, offsetArc } = illuminationDrawing(withHorn([0, 0, 180]), space);
     expect(dimensions.map(({ text }) => text)).toEqual(['200', '180']);

@@ -65,19 +65,25 @@ export function illuminationDrawing(design: DesignDocument, space: { readonly wi
     panelTo: { x: place.x(section.panelTo), y: place.y(0) },
     origin: { x: place.x(0), y: place.y(0) },
     beams: beamsOf(design, section, place, reachMm),
-    ...(design.illumination.kind === 'horn' ? hornParts(design, section, place) : waveParts(design, section, place)),
+    ...LIT_PARTS[design.illumination.kind](design, section, place),
   };
 }
 
 /** The plane of the horn's offset; of a centred one the x-z plane. Its axis points to the half with positive x. */
 function sectionOf({ illumination, panel }: DesignDocument): Section {
-  const [x, y] = illumination.kind === 'horn' ? illumination.positionMm : [Math.cos(illumination.phiDeg * DEG), Math.sin(illumination.phiDeg * DEG)];
+  const [x, y] = illumination.kind === 'horn' ? illumination.positionMm : alongAzimuth(illumination);
   const centred = Math.hypot(x, y) < 1e-9;
   const raw = centred ? 0 : Math.atan2(y, x) / DEG;
   const planePhiDeg = raw > 90 + 1e-9 ? raw - 180 : raw <= -90 + 1e-9 ? raw + 180 : raw;
   const along = { x: Math.cos(planePhiDeg * DEG), y: Math.sin(planePhiDeg * DEG) };
   const reaches = outlineTrace(siPanel(panel).outline, 360).map((point) => (point.xM * along.x + point.yM * along.y) * 1000);
   return { planePhiDeg, panelFrom: Math.min(...reaches), panelTo: Math.max(...reaches) };
+}
+
+function alongAzimuth(illumination: Exclude<DesignDocument['illumination'], { kind: 'horn' }>): readonly [number, number] {
+  if (illumination.kind === 'plane-wave') return [Math.cos(illumination.phiDeg * DEG), Math.sin(illumination.phiDeg * DEG)];
+  const directionDeg = illumination.launch.kind === 'plane' ? illumination.launch.directionDeg : 0;
+  return [Math.cos(directionDeg * DEG), Math.sin(directionDeg * DEG)];
 }
 
 function across([x, y]: readonly number[], { planePhiDeg }: Section): number {
@@ -91,9 +97,8 @@ function extentOf(design: DesignDocument, section: Section, reachMm: number) {
     [section.panelTo, 0],
     [0, reachMm],
     ...design.requirement.beams.map(({ thetaDeg, phiDeg }) => [Math.sin(thetaDeg * DEG) * Math.cos((phiDeg - section.planePhiDeg) * DEG) * reachMm, 0]),
-    illumination.kind === 'horn'
-      ? [across(illumination.positionMm, section), illumination.positionMm[2]]
-      : [Math.sin(illumination.thetaDeg * DEG) * reachMm, sideOf(design) * reachMm],
+    ...(illumination.kind === 'horn' ? [[across(illumination.positionMm, section), illumination.positionMm[2]]] : []),
+    ...(illumination.kind === 'plane-wave' ? [[Math.sin(illumination.thetaDeg * DEG) * reachMm, sideOf(design) * reachMm]] : []),
   ];
   return {
     left: Math.min(...points.map(([s]) => s)),
@@ -121,6 +126,33 @@ function arrow(from: DrawnPoint, to: DrawnPoint): string {
   const turn = Math.atan2(to.y - from.y, to.x - from.x);
   const barb = (side: number): string => `${n(to.x - 9 * Math.cos(turn + side * 0.35))} ${n(to.y - 9 * Math.sin(turn + side * 0.35))}`;
   return `M${n(from.x)} ${n(from.y)}L${n(to.x)} ${n(to.y)}M${barb(1)}L${n(to.x)} ${n(to.y)}L${barb(-1)}`;
+}
+
+const LIT_PARTS: Readonly<Record<DesignDocument['illumination']['kind'], (design: DesignDocument, section: Section, place: Placing) => LitParts>> = {
+  horn: hornParts,
+  'plane-wave': waveParts,
+  'guided-wave': guidedParts,
+};
+
+/** Arrows under the panel along the way of the wave, from its edge or from its launch to both sides. */
+function guidedParts({ illumination }: DesignDocument, section: Section, place: Placing): LitParts {
+  if (illumination.kind !== 'guided-wave') throw new Error('guidedParts needs a guided wave');
+  const { launch } = illumination;
+  const below = place.y(0) + 12;
+  const [from, to] = [place.x(section.panelFrom), place.x(section.panelTo)];
+  const towards = (start: number, end: number): string => arrow({ x: start, y: below }, { x: end, y: below });
+  // The axis of the drawing points to the half with positive x: a wave towards the other half runs against it.
+  const forward = launch.kind !== 'plane' || Math.cos((launch.directionDeg - section.planePhiDeg) * DEG) >= 0;
+  const start = launch.kind === 'plane' ? (forward ? from : to) : place.x(across(launch.centreMm, section));
+  const ends = launch.kind === 'plane' ? [forward ? to : from] : [from, to];
+  return {
+    axis: ends.map((end) => towards(start, end)).join(''),
+    rays: '',
+    horn: null,
+    wavefronts: null,
+    offsetArc: null,
+    dimensions: [horizontalDimension({ fromX: from, toX: to, edgeY: place.y(0), lineY: place.y(0) + 38, text: millimetreText(section.panelTo - section.panelFrom) })],
+  };
 }
 
 type LitParts = Pick<IlluminationDrawing, 'axis' | 'rays' | 'horn' | 'wavefronts' | 'offsetArc' | 'dimensions'>;

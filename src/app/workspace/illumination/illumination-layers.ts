@@ -1,3 +1,7 @@
+import { illuminateCells } from '../../../../shared/antenna/illumination';
+import { siDesign } from '../../../../shared/antenna/si-design';
+import { degFromRad, wrapDeg } from '../../../../shared/units/angles';
+import { wavenumberRadPerM } from '../../../../shared/waves/conventions';
 import type { MapPlaces } from '../../ui/plots/map-places';
 import type { MapLayer } from '../../ui/plots/paint-panel-map';
 import type { LivePrediction } from '../live-prediction-data';
@@ -28,6 +32,17 @@ export function incidenceLayer({ cells }: LivePrediction): MapLayer {
   const steepest = largest(cells.incidenceDeg);
   const to = Math.max(10, Math.ceil(steepest / 10) * 10);
   return { title: 'Angle of incidence', unit: '°', digits: 1, values: cells.incidenceDeg, scale: { map: 'sequential', from: 0, to } };
+}
+
+/** Phase with which the wave arrives at each cell, at the design frequency: -k times the path, a guided wave by its own index. */
+export function incidentPhaseLayer({ cells, of }: LivePrediction): MapLayer {
+  const si = siDesign(of);
+  const wavenumber = wavenumberRadPerM(si.designFrequencyHz);
+  const xM = Float64Array.from(cells.xMm, (x) => x / 1000);
+  const yM = Float64Array.from(cells.yMm, (y) => y / 1000);
+  const { pathM } = illuminateCells(si.illumination, { count: xM.length, xM, yM }, si.receiveExponent);
+  const values = Float32Array.from(pathM, (path) => wrapDeg(degFromRad(-wavenumber * path)));
+  return { title: 'Phase of the incident wave', unit: '°', digits: 1, values, scale: { map: 'cyclic', from: -180, to: 180 } };
 }
 
 /** Of values that are never negative. */

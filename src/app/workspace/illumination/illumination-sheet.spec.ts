@@ -1,13 +1,16 @@
+import { designFaults } from '../../../../shared/antenna/design-faults';
 import { STARTING_DESIGN } from '../../../../shared/model/starting-design';
 import { SAMPLE_HEAD } from '../sample-prediction';
 import type { LivePrediction, PredictedCells } from '../live-prediction-data';
 import { sheetRig } from '../fields/sheet-rig';
-import { illuminationOfKind } from './illumination-choices';
-import { amplitudeLayer, cellPlaces, incidenceLayer } from './illumination-layers';
+import { designOfIllumination, illuminationOfKind } from './illumination-choices';
+import { amplitudeLayer, cellPlaces, incidenceLayer, incidentPhaseLayer } from './illumination-layers';
 import { IlluminationSheet } from './illumination-sheet';
 
 const cells = { xMm: Float64Array.of(-2.5, 2.5), yMm: Float64Array.of(0, 0), amplitude: Float64Array.of(1, 0.5), incidenceDeg: Float64Array.of(10, 42) } as unknown as PredictedCells;
 const prediction: LivePrediction = { head: SAMPLE_HEAD, cells, cuts: [], uv: null, of: STARTING_DESIGN };
+
+const guidedDesign = designOfIllumination(STARTING_DESIGN, 'guided-wave');
 
 describe('IlluminationSheet', () => {
   it('shows what follows from the horn at once', async () => {
@@ -38,6 +41,35 @@ describe('IlluminationSheet', () => {
     expect(workspace.stepNames()).toEqual(['Illumination: Plane wave']);
   });
 
+  it('lights by a guided wave from an edge or a point, with what follows from its index', async () => {
+    const { workspace, choose, enter, text, header } = await sheetRig(IlluminationSheet);
+    await choose('Guided wave');
+    // alpha L = 1.2564 over 200 mm
+    expect(workspace.design().illumination).toEqual({ kind: 'guided-wave', launch: { kind: 'plane', directionDeg: 0 }, effectiveIndex: 1.6, leakageNpPerM: 6.28, polarisation: 'x' });
+    // 10.707 mm / 2.6
+    expect(text()).toContain('below λ/(n + 1)4.118 mm');
+    await enter('Effective index n', '2.5');
+    await choose('Radial, from a point');
+    await enter('Launch radius', '12');
+    expect(workspace.design().illumination).toMatchObject({ launch: { kind: 'radial', radiusMm: 12 }, effectiveIndex: 2.5 });
+    await choose('Plane, from an edge');
+    expect(workspace.design().illumination).toMatchObject({ launch: { kind: 'plane', directionDeg: 0 } });
+    expect(header.head().subtitle).toBe('guided wave, plane, index 2.5, leakage 6.28 per metre');
+    expect(text()).toContain('How computed: a guided wave under the panel');
+  });
+
+  it('shows leaked share and modulation instead of spillover, and no angle of incidence', async () => {
+    const { workspace, fixture, text } = await sheetRig(IlluminationSheet, guidedDesign);
+    const guidedWave = { lengthMm: 200, leakedShare: 0.919, beamRelativeDb: -6.02, modulationEfficiency: 0.5, unmodulatedLobes: [] };
+    workspace.prediction.set({ ...prediction, of: guidedDesign, head: { ...SAMPLE_HEAD, figures: { ...SAMPLE_HEAD.figures, guidedWave } } });
+    await fixture.whenStable();
+    expect(text()).toContain('Leaked share91.9 %, −0.37 dB');
+    expect(text()).toContain('Beam against cells of free phase−6.02 dB');
+    expect(text()).not.toContain('Spillover−');
+    expect(text()).toContain('Incident phase');
+    expect(text()).not.toContain('from the normal');
+  });
+
   it('refuses a horn in the plane of the panel', async () => {
     const { workspace, enter, text } = await sheetRig(IlluminationSheet);
     await enter('Phase centre z', '0');
@@ -53,6 +85,22 @@ describe('illuminationOfKind', () => {
   });
 });
 
+describe('designOfIllumination', () => {
+  it('changes cells that cannot be lit so, and only those', () => {
+    const edition = { kind: 'edition', editionId: '7f7d2f0e-5f0e-4d8e-9b52-000000000000', rule: 'nearest-phase', excludedCells: [] } as const;
+    const resonant = designOfIllumination({ ...STARTING_DESIGN, cells: { ...edition, excludedCells: [] } }, 'guided-wave');
+    expect(resonant.cells).toEqual({ kind: 'resonant', rule: 'projection', states: null });
+    expect(designOfIllumination(resonant, 'horn').cells).toEqual({ kind: 'ideal', levels: null });
+    expect(guidedDesign.cells).toBe(STARTING_DESIGN.cells);
+    expect(designFaults(resonant)).toEqual([]);
+  });
+
+  it('makes a wave from broadside of a guided one', () => {
+    expect(illuminationOfKind(guidedDesign, 'plane-wave')).toMatchObject({ thetaDeg: 0, phiDeg: 0 });
+    expect(illuminationOfKind(guidedDesign, 'horn')).toMatchObject({ kind: 'horn', positionMm: [0, 0, 180] });
+  });
+});
+
 describe('layers of the illumination', () => {
   it('has the brightest cell at 0 dB and half its amplitude at -6.02 dB', () => {
     const layer = amplitudeLayer(prediction);
@@ -64,6 +112,12 @@ describe('layers of the illumination', () => {
   it('keeps a dark panel on the floor instead of failing', () => {
     const dark = { ...prediction, cells: { ...cells, amplitude: new Float64Array(2) } };
     expect([...Array.from(amplitudeLayer(dark).values)]).toEqual([-40, -40]);
+  });
+
+  it('has the incident phase of a guided wave fall by its index along its way', () => {
+    const { values } = incidentPhaseLayer({ ...prediction, of: guidedDesign });
+    // 5 mm at index 1.6 and 10.7069 mm of wavelength: 269 degrees of delay.
+    expect((((values[1] - values[0]) % 360) + 360) % 360).toBeCloseTo(360 - (360 * 1.6 * 5) / 10.7068735, 3);
   });
 
   it('scales incidence to the next ten degrees and places cells by their lattice', () => {

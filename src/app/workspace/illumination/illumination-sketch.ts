@@ -16,6 +16,6 @@ export class IlluminationSketch {
   private readonly measured = hostWidth();
   protected readonly drawing = computed(() => illuminationDrawing(this.design(), { width: Math.max(260, this.measured()), height: this.maxHeight() }));
   protected readonly label = computed(() =>
-    this.design().illumination.kind === 'horn' ? 'Side view of panel, horn and beams' : 'Side view of panel, plane wave and beams',
+    `Side view of panel, ${{ horn: 'horn', 'plane-wave': 'plane wave', 'guided-wave': 'guided wave' }[this.design().illumination.kind]} and beams`,
   );
 }

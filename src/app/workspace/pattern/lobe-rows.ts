@@ -54,8 +54,9 @@ export function markedDirections(figures: Figures, design: DesignDocument, shown
   design.requirement.beams.forEach(({ thetaDeg, phiDeg }, i) => {
     if (i !== shown.beam) marked.push({ kind: 'other-beam', thetaDeg, phiDeg, label: say(`beam ${i + 1}`, thetaDeg, phiDeg) });
   });
-  if (shown.specular) {
-    const { thetaDeg, phiDeg } = specularDirection(design);
+  const specular = shown.specular ? specularDirection(design) : null;
+  if (specular) {
+    const { thetaDeg, phiDeg } = specular;
     marked.push({ kind: 'specular', thetaDeg, phiDeg, label: say('specular direction', thetaDeg, phiDeg) });
   }
   if (typeof peakThetaDeg === 'number' && typeof peakPhiDeg === 'number') {
@@ -64,8 +65,9 @@ export function markedDirections(figures: Figures, design: DesignDocument, shown
   return marked;
 }
 
-/** Where a plain plate sends (or lets through) the light from the middle of the source: the tangential part goes on. */
-export function specularDirection({ illumination }: DesignDocument): { readonly thetaDeg: number; readonly phiDeg: number } {
+/** Where a plain plate sends (or lets through) the light from the middle of the source: the tangential part goes on. A guided wave has none. */
+export function specularDirection({ illumination }: DesignDocument): { readonly thetaDeg: number; readonly phiDeg: number } | null {
+  if (illumination.kind === 'guided-wave') return null;
   const degrees = 180 / Math.PI;
   if (illumination.kind === 'plane-wave') return { thetaDeg: illumination.thetaDeg, phiDeg: wrapped(illumination.phiDeg + 180) };
   const [x, y, z] = illumination.positionMm;

@@ -1,6 +1,7 @@
+import { coupledField } from '../../../../shared/antenna/guided-wave/resonant-cell';
 import { curveOverCells } from '../../../../shared/antenna/response-curve';
 import type { PreparedEdition } from '../../../../shared/antenna/prepare-edition';
-import { wrapDeg } from '../../../../shared/units/angles';
+import { degFromRad, wrapDeg } from '../../../../shared/units/angles';
 import type { LineFigure } from '../../ui/plots/line-figure';
 import { numberText } from '../../ui/plots/plot-text';
 import type { LivePrediction } from '../live-prediction-data';
@@ -29,6 +30,10 @@ export function libraryCurve(source: CurveSource): LibraryCurve | null {
   const { cells } = source.prediction.of;
   if (cells.kind === 'edition') return editionCurve(source);
   if (cells.kind === 'inline') return tableCurve(source, cells.cells.map(({ phaseDeg }) => phaseDeg), 'Table of cells');
+  if (cells.kind === 'resonant') {
+    const { states } = cells;
+    return states === null ? null : tableCurve(source, Array.from({ length: states }, (_, k) => degFromRad(coupledField((2 * Math.PI * k) / states, { magnitude: 0, phaseRad: 0 }).phaseRad)), 'States of a resonant cell');
+  }
   const { levels } = cells;
   return levels === null ? null : tableCurve(source, Array.from({ length: levels }, (_, i) => (360 * i) / levels), 'Phase levels');
 }

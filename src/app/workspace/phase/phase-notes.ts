@@ -3,6 +3,8 @@ import { numberText } from '../../ui/plots/plot-text';
 import type { LivePrediction } from '../live-prediction-data';
 import type { EditionInUse } from '../workspace-state';
 
+export const RESONANT_RULES = { projection: 'projection', nearest: 'nearest field', 'phase-only': 'phase only' } as const;
+
 /** The line beside the title: how many cells, of what, by which rule. */
 export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInUse | null): string {
   const count = `${numberText(cells.xMm.length, 0)} cells`;
@@ -11,6 +13,8 @@ export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInU
       return `${count}, ideal phase, ${of.cells.levels === null ? 'continuous' : `${of.cells.levels} levels`}`;
     case 'inline':
       return `${count}, what-if table of ${of.cells.cells.length}, nearest phase`;
+    case 'resonant':
+      return `${count}, resonant, ${RESONANT_RULES[of.cells.rule]}, ${of.cells.states === null ? 'continuous' : `${of.cells.states} states`}`;
     case 'edition': {
       const rule = of.cells.rule === 'nearest-phase' ? 'nearest phase' : 'least complex error';
       return edition ? `${count}, edition ${edition.number ?? 'not published'} of ${edition.familyName}, ${rule}` : `${count}, ${rule}`;

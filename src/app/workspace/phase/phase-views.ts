@@ -65,6 +65,7 @@ function roundLimit(largest: number, most: number): number {
 
 function cellLayer({ prediction, edition }: PhaseViewSource): PhaseLayer {
   const { cells, of } = prediction;
+  if (of.cells.kind === 'resonant' && of.cells.states === null) return { kind: 'none', reason: 'A continuous tuning has no states to tell apart.' };
   if (of.cells.kind === 'ideal' && of.cells.levels === null) return { kind: 'none', reason: 'A continuous ideal phase has no cells to tell apart. Choose cells on the Cells sheet.' };
   const own = editionOf(of, edition);
   const parameter = own?.description.parameters[0];
@@ -74,7 +75,7 @@ function cellLayer({ prediction, edition }: PhaseViewSource): PhaseLayer {
   // The paper is kept for places without a cell, so the smallest cell is a little above the floor of the map.
   const room = high > low ? (high - low) * 0.08 : 1;
   const scale = { map: 'sequential', from: low - room, to: high } as const;
-  const title = parameter ? parameter.label : of.cells.kind === 'ideal' ? 'Level' : 'Entry of the table';
+  const title = parameter ? parameter.label : of.cells.kind === 'ideal' ? 'Level' : of.cells.kind === 'resonant' ? 'State' : 'Entry of the table';
   return drawn({ title, unit: parameter ? 'mm' : '', digits: parameter ? 2 : 0, values, scale });
 }
 
