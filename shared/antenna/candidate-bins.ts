@@ -24,6 +24,8 @@ const MARGIN_SHARE = 0.15;
 interface PhaseRanges {
   readonly middle: Float64Array;
   readonly halfWidth: Float64Array;
+  /** Room for one list while it is made. */
+  readonly found: Int32Array;
   readonly lists: (Int32Array | undefined)[];
 }
 
@@ -57,6 +59,7 @@ export function candidateBins(query: CandidateQuery): (targetRad: number, incide
 function rangeSampler({ prepared, at, polarisation, allowed }: CandidateQuery): (theta: readonly [number, number], azimuth: readonly [number, number]) => PhaseRanges {
   const weigh = incidenceWeigher(prepared, polarisation);
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  const found = new Int32Array(allowed.length);
   return ([thetaFrom, thetaTo], [azimuthFrom, azimuthTo]) => {
     const low = new Float64Array(allowed.length).fill(Infinity);
     const high = new Float64Array(allowed.length).fill(-Infinity);
@@ -75,13 +78,18 @@ function rangeSampler({ prepared, at, polarisation, allowed }: CandidateQuery): 
     }
     const middle = low.map((value, i) => (value + high[i]) / 2);
     const halfWidth = low.map((value, i) => ((high[i] - value) / 2) * (1 + 2 * MARGIN_SHARE) + MARGIN_RAD);
-    return { middle, halfWidth, lists: new Array<Int32Array | undefined>(TARGET_BINS) };
+    return { middle, halfWidth, found, lists: new Array<Int32Array | undefined>(TARGET_BINS) };
   };
 }
 
-function candidates({ middle, halfWidth }: PhaseRanges, allowed: Int32Array, target: { middleRad: number; halfRad: number }): Int32Array {
-  const distance = middle.map((phase) => Math.abs(wrapRad(phase - target.middleRad)));
+/** Two passes and no array but the result: a large panel meets hundreds of thousands of bins. */
+function candidates({ middle, halfWidth, found }: PhaseRanges, allowed: Int32Array, target: { middleRad: number; halfRad: number }): Int32Array {
   let surely = Infinity;
-  for (let i = 0; i < allowed.length; i++) surely = Math.min(surely, distance[i] + halfWidth[i] + target.halfRad);
-  return allowed.filter((_, i) => distance[i] - halfWidth[i] - target.halfRad <= surely);
+  for (let i = 0; i < allowed.length; i++) surely = Math.min(surely, Math.abs(wrapRad(middle[i] - target.middleRad)) + halfWidth[i]);
+  const limit = surely + 2 * target.halfRad;
+  let count = 0;
+  for (let i = 0; i < allowed.length; i++) {
+    if (Math.abs(wrapRad(middle[i] - target.middleRad)) - halfWidth[i] <= limit) found[count++] = allowed[i];
+  }
+  return found.slice(0, count);
 }

@@ -1,5 +1,6 @@
 import type { Polarisation } from '../model/design-document';
-import { lagrangeWeights } from '../math/interpolate';
+import { lagrangeWeigher } from '../math/interpolate';
+import { wrapRad } from '../units/angles';
 import type { EditionAtFrequency } from './edition-at-frequency';
 import type { PreparedEdition } from './prepare-edition';
 
@@ -25,6 +26,8 @@ export const MOST_AZIMUTH_NODES = 3;
  */
 export function incidenceWeigher(prepared: PreparedEdition, polarisation: Polarisation): (incidenceRad: number, azimuthRad: number) => IncidenceWeights {
   const { sineSquaredNodes, smallestThetaRad, largestThetaRad, azimuths } = prepared;
+  const weighTheta = windowedWeigher(sineSquaredNodes, MOST_THETA_NODES);
+  const weighAzimuth = windowedWeigher(azimuths.cosines, MOST_AZIMUTH_NODES);
   const thetaWeights = new Float64Array(sineSquaredNodes.length);
   const azimuthWeights = new Float64Array(azimuths.cosines.length);
   const nodes = new Float64Array(thetaWeights.length * azimuthWeights.length);
@@ -34,9 +37,9 @@ export function incidenceWeigher(prepared: PreparedEdition, polarisation: Polari
   const highest = azimuths.cosines[azimuths.cosines.length - 1];
   return (incidenceRad, azimuthRad) => {
     const sine = Math.sin(Math.min(largestThetaRad, Math.max(smallestThetaRad, incidenceRad)));
-    windowedWeights(sineSquaredNodes, sine * sine, MOST_THETA_NODES, thetaWeights);
+    weighTheta(sine * sine, thetaWeights);
     const cosine = Math.min(highest, Math.max(lowest, Math.cos(azimuths.fold * azimuthRad)));
-    windowedWeights(azimuths.cosines, cosine, MOST_AZIMUTH_NODES, azimuthWeights);
+    weighAzimuth(cosine, azimuthWeights);
     for (let t = 0; t < thetaWeights.length; t++) {
       for (let a = 0; a < azimuthWeights.length; a++) nodes[t * azimuthWeights.length + a] = thetaWeights[t] * azimuthWeights[a];
     }
@@ -68,15 +71,15 @@ function fillShares(shares: Float64Array, kind: PreparedEdition['ports']['kind']
 }
 
 /** Lagrange weights through the `most` nodes about `x`, zero for the others. */
-export function windowedWeights(nodes: Float64Array, x: number, most: number, weights: Float64Array): void {
-  if (nodes.length <= most) {
-    lagrangeWeights(nodes, x, weights);
-    return;
-  }
-  let first = 0;
-  while (first + most < nodes.length && Math.abs(nodes[first + most] - x) < Math.abs(nodes[first] - x)) first += 1;
-  weights.fill(0);
-  lagrangeWeights(nodes.subarray(first, first + most), x, weights.subarray(first, first + most));
+function windowedWeigher(nodes: Float64Array, most: number): (x: number, weights: Float64Array) => void {
+  if (nodes.length <= most) return lagrangeWeigher(nodes);
+  const weighers = Array.from({ length: nodes.length - most + 1 }, (_, first) => lagrangeWeigher(nodes.subarray(first, first + most)));
+  return (x, weights) => {
+    let first = 0;
+    while (first + most < nodes.length && Math.abs(nodes[first + most] - x) < Math.abs(nodes[first] - x)) first += 1;
+    weights.fill(0);
+    weighers[first](x, weights.subarray(first, first + most));
+  };
 }
 
 /** Interpolated phase of one entry of one cell, rad, on the edition's own branch. */
@@ -112,23 +115,23 @@ export interface PolarResponse {
 }
 
 /** Co-polar response of a cell at weighed angles: the shares of its entries, added as complex numbers. Written into `out`. */
-export function coPolarResponse(at: EditionAtFrequency, cell: number, weights: IncidenceWeights, out: PolarResponse): PolarResponse {
-  const { nodes, shares } = weights;
-  if (shares.length === 1) {
-    out.magnitude = Math.exp(entryLogMagnitude(at, cell, 0, nodes));
-    out.phaseRad = entryPhaseRad(at, cell, 0, nodes);
+export function coPolarResponse(at: EditionAtFrequency, cell: number, { nodes, shares }: IncidenceWeights, out: PolarResponse): PolarResponse {
+  const alone = shares.length === 1 || shares[1] === 0;
+  const first = alone || shares[0] !== 0 ? 0 : 1;
+  const phase = entryPhaseRad(at, cell, first, nodes);
+  const logMagnitude = entryLogMagnitude(at, cell, first, nodes);
+  const size = shares[first] * Math.exp(logMagnitude);
+  if (alone || first === 1) {
+    out.magnitude = size;
+    out.phaseRad = shares.length === 1 ? phase : wrapRad(phase);
     return out;
   }
-  let re = 0;
-  let im = 0;
-  for (let e = 0; e < shares.length; e++) {
-    if (shares[e] === 0) continue;
-    const size = shares[e] * Math.exp(entryLogMagnitude(at, cell, e, nodes));
-    const phase = entryPhaseRad(at, cell, e, nodes);
-    re += size * Math.cos(phase);
-    im += size * Math.sin(phase);
-  }
-  out.magnitude = Math.hypot(re, im);
-  out.phaseRad = Math.atan2(im, re);
+  // The second entry relative to the first: one turn of the plane instead of two.
+  const ratio = (shares[1] / shares[0]) * Math.exp(entryLogMagnitude(at, cell, 1, nodes) - logMagnitude);
+  const turn = entryPhaseRad(at, cell, 1, nodes) - phase;
+  const re = 1 + ratio * Math.cos(turn);
+  const im = ratio * Math.sin(turn);
+  out.magnitude = size * Math.sqrt(re * re + im * im);
+  out.phaseRad = wrapRad(phase + Math.atan2(im, re));
   return out;
 }

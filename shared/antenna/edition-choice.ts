@@ -6,8 +6,11 @@ import type { CellRule } from './reference-search';
 /** Errors nearer than this are equal, so that rounding does not decide a tie; the smallest index then stands. */
 const SAME_ERROR = 1e-9;
 
-/** Chooses a cell for one target at weighed angles; `allowed` lists the candidates. -1 where there is none. */
-export type CellChooser = (targetRad: number, weights: IncidenceWeights, allowed: Int32Array) => number;
+/**
+ * Chooses a cell for one target at weighed angles; `allowed` lists the candidates. -1 where there is none. The response of
+ * the one chosen is written into `chosen` where that is given.
+ */
+export type CellChooser = (targetRad: number, weights: IncidenceWeights, allowed: Int32Array, chosen?: PolarResponse) => number;
 
 /**
  * Best cell of an edition at a frequency. The phase of a mixture of TE and TM lies between the phases of the two, so a
@@ -19,7 +22,8 @@ export function editionChooser(at: EditionAtFrequency, rule: CellRule): CellChoo
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
   const errorOf = rule === 'nearest-phase' ? phaseError : complexError;
   const boundOf = rule === 'nearest-phase' ? (phaseBound: number): number => phaseBound : leastComplexError;
-  return (targetRad, weights, allowed) => {
+  const unasked: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  return (targetRad, weights, allowed, chosen = unasked) => {
     let promising = -1;
     for (let i = 0; i < allowed.length; i++) {
       const k = allowed[i];
@@ -28,12 +32,16 @@ export function editionChooser(at: EditionAtFrequency, rule: CellRule): CellChoo
     }
     if (promising < 0) return -1;
     let best = allowed[promising];
-    let least = errorOf(coPolarResponse(at, best, weights, response), targetRad);
+    let least = errorOf(coPolarResponse(at, best, weights, chosen), targetRad);
     for (let i = 0; i < allowed.length; i++) {
       if (i === promising || bounds[i] > least + SAME_ERROR) continue;
       const k = allowed[i];
       const error = errorOf(coPolarResponse(at, k, weights, response), targetRad);
-      if (error < least - SAME_ERROR || (error <= least + SAME_ERROR && k < best)) [best, least] = [k, Math.min(error, least)];
+      if (error >= least - SAME_ERROR && (error > least + SAME_ERROR || k > best)) continue;
+      best = k;
+      least = Math.min(error, least);
+      chosen.magnitude = response.magnitude;
+      chosen.phaseRad = response.phaseRad;
     }
     return best;
   };

@@ -2,7 +2,7 @@ import type { Cells } from '../model/design-document';
 import { candidateBins } from './candidate-bins';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
-import { editionChooser } from './edition-choice';
+import { editionChooser, type CellChooser } from './edition-choice';
 import { editionWarnings } from './edition-warnings';
 import { permittedNodes, type PermittedNodes } from './excluded-nodes';
 import { regionFilter, type RegionFilter } from './excluded-regions';
@@ -87,10 +87,9 @@ function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
   for (let n = 0; n < targetRad.length; n++) {
     const weights = weigh(light.incidenceRad[n], light.azimuthRad[n]);
-    const chosen = choose(targetRad[n], weights, candidatesAt(targetRad[n], light.incidenceRad[n], light.azimuthRad[n]));
+    const chosen = choose(targetRad[n], weights, candidatesAt(targetRad[n], light.incidenceRad[n], light.azimuthRad[n]), response);
     assignment.cellIndex[n] = chosen;
     if (chosen < 0) continue;
-    coPolarResponse(at, chosen, weights, response);
     assignment.magnitude[n] = response.magnitude;
     assignment.phaseRad[n] = response.phaseRad;
   }
@@ -117,17 +116,19 @@ function emptyAssignment(count: number): CellAssignment {
 }
 
 /** With one response per cell, whatever the angle, the phases are sorted once. Valid while no region takes cells away. */
-function tableChooser(site: EditionSite): (targetRad: number, weights: unknown, allowed: Int32Array) => number {
-  const { phaseRad } = site.edition.atFrequency(site.designFrequencyHz);
+function tableChooser(site: EditionSite): CellChooser {
+  const at = site.edition.atFrequency(site.designFrequencyHz);
   const tables = new Map<Int32Array, (targetRad: number) => number>();
-  return (targetRad, _weights, allowed) => {
+  return (targetRad, weights, allowed, chosen) => {
     if (allowed.length === 0) return -1;
     let table = tables.get(allowed);
     if (!table) {
-      table = nearestPhaseTable(Float64Array.from(allowed, (k) => phaseRad[k]));
+      table = nearestPhaseTable(Float64Array.from(allowed, (k) => at.phaseRad[k]));
       if (tables.size < 2) tables.set(allowed, table);
     }
-    return allowed[table(targetRad)];
+    const best = allowed[table(targetRad)];
+    if (chosen) coPolarResponse(at, best, weights, chosen);
+    return best;
   };
 }
 

@@ -1,5 +1,5 @@
 import * as fc from 'fast-check';
-import { radFromDeg, wrapDeg } from '../units/angles';
+import { radFromDeg, wrapDeg, wrapRad } from '../units/angles';
 import { nearestPhaseTable } from './nearest-phase-table';
 
 const table = (degrees: number[]): ((deg: number) => number) => {
@@ -41,5 +41,16 @@ describe('the nearest state in phase', () => {
         expect(table(states)(target)).toBe(errors.indexOf(Math.min(...errors)));
       }),
     );
+  });
+
+  it('equals trying every one of very many states, at targets anywhere', () => {
+    const scattered = (n: number): number => (n * 0.6180339887498949) % 1;
+    const states = Float64Array.from({ length: 300 }, (_, n) => 2 * Math.PI * scattered(n * n));
+    const nearest = nearestPhaseTable(states);
+    for (let n = 0; n < 3000; n++) {
+      const target = 40 * (scattered(n) - 0.5);
+      const errors = Array.from(states, (rad) => Math.abs(wrapRad(rad - target)));
+      expect(errors[nearest(target)]).toBeLessThan(Math.min(...errors) + 1e-9);
+    }
   });
 });

@@ -18,27 +18,45 @@ export function nearestPhaseTable(statePhaseRad: Float64Array): (targetRad: numb
     if (last && state.rad - last.rad <= SAME_RAD) last.index = Math.min(last.index, state.index);
     else distinct.push({ ...state });
   }
-  const phases = Float64Array.from(distinct, (state) => state.rad);
-  const indices = Int32Array.from(distinct, (state) => state.index);
+  return boundaryLookUp(distinct);
+}
+
+interface State {
+  readonly rad: number;
+  readonly index: number;
+}
+
+/** Bins of the look-up per state: most then hold no boundary or one. */
+const BINS_PER_STATE = 8;
+
+/**
+ * Which state is nearest changes half way between neighbours and nowhere else. The bin of a target says how many
+ * such boundaries lie below its start; the few within it are stepped over.
+ */
+function boundaryLookUp(states: readonly State[]): (targetRad: number) => number {
+  const changes = states.map((state, i) => boundaryAfter(state, states[i + 1] ?? { ...states[0], rad: states[0].rad + TURN_RAD }));
+  changes.sort((a, b) => a.rad - b.rad);
+  // Below the first boundary of the turn stands the state after the last.
+  const owners = Int32Array.from([changes[changes.length - 1], ...changes], (change) => change.next);
+  const boundaries = Float64Array.from([...changes.map(({ rad }) => rad), Infinity]);
+  const binCount = BINS_PER_STATE * states.length;
+  const binsPerRad = binCount / TURN_RAD;
+  const below = new Int32Array(binCount + 1);
+  for (let bin = 0, rank = 0; bin <= binCount; bin++) {
+    while (boundaries[rank] <= bin / binsPerRad - SAME_RAD) rank += 1;
+    below[bin] = rank;
+  }
   return (targetRad) => {
     const target = targetRad - TURN_RAD * Math.floor(targetRad / TURN_RAD);
-    const above = firstAbove(phases, target);
-    const upper = above === phases.length ? 0 : above;
-    const lower = above === 0 ? phases.length - 1 : above - 1;
-    const up = phases[upper] - target + (above === phases.length ? TURN_RAD : 0);
-    const down = target - phases[lower] + (above === 0 ? TURN_RAD : 0);
-    if (Math.abs(up - down) <= SAME_RAD) return Math.min(indices[upper], indices[lower]);
-    return up < down ? indices[upper] : indices[lower];
+    let rank = below[Math.floor(target * binsPerRad)];
+    while (target >= boundaries[rank]) rank += 1;
+    return owners[rank];
   };
 }
 
-function firstAbove(rising: Float64Array, value: number): number {
-  let low = 0;
-  let high = rising.length;
-  while (low < high) {
-    const middle = (low + high) >> 1;
-    if (rising[middle] > value) high = middle;
-    else low = middle + 1;
-  }
-  return low;
+/** Where the next state takes over, in [0, 2 pi): half way, less or more the width of a tie, which goes to the smaller index. */
+function boundaryAfter(state: State, next: State): { rad: number; next: number } {
+  const tie = (state.index < next.index ? SAME_RAD : -SAME_RAD) / 2;
+  const rad = (state.rad + next.rad) / 2 + tie;
+  return { rad: rad - TURN_RAD * Math.floor(rad / TURN_RAD), next: next.index };
 }

@@ -1,5 +1,5 @@
 import * as fc from 'fast-check';
-import { bracket, lagrangeWeights, linearThrough } from './interpolate';
+import { bracket, lagrangeWeigher, lagrangeWeights, linearThrough } from './interpolate';
 
 describe('interpolation', () => {
   it('finds the interval and says when a value lies outside', () => {
@@ -32,5 +32,15 @@ describe('interpolation', () => {
   it('gives weights that sum to one, and a single node all of it', () => {
     expect(lagrangeWeights([0.3], 0.9, new Float64Array(1))[0]).toBe(1);
     expect(lagrangeWeights([0, 1, 2], 0.4, new Float64Array(3)).reduce((a, b) => a + b)).toBeCloseTo(1, 14);
+  });
+
+  it('weighs the same when the nodes are divided by once', () => {
+    const nodes = [0, 0.07, 0.25, 0.5, 0.75];
+    const weigh = lagrangeWeigher(nodes);
+    for (const x of [-0.1, 0, 0.07, 0.3, 0.75, 1]) {
+      const weights = new Float64Array(5);
+      weigh(x, weights);
+      lagrangeWeights(nodes, x, new Float64Array(5)).forEach((weight, i) => expect(weights[i]).toBeCloseTo(weight, 13));
+    }
   });
 });
