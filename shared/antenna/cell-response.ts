@@ -70,8 +70,8 @@ function fillShares(shares: Float64Array, kind: PreparedEdition['ports']['kind']
   shares[1] = inPlane;
 }
 
-/** Lagrange weights through the `most` nodes about `x`, zero for the others. */
-function windowedWeigher(nodes: Float64Array, most: number): (x: number, weights: Float64Array) => void {
+/** Gives the Lagrange weights through the `most` nodes about `x`, zero for the others. */
+export function windowedWeigher(nodes: Float64Array, most: number): (x: number, weights: Float64Array) => void {
   if (nodes.length <= most) return lagrangeWeigher(nodes);
   const weighers = Array.from({ length: nodes.length - most + 1 }, (_, first) => lagrangeWeigher(nodes.subarray(first, first + most)));
   return (x, weights) => {

@@ -1,5 +1,5 @@
 import { bracket } from '../../math/interpolate';
-import { entryLogMagnitude, entryPhaseRad, incidenceWeigher, MOST_AZIMUTH_NODES, MOST_THETA_NODES, weightedSum, windowedWeights } from '../cell-response';
+import { entryLogMagnitude, entryPhaseRad, incidenceWeigher, MOST_AZIMUTH_NODES, MOST_THETA_NODES, weightedSum, windowedWeigher } from '../cell-response';
 import type { PreparedEdition } from '../prepare-edition';
 import { crossTermsAt, type CrossTerms } from './cross-terms';
 
@@ -82,11 +82,12 @@ export function matrixSampler(prepared: PreparedEdition, frequencyHz: number, th
 
 function thetaWeigher({ sineSquaredNodes, smallestThetaRad, largestThetaRad, edition }: PreparedEdition, rule: ThetaRule): (incidenceRad: number) => Float64Array {
   const weights = new Float64Array(sineSquaredNodes.length);
+  const weigh = windowedWeigher(sineSquaredNodes, MOST_THETA_NODES);
   return (incidenceRad) => {
     // Beyond the angles given the nearest one stands in, as for the co-polar response.
     const theta = Math.min(largestThetaRad, Math.max(smallestThetaRad, incidenceRad));
     if (rule === 'poly') {
-      windowedWeights(sineSquaredNodes, Math.sin(theta) ** 2, MOST_THETA_NODES, weights);
+      weigh(Math.sin(theta) ** 2, weights);
       return weights;
     }
     weights.fill(0);
@@ -112,9 +113,10 @@ function azimuthWeigher({ azimuths, ports }: PreparedEdition, cross: CrossTerms)
   const weights = new Float64Array(cosines.length);
   if (cosines.length === 0) return () => weights;
   const [lowest, highest] = [cosines[0], cosines[cosines.length - 1]];
+  const weigh = windowedWeigher(cosines, MOST_AZIMUTH_NODES);
   return (azimuthRad) => {
     const cosine = Math.min(highest, Math.max(lowest, Math.cos(azimuths.fold * azimuthRad)));
-    windowedWeights(cosines, cosine, MOST_AZIMUTH_NODES, weights);
+    weigh(cosine, weights);
     if (ports.kind === 'te-and-tm') {
       const odd = Math.sin(azimuths.fold * azimuthRad);
       for (let a = 0; a < weights.length; a++) weights[a] *= odd;
