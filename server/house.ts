@@ -85,7 +85,7 @@ function createDesignServices({ ground, people, audit, library, engine }: Design
   const drafts = new DraftService(ground, (transaction, ids) => people.names(transaction, ids));
   const revisions = new RevisionService({ ground, drafts, contents, figures, audit });
   const comparisons = new ComparisonService({ ground, drafts, revisions, predictions, library });
-  const exports = new ExportService({ ground, drafts, revisions, predictions, library, productVersion: version });
+  const exports = new ExportService({ ground, drafts, revisions, predictions, library, audit, productVersion: version });
   const panels = new PanelService({ ground, drafts, contents, revisions, audit });
   const projects = new ProjectService({ ground, drafts, revisions, figures, audit });
   return { predictions, figures, revisions, comparisons, exports, panels, projects };

@@ -1,9 +1,7 @@
-import { checksumList, fileNamePart, readArchive, sha256Of, zipArchive } from './export-archive';
+import JSZip from 'jszip';
+import { archivedFile, checksumList, fileNamePart, sha256Of, withChecksums, zipArchive } from './export-archive';
 
-const files = [
-  { name: 'b.txt', function: 'second', content: 'Å' },
-  { name: 'a.txt', function: 'first', content: '' },
-];
+const files = [archivedFile('b.txt', 'second', 'Å'), archivedFile('a.txt', 'first', '')];
 
 describe('an archive', () => {
   it('lists checksums as sha256sum writes them, in the order of the names', () => {
@@ -22,8 +20,12 @@ describe('an archive', () => {
   });
 
   it('gives its files back, checksums among them', async () => {
-    const read = await readArchive(await zipArchive('folder', files));
-    expect(read.map(({ name, content }) => [name, content.toString('utf8')])).toEqual([['SHA256SUMS', checksumList(files)], ['a.txt', ''], ['b.txt', 'Å']]);
+    const { name, bytes, sha256 } = await zipArchive('folder', files);
+    expect([name, sha256]).toEqual(['folder', sha256Of(bytes)]);
+    const entries = Object.values((await JSZip.loadAsync(bytes, { checkCRC32: true })).files);
+    const read = await Promise.all(entries.map(async (entry) => [entry.name, await entry.async('string')]));
+    expect(read).toEqual([['folder/SHA256SUMS', checksumList(files)], ['folder/a.txt', ''], ['folder/b.txt', 'Å']]);
+    expect(withChecksums(files).map((file) => [`folder/${file.name}`, file.bytes.toString('utf8')])).toEqual(read);
   });
 });
 

@@ -1,18 +1,26 @@
 import { createHash } from 'node:crypto';
 import JSZip from 'jszip';
 
+/** A file with its bytes and their hash, made once however often they are asked for. */
 export interface ArchivedFile {
   /** Within the folder of the archive; letters, digits, dots, dashes and underscores only. */
   readonly name: string;
   /** What the file is for, in one line. */
   readonly function: string;
-  readonly content: string;
+  readonly bytes: Buffer;
+  readonly sha256: string;
+}
+
+export function archivedFile(name: string, purpose: string, content: string): ArchivedFile {
+  const bytes = Buffer.from(content, 'utf8');
+  return { name, function: purpose, bytes, sha256: sha256Of(bytes) };
 }
 
 export interface Archive {
   /** Without `.zip`; the archive holds one folder of this name. */
   readonly name: string;
   readonly bytes: Buffer;
+  readonly sha256: string;
 }
 
 export const CHECKSUM_FILE = 'SHA256SUMS';
@@ -26,19 +34,23 @@ export const sha256Of = (bytes: string | Uint8Array): string => createHash('sha2
 /** The list that `sha256sum --strict -c` checks, in the order of the names. */
 export function checksumList(files: readonly ArchivedFile[]): string {
   return inOrder(files)
-    .map(({ name, content }) => `${sha256Of(content)}  ${name}\n`)
+    .map(({ name, sha256 }) => `${sha256}  ${name}\n`)
     .join('');
+}
+
+/** The files of an archive in their order, the list of their checksums among them. */
+export function withChecksums(files: readonly ArchivedFile[]): ArchivedFile[] {
+  return inOrder([...files, archivedFile(CHECKSUM_FILE, 'checksums of the other files', checksumList(files))]);
 }
 
 /** The same files give the same bytes: fixed order, time, attributes and compression. */
 export async function zipArchive(name: string, files: readonly ArchivedFile[]): Promise<Archive> {
   const zip = new JSZip();
-  const sums: ArchivedFile = { name: CHECKSUM_FILE, function: 'checksums', content: checksumList(files) };
-  for (const file of inOrder([...files, sums])) {
-    zip.file(`${name}/${file.name}`, Buffer.from(file.content, 'utf8'), { date: FIXED_TIME, createFolders: false });
+  for (const file of withChecksums(files)) {
+    zip.file(`${name}/${file.name}`, file.bytes, { date: FIXED_TIME, createFolders: false });
   }
   const bytes = await zip.generateAsync({ type: 'nodebuffer', platform: 'DOS', compression: 'DEFLATE', compressionOptions: { level: LEVEL } });
-  return { name, bytes };
+  return { name, bytes, sha256: sha256Of(bytes) };
 }
 
 /** By the code units of their names, whatever the language of the machine. */
@@ -53,10 +65,4 @@ export function fileNamePart(text: string, otherwise: string): string {
     .slice(0, 60)
     .replace(/^[-.]+|[-.]+$/g, '');
   return plain === '' ? otherwise : plain;
-}
-
-/** The files of an archive as whoever unpacks it finds them. */
-export async function readArchive({ name, bytes }: Archive): Promise<{ name: string; content: Buffer }[]> {
-  const zip = await JSZip.loadAsync(bytes, { checkCRC32: true });
-  return Promise.all(Object.values(zip.files).map(async (entry) => ({ name: entry.name.slice(name.length + 1), content: await entry.async('nodebuffer') })));
 }

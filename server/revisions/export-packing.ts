@@ -2,10 +2,11 @@ import type { ExportPreview } from '../../shared/contracts/projects';
 import type { Prediction } from '../../shared/antenna/predict-design';
 import { canonicalJson } from '../../shared/model/canonical-json';
 import type { DesignDocument, Outline } from '../../shared/model/design-document';
-import { CHECKSUM_FILE, fileNamePart, readArchive, sha256Of, zipArchive, type Archive, type ArchivedFile } from './export-archive';
+import { archivedFile, fileNamePart, withChecksums, zipArchive, type Archive, type ArchivedFile } from './export-archive';
+import { cellTable, type ExportedStock } from './cell-table';
 import { exportReadme } from './export-readme';
 import type { ReadmeFacts } from './export-readme';
-import { cellTable, cutTable, figureTable, type ExportedStock } from './export-tables';
+import { cutTable, figureTable } from './export-tables';
 
 /** Everything that goes into the files, as plain data that may travel to a thread. */
 export interface ExportSources {
@@ -33,34 +34,33 @@ const FUNCTIONS: Readonly<Record<string, string>> = {
   'cut_across.csv': 'pattern on the great circle across the wanted beam',
   'design.json': 'the frozen design document with its cell edition',
   'manifest.json': 'identity, versions, hashes',
-  [CHECKSUM_FILE]: 'checksums of the other files',
 };
 
 /** The archive of a revision. Equal sources give equal bytes. */
 export async function packExport(sources: ExportSources): Promise<Archive> {
-  const { header, projectName, panelName } = sources;
-  const name = `${fileNamePart(projectName, 'project')}_${fileNamePart(panelName, 'panel')}_r${header.number}`;
-  return zipArchive(name, await filesOf(sources));
+  return zipArchive(archiveName(sources), await filesOf(sources));
 }
 
-/** What the archive of a revision holds, read back from its bytes. */
+/** The files that the archive of a revision would hold, with sizes and hashes of what they are; nothing is packed for it. */
 export async function previewExport(sources: ExportSources): Promise<ExportPreview> {
-  const archive = await packExport(sources);
-  const files = (await readArchive(archive)).map(({ name, content }) => ({
+  const files = withChecksums(await filesOf(sources)).map(({ name, function: purpose, bytes, sha256 }) => ({
     name,
-    bytes: content.length,
-    sha256: sha256Of(content),
-    function: FUNCTIONS[name] ?? '',
-    head: content.toString('utf8').slice(0, PREVIEW_LENGTH),
+    bytes: bytes.length,
+    sha256,
+    function: purpose,
+    // A letter takes at most four bytes.
+    head: bytes.subarray(0, 4 * PREVIEW_LENGTH).toString('utf8').slice(0, PREVIEW_LENGTH),
   }));
-  return { archiveName: `${archive.name}.zip`, bytes: archive.bytes.length, sha256: sha256Of(archive.bytes), files };
+  return { archiveName: `${archiveName(sources)}.zip`, contentBytes: files.reduce((sum, { bytes }) => sum + bytes, 0), files };
 }
+
+const archiveName = ({ header, projectName, panelName }: ExportSources): string => `${fileNamePart(projectName, 'project')}_${fileNamePart(panelName, 'panel')}_r${header.number}`;
 
 async function filesOf(sources: ExportSources): Promise<ArchivedFile[]> {
   const { design, frozenEdition, edition } = sources;
   const { cells, cuts, figures, verdicts } = sources.prediction;
   if (cells === undefined || cuts === undefined) throw new Error('the prediction came without the arrays it was asked for');
-  const file = (name: string, content: string): ArchivedFile => ({ name, function: FUNCTIONS[name] ?? '', content });
+  const file = (name: string, content: string): ArchivedFile => archivedFile(name, FUNCTIONS[name] ?? '', content);
   const files = [
     file('README.txt', readmeOf(sources)),
     file('cells.csv', await cellTable(cells, { cells: design.cells, edition })),
@@ -88,7 +88,7 @@ function manifestOf(sources: ExportSources, files: readonly ArchivedFile[]): str
     edition: frozenEdition === null ? null : { ...frozenEdition, provenance: edition?.description.provenance ?? null },
     units: { length: 'mm', frequency: 'GHz', angle: 'deg', level: 'dB' },
     predicted: true,
-    files: files.map(({ name, function: purpose, content }) => ({ name, bytes: Buffer.byteLength(content), sha256: sha256Of(content), function: purpose })),
+    files: files.map(({ name, function: purpose, bytes, sha256 }) => ({ name, bytes: bytes.length, sha256, function: purpose })),
   };
   return `${JSON.stringify(manifest, null, 2)}\n`;
 }

@@ -18,8 +18,10 @@ export const exportRoutes = ({ exports }: { exports: ExportService }): readonly 
     params: idParams,
     bytes: ['application/zip'],
     handler: async ({ caller, params }) => {
-      const { name, bytes } = await exports.archive(caller.teamId, params.id);
-      return new BytesReply(bytes, 'application/zip', { fileName: `${name}.zip` });
+      const { name, bytes, sha256 } = await exports.archive(caller, params.id);
+      // RFC 9530: what came whole has this hash.
+      const digest = `sha-256=:${Buffer.from(sha256, 'hex').toString('base64')}:`;
+      return new BytesReply(bytes, 'application/zip', { fileName: `${name}.zip`, headers: { 'Repr-Digest': digest } });
     },
   }),
   defineRoute({

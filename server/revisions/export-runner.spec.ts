@@ -1,8 +1,10 @@
 import { join } from 'node:path';
+import JSZip from 'jszip';
 import { exampleDesign } from '../../shared/antenna/example-design';
 import { exampleEdition } from '../../shared/antenna/example-edition';
 import { predictDesign } from '../../shared/antenna/predict-design';
 import { prepareEdition } from '../../shared/antenna/prepare-edition';
+import { sha256Of } from './export-archive';
 import type { ExportSources } from './export-packing';
 import { createExportRunner, createPooledExportRunner } from './export-runner';
 
@@ -39,11 +41,16 @@ describe('the packing of exports', () => {
     expect(threaded.name).toBe('Project_Panel_r2');
     expect(Buffer.isBuffer(threaded.bytes)).toBe(true);
     expect(threaded.bytes.equals(here.bytes)).toBe(true);
+    expect(threaded.sha256).toBe(sha256Of(here.bytes));
   }, 30_000);
 
-  it('previews the archive it would pack', async () => {
+  it('previews the files of the archive it would pack, without packing it', async () => {
     const [preview, { bytes }] = [await pool.preview(sources), await own.pack(sources)];
     expect(preview).toEqual(await own.preview(sources));
-    expect([preview.archiveName, preview.bytes, preview.files.length]).toEqual(['Project_Panel_r2.zip', bytes.length, 8]);
+    expect([preview.archiveName, preview.files.length]).toEqual(['Project_Panel_r2.zip', 8]);
+    const entries = Object.values((await JSZip.loadAsync(bytes)).files);
+    const held = await Promise.all(entries.map(async (entry) => [entry.name, sha256Of(await entry.async('nodebuffer'))]));
+    expect(preview.files.map(({ name, sha256 }) => [`Project_Panel_r2/${name}`, sha256])).toEqual(held);
+    expect(preview.contentBytes).toBe(preview.files.reduce((sum, file) => sum + file.bytes, 0));
   }, 30_000);
 });

@@ -23,9 +23,9 @@ export function createPooledExportRunner(workerFile: string): ExportRunner {
   const pool = new Piscina({ filename: workerFile, minThreads: 0, maxThreads: 1, idleTimeout: 60_000 });
   return {
     pack: async (sources) => {
-      const { name, bytes } = (await pool.run(sources, { name: 'runPacking' })) as Archive;
+      const { bytes, ...rest } = (await pool.run(sources, { name: 'runPacking' })) as Archive;
       // A Buffer arrives from a thread as the plain bytes it is.
-      return { name, bytes: Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength) };
+      return { ...rest, bytes: Buffer.from(bytes.buffer, bytes.byteOffset, bytes.byteLength) };
     },
     preview: async (sources) => (await pool.run(sources, { name: 'runPreview' })) as ExportPreview,
     close: () => pool.destroy(),

@@ -1,10 +1,11 @@
 import type { ExportPreview } from '../../shared/contracts/projects';
 import type { CutRequest } from '../../shared/contracts/predictions';
+import type { AuditService } from '../audit/audit-service';
 import type { Ground } from '../database/ground';
 import { ENGINE_VERSION } from '../engine/engine-version';
 import type { LibraryService } from '../library/library-service';
 import type { PredictionService } from '../predictions/prediction-service';
-import type { DraftService } from '../projects/draft-service';
+import type { Actor, DraftService } from '../projects/draft-service';
 import type { Archive } from './export-archive';
 import type { ExportSources } from './export-packing';
 import { createExportRunner, type ExportRunner } from './export-runner';
@@ -16,6 +17,7 @@ export interface ExportServiceParts {
   readonly revisions: RevisionService;
   readonly predictions: PredictionService;
   readonly library: LibraryService;
+  readonly audit: AuditService;
   readonly productVersion: string;
 }
 
@@ -28,12 +30,24 @@ export class ExportService {
     private readonly runner: ExportRunner = createExportRunner(),
   ) {}
 
-  /** @throws NotFound */
-  async archive(teamId: string, revisionId: string): Promise<Archive> {
-    return this.runner.pack(await this.sourcesOf(teamId, revisionId));
+  /** Packs a revision, and writes down who took what. @throws NotFound */
+  async archive({ teamId, person }: Actor, revisionId: string): Promise<Archive> {
+    const sources = await this.sourcesOf(teamId, revisionId);
+    const archive = await this.runner.pack(sources);
+    const { header, panelName, projectName } = sources;
+    await this.parts.ground.transactions.run((transaction) =>
+      this.parts.audit.record(transaction, {
+        teamId,
+        personId: person.id,
+        action: 'revision.exported',
+        object: `revision:${revisionId}`,
+        detail: { project: projectName, panel: panelName, number: header.number, hash: header.hash, archive: `${archive.name}.zip`, bytes: archive.bytes.length, sha256: archive.sha256 },
+      }),
+    );
+    return archive;
   }
 
-  /** What the archive holds, read back from its bytes. @throws NotFound */
+  /** What the archive would hold. @throws NotFound */
   async preview(teamId: string, revisionId: string): Promise<ExportPreview> {
     return this.runner.preview(await this.sourcesOf(teamId, revisionId));
   }

@@ -105,7 +105,13 @@ export const revisionDetail = revisionHeader.extend({
 });
 
 export const exportedFile = z.strictObject({ name: text, bytes: z.number().int(), sha256, function: text, head: text });
-export const exportPreview = z.strictObject({ archiveName: text, bytes: z.number().int(), sha256, files: z.array(exportedFile) });
+/** Nothing is packed for a preview: the hash of the archive comes with the archive, in the header Repr-Digest (RFC 9530). */
+export const exportPreview = z.strictObject({
+  archiveName: text,
+  /** Of the files before they are packed. */
+  contentBytes: z.number().int(),
+  files: z.array(exportedFile),
+});
 
 export type RevisionHeader = z.infer<typeof revisionHeader>;
 export type FiguresSummary = z.infer<typeof figuresSummary>;

@@ -6,12 +6,13 @@ import { dirname, join } from 'node:path';
 import { promisify } from 'node:util';
 import JSZip from 'jszip';
 import { readCsv } from '../../shared/files/csv-table';
+import type { AuditRow } from '../../shared/contracts/team';
 import type { ExportPreview, RevisionDetail } from '../../shared/contracts/projects';
 import type { PredictionReply } from '../../shared/contracts/predictions';
 import { STARTING_DESIGN } from '../../shared/model/starting-design';
 import { Api, STRANGER } from '../support/api';
 import type { ApiClient } from '../support/api-client';
-import { draw, freeze, newPanel } from '../support/panels';
+import { bodyOf, draw, freeze, newPanel } from '../support/panels';
 import { expectNotAllowed, expectNotFound } from '../support/problems';
 import { onEdition, publishedEdition } from '../support/published-edition';
 
@@ -135,9 +136,10 @@ describe('export', () => {
     expect(Math.max(...readme.split('\n').map((line) => line.length))).toBeLessThanOrEqual(78);
   });
 
-  it('previews the very bytes it exports', async () => {
+  it('previews the very files it exports, without packing them', async () => {
     const preview = (await designer.get(`/api/revisions/${revision.id}/export/preview`)).json as ExportPreview;
-    expect(preview).toMatchObject({ archiveName: 'Trials_Panel_r1.zip', bytes: bytes.length, sha256: sha256(bytes) });
+    const sizes = NAMES.map((name) => Buffer.byteLength(text(name)));
+    expect(preview).toMatchObject({ archiveName: 'Trials_Panel_r1.zip', contentBytes: sizes.reduce((sum, size) => sum + size, 0) });
     expect(preview.files.map(({ name }) => name)).toEqual(NAMES);
     for (const file of preview.files) {
       const content = Buffer.from(text(file.name));
@@ -145,6 +147,22 @@ describe('export', () => {
       expect(text(file.name).startsWith(file.head)).toBe(true);
       expect(file.function).not.toBe('');
     }
+  });
+
+  it('says its hash beside the bytes, and writes down who took which revision with it', async () => {
+    const answer = await designer.get(`/api/revisions/${revision.id}/export`);
+    expect(answer.headers.get('repr-digest')).toBe(`sha-256=:${createHash('sha256').update(answer.bytes).digest('base64')}:`);
+    const { items } = bodyOf<{ items: AuditRow[] }>(await (await api.signedIn('admin')).get('/api/audit'), 200);
+    const exported = items.filter(({ action }) => action === 'revision.exported');
+    expect(exported[0]).toMatchObject({
+      object: `revision:${revision.id}`,
+      detail: { project: 'Trials', panel: 'Panel', number: 1, hash: revision.hash, archive: 'Trials_Panel_r1.zip', bytes: bytes.length, sha256: sha256(bytes) },
+    });
+    const before = exported.length;
+    await designer.get(`/api/revisions/${revision.id}/export/preview`);
+    await (await api.signedIn(STRANGER)).get(`/api/revisions/${revision.id}/export`);
+    const { items: after } = bodyOf<{ items: AuditRow[] }>(await (await api.signedIn('admin')).get('/api/audit'), 200);
+    expect(after.filter(({ action }) => action === 'revision.exported')).toHaveLength(before);
   });
 
   it('leaves the columns of a geometry out where ideal cells have none', async () => {

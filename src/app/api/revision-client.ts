@@ -7,6 +7,12 @@ import { callOutcome } from './call-outcome';
 import type { CallOutcome } from './call-outcome';
 import { failedCall } from './failed-call';
 
+export interface ExportedArchive {
+  readonly bytes: Blob;
+  /** Null where the answer came without it. */
+  readonly sha256: string | null;
+}
+
 /** Frozen revisions of a panel. They never change; a restoration makes a new one. */
 @Injectable({ providedIn: 'root' })
 export class RevisionClient {
@@ -32,10 +38,11 @@ export class RevisionClient {
     return callOutcome(this.http.get<unknown>(`${this.path(revisionId)}/export/preview`), exportPreview);
   }
 
-  /** The whole archive as it would be handed over. */
-  async archive(revisionId: string): Promise<CallOutcome<Blob>> {
+  /** The whole archive as it would be handed over, with the hash that the server gives it. */
+  async archive(revisionId: string): Promise<CallOutcome<ExportedArchive>> {
     try {
-      return { kind: 'found', value: await firstValueFrom(this.http.get(`${this.path(revisionId)}/export`, { responseType: 'blob' })) };
+      const { body, headers } = await firstValueFrom(this.http.get(`${this.path(revisionId)}/export`, { responseType: 'blob', observe: 'response' }));
+      return { kind: 'found', value: { bytes: body ?? new Blob(), sha256: sha256Of(headers.get('Repr-Digest')) } };
     } catch (error) {
       const failure = failedCall(error);
       return failure.kind === 'unreachable' ? failure : { kind: 'refused', problem: failure.problem };
@@ -45,4 +52,10 @@ export class RevisionClient {
   private path(revisionId: string): string {
     return `/api/revisions/${encodeURIComponent(revisionId)}`;
   }
+}
+
+/** Hexadecimal digits from "sha-256=:<base64>:", RFC 9530. */
+function sha256Of(digest: string | null): string | null {
+  const [, base64] = /sha-256=:([A-Za-z0-9+/]+=*):/.exec(digest ?? '') ?? [];
+  return base64 === undefined ? null : Array.from(atob(base64), (letter) => letter.charCodeAt(0).toString(16).padStart(2, '0')).join('');
 }

@@ -24,13 +24,15 @@ export class ExportPanel {
   protected readonly preview = signal<ExportPreview | null>(null);
   protected readonly trouble = signal('');
   protected readonly busy = signal(false);
+  /** Of the archive that was downloaded. */
+  protected readonly packedHash = signal<string | null>(null);
   protected readonly opened = signal<string | null>(null);
   protected readonly files = computed(() =>
     (this.preview()?.files ?? []).map((file) => ({ ...file, size: sizeText(file.bytes), shortHash: file.sha256.slice(0, 12) })),
   );
   protected readonly archive = computed(() => {
     const preview = this.preview();
-    return preview ? { name: preview.archiveName, size: sizeText(preview.bytes), hash: preview.sha256 } : null;
+    return preview ? { name: preview.archiveName, size: sizeText(preview.contentBytes) } : null;
   });
 
   constructor() {
@@ -39,6 +41,7 @@ export class ExportPanel {
 
   private async read(revisionId: string): Promise<void> {
     this.preview.set(null);
+    this.packedHash.set(null);
     this.trouble.set('');
     const outcome = await this.client.exportPreview(revisionId);
     // Another revision may have been asked for meanwhile.
@@ -57,7 +60,10 @@ export class ExportPanel {
     this.busy.set(true);
     const outcome = await this.client.archive(this.revisionId());
     this.busy.set(false);
-    if (outcome.kind === 'found') saveFile(this.document, archive.name, outcome.value);
+    if (outcome.kind === 'found') {
+      saveFile(this.document, archive.name, outcome.value.bytes);
+      this.packedHash.set(outcome.value.sha256);
+    }
     this.trouble.set(outcomeText(outcome) ?? '');
   }
 }
