@@ -24,8 +24,6 @@ const MARGIN_SHARE = 0.15;
 interface PhaseRanges {
   readonly middle: Float64Array;
   readonly halfWidth: Float64Array;
-  /** Room for one list while it is made. */
-  readonly found: Int32Array;
   readonly lists: (Int32Array | undefined)[];
 }
 
@@ -42,54 +40,83 @@ export function candidateBins(query: CandidateQuery): (targetRad: number, incide
   const azimuthStep = Math.PI / 2 / AZIMUTH_BINS;
   const targetStep = (2 * Math.PI) / TARGET_BINS;
   const bins: (PhaseRanges | undefined)[] = new Array<PhaseRanges | undefined>(THETA_BINS * AZIMUTH_BINS);
-  const measure = rangeSampler(query);
+  const measure = rangeSampler(query, phaseSampler(query, thetaStep / 2, azimuthStep / 2));
+  const list = listMaker(query);
   return (targetRad, incidenceRad, azimuthRad) => {
     const theta = Math.min(THETA_BINS - 1, Math.floor(incidenceRad / thetaStep));
     // Responses and shares are the same at -phi and 180 - phi, whatever the fold of the edition.
     const inHalfTurn = azimuthRad - Math.PI * Math.floor(azimuthRad / Math.PI);
     const azimuth = Math.min(AZIMUTH_BINS - 1, Math.floor(Math.min(inHalfTurn, Math.PI - inHalfTurn) / azimuthStep));
-    const key = theta * AZIMUTH_BINS + azimuth;
-    const ranges = (bins[key] ??= measure([theta * thetaStep, (theta + 1) * thetaStep], [azimuth * azimuthStep, (azimuth + 1) * azimuthStep]));
+    const ranges = (bins[theta * AZIMUTH_BINS + azimuth] ??= measure(theta, azimuth));
     const turned = targetRad - 2 * Math.PI * Math.floor(targetRad / (2 * Math.PI));
     const target = Math.min(TARGET_BINS - 1, Math.floor(turned / targetStep));
-    return (ranges.lists[target] ??= candidates(ranges, query.allowed, { middleRad: (target + 0.5) * targetStep, halfRad: targetStep / 2 }));
+    return (ranges.lists[target] ??= list(ranges, { middleRad: (target + 0.5) * targetStep, halfRad: targetStep / 2 }));
   };
 }
 
-function rangeSampler({ prepared, at, polarisation, allowed }: CandidateQuery): (theta: readonly [number, number], azimuth: readonly [number, number]) => PhaseRanges {
+/** Phases of all allowed cells at one pair of angles, given in half bins: neighbouring bins share those on their edges. */
+type PhaseSampler = (halfTheta: number, halfAzimuth: number) => Float64Array;
+
+function phaseSampler({ prepared, at, polarisation, allowed }: CandidateQuery, thetaStep: number, azimuthStep: number): PhaseSampler {
   const weigh = incidenceWeigher(prepared, polarisation);
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
-  const found = new Int32Array(allowed.length);
-  return ([thetaFrom, thetaTo], [azimuthFrom, azimuthTo]) => {
+  const known = new Map<number, Float64Array>();
+  return (halfTheta, halfAzimuth) => {
+    const key = halfTheta * (2 * AZIMUTH_BINS + 1) + halfAzimuth;
+    const kept = known.get(key);
+    if (kept) return kept;
+    const weights = weigh(halfTheta * thetaStep, halfAzimuth * azimuthStep);
+    const phases = new Float64Array(allowed.length);
+    for (let i = 0; i < phases.length; i++) phases[i] = coPolarResponse(at, allowed[i], weights, response).phaseRad;
+    known.set(key, phases);
+    return phases;
+  };
+}
+
+/** Takes nine samples of a bin: its corners, the middles of its edges and its own middle. */
+function rangeSampler({ allowed }: CandidateQuery, phasesAt: PhaseSampler): (theta: number, azimuth: number) => PhaseRanges {
+  return (theta, azimuth) => {
     const low = new Float64Array(allowed.length).fill(Infinity);
     const high = new Float64Array(allowed.length).fill(-Infinity);
-    const first = new Float64Array(allowed.length);
+    const first = phasesAt(2 * theta, 2 * azimuth);
     for (let sample = 0; sample < 9; sample++) {
-      const theta = thetaFrom + ((sample % 3) / 2) * (thetaTo - thetaFrom);
-      const azimuth = azimuthFrom + (Math.floor(sample / 3) / 2) * (azimuthTo - azimuthFrom);
-      const weights = weigh(theta, azimuth);
-      for (let i = 0; i < allowed.length; i++) {
-        const { phaseRad } = coPolarResponse(at, allowed[i], weights, response);
-        if (sample === 0) first[i] = phaseRad;
-        const near = first[i] + wrapRad(phaseRad - first[i]);
+      const phases = phasesAt(2 * theta + (sample % 3), 2 * azimuth + Math.floor(sample / 3));
+      for (let i = 0; i < phases.length; i++) {
+        const near = first[i] + wrapRad(phases[i] - first[i]);
         low[i] = Math.min(low[i], near);
         high[i] = Math.max(high[i], near);
       }
     }
     const middle = low.map((value, i) => (value + high[i]) / 2);
     const halfWidth = low.map((value, i) => ((high[i] - value) / 2) * (1 + 2 * MARGIN_SHARE) + MARGIN_RAD);
-    return { middle, halfWidth, found, lists: new Array<Int32Array | undefined>(TARGET_BINS) };
+    return { middle, halfWidth, lists: new Array<Int32Array | undefined>(TARGET_BINS) };
   };
 }
 
-/** Two passes and no array but the result: a large panel meets hundreds of thousands of bins. */
-function candidates({ middle, halfWidth, found }: PhaseRanges, allowed: Int32Array, target: { middleRad: number; halfRad: number }): Int32Array {
-  let surely = Infinity;
-  for (let i = 0; i < allowed.length; i++) surely = Math.min(surely, Math.abs(wrapRad(middle[i] - target.middleRad)) + halfWidth[i]);
-  const limit = surely + 2 * target.halfRad;
-  let count = 0;
-  for (let i = 0; i < allowed.length; i++) {
-    if (Math.abs(wrapRad(middle[i] - target.middleRad)) - halfWidth[i] <= limit) found[count++] = allowed[i];
-  }
-  return found.slice(0, count);
+/** Lists longer than this are not worth remembering by their members. */
+const LONGEST_SHARED = 4;
+
+/**
+ * Makes the list of one bin. A large panel meets hundreds of thousands of bins but few different short lists, so equal ones
+ * are one array.
+ */
+function listMaker({ allowed }: CandidateQuery): (ranges: PhaseRanges, target: { middleRad: number; halfRad: number }) => Int32Array {
+  const found = new Int32Array(allowed.length);
+  const shared = new Map<number, Int32Array>();
+  return ({ middle, halfWidth }, target) => {
+    let surely = Infinity;
+    for (let i = 0; i < allowed.length; i++) surely = Math.min(surely, Math.abs(wrapRad(middle[i] - target.middleRad)) + halfWidth[i]);
+    const limit = surely + 2 * target.halfRad;
+    let count = 0;
+    let key = 0;
+    for (let i = 0; i < allowed.length; i++) {
+      if (Math.abs(wrapRad(middle[i] - target.middleRad)) - halfWidth[i] > limit) continue;
+      found[count++] = allowed[i];
+      key = key * (allowed.length + 1) + i + 1;
+    }
+    if (count > LONGEST_SHARED) return found.slice(0, count);
+    const list = shared.get(key) ?? found.slice(0, count);
+    shared.set(key, list);
+    return list;
+  };
 }
