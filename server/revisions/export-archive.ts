@@ -11,8 +11,8 @@ export interface ArchivedFile {
   readonly sha256: string;
 }
 
-export function archivedFile(name: string, purpose: string, content: string): ArchivedFile {
-  const bytes = Buffer.from(content, 'utf8');
+export function archivedFile(name: string, purpose: string, content: string | Buffer): ArchivedFile {
+  const bytes = typeof content === 'string' ? Buffer.from(content, 'utf8') : content;
   return { name, function: purpose, bytes, sha256: sha256Of(bytes) };
 }
 

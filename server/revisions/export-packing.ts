@@ -60,7 +60,7 @@ async function filesOf(sources: ExportSources): Promise<ArchivedFile[]> {
   const { design, frozenEdition, edition } = sources;
   const { cells, cuts, figures, verdicts } = sources.prediction;
   if (cells === undefined || cuts === undefined) throw new Error('the prediction came without the arrays it was asked for');
-  const file = (name: string, content: string): ArchivedFile => archivedFile(name, FUNCTIONS[name] ?? '', content);
+  const file = (name: string, content: string | Buffer): ArchivedFile => archivedFile(name, FUNCTIONS[name] ?? '', content);
   const files = [
     file('README.txt', readmeOf(sources)),
     file('cells.csv', await cellTable(cells, { cells: design.cells, edition })),
