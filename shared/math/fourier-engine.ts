@@ -60,6 +60,29 @@ export interface AlternatingProjections {
   cells(): ComplexSamples;
 }
 
+export interface PatternStepQuery extends SampleCounts {
+  readonly columnCount: number;
+  readonly rowCount: number;
+  readonly precision: SamplePrecision;
+  /** Weight of |F|^2 of every sample in the total, at m rows + n: the transform of the hemisphere's kernel gives the radiated power. */
+  readonly weights: Float64Array;
+}
+
+export interface PatternSummary {
+  /** Largest |F|^2 on the samples and its place m rows + n. */
+  readonly peak: number;
+  readonly peakSample: number;
+  /** Weighted sum of |F|^2. */
+  readonly total: number;
+}
+
+/** From cells to a displayed pattern in one go, again and again for one grid: the spectrum itself is not kept. */
+export interface PatternStep {
+  run(re: Float64Array, im: Float64Array): PatternSummary;
+  /** 10 log10 |F|^2 of the last run, row after row: sample (m, n) at n columns + m. Overwritten by the next. */
+  readonly powerDb: Float32Array;
+}
+
 /** F of a direction and of the opposite one, phase origin in the cell (0, 0); places as in the query. */
 export interface LatticeSums {
   readonly re: Float64Array;
@@ -82,6 +105,8 @@ export interface LatticeSumQuery extends ComplexCells {
 export interface FourierEngine {
   /** F with c and r counted from the origin given. */
   spectrum(query: SpectrumQuery): ComplexSamples;
+  /** At least 16 samples along each side. */
+  patternStep(query: PatternStepQuery): PatternStep;
   powerTrials(query: TrialQuery): PowerTrials;
   alternatingProjections(query: ProjectionQuery): AlternatingProjections;
   /** Exact sums over the cells at any directions. */

@@ -1,9 +1,10 @@
-import type { AlternatingProjections, ComplexSamples, FourierEngine, LatticeSumQuery, LatticeSums, PowerTrials, ProjectionQuery, SpectrumQuery, TrialQuery } from './fourier-engine';
+import type { AlternatingProjections, ComplexSamples, FourierEngine, LatticeSumQuery, LatticeSums, PatternStep, PatternStepQuery, PowerTrials, ProjectionQuery, SpectrumQuery, TrialQuery } from './fourier-engine';
 import { radixFourTransform } from './fourier-transform';
 
 /** Everything in TypeScript, 64-bit whatever is asked for: where there is no kernel, and what kernels are held against. */
 export const plainFourierEngine: FourierEngine = {
   spectrum: plainSpectrum,
+  patternStep: plainPatternStep,
   powerTrials: plainTrials,
   alternatingProjections: plainProjections,
   latticeSums: plainLatticeSums,
@@ -90,6 +91,28 @@ function plainTrials(query: TrialQuery): PowerTrials {
     },
     sum: () => sum.slice(),
     largest: () => largest.slice(),
+  };
+}
+
+/** Power that stands for nothing in decibels. */
+const NO_POWER = 1e-30;
+
+function plainPatternStep(query: PatternStepQuery): PatternStep {
+  const { columns, rows, weights } = query;
+  const powerDb = new Float32Array(columns * rows);
+  return {
+    powerDb,
+    run: (cellsRe, cellsIm) => {
+      const { re, im } = plainSpectrum({ ...query, re: cellsRe, im: cellsIm, originColumn: 0, originRow: 0 });
+      let [peak, peakSample, total] = [0, 0, 0];
+      for (let i = 0; i < re.length; i++) {
+        const power = re[i] * re[i] + im[i] * im[i];
+        if (power > peak) [peak, peakSample] = [power, i];
+        total += power * weights[i];
+        powerDb[(i % rows) * columns + Math.floor(i / rows)] = 10 * Math.log10(power + NO_POWER);
+      }
+      return { peak, peakSample, total };
+    },
   };
 }
 

@@ -148,6 +148,44 @@ describe('the kernel against the same in TypeScript', () => {
   });
 });
 
+describe('the pattern step in the kernel', () => {
+  const count = 40 * 30;
+  const shape = { columnCount: 40, rowCount: 30, columns: 128, rows: 64 };
+  const weights = scattered(128 * 64, 11).map((w) => 1 + w);
+
+  it.each([
+    [64, 1e-6],
+    [32, 1e-5],
+  ] as const)('finds peak, place, total and decibels as in TypeScript, in %i bits', (precision, within) => {
+    const query = { ...shape, precision, weights };
+    const [got, wanted] = [kernel.patternStep(query), plainFourierEngine.patternStep(query)];
+    for (const seed of [1, 2, 3]) {
+      const cells = [scattered(count, seed), scattered(count, seed + 9)] as const;
+      const [own, theirs] = [got.run(...cells), wanted.run(...cells)];
+      expect(own.peakSample).toBe(theirs.peakSample);
+      expect(own.peak / theirs.peak).toBeCloseTo(1, 5);
+      expect(Math.abs(own.total / theirs.total - 1)).toBeLessThan(within);
+      const peakDb = 10 * Math.log10(theirs.peak);
+      const errors = wanted.powerDb.map((db, i) => (db > peakDb - 60 ? Math.abs(db - got.powerDb[i]) : 0));
+      expect(Math.max(...errors)).toBeLessThan(precision === 64 ? 2e-5 : 5e-3);
+    }
+  });
+
+  it('puts nothing at -300 dB and keeps the place of a single beam', () => {
+    const step = kernel.patternStep({ ...shape, precision: 64, weights });
+    expect(step.run(new Float64Array(count), new Float64Array(count))).toEqual({ peak: 0, peakSample: 0, total: 0 });
+    expect(step.powerDb[77]).toBeCloseTo(-300, 3);
+    const phase = (i: number): number => -2 * Math.PI * ((9 * (i % 40)) / 128 + (50 * Math.floor(i / 40)) / 64);
+    const beam = step.run(Float64Array.from({ length: count }, (_, i) => Math.cos(phase(i))), Float64Array.from({ length: count }, (_, i) => Math.sin(phase(i))));
+    expect(beam.peakSample).toBe(9 * 64 + 50);
+    expect(beam.peak).toBeCloseTo(count * count, 0);
+  });
+
+  it('refuses a grid narrower than its blocks', () => {
+    expect(() => kernel.patternStep({ ...shape, columnCount: 8, columns: 8, precision: 64, weights })).toThrow('at least 16 samples along each side; got 8 by 64');
+  });
+});
+
 describe('alternating projections in the kernel', () => {
   const shape: ComplexCells & SampleCounts = { columnCount: 12, rowCount: 10, re: scattered(120), im: scattered(120, 3), columns: 32, rows: 32 };
   const amplitude = Float64Array.from({ length: 120 }, (_, i) => (i % 11 === 0 ? 0 : 1 + 0.3 * Math.sin(i)));

@@ -1,6 +1,7 @@
 import type { FourierEngine } from '../../../shared/math/fourier-engine';
 import { KernelInstance } from './kernel-instance';
 import { createLatticeSums } from './kernel-lattice-sums';
+import { createPatternStep } from './kernel-pattern-step';
 import { createProjections } from './kernel-projections';
 import { createSpectrumMaker } from './kernel-spectrum';
 import { createTrials } from './kernel-trials';
@@ -12,6 +13,7 @@ export function createKernelFourierEngine(): FourierEngine {
     spectrum: createSpectrumMaker(instance),
     latticeSums: createLatticeSums(instance),
     // These live on beside other work, each in a memory of its own that goes with it.
+    patternStep: (query) => createPatternStep(new KernelInstance(), query),
     powerTrials: (query) => createTrials(new KernelInstance(), query),
     alternatingProjections: (query) => createProjections(new KernelInstance(), query),
   };
