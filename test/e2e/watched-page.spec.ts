@@ -5,6 +5,7 @@ import type { Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
 import { eventually } from './support/eventually';
+import { sidewaysOverflow } from './support/screen-soundness';
 import { TestBrowser, screenshotFolder, seriousAccessFaults, takePicture } from '../support/browser';
 
 const pageOf = (body: string): string => `<!doctype html><html lang="en"><head><title>Planted</title></head><body><main><h1>Planted</h1>${body}</main></body></html>`;
@@ -16,6 +17,7 @@ const bodies: Record<string, string> = {
   '/policy': '<script>document.title = "not reached"</script>',
   '/leaving': '<img alt="elsewhere" src="http://127.0.0.1:9/elsewhere.png">',
   '/missing-part': '<img alt="missing" src="/no-such-picture.png">',
+  '/too-wide': '<hr width="3000">',
   '/unlabelled': '<input type="text">',
 };
 
@@ -82,6 +84,14 @@ describe('a watched page', () => {
     expect(await seriousAccessFaults(page)).toEqual([expect.stringMatching(/^label: .*input/s)]);
     await page.goto('/sound');
     expect(await seriousAccessFaults(page)).toEqual([]);
+  });
+
+  it('is told when something makes it wider than its window', async () => {
+    const { page } = await browser.openPage({ size: 'phone' });
+    await page.goto('/too-wide');
+    expect(await page.evaluate(sidewaysOverflow)).toEqual([expect.stringMatching(/^the page is 26\d\d px wider than its window of 390 px: hr\./)]);
+    await page.goto('/sound');
+    expect(await page.evaluate(sidewaysOverflow)).toEqual([]);
   });
 
   it('takes a picture at the size of a phone', async () => {

@@ -106,10 +106,11 @@ export class TestBrowser {
 }
 
 /** Serious and critical findings of axe on the page as it stands, as readable lines; a test expects none. */
-export async function seriousAccessFaults(page: Page): Promise<string[]> {
+export async function seriousAccessFaults(page: Page, of: 'everything' | 'colours' = 'everything'): Promise<string[]> {
   const tags = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
   // Listing what passes, and looking for frames that we do not have, would take six times as long as the checks.
-  const { violations } = await new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).withTags(tags).setLegacyMode().analyze();
+  const checks = new AxeBuilder({ page }).options({ resultTypes: ['violations'] });
+  const { violations } = await (of === 'colours' ? checks.withRules(['color-contrast']) : checks.withTags(tags)).setLegacyMode().analyze();
   return violations
     .filter(({ impact }) => impact === 'serious' || impact === 'critical')
     .flatMap(({ id, help, nodes }) => nodes.map((node) => `${id}: ${help} at ${node.target.join(' ')}: ${node.failureSummary ?? ''}`));
