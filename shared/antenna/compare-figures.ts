@@ -1,4 +1,5 @@
 import type { Figure, Figures, Verdict, VerdictWord } from '../model/figures';
+import { isReason, limitDistance } from './exposure/exposure-readings';
 import { isNumber, noFigure } from './no-figure';
 import { figureOfLine } from './requirement-verdicts';
 
@@ -29,6 +30,15 @@ interface Row {
   readonly of: (figures: Figures) => Figure;
   /** The line of the requirement that this figure is held against. */
   readonly line?: Verdict['line'];
+  /** Listed only where one of the two has it. */
+  readonly where?: 'asked';
+}
+
+const UNASKED = noFigure('not-asked', 'the requirement does not ask for it');
+
+function publicDistance({ exposure }: Figures): Figure {
+  if (exposure === undefined) return UNASKED;
+  return isReason(exposure) ? exposure : limitDistance(exposure.fccPublic);
 }
 
 const judged = (line: Verdict['line'], label: string, unit: string): Row => ({ id: line, label, unit, line, of: (figures) => figureOfLine(line, figures) });
@@ -50,11 +60,17 @@ const ROWS: readonly Row[] = [
   { id: 'spillover', label: 'Spillover', unit: 'dB', of: ({ spilloverDb }) => spilloverDb },
   { id: 'aperture-efficiency', label: 'Aperture efficiency', unit: '%', of: ({ apertureEfficiency }) => percent(apertureEfficiency) },
   judged('cross-polar', 'Cross-polar', 'dB'),
+  { ...judged('cross-polar-mask', 'Cross-polar mask margin', 'dB'), where: 'asked' },
+  { ...judged('received-power', 'Received power', 'dBm'), where: 'asked' },
+  { ...judged('gain-over-temperature', 'Gain over temperature', 'dB/K'), where: 'asked' },
+  { ...judged('eirp-density', 'EIRP density margin', 'dB'), where: 'asked' },
+  { id: 'eirp', label: 'EIRP', unit: 'dBW', where: 'asked', of: ({ eirpDbw }) => eirpDbw ?? UNASKED },
+  { id: 'exposure-public', label: 'Distance to the FCC public limit, estimate', unit: 'm', where: 'asked', of: publicDistance },
 ];
 
 /** The figures of two designs beside each other, each with its limit and both verdicts. */
 export function compareFigures(before: JudgedFigures, after: JudgedFigures): FigureDifference[] {
-  return ROWS.map(({ id, label, unit, line, of }) => {
+  return ROWS.filter((row) => isAsked(row, before) || isAsked(row, after)).map(({ id, label, unit, line, of }) => {
     const [left, right] = [of(before.figures), of(after.figures)];
     const [old, now] = [verdictOf(before, line), verdictOf(after, line)];
     const limits = [...new Set([old, now].flatMap((verdict) => (verdict === undefined ? [] : [limitText(verdict)])))];
@@ -70,6 +86,10 @@ export function compareFigures(before: JudgedFigures, after: JudgedFigures): Fig
       verdictAfter: now?.verdict ?? null,
     };
   });
+}
+
+function isAsked({ where, line, of }: Row, side: JudgedFigures): boolean {
+  return where === undefined || isNumber(of(side.figures)) || verdictOf(side, line) !== undefined;
 }
 
 /** The one figure whose verdict decides between the two; null when none or several changed. */

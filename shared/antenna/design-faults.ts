@@ -23,7 +23,17 @@ function requirementFaults({ requirement }: DesignDocument): DesignFault[] {
   const faults: DesignFault[] = [];
   const band = requirement.bandGHz;
   if (band && band[0] > band[1]) faults.push({ pointer: '#/requirement/bandGHz', detail: `must rise; got ${band[0]} to ${band[1]} GHz` });
-  return [...faults, ...maskFaults(requirement.mask, '#/requirement/mask')];
+  const { occupiedBandwidthGHz, referenceBandwidthGHz } = requirement.transmitter ?? {};
+  if (occupiedBandwidthGHz !== undefined && referenceBandwidthGHz !== undefined && referenceBandwidthGHz > occupiedBandwidthGHz) {
+    const detail = `must not exceed the occupied bandwidth, ${occupiedBandwidthGHz} GHz; got ${referenceBandwidthGHz} GHz`;
+    faults.push({ pointer: '#/requirement/transmitter/referenceBandwidthGHz', detail });
+  }
+  return [
+    ...faults,
+    ...maskFaults(requirement.mask, '#/requirement/mask'),
+    ...maskFaults(requirement.crossPolarMask, '#/requirement/crossPolarMask'),
+    ...maskFaults(requirement.transmitter?.densityMask, '#/requirement/transmitter/densityMask'),
+  ];
 }
 
 function shapeFaults({ panel }: DesignDocument): DesignFault[] {

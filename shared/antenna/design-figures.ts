@@ -4,6 +4,7 @@ import { dbToPowerRatio } from '../units/decibels';
 import { edgeTaperDb, maxIncidenceRad } from './aperture-figures';
 import { gratingLobes } from './grating-lobes';
 import type { IlluminatedState } from './illuminated-state';
+import { transmissionFigures } from './link/transmission-figures';
 import { isNumber, noFigure, nothingLit } from './no-figure';
 import { largestDimensionM } from './outline';
 import { patternFigures, type PatternFigures } from './pattern-figures';
@@ -44,6 +45,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     referencePhaseDeg: degFromRad(placed.referencePhaseRad),
     uncertainty: radiates ? uncertainties(state, read.peakThetaDeg, peakUncertaintyDeg) : {},
     ...lawFigures(state),
+    ...transmissionFigures(state, read),
   };
   return { figures, gratingLobeCount: orders.reduce((sum, order) => sum + order.count, 0), maxIncidence };
 }

@@ -1,5 +1,6 @@
 import type { Requirement } from '../model/design-document';
 import type { Figure, Figures, NoFigure, Verdict } from '../model/figures';
+import { isReason } from './exposure/exposure-readings';
 import { isNumber, noFigure } from './no-figure';
 
 interface Line {
@@ -25,6 +26,10 @@ export function requirementVerdicts(requirement: Requirement, figures: Figures, 
   add('pointing', 'at-most', pointingToleranceDeg, '°');
   add('mask', 'at-least', mask === undefined ? undefined : 0, 'dB');
   add('cross-polar', 'at-least', minCrossPolarDiscriminationDb, 'dB');
+  add('cross-polar-mask', 'at-least', requirement.crossPolarMask === undefined ? undefined : 0, 'dB');
+  add('received-power', 'at-least', requirement.link?.minReceivedDbm, 'dBm');
+  add('gain-over-temperature', 'at-least', requirement.receiver?.minGainOverTemperatureDbPerK, 'dB/K');
+  add('eirp-density', 'at-least', requirement.transmitter?.densityMask === undefined ? undefined : 0, 'dB');
   return lines.map(judge);
 }
 
@@ -44,6 +49,14 @@ export function figureOfLine(line: Verdict['line'], figures: Figures): Figure {
       return worst(figures.beams.map((beam) => beam.pointingErrorDeg), Math.max);
     case 'mask':
       return 'marginDb' in maskMargin ? numberOr(maskMargin.marginDb, maskMargin) : maskMargin;
+    case 'cross-polar-mask':
+      return marginOf(figures.crossPolarMaskMargin);
+    case 'received-power':
+      return figures.link === undefined || isReason(figures.link) ? absent(figures.link) : figures.link.receivedDbm;
+    case 'gain-over-temperature':
+      return figures.gainOverTemperatureDbPerK ?? absent(undefined);
+    case 'eirp-density':
+      return marginOf(figures.eirpDensityMargin);
     case 'cross-polar':
       return noFigure('scalar-model', 'the scalar prediction has no cross-polar field');
   }
@@ -58,6 +71,16 @@ function judge(line: Line): Verdict {
 function worst(values: readonly Figure[], pick: (...numbers: number[]) => number): Figure {
   const missing = values.find((value) => !isNumber(value));
   return missing ?? pick(...values.filter(isNumber));
+}
+
+function marginOf(holder: Figures['eirpDensityMargin'] | Figures['crossPolarMaskMargin']): Figure {
+  return holder !== undefined && 'marginDb' in holder ? numberOr(holder.marginDb, holder) : absent(holder);
+}
+
+/** Figures kept from before a line was known have no value for it. */
+function absent(holder: object | undefined): NoFigure {
+  const reason = holder !== undefined && 'reason' in holder ? String(holder.reason) : 'not computed with these figures';
+  return noFigure('no-figure', reason);
 }
 
 /** A reason may carry a field of the same name as the figure; only a bare number is one. */

@@ -1,5 +1,10 @@
 import './zod-jitless';
 import * as z from 'zod';
+import { mask } from './mask';
+import { link, receiver, transmitter } from './transmission';
+
+export { mask };
+export type { Mask } from './mask';
 
 /**
  * The design document: what a draft holds and a revision freezes.
@@ -29,28 +34,6 @@ export const beam = z.strictObject({
   phaseDeg: z.number().min(-360).max(360).optional(),
 });
 
-export const mask = z.discriminatedUnion('kind', [
-  z.strictObject({
-    kind: z.literal('published'),
-    id: z.string().min(1).max(64),
-    /** Angles off the beam between which the main reflector spills over, for envelopes that allow more there. */
-    spilloverDeg: z.tuple([z.number().min(0).max(180), z.number().min(0).max(180)]).optional(),
-  }),
-  z.strictObject({
-    kind: z.literal('custom'),
-    /** Pairs of angle off the wanted beam (degrees, rising) and highest allowed level (dBi), joined by straight lines. */
-    points: z.array(z.tuple([z.number().min(0).max(180), z.number().min(-200).max(200)])).min(2).max(500),
-  }),
-  z.strictObject({
-    kind: z.literal('formula'),
-    /** Stretches of angles off the wanted beam, rising; the expression gives dBi from `theta` in degrees. Undefined between and outside them. */
-    segments: z
-      .array(z.strictObject({ fromDeg: z.number().min(0).max(180), toDeg: z.number().min(0).max(180), expression: z.string().min(1).max(200) }))
-      .min(1)
-      .max(12),
-  }),
-]);
-
 export const requirement = z.strictObject({
   designFrequencyGHz: frequencyGHz,
   bandGHz: z.tuple([frequencyGHz, frequencyGHz]).optional(),
@@ -61,6 +44,11 @@ export const requirement = z.strictObject({
   pointingToleranceDeg: z.number().gt(0).max(90).optional(),
   maxSidelobeDb: z.number().min(-100).max(0).optional(),
   mask: mask.optional(),
+  /** Highest cross-polar gain at each angle off the wanted beam. */
+  crossPolarMask: mask.optional(),
+  transmitter: transmitter.optional(),
+  link: link.optional(),
+  receiver: receiver.optional(),
 });
 
 const rectangle = z.strictObject({ kind: z.literal('rectangle'), widthMm: lengthMm, heightMm: lengthMm });
@@ -163,7 +151,6 @@ export const designDocument = z.strictObject({
 
 export type DesignDocument = z.infer<typeof designDocument>;
 export type Beam = z.infer<typeof beam>;
-export type Mask = z.infer<typeof mask>;
 export type Requirement = z.infer<typeof requirement>;
 export type Outline = z.infer<typeof outline>;
 export type KeepOut = z.infer<typeof keepOut>;

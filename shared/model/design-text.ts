@@ -42,6 +42,8 @@ const BY_KIND: Readonly<Record<string, (fields: Fields) => string>> = {
   polygon: sizeText,
   published: (fields) => `published ${fields['id']}`,
   formula: (fields) => `formula, ${lengthOf(fields['segments'])} stretches`,
+  hop: (fields) => `hop of ${fields['distanceM']} m`,
+  relay: (fields) => `over the panel, ${fields['incomingDistanceM']} m and ${fields['outgoingDistanceM']} m`,
   custom: (fields) => `custom, ${lengthOf(fields['points'])} points`,
   rectangular: (fields) => `rectangular ${fields['periodXMm']} × ${fields['periodYMm']} mm`,
   triangular: (fields) => `triangular ${fields['periodXMm']} × ${fields['rowSpacingMm']} mm`,

@@ -3,6 +3,7 @@ import * as z from 'zod';
 import { figure, noFigure } from './figure-value';
 import { lawFigures } from './law-figures';
 import { maskFindings, maskMargin } from './mask-figures';
+import { transmissionFigures } from './transmission-figures';
 
 export { figure, noFigure };
 
@@ -61,13 +62,14 @@ export const figures = z.strictObject({
   /** Numerical uncertainty by name of the figure. */
   uncertainty: z.record(z.string(), z.number()),
   ...lawFigures,
+  ...transmissionFigures,
 });
 
 export const verdictWord = z.enum(['meets', 'falls-short', 'not-evaluated']);
 
 /** One line of the requirement against what was computed. */
 export const verdict = z.strictObject({
-  line: z.enum(['gain', 'sidelobe', 'pointing', 'mask', 'cross-polar']),
+  line: z.enum(['gain', 'sidelobe', 'pointing', 'mask', 'cross-polar', 'cross-polar-mask', 'received-power', 'gain-over-temperature', 'eirp-density']),
   /** "at least" or "at most". */
   sense: z.enum(['at-least', 'at-most']),
   limit: z.number(),

@@ -3,6 +3,7 @@ import { arrayChecks } from './tables/array-checks';
 import { apertureChecks } from './tables/aperture-checks';
 import { cellChecks } from './tables/cell-checks';
 import { conventionsChecks } from './tables/conventions-checks';
+import { linkChecks } from './tables/link-checks';
 import { maskChecks } from './tables/mask-checks';
 import { guidedWaveChecks } from './tables/guided-wave-checks';
 import { panelChecks } from './tables/panel-checks';
@@ -10,7 +11,7 @@ import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
 import { synthesisChecks } from './tables/synthesis-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...guidedWaveChecks, ...synthesisChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...linkChecks, ...guidedWaveChecks, ...synthesisChecks };
 const checks = loadChecks();
 const pending = loadPending();
 

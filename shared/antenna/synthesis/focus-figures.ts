@@ -21,7 +21,7 @@ export function focusFigures(state: IlluminatedState, focus: SiPosition): FocusF
     return noFigure('too-many-cells', `${lattice.count} cells are too many to follow the level along the axis; the limit is ${Math.floor(MOST_EVALUATIONS / (SAMPLES + REFINING))}`);
   }
   const distanceM = Math.hypot(focus.xM, focus.yM, focus.zM);
-  const sources = sourcesOf(state, [focus.xM / distanceM, focus.yM / distanceM, focus.zM / distanceM]);
+  const sources = axialSources(state, [focus.xM / distanceM, focus.yM / distanceM, focus.zM / distanceM]);
   const atFocus = axialLevel(sources, distanceM);
   if (atFocus <= 0) return nothingLit();
   const sideM = largestDimensionM(state.placed.si.panel.outline);
@@ -43,7 +43,8 @@ export function focusFigures(state: IlluminatedState, focus: SiPosition): FocusF
   };
 }
 
-function sourcesOf({ placed, responses, wavenumber }: IlluminatedState, along: AxialSources['along']): AxialSources {
+/** The cells in use as point sources, for the line along a unit vector. */
+export function axialSources({ placed, responses, wavenumber }: IlluminatedState, along: AxialSources['along']): AxialSources {
   const { lattice, light, si } = placed;
   const re = new Float64Array(lattice.count);
   const im = new Float64Array(lattice.count);

@@ -78,6 +78,10 @@ const LINE_NAMES: Readonly<Record<Verdict['line'], string>> = {
   pointing: 'pointing',
   mask: 'mask',
   'cross-polar': 'cross-polar discrimination',
+  'cross-polar-mask': 'cross-polar mask',
+  'received-power': 'received power',
+  'gain-over-temperature': 'gain over temperature',
+  'eirp-density': 'EIRP density',
 };
 
 function lineNames(verdicts: readonly Verdict[]): string {
