@@ -10,8 +10,9 @@ import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
 import { synthesisChecks } from './tables/synthesis-checks';
+import { toleranceChecks } from './tables/tolerance-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...linkChecks, ...guidedWaveChecks, ...synthesisChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...linkChecks, ...guidedWaveChecks, ...synthesisChecks, ...toleranceChecks };
 const checks = loadChecks();
 const pending = loadPending();
 
