@@ -10,6 +10,7 @@ import { largestDimensionM } from './outline';
 import { patternFigures, type PatternFigures } from './pattern-figures';
 import { lawFigures } from './synthesis/law-figures';
 import { evanescentCellCount } from './target-phase';
+import { vectorFigures } from './vector/vector-figures';
 
 export interface DesignFigures {
   readonly figures: Figures;
@@ -43,6 +44,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     ...losses,
     apertureEfficiency: apertureEfficiency(read.gainDbi, lattice.count * lattice.cellAreaM2, wavelengthM),
     referencePhaseDeg: degFromRad(placed.referencePhaseRad),
+    ...(state.vector && placed.vector ? { vector: vectorFigures(state.vector, placed.vector.form, beams) } : {}),
     uncertainty: radiates ? uncertainties(state, read.peakThetaDeg, peakUncertaintyDeg) : {},
     ...lawFigures(state),
     ...transmissionFigures(state, read),

@@ -8,6 +8,8 @@ import { sumFigures } from './no-figure';
 import type { PlacedDesign } from './place-cells';
 import { radiationPattern, type RadiationPattern } from './radiation-pattern';
 import { targetPhasesRad } from './target-phase';
+import type { VectorPlacement } from './vector/vector-stock';
+import { vectorState, type VectorState } from './vector/vector-state';
 
 /** A placed design in use at one frequency. */
 export interface IlluminatedState {
@@ -28,6 +30,8 @@ export interface IlluminatedState {
   /** Gain less directivity. */
   readonly gainOffsetDb: Figure;
   readonly litCount: number;
+  /** Present where the vector model is in use; `pattern` is then its co-polar part. */
+  readonly vector?: VectorState;
 }
 
 export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): IlluminatedState {
@@ -37,6 +41,7 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
   const responses = stock.respond(assignment, frequencyHz);
   const targetRad = targetInUse(placed, responses, frequencyHz);
   const losses = apertureLosses(light, responses, phaseErrorsRad(responses.phaseRad, targetRad));
+  if (placed.vector) return vectorLit({ placed, vector: placed.vector, frequencyHz, wavenumber, responses, targetRad, losses });
   const { capturedDb, ...spillover } = capturedPower(si);
   const cellLossDb = countedCellLossDb(placed.design.cells, losses.cellLossDb);
   return {
@@ -50,7 +55,36 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
     losses: { ...losses, cellLossDb },
     ...spillover,
     gainOffsetDb: placed.design.cells.kind === 'resonant' ? capturedDb : sumFigures(capturedDb, cellLossDb),
-    litCount: light.amplitude.reduce((count, amplitude) => count + (amplitude > 0 ? 1 : 0), 0),
+    litCount: litCells(light.amplitude),
+  };
+}
+
+function litCells(amplitude: Float64Array): number {
+  return amplitude.reduce((count, size) => count + (size > 0 ? 1 : 0), 0);
+}
+
+interface LitVector extends Pick<IlluminatedState, 'placed' | 'frequencyHz' | 'wavenumber' | 'responses' | 'targetRad' | 'losses'> {
+  readonly vector: VectorPlacement;
+}
+
+/** The same by the vector model: powers of all polarisations, the co-polar pattern, phase errors of what goes to the beam. */
+function vectorLit({ placed, vector, frequencyHz, wavenumber, responses, targetRad, losses }: LitVector): IlluminatedState {
+  const state = vectorState({ ...placed, vector }, frequencyHz, wavenumber);
+  const { result, spilloverDb, spilloverUncertaintyDb, gainOffsetDb, cellLossDb } = state;
+  return {
+    placed,
+    frequencyHz,
+    wavenumber,
+    wavelengthM: (2 * Math.PI) / wavenumber,
+    responses,
+    targetRad,
+    pattern: state.pattern.co,
+    losses: { ...losses, cellLossDb, phaseErrorRmsDeg: result?.phaseErrorRmsDeg ?? losses.phaseErrorRmsDeg },
+    spilloverDb,
+    spilloverUncertaintyDb,
+    gainOffsetDb,
+    litCount: litCells(placed.light.amplitude),
+    vector: state,
   };
 }
 

@@ -8,6 +8,7 @@ import { panelLattice, type PanelLattice } from './panel-lattice';
 import type { PreparedEdition } from './prepare-edition';
 import { siDesign, type SiDesign } from './si-design';
 import { targetPhasesRad } from './target-phase';
+import { vectorArrival, vectorStock, type VectorPlacement } from './vector/vector-stock';
 
 /** A design with its cells placed: everything that does not depend on the frequency of use. */
 export interface PlacedDesign {
@@ -23,6 +24,8 @@ export interface PlacedDesign {
   /** At the design frequency, reference phase included. */
   readonly targetRad: Float64Array;
   readonly assignment: CellAssignment;
+  /** Present where the vector model is in use; responses are then what the cells send into the beam. */
+  readonly vector?: VectorPlacement;
 }
 
 /** Places the cells of a design, at its design frequency. Throws InvalidDesign. */
@@ -31,16 +34,20 @@ export function placeCells(design: DesignDocument, edition?: PreparedEdition): P
   const si = siDesign(design);
   const designWavenumber = wavenumberRadPerM(si.designFrequencyHz);
   const lattice = panelLattice(si.panel);
-  const light = illuminateCells(si.illumination, lattice, si.receiveExponent);
+  const arrival = vectorArrival(si, lattice);
+  const scalarLight = illuminateCells(si.illumination, lattice, si.receiveExponent);
+  const light = arrival ? { ...scalarLight, amplitude: arrival.amplitude } : scalarLight;
   const law = apertureLaw(si);
   const bareTargetRad = targetPhasesRad(law, lattice, light, designWavenumber);
-  const stock = cellStock(design.cells, { light, designFrequencyHz: si.designFrequencyHz, si, edition });
+  const site = { light, designFrequencyHz: si.designFrequencyHz, si, edition };
+  const vector = arrival && { ...arrival, stock: vectorStock(design.cells, { ...site, ...arrival }) };
+  const stock = vector?.stock ?? cellStock(design.cells, site);
   const referencePhaseRad =
     si.referencePhaseRad === 'search'
       ? stock.searchReferenceRad({ targetRad: bareTargetRad, ...beamWeights({ si, lattice, light, wavenumber: designWavenumber }) })
       : si.referencePhaseRad;
   const targetRad = bareTargetRad.map((rad) => rad + referencePhaseRad);
-  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad) };
+  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad), ...(vector ? { vector } : {}) };
 }
 
 interface WeightQuery {

@@ -82,6 +82,15 @@ export interface SiDesign {
   readonly referencePhaseRad: number | 'search';
   readonly receiveExponent: number;
   readonly radiateExponent: number;
+  /** Present where the vector model is asked for. */
+  readonly vectorModel?: SiVectorModel;
+}
+
+export interface SiVectorModel {
+  readonly reradiation: 'power-wave' | 'aperture';
+  readonly cellFactor: 'none' | 'normal' | 'beam';
+  /** The wanted one, of the beam. */
+  readonly polarisation: Polarisation;
 }
 
 const M_PER_MM = 1e-3;
@@ -104,11 +113,16 @@ export function siDesign(design: DesignDocument): SiDesign {
     referencePhaseRad: referencePhaseDeg === 'search' ? 'search' : radFromDeg(referencePhaseDeg),
     receiveExponent: prediction.receiveExponent,
     radiateExponent: prediction.radiateExponent,
+    ...(prediction.model === 'vector' ? { vectorModel: siVectorModel(design) } : {}),
   };
 }
 
 function siSynthesis(synthesis: DesignDocument['synthesis']): SiSynthesis {
   return synthesis.kind === 'focus' ? { kind: 'focus', point: siPosition(synthesis.pointMm) } : synthesis;
+}
+
+function siVectorModel({ requirement, prediction }: DesignDocument): SiVectorModel {
+  return { reradiation: prediction.reradiation ?? 'power-wave', cellFactor: prediction.cellFactor ?? 'none', polarisation: requirement.polarisation };
 }
 
 /** The panel alone in metres, for counting its cells before anything else is known. */

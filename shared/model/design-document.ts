@@ -136,6 +136,12 @@ export const cells = z.discriminatedUnion('kind', [
 export const prediction = z.strictObject({
   receiveExponent: z.number().min(0).max(10),
   radiateExponent: z.number().min(0).max(10),
+  /** Absent means scalar. The vector model takes the horn's whole field and the cells' 2x2 responses; it uses neither exponent. */
+  model: z.enum(['scalar', 'vector']).optional(),
+  /** Of the vector model: how a cell's leaving waves radiate. Absent means power waves. */
+  reradiation: z.enum(['power-wave', 'aperture']).optional(),
+  /** Of the vector model: the far-field factor of one cell. Absent means none. */
+  cellFactor: z.enum(['none', 'normal', 'beam']).optional(),
 });
 
 export const designDocument = z.strictObject({
@@ -159,4 +165,5 @@ export type Panel = z.infer<typeof panel>;
 export type Illumination = z.infer<typeof illumination>;
 export type Synthesis = z.infer<typeof synthesis>;
 export type Cells = z.infer<typeof cells>;
+export type PredictionModel = z.infer<typeof prediction>;
 export type Polarisation = z.infer<typeof polarisation>;

@@ -125,6 +125,9 @@ const LABELS: readonly (readonly [path: string, label: string, unit: string])[] 
   ['referencePhaseDeg', 'Reference phase', '°'],
   ['prediction/receiveExponent', 'Receive exponent', ''],
   ['prediction/radiateExponent', 'Radiate exponent', ''],
+  ['prediction/model', 'Model', ''],
+  ['prediction/reradiation', 'Re-radiation', ''],
+  ['prediction/cellFactor', 'Cell factor', ''],
   ['schemaVersion', 'Version of the document', ''],
 ];
 

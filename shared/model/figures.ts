@@ -4,6 +4,7 @@ import { figure, noFigure } from './figure-value';
 import { lawFigures } from './law-figures';
 import { maskFindings, maskMargin } from './mask-figures';
 import { transmissionFigures } from './transmission-figures';
+import { vectorFigures } from './vector-figures';
 
 export { figure, noFigure };
 
@@ -59,6 +60,8 @@ export const figures = z.strictObject({
   /** The highest lobes outside the wanted beam, strongest first, relative to it. */
   highestLobes: z.array(lobe),
   beams: z.array(beamFigures),
+  /** Present where the vector model was used; the other figures are then of the co-polar field. */
+  vector: vectorFigures.optional(),
   /** Numerical uncertainty by name of the figure. */
   uncertainty: z.record(z.string(), z.number()),
   ...lawFigures,
@@ -98,6 +101,9 @@ export const warning = z.strictObject({
     'illumination-misses',
     'behind-panel',
     'unmodulated-lobe',
+    'bounds-not-reached',
+    'cross-terms',
+    'polarisation',
     'provenance',
   ]),
   /** JSON pointer of the field it concerns. */

@@ -7,7 +7,7 @@ import { cellFilesOf, descriptionOf } from '../support/cell-files';
 import { expectWithin } from './expect-within';
 import { loadChecks, numberIn, toleranceOf } from './published-check';
 
-/** S11 (TE) and S22 (TM) of checks lib-01 to lib-04; their cross terms wait for the vector model. */
+/** S11 (TE) and S22 (TM) of checks lib-01 to lib-04 as the scalar model reads them; the whole matrix is checked with the vector model. */
 describe('an edition between its nodes, against an independent program on the same files', () => {
   let prepared: PreparedEdition;
   beforeAll(() => {
