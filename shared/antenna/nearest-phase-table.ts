@@ -3,6 +3,7 @@ import { positiveDeg, radFromDeg, degFromRad } from '../units/angles';
 /** Phases nearer than this are the same: rounding must not decide a tie. */
 const SAME_RAD = 1e-9;
 const TURN_RAD = 2 * Math.PI;
+const TURNS_PER_RAD = 1 / TURN_RAD;
 
 /**
  * A look-up of the state nearest in phase round the turn, so 359 degrees finds 1 degree before 350. States of equal
@@ -26,8 +27,8 @@ interface State {
   readonly index: number;
 }
 
-/** Bins of the look-up per state: most then hold no boundary or one. */
-const BINS_PER_STATE = 8;
+/** Bins of the look-up per state: few then hold a boundary, and the branch that looks for one is foreseen. */
+const BINS_PER_STATE = 32;
 
 /**
  * Which state is nearest changes half way between neighbours and nowhere else. The bin of a target says how many
@@ -47,8 +48,9 @@ function boundaryLookUp(states: readonly State[]): (targetRad: number) => number
     below[bin] = rank;
   }
   return (targetRad) => {
-    const target = targetRad - TURN_RAD * Math.floor(targetRad / TURN_RAD);
-    let rank = below[Math.floor(target * binsPerRad)];
+    const target = targetRad - TURN_RAD * Math.floor(targetRad * TURNS_PER_RAD);
+    // Rounding may leave a target a hair outside the turn: cutting off puts it into the first or the last bin.
+    let rank = below[(target * binsPerRad) | 0];
     while (target >= boundaries[rank]) rank += 1;
     return owners[rank];
   };
