@@ -25,6 +25,8 @@ export interface Config {
   readonly workerCount: number;
   /** Proxies in front of the server whose X-Forwarded-For is believed. */
   readonly trustedProxyCount: number;
+  /** A worker that is silent for so long has lost what it was computing. */
+  readonly runExpirySeconds: number;
   /** Run the migrations before listening. */
   readonly migrateAtStart: boolean;
 }
@@ -57,6 +59,7 @@ const environment = z.object({
   LOG_LEVEL: z.enum(logLevels, { error: `must be one of ${logLevels.join(', ')}` }).default('info'),
   WORKERS: z.coerce.number({ error: 'must be a whole number' }).int().min(1).max(64).optional(),
   SLANTWISE_TRUSTED_PROXIES: z.coerce.number({ error: 'must be a whole number' }).int().min(0).max(8).default(0),
+  SLANTWISE_RUN_EXPIRY: z.coerce.number({ error: 'must be a number of seconds' }).int().min(2).max(3600).default(30),
   SLANTWISE_MIGRATE: onOff.default('off'),
 });
 
@@ -109,6 +112,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     logLevel: values.LOG_LEVEL,
     workerCount: values.WORKERS ?? Math.max(1, availableParallelism() - 1),
     trustedProxyCount: values.SLANTWISE_TRUSTED_PROXIES,
+    runExpirySeconds: values.SLANTWISE_RUN_EXPIRY,
     migrateAtStart: values.SLANTWISE_MIGRATE === 'on',
   };
 }

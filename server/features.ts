@@ -11,6 +11,7 @@ import { projectRoutes } from './projects/project-routes';
 import { comparisonRoutes } from './revisions/comparison-routes';
 import { exportRoutes } from './revisions/export-routes';
 import { revisionRoutes } from './revisions/revision-routes';
+import { runRoutes } from './runs/run-routes';
 import { invitationRoutes, teamRoutes } from './teams/team-routes';
 
 /** Every feature's routes, one line each. */
@@ -29,4 +30,5 @@ export const features: readonly ((house: House) => readonly Route[])[] = [
   revisionRoutes,
   comparisonRoutes,
   exportRoutes,
+  runRoutes,
 ];

@@ -20,6 +20,7 @@ import { LibraryService } from './library/library-service';
 import { LetterService } from './notices/letter-service';
 import { FigureService } from './predictions/figure-service';
 import { PredictionService } from './predictions/prediction-service';
+import { ResultService } from './predictions/result-service';
 import { DesignContentService } from './projects/design-content-service';
 import { DraftService } from './projects/draft-service';
 import { PanelService } from './projects/panel-service';
@@ -28,6 +29,13 @@ import { ReplayService } from './replays/replay-service';
 import { ComparisonService } from './revisions/comparison-service';
 import { ExportService } from './revisions/export-service';
 import { RevisionService } from './revisions/revision-service';
+import { RunChunkService } from './runs/run-chunk-service';
+import { RunDispatchService } from './runs/run-dispatch-service';
+import { RunEvents } from './runs/run-events';
+import { RunPlanningService } from './runs/run-planning-service';
+import { RunQueueRepository } from './runs/run-queue-repository';
+import { RunRosterService } from './runs/run-roster-service';
+import { RunService } from './runs/run-service';
 import { InvitationService } from './teams/invitation-service';
 import { MembershipService } from './teams/membership-service';
 import { TeamService } from './teams/team-service';
@@ -64,9 +72,10 @@ function createServices({ ground, hasher = new PasswordHasher(), predictionRunne
   });
   const engine = new PredictionEngine(predictionRunner ?? createPredictionRunner(ground.config.workerCount), limitsFor(ground.config.workerCount));
   const design = createDesignServices({ ground, people, audit, library, engine });
+  const running = createRunServices({ ground, audit, ...design });
   const inspections = createInspectionRunner();
   const imports = new ImportService(ground, { library, audit, runner: inspections });
-  return { ...design, engine, library, inspections, imports, hasher, memberships, replays, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
+  return { ...design, ...running, engine, library, inspections, imports, hasher, memberships, replays, people, audit, letters, sessions, signIn, passwords, tokens, account, teams, invitations };
 }
 
 interface DesignParts {
@@ -88,7 +97,31 @@ function createDesignServices({ ground, people, audit, library, engine }: Design
   const exports = new ExportService({ ground, drafts, revisions, predictions, library, audit, productVersion: version });
   const panels = new PanelService({ ground, drafts, contents, revisions, audit });
   const projects = new ProjectService({ ground, drafts, revisions, figures, audit });
-  return { predictions, figures, revisions, comparisons, exports, panels, projects };
+  return { predictions, figures, contents, drafts, revisions, comparisons, exports, panels, projects };
+}
+
+interface RunParts {
+  readonly ground: Ground;
+  readonly audit: AuditService;
+  readonly contents: DesignContentService;
+  readonly drafts: DraftService;
+  readonly revisions: RevisionService;
+}
+
+/** Runs: what the server answers of them, and what a worker does. */
+function createRunServices({ ground, audit, contents, drafts, revisions }: RunParts) {
+  const results = new ResultService(ground);
+  const runQueue = new RunQueueRepository(ground.transactions, {
+    maintenanceSeconds: Math.max(1, Math.floor(ground.config.runExpirySeconds / 6)),
+    onError: (error) => ground.logger.error({ err: error }, 'the queue could not be looked after'),
+  });
+  const dispatcher = new RunDispatchService(ground, runQueue);
+  const planner = new RunPlanningService({ ground, drafts, revisions, contents });
+  const runs = new RunService({ ground, drafts, planner, dispatcher, results, audit });
+  const runChunks = new RunChunkService({ ground, queue: runQueue, dispatcher, results });
+  const runRoster = new RunRosterService(ground);
+  const runEvents = new RunEvents(runs, ground.logger);
+  return { runs, runQueue, runChunks, runRoster, runEvents };
 }
 
 const SWEEP_MS = 6 * 3600 * 1000;
@@ -111,7 +144,7 @@ export interface House extends ReturnType<typeof createServices> {
 export function createHouse(options: HouseOptions): House {
   const { ground } = options;
   const services = createServices(options);
-  const { engine, exports, figures, inspections, letters, passwords, replays, sessions, tokens } = services;
+  const { engine, exports, figures, inspections, letters, passwords, replays, runEvents, runs, sessions, tokens } = services;
   const eventStreams = new EventStreams();
   let draining = false;
   let sweeper: NodeJS.Timeout | undefined;
@@ -132,15 +165,17 @@ export function createHouse(options: HouseOptions): House {
     start: async () => {
       await letters.start();
       sweeper = setInterval(() => {
-        Promise.all([sessions.sweep(), replays.sweep(), figures.sweep()]).catch((error: unknown) => ground.logger.error({ err: error }, 'old rows could not be swept'));
+        Promise.all([sessions.sweep(), replays.sweep(), figures.sweep(), runs.sweep()]).catch((error: unknown) => ground.logger.error({ err: error }, 'old rows could not be swept'));
       }, SWEEP_MS).unref();
     },
     drain: () => {
       draining = true;
+      runEvents.close();
       eventStreams.endAll();
     },
     close: async () => {
       clearInterval(sweeper);
+      runEvents.close();
       await passwords.settled();
       await letters.close();
       await inspections.close();

@@ -2,7 +2,7 @@ import { readConfig, type Config } from './config';
 import { apiDatabaseLimits, createDataSource } from './database/data-source';
 import { isSchemaReady } from './database/schema-state';
 import { TransactionRunner } from './database/transaction-runner';
-import { createHouse, type House } from './house';
+import { createHouse, type House, type HouseOptions } from './house';
 import { createLogger } from './log';
 
 export interface OpenedHouse {
@@ -13,14 +13,14 @@ export interface OpenedHouse {
 }
 
 /** The house on the database that the environment names; for every program of the server. @throws ConfigFaults */
-export async function openHouse(env: NodeJS.ProcessEnv): Promise<OpenedHouse> {
+export async function openHouse(env: NodeJS.ProcessEnv, options: Pick<HouseOptions, 'predictionRunner'> = {}): Promise<OpenedHouse> {
   const config = readConfig(env);
   const logger = createLogger(config);
   const dataSource = createDataSource({ url: config.databaseUrl, ...apiDatabaseLimits });
   await dataSource.initialize();
   if (config.migrateAtStart) await dataSource.runMigrations();
   const ground = { config, logger, transactions: new TransactionRunner(dataSource), now: () => new Date() };
-  const house = createHouse({ ground, isSchemaReady: () => isSchemaReady(dataSource) });
+  const house = createHouse({ ...options, ground, isSchemaReady: () => isSchemaReady(dataSource) });
   const close = async (): Promise<void> => {
     await house.close();
     await dataSource.destroy();

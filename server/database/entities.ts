@@ -18,6 +18,9 @@ import { Replay } from '../replays/replay-entity';
 import { Content } from '../revisions/content-entity';
 import { Revision } from '../revisions/revision-entity';
 import { RevisionPart } from '../revisions/revision-part-entity';
+import { RunChunk } from '../runs/run-chunk-entity';
+import { Run } from '../runs/run-entity';
+import { RunWorkerRow } from '../runs/run-worker-entity';
 import { Invitation } from '../teams/invitation-entity';
 import { Membership } from '../teams/membership-entity';
 import { Team } from '../teams/team-entity';
@@ -47,4 +50,7 @@ export const entities: readonly (new () => object)[] = [
   Content,
   Revision,
   RevisionPart,
+  Run,
+  RunChunk,
+  RunWorkerRow,
 ];

@@ -14,6 +14,11 @@ export class ResultRepository {
   }
 
   async removeOlderThan(transaction: Transaction, before: Date): Promise<void> {
-    await managerOf(transaction).query('DELETE FROM result WHERE created_at < $1', [before]);
+    // What was computed of a revision stays with it.
+    await managerOf(transaction).query(
+      `DELETE FROM result WHERE created_at < $1 AND NOT EXISTS (
+        SELECT FROM run WHERE run.team_id = result.team_id AND run.result_key = result.content_hash AND run.kind = result.kind AND run.revision_id IS NOT NULL)`,
+      [before],
+    );
   }
 }

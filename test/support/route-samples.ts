@@ -2,6 +2,7 @@ import { accountSamples } from './samples/account-samples';
 import { exportSamples } from './samples/export-samples';
 import { librarySamples } from './samples/library-samples';
 import { projectSamples } from './samples/project-samples';
+import { runSamples } from './samples/run-samples';
 import { teamSamples } from './samples/team-samples';
 import type { Api } from './api';
 import type { Call } from './api-client';
@@ -31,5 +32,6 @@ export const routeSamples: RouteSamples = {
   ...exportSamples,
   ...librarySamples,
   ...projectSamples,
+  ...runSamples,
   ...teamSamples,
 };
