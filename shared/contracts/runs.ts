@@ -1,6 +1,7 @@
 import '../model/zod-jitless';
 import * as z from 'zod';
 import { bandParameters, bandResult } from '../model/band-run';
+import { toleranceParameters, toleranceResult } from '../model/tolerance-run';
 import { id, isoTime, page, pageQuery, personName } from './common';
 
 /**
@@ -17,6 +18,7 @@ import { id, isoTime, page, pageQuery, personName } from './common';
 /** One line for each kind of run: what it is asked and what it gives. */
 export const runSchemas = {
   band: { parameters: bandParameters, result: bandResult },
+  tolerance: { parameters: toleranceParameters, result: toleranceResult },
 } as const;
 
 export type RunKind = keyof typeof runSchemas;
@@ -35,10 +37,13 @@ const requestOf = <Kind extends RunKind>(kind: Kind) =>
   });
 
 /** One line for each kind. */
-export const runRequest = z.discriminatedUnion('kind', [requestOf('band')]);
+export const runRequest = z.discriminatedUnion('kind', [requestOf('band'), requestOf('tolerance')]);
 
 /** One line for each kind. */
-const runAnswer = z.discriminatedUnion('kind', [z.strictObject({ kind: z.literal('band'), parameters: bandParameters, result: bandResult.nullable() })]);
+const runAnswer = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('band'), parameters: bandParameters, result: bandResult.nullable() }),
+  z.strictObject({ kind: z.literal('tolerance'), parameters: toleranceParameters, result: toleranceResult.nullable() }),
+]);
 
 export const runState = z.enum(['queued', 'running', 'done', 'failed', 'cancelled']);
 

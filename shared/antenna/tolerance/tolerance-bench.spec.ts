@@ -66,6 +66,6 @@ describe('toleranceBench', () => {
 
   it('refuses a panel that radiates nothing', () => {
     const dark: DesignDocument['illumination'] = { kind: 'horn', positionMm: [0, 0, 200], aimMm: [0, 0, 400], exponentE: 6, exponentH: 6, polarisation: 'x' };
-    expect(() => benchOf({ ...design, illumination: dark })).toThrow('the panel radiates nothing, so there is nothing that could be spread');
+    expect(() => benchOf({ ...design, illumination: dark })).toThrow('the panel radiates nothing towards its first beam, so there is nothing that could be spread');
   });
 });

@@ -38,10 +38,10 @@ export interface BenchSubject {
 export function toleranceBench({ placed, edition, parameters, spectrumOf }: BenchSubject): ToleranceBench {
   const { contributors, material, seed } = parameters;
   const nominal = illuminatedState(placed);
-  if (!isReadable(nominal)) throw new InvalidDesign([{ pointer: '#/illumination', detail: 'the panel radiates nothing, so there is nothing that could be spread' }]);
+  if (!isReadable(nominal)) throw new InvalidDesign([{ pointer: '#/illumination', detail: 'the panel radiates nothing towards its first beam, so there is nothing that could be spread' }]);
   const model = toleranceModel({ placed, edition, contributors, material });
-  const gauge = trialGauge(nominal, spectrumOf);
   const fieldOf = trialField(placed, model);
+  const gauge = trialGauge(nominal, fieldOf(), spectrumOf);
   const draw = deviationDrawer(placed.lattice, seed);
   const acting = contributors.filter(({ id }) => !model.notApplied.some((other) => other.id === id));
   const [beam] = placed.si.beams;

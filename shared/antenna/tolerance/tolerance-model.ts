@@ -109,10 +109,13 @@ function shapeEffects(subject: ToleranceSubject): Effect[] {
   const shapes = panelShapes(placed.lattice);
   const byId = { lift: shapes.lift, 'tilt-x': shapes.tiltX, 'tilt-y': shapes.tiltY, bow: shapes.bow } as const;
   const cosBeam = placed.si.beams[0].direction.w;
+  const { incidenceRad, tangentialIndex } = placed.light;
+  // A guided wave comes along with the panel: what changes is the way to the beam.
+  const cosIncidence = incidenceRad.map((rad) => (tangentialIndex === undefined ? Math.cos(rad) : 0));
   return (Object.keys(byId) as (keyof typeof byId)[])
     .filter((id) => wanted(subject, id))
     .map((id) => {
-      const slope = byId[id].map((height, n) => heightPhaseRad(placed.designWavenumber, placed.si.operation, Math.cos(placed.light.incidenceRad[n]), cosBeam)(height));
+      const slope = byId[id].map((height, n) => heightPhaseRad(placed.designWavenumber, placed.si.operation, cosIncidence[n], cosBeam)(height));
       return slopeEffect(id, { phaseRad: slope, logMagnitude: null });
     });
 }

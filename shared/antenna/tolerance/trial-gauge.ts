@@ -29,27 +29,33 @@ export interface TrialGauge {
 }
 
 /**
- * `nominal` is the design as drawn. Gain is absolute, |F|^2 over the power of the feed: a panel that receives less radiates
- * less. The constant is that of the nominal prediction, so the undisturbed trial has the gain of the prediction.
+ * `nominal` is the design as drawn, `drawn` its aperture field. Gain is absolute, |F|^2 over the power of the feed: a panel that
+ * receives less radiates less. The constant is that of the nominal prediction, so that the undisturbed trial has its gain.
  */
-export function trialGauge(nominal: IlluminatedState, spectrumOf: SpectrumOf = apertureSpectrum): TrialGauge {
-  const { placed, wavenumber, gainOffsetDb, pattern } = nominal;
+export function trialGauge(nominal: IlluminatedState, drawn: ApertureField, spectrumOf: SpectrumOf = apertureSpectrum): TrialGauge {
+  const { placed, wavenumber, pattern } = nominal;
   const { radiateExponent, beams } = placed.si;
   const directions = beams.map(({ direction }) => direction);
-  const gainPower = isNumber(gainOffsetDb) ? pattern.radiatedPower / dbToPowerRatio(gainOffsetDb) : NaN;
+  const patternWith = (field: ApertureField, radiatedPower: number): RadiationPattern => {
+    const spectrum = spectrumOf(field);
+    return { wavenumber, radiateExponent, spectrum, farField: farFieldOf(field, spectrum, wavenumber), radiatedPower };
+  };
+  const gainPower = directivityRatio(patternWith(drawn, 1), directions[0]) / nominalGainRatio(nominal, directions[0]);
+  const maskMarginOf = maskReader(placed, directions);
   return {
-    patternOf: (field) => {
-      const spectrum = spectrumOf(field);
-      return { wavenumber, radiateExponent, spectrum, farField: farFieldOf(field, spectrum, wavenumber), radiatedPower: gainPower };
-    },
-    read: (trial) => readPattern(trial, directions, maskReader(placed, directions)),
+    patternOf: (field) => patternWith(field, gainPower),
+    read: (trial) => readPattern(trial, directions, maskMarginOf),
     gainsReader: (places) => gainsReader(pattern, places),
   };
 }
 
-/** False where the design radiates nothing, so that no trial could be read. */
-export function isReadable({ gainOffsetDb, pattern }: IlluminatedState): boolean {
-  return isNumber(gainOffsetDb) && pattern.radiatedPower > 0;
+function nominalGainRatio({ pattern, gainOffsetDb }: IlluminatedState, beam: Direction): number {
+  return isNumber(gainOffsetDb) ? directivityRatio(pattern, beam) * dbToPowerRatio(gainOffsetDb) : NaN;
+}
+
+/** False where the design radiates nothing towards its first beam, so that no trial could be read. */
+export function isReadable({ gainOffsetDb, pattern, placed }: IlluminatedState): boolean {
+  return isNumber(gainOffsetDb) && pattern.radiatedPower > 0 && directivityRatio(pattern, placed.si.beams[0].direction) > 0;
 }
 
 function gainsReader({ spectrum, wavenumber, radiateExponent }: RadiationPattern, directions: readonly Direction[]): (pattern: RadiationPattern) => Float64Array {

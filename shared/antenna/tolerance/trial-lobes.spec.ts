@@ -12,7 +12,7 @@ import { trialLobes } from './trial-lobes';
 const contributors = [{ id: 'phase-scatter', spread: 20, distribution: 'normal' }] as const;
 const placed = placeCells(exampleDesign({ requirement: { ...exampleDesign().requirement, beams: [{ thetaDeg: 20, phiDeg: 0 }, { thetaDeg: 20, phiDeg: 90 }] } }));
 const field = trialField(placed, toleranceModel({ placed, contributors, material: { expansionPpmPerK: 0, permittivityPpmPerK: 0 } }));
-const gauge = trialGauge(illuminatedState(placed));
+const gauge = trialGauge(illuminatedState(placed), field());
 const beams = placed.si.beams.map(({ direction }) => direction);
 
 describe('trialLobes', () => {

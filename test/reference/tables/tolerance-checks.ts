@@ -46,7 +46,7 @@ interface Bench {
 function benchOf(design: ReturnType<typeof testDesign>, contributors: readonly ToleranceContributor[], edition?: PreparedEdition): Bench {
   const placed = placeCells(design, edition);
   const field = trialField(placed, toleranceModel({ placed, edition, contributors, material: MATERIAL }));
-  const gauge = trialGauge(illuminatedState(placed));
+  const gauge = trialGauge(illuminatedState(placed), field());
   return { placed, farFieldOf: (deviations) => exactFarField(field(deviations), placed.designWavenumber), patternOf: (deviations) => gauge.patternOf(field(deviations)) };
 }
 
