@@ -51,6 +51,17 @@ const UNITS: readonly (readonly [suffix: string, unit: string])[] = [
   ['Deg', 'deg'],
   ['GHz', 'GHz'],
   ['Mm', 'mm'],
+  ['WPerM2', 'W/m2'],
+  ['DbPerK', 'dB/K'],
+  ['Dbm', 'dBm'],
+  ['Dbw', 'dBW'],
+  ['Dbsm', 'dBsm'],
+  ['PowerW', 'W'],
+  ['TemperatureK', 'K'],
+  ['Min', 'min'],
+  ['FromM', 'm'],
+  ['EndM', 'm'],
+  ['distanceM', 'm'],
 ];
 
 /** The unit stands in the name of the figure or of the group it belongs to. */

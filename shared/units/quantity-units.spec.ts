@@ -10,7 +10,7 @@ describe('the units of the fields', () => {
   });
 
   it('are read as 1 in the unit of the document', () => {
-    for (const dimension of ['frequency', 'length', 'angle', 'level', 'power'] as const)
+    for (const dimension of ['frequency', 'length', 'distance', 'angle', 'level', 'power'] as const)
       expect([dimension, parseQuantity(`1 ${DOCUMENT_UNITS[dimension]}`, dimension)]).toEqual([dimension, { kind: 'value', value: 1 }]);
   });
 
@@ -24,6 +24,8 @@ describe('the units of the fields', () => {
     ['in', 'length', 25.4],
     ['mil', 'length', 0.0254],
     ['ft', 'length', 304.8],
+    ['km', 'distance', 1000],
+    ['mi', 'distance', 1609.344],
     ['rad', 'angle', 360 / (2 * Math.PI)],
     ['mrad', 'angle', 0.36 / (2 * Math.PI)],
     ['arcmin', 'angle', 1 / 60],

@@ -1,5 +1,5 @@
-/** What a field holds. A `number` has no unit. */
-export type QuantityDimension = 'frequency' | 'length' | 'angle' | 'level' | 'power' | 'number';
+/** What a field holds. A `number` has no unit; a `length` is a size of the panel, a `distance` the way of a link. */
+export type QuantityDimension = 'frequency' | 'length' | 'distance' | 'angle' | 'level' | 'power' | 'number';
 
 /** How a unit relates to the document's unit: by a power of ten (exact), by a factor, or as decibels of a power. */
 export type UnitScale =
@@ -18,7 +18,7 @@ export interface QuantityUnit {
 const decimal = (exponent: number): UnitScale => ({ kind: 'decimal', exponent });
 const factor = (value: number): UnitScale => ({ kind: 'factor', factor: value });
 
-/** Every unit the fields understand. The document's units are GHz, mm, deg, dB and W. */
+/** Every unit the fields understand. The document's units are GHz, mm (m for distances), deg, dB and W. */
 export const QUANTITY_UNITS: readonly QuantityUnit[] = [
   { symbol: 'Hz', dimension: 'frequency', scale: decimal(-9) },
   { symbol: 'kHz', dimension: 'frequency', scale: decimal(-6) },
@@ -35,6 +35,11 @@ export const QUANTITY_UNITS: readonly QuantityUnit[] = [
   { symbol: 'in', dimension: 'length', scale: factor(25.4), spellings: ['inch', 'inches', '"', '″'] },
   { symbol: 'mil', dimension: 'length', scale: factor(0.0254), spellings: ['mils', 'thou'] },
   { symbol: 'ft', dimension: 'length', scale: factor(304.8), spellings: ['foot', 'feet'] },
+  { symbol: 'mm', dimension: 'distance', scale: decimal(-3) },
+  { symbol: 'm', dimension: 'distance', scale: decimal(0) },
+  { symbol: 'km', dimension: 'distance', scale: decimal(3) },
+  { symbol: 'ft', dimension: 'distance', scale: factor(0.3048), spellings: ['foot', 'feet'] },
+  { symbol: 'mi', dimension: 'distance', scale: factor(1609.344), spellings: ['mile', 'miles'] },
   { symbol: '°', dimension: 'angle', scale: decimal(0), spellings: ['deg', 'degree', 'degrees'] },
   { symbol: 'rad', dimension: 'angle', scale: factor(180 / Math.PI) },
   { symbol: 'mrad', dimension: 'angle', scale: factor(0.18 / Math.PI) },
@@ -54,6 +59,7 @@ export const QUANTITY_UNITS: readonly QuantityUnit[] = [
 export const DOCUMENT_UNITS: Readonly<Record<QuantityDimension, string>> = {
   frequency: 'GHz',
   length: 'mm',
+  distance: 'm',
   angle: '°',
   level: 'dB',
   power: 'W',

@@ -118,7 +118,7 @@ function joined(number: string, unit: string): string {
 }
 
 function exampleOf(dimension: QuantityDimension): string {
-  const examples = { frequency: '28 GHz', length: '10.7 mm', angle: '45°', level: '-3 dB', power: '2 W', number: '4' };
+  const examples = { frequency: '28 GHz', length: '10.7 mm', distance: '2 km', angle: '45°', level: '-3 dB', power: '2 W', number: '4' };
   return examples[dimension];
 }
 

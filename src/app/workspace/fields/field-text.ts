@@ -2,7 +2,7 @@ import type { QuantityDimension } from '../../../../shared/units/quantity';
 import type { EntryStep } from './entry-box';
 
 /** What one press of an arrow key adds, in the document's unit. */
-const ARROW_STEPS: Readonly<Record<QuantityDimension, number>> = { frequency: 0.1, length: 1, angle: 0.5, level: 0.5, power: 0.1, number: 0.5 };
+const ARROW_STEPS: Readonly<Record<QuantityDimension, number>> = { frequency: 0.1, length: 1, distance: 10, angle: 0.5, level: 0.5, power: 0.1, number: 0.5 };
 
 /** The whole value, so that taking the entry back changes nothing. */
 export function fieldText(value: unknown): string {

@@ -42,10 +42,11 @@ import { findingsText, violationRows } from './mask-findings';
 })
 export class MaskFindingsTable {
   readonly margin = input.required<Figures['maskMargin']>();
-  readonly findings = input.required<MaskFindings | null>();
+  /** A sentence where no stretches are told. */
+  readonly findings = input.required<MaskFindings | string>();
   protected readonly rows = computed(() => {
     const findings = this.findings();
-    return findings ? violationRows(findings) : [];
+    return typeof findings === 'string' ? [] : violationRows(findings);
   });
   protected readonly text = computed(() => findingsText(this.margin(), this.findings()));
 }

@@ -21,6 +21,6 @@ describe('what stands above a mask', () => {
   });
 
   it('says why nothing was judged', () => {
-    expect(findingsText({ kind: 'mask-not-applicable', reason: 'S.465-6 is for 2 to 31 GHz; the frequency is 40 GHz' }, null)).toBe('Not evaluated: S.465-6 is for 2 to 31 GHz; the frequency is 40 GHz.');
+    expect(findingsText({ kind: 'mask-not-applicable', reason: 'S.465-6 is for 2 to 31 GHz; the frequency is 40 GHz' }, 'Not evaluated.')).toBe('Not evaluated: S.465-6 is for 2 to 31 GHz; the frequency is 40 GHz.');
   });
 });

@@ -24,8 +24,9 @@ export function violationRows({ violations }: MaskFindings): readonly ViolationR
 }
 
 /** What was judged and found, in one or two sentences. */
-export function findingsText(margin: Figures['maskMargin'], findings: MaskFindings | null): string {
-  if ('reason' in margin || findings === null) return 'reason' in margin ? `Not evaluated: ${margin.reason}.` : 'Not evaluated.';
+export function findingsText(margin: Figures['maskMargin'], findings: MaskFindings | string): string {
+  if ('reason' in margin) return `Not evaluated: ${margin.reason}.`;
+  if (typeof findings === 'string') return findings;
   const { judgedFromDeg, violationCount, violations, peaksJudged, peaksAbove, angleFractionAbove } = findings;
   const parts = [`Judged from ${figureText(judgedFromDeg, 2)}° off the beam outwards, over the whole hemisphere in front of the panel.`];
   if (peaksJudged !== undefined && peaksAbove !== undefined) parts.push(`${peaksAbove} of ${peaksJudged} sidelobe peaks stand above it; one in ten may.`);

@@ -23,7 +23,7 @@ export interface VerdictSource {
   readonly stale: boolean;
 }
 
-type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; isSet(requirement: Requirement): boolean };
+type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; isSet(requirement: Requirement): boolean; isShown?(requirement: Requirement): boolean };
 
 const SHAPES: readonly LineShape[] = [
   {
@@ -63,11 +63,43 @@ const SHAPES: readonly LineShape[] = [
     isSet: ({ minCrossPolarDiscriminationDb }) => minCrossPolarDiscriminationDb !== undefined,
   },
   { line: 'mask', name: 'Mask margin', sign: '≥', field: null, digits: 2, unit: 'dB', isSet: ({ mask }) => mask !== undefined },
+  {
+    line: 'cross-polar-mask',
+    name: 'Cross-polar mask margin',
+    ...{ sign: '≥', field: null, digits: 2, unit: 'dB' },
+    isSet: ({ crossPolarMask }) => crossPolarMask !== undefined,
+    isShown: ({ crossPolarMask }) => crossPolarMask !== undefined,
+  },
+  {
+    line: 'eirp-density',
+    name: 'EIRP density margin',
+    ...{ sign: '≥', field: null, digits: 2, unit: 'dB' },
+    isSet: ({ transmitter }) => transmitter?.densityMask !== undefined,
+    isShown: ({ transmitter }) => transmitter?.densityMask !== undefined,
+  },
+  {
+    line: 'received-power',
+    name: 'Received power',
+    sign: '≥',
+    field: { pointer: '/requirement/link/minReceivedDbm', dimension: 'number', unit: 'dBm' },
+    ...{ digits: 2, unit: 'dBm' },
+    isSet: ({ link }) => link?.minReceivedDbm !== undefined,
+    isShown: ({ link }) => link !== undefined,
+  },
+  {
+    line: 'gain-over-temperature',
+    name: 'G/T',
+    sign: '≥',
+    field: { pointer: '/requirement/receiver/minGainOverTemperatureDbPerK', dimension: 'number', unit: 'dB/K' },
+    ...{ digits: 2, unit: 'dB/K' },
+    isSet: ({ receiver }) => receiver?.minGainOverTemperatureDbPerK !== undefined,
+    isShown: ({ receiver }) => receiver !== undefined,
+  },
 ];
 
-/** The five lines in their fixed order; a line without a limit is never shown as met. */
+/** The lines in their fixed order, those of mask, link and receiver where there is one; a line without a limit is never shown as met. */
 export function requirementLines(requirement: Requirement, { verdicts, stale }: VerdictSource): readonly RequirementLine[] {
-  return SHAPES.map(({ line, name, sign, field, digits, unit, isSet }) => {
+  return SHAPES.filter(({ isShown }) => isShown?.(requirement) ?? true).map(({ line, name, sign, field, digits, unit, isSet }) => {
     const shape = { line, name, sign, field };
     if (!isSet(requirement)) return { ...shape, word: 'no-limit', value: '–', margin: null, reason: null };
     const verdict = verdicts?.find((candidate) => candidate.line === line);

@@ -17,6 +17,8 @@ import { WORKSPACE_STATE } from '../workspace-state';
 import { BeamsTable } from './beams-table';
 import { MaskSection } from './mask-section';
 import { requirementLines } from './requirement-lines';
+import { SizingSection } from './sizing-section';
+import { TransmissionSection } from './transmission-section';
 import { VerdictTable } from './verdict-table';
 
 const ANGLE_CHOICES = [
@@ -29,7 +31,7 @@ const FIRST_BAND_SHARE = 0.02;
 /** What must be met: beams, band, limits and mask, each with the verdict of the prediction. */
 @Component({
   selector: 'slant-requirement-sheet',
-  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, MaskSection, RemarkList, SheetNotes, VerdictTable, ViewTitle],
+  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, MaskSection, RemarkList, SheetNotes, SizingSection, TransmissionSection, VerdictTable, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './requirement-sheet.html',
   styleUrl: '../fields/sheet.scss',

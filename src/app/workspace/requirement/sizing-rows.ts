@@ -1,0 +1,26 @@
+import type { SizingAdvice } from '../../../../shared/antenna/sizing/size-panel';
+import { sizedDesign } from '../../../../shared/antenna/sizing/sized-design';
+import type { DesignDocument } from '../../../../shared/model/design-document';
+import { degFromRad } from '../../../../shared/units/angles';
+import { powerRatioToDb } from '../../../../shared/units/decibels';
+import { designPartText } from '../../../../shared/model/design-text';
+import { figureText } from '../strip-figures';
+
+export interface SizingRow {
+  readonly name: string;
+  readonly value: string;
+}
+
+/** The advice as it would stand in the design. */
+export function sizingRows(advice: SizingAdvice, design: DesignDocument): readonly SizingRow[] {
+  const { panel, illumination } = sizedDesign(design, advice);
+  const horn = illumination.kind === 'horn' ? illumination : null;
+  return [
+    { name: 'Outline', value: String(designPartText(panel.outline)) },
+    { name: 'Lattice', value: String(designPartText(panel.lattice)) },
+    { name: 'Period limited by', value: `${advice.periodLimitedBy} of ${figureText(degFromRad(advice.periodLimitedBy === 'scan' ? advice.steepestScanRad : advice.largestIncidenceRad), 1)}°` },
+    { name: 'Horn at', value: horn ? `${designPartText(horn.positionMm)} mm` : '–' },
+    { name: 'Horn exponent q', value: horn ? String(horn.exponentE) : '–' },
+    { name: 'Spillover and taper', value: `${figureText(powerRatioToDb(advice.illuminationEfficiency), 2)} dB` },
+  ];
+}

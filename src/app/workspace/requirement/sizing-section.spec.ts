@@ -1,0 +1,30 @@
+import { sheetRig } from '../fields/sheet-rig';
+import { SizingSection } from './sizing-section';
+
+describe('SizingSection', () => {
+  it('starts from the least gain of the requirement and follows what is typed', async () => {
+    const { field, text, enter } = await sheetRig(SizingSection);
+    expect(field('Gain wanted').value).toBe('34');
+    const before = /Outline(rectangle [\d.]+ × [\d.]+ mm)/.exec(text())?.[1];
+    await enter('Gain wanted', '37');
+    expect(/Outline(rectangle [\d.]+ × [\d.]+ mm)/.exec(text())?.[1]).not.toBe(before);
+  });
+
+  it('puts outline, period and horn into the design as one step that can be undone', async () => {
+    const { workspace, press } = await sheetRig(SizingSection);
+    const before = workspace.design();
+    await press('Use these');
+    const { panel, illumination } = workspace.design();
+    expect(workspace.stepNames()).toEqual(['Use sizing advice']);
+    expect([panel.outline, panel.lattice, illumination]).not.toEqual([before.panel.outline, before.panel.lattice, before.illumination]);
+    expect(illumination).toMatchObject({ kind: 'horn', aimMm: [0, 0, 0] });
+    workspace.undo();
+    expect(workspace.design()).toBe(before);
+  });
+
+  it('refuses a taper that is none', async () => {
+    const { enter, text } = await sheetRig(SizingSection);
+    await enter('Edge taper', '2');
+    expect(text()).toContain('from -30 to -3dB');
+  });
+});
