@@ -25,8 +25,20 @@ export function predictionCost({ design, cuts = [], uvSize = 0 }: Omit<Predictio
   const cellBound = cellCountUpperBound(design.panel);
   const directionCount = uvSize * uvSize + cuts.reduce((sum, cut) => sum + cutSampleCount(cut), 0);
   const cells = Math.min(cellBound, MAX_CELL_COUNT);
-  const seconds = cells * SECONDS_PER_CELL + directionCount * SECONDS_PER_DIRECTION + outlineTests(design.panel) * SECONDS_PER_ROW_AND_CORNER;
+  const seconds = vectorSeconds(design, cells, directionCount) + cells * SECONDS_PER_CELL + directionCount * SECONDS_PER_DIRECTION + outlineTests(design.panel) * SECONDS_PER_ROW_AND_CORNER;
   return { cellBound, directionCount, seconds };
+}
+
+// Each candidate's 2x2 response is interpolated at each cell, and every direction is reckoned for two polarisations.
+const VECTOR_SECONDS_PER_CELL = 3e-5;
+// Forms without a kernel in closed form are integrated over the hemisphere.
+const QUADRATURE_SECONDS_PER_CELL = 2e-5;
+
+function vectorSeconds({ prediction, cells: stock }: PredictionQuestion['design'], cells: number, directionCount: number): number {
+  if (prediction.model !== 'vector') return 0;
+  const isClosed = (prediction.reradiation ?? 'power-wave') === 'power-wave' && (prediction.cellFactor ?? 'none') === 'none';
+  const perCell = (stock.kind === 'edition' ? VECTOR_SECONDS_PER_CELL : SECONDS_PER_CELL) + (isClosed ? 0 : QUADRATURE_SECONDS_PER_CELL);
+  return cells * perCell + directionCount * SECONDS_PER_DIRECTION;
 }
 
 export function cutSampleCount(cut: CutRequest): number {

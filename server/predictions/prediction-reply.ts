@@ -20,8 +20,8 @@ export function predictionReplyOf({ figures, verdicts, warnings, cells, cuts, uv
     verdicts,
     warnings,
     ...(cells === undefined ? {} : { cells: plainArrays(CELL_ARRAY_NAMES, cells) }),
-    ...(cuts === undefined ? {} : { cuts: cuts.map((cut) => ({ request: requestOf(cut.request), ...plainArrays(CUT_ARRAY_NAMES, cut) })) }),
-    ...(uv === undefined ? {} : { uv: { size: uv.size, floorDbi: uv.floorDbi, gainDbi: Array.from(uv.gainDbi) } }),
+    ...(cuts === undefined ? {} : { cuts: cuts.map((cut) => ({ request: requestOf(cut.request), ...plainArrays(CUT_ARRAY_NAMES, cut), ...plainCross(cut) })) }),
+    ...(uv === undefined ? {} : { uv: { size: uv.size, floorDbi: uv.floorDbi, gainDbi: Array.from(uv.gainDbi), ...plainCross(uv) } }),
   };
 }
 
@@ -38,11 +38,20 @@ export function predictionBlockOf({ figures, verdicts, warnings, cells, cuts, uv
   };
   return writeBinaryBlock(head, {
     ...(cells === undefined ? {} : namedArrays('cells', CELL_ARRAY_NAMES, cells)),
-    ...Object.assign({}, ...(cuts ?? []).map((cut, i) => namedArrays(`cuts.${i}`, CUT_ARRAY_NAMES, cut))),
-    ...(uv === undefined ? {} : { 'uv.gainDbi': uv.gainDbi }),
+    ...Object.assign({}, ...(cuts ?? []).map((cut, i) => ({ ...namedArrays(`cuts.${i}`, CUT_ARRAY_NAMES, cut), ...namedCross(`cuts.${i}`, cut) }))),
+    ...(uv === undefined ? {} : { 'uv.gainDbi': uv.gainDbi, ...namedCross('uv', uv) }),
   });
 }
 
 function namedArrays<Name extends string>(prefix: string, names: readonly Name[], holder: Readonly<Record<Name, BlockArray>>): BlockArrays {
   return Object.fromEntries(names.map((name) => [`${prefix}.${name}`, holder[name]]));
+}
+
+/** Only the vector model has a cross-polar field. */
+function plainCross({ crossGainDbi }: { readonly crossGainDbi?: Numbers }): { crossGainDbi?: number[] } {
+  return crossGainDbi === undefined ? {} : { crossGainDbi: Array.from(crossGainDbi) };
+}
+
+function namedCross(prefix: string, { crossGainDbi }: { readonly crossGainDbi?: BlockArray }): BlockArrays {
+  return crossGainDbi === undefined ? {} : { [`${prefix}.crossGainDbi`]: crossGainDbi };
 }

@@ -10,7 +10,9 @@ export const MAX_CUT_SAMPLES = 200_000;
 /** Numbers in the arrays of the answer, at most. */
 export function arrayNumberBound({ design, cells, cuts = [], uvSize = 0 }: PredictionWish): number {
   const cellNumbers = cells === true ? Math.min(MAX_CELL_COUNT, cellCountUpperBound(design.panel)) * CELL_ARRAY_NAMES.length : 0;
-  return cellNumbers + cutSamples(cuts) * CUT_ARRAY_NAMES.length + uvSize * uvSize;
+  // The vector model answers the cross-polar field beside the co-polar one.
+  const fields = design.prediction.model === 'vector' ? 2 : 1;
+  return cellNumbers + cutSamples(cuts) * (CUT_ARRAY_NAMES.length + fields - 1) + fields * uvSize * uvSize;
 }
 
 export const cutSamples = (cuts: NonNullable<PredictionWish['cuts']>): number => cuts.reduce((sum, cut) => sum + cutSampleCount(cut), 0);

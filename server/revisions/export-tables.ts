@@ -8,8 +8,12 @@ import { positionMm } from './cell-table';
 const rounded = (value: number): number => Math.round(value * 1e4) / 1e4 + 0;
 
 export function cutTable(cut: Cut): string {
-  const rows = Array.from(cut.angleDeg, (_, i) => CUT_ARRAY_NAMES.map((name) => (name.endsWith('Deg') ? positionMm(cut[name][i]) : rounded(cut[name][i]))));
-  return writeCsv([['angle_deg', 'theta_deg', 'phi_deg', 'directivity_dbi', 'gain_dbi'], ...rows]);
+  const { crossGainDbi } = cut;
+  const rows = Array.from(cut.angleDeg, (_, i) => [
+    ...CUT_ARRAY_NAMES.map((name) => (name.endsWith('Deg') ? positionMm(cut[name][i]) : rounded(cut[name][i]))),
+    ...(crossGainDbi ? [rounded(crossGainDbi[i])] : []),
+  ]);
+  return writeCsv([['angle_deg', 'theta_deg', 'phi_deg', 'directivity_dbi', 'gain_dbi', ...(crossGainDbi ? ['cross_polar_gain_dbi'] : [])], ...rows]);
 }
 
 /** Every figure under its name in the prediction, then every line of the requirement. A figure without value says why. */

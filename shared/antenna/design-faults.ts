@@ -3,6 +3,7 @@ import { cellCountFault } from './cell-count';
 import { InvalidDesign, type DesignFault } from './invalid-design';
 import { maskFaults } from './masks/mask-faults';
 import { polygonFault } from './polygon-fault';
+import { vectorFaults } from './vector/vector-faults';
 
 /** A horn nearer than this to the plane of the panel lights it at grazing incidence everywhere. */
 const LEAST_HORN_HEIGHT_MM = 1e-3;
@@ -16,7 +17,7 @@ export function checkDesign(design: DesignDocument): void {
 /** Faults that no single field shows, of a document whose fields are each valid. */
 export function designFaults(design: DesignDocument): DesignFault[] {
   const shape = shapeFaults(design);
-  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? countFaults(design) : []), ...sourceFaults(design)];
+  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? countFaults(design) : []), ...sourceFaults(design), ...vectorFaults(design)];
 }
 
 function requirementFaults({ requirement }: DesignDocument): DesignFault[] {

@@ -5,6 +5,7 @@ import { guidedWaveWarnings } from './guided-wave/guided-wave-warnings';
 import { illuminationWarnings } from './illumination-warnings';
 import { keepOutWarning } from './keep-out-warning';
 import { latticeWarnings, type LatticeFacts } from './lattice-warnings';
+import { polarisationWarnings } from './vector/polarisation-warnings';
 
 export interface DesignFacts extends LatticeFacts {
   readonly design: DesignDocument;
@@ -21,6 +22,7 @@ export function designWarnings(facts: DesignFacts): Warning[] {
     ...illuminationWarnings(facts.si, facts.litCount),
     ...keepOutWarning(facts.si, facts.figures.spilloverDb),
     ...facts.cellWarnings,
+    ...polarisationWarnings(facts.design),
     ...latticeWarnings(facts),
     ...guidedWaveWarnings(facts.si, facts.wavelengthM, facts.design.cells.kind === 'resonant'),
     ...imageLobeWarning(facts.design, facts.figures),

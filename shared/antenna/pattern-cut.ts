@@ -17,6 +17,8 @@ export interface Cut {
   readonly phiDeg: Float64Array;
   readonly directivityDbi: Float64Array;
   readonly gainDbi: Float64Array;
+  /** Of the cross-polar field, on the same scale; where the model has one. */
+  readonly crossGainDbi?: Float64Array;
 }
 
 /** Nothing is shown or sent below this, so a null is a number too. */

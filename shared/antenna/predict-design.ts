@@ -1,5 +1,6 @@
 import type { DesignDocument } from '../model/design-document';
 import type { Figures, Verdict, Warning } from '../model/figures';
+import type { Direction } from '../waves/conventions';
 import { cellArrays, type CellArrays } from './cell-arrays';
 import { designFigures } from './design-figures';
 import { designWarnings } from './design-warnings';
@@ -8,7 +9,7 @@ import { patternCut, type Cut, type CutRequest } from './pattern-cut';
 import { placeCells, type PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
 import { requirementVerdicts } from './requirement-verdicts';
-import { illuminatedState } from './illuminated-state';
+import { illuminatedState, type IlluminatedState } from './illuminated-state';
 import { uvMap, type UvMap, type UvShift } from './uv-map';
 import { isNumber } from './no-figure';
 
@@ -37,7 +38,7 @@ export interface Prediction {
 export type PlacedPredictionOptions = Omit<PredictionOptions, 'edition'>;
 
 /**
- * Predicts what a design radiates by the scalar model of the design document: design -> lattice -> illumination ->
+ * Predicts what a design radiates, by the scalar model of the design document or the vector one: design -> lattice -> illumination ->
  * target phase -> assignment -> aperture field -> pattern -> figures, verdicts and warnings.
  * Throws InvalidDesign, naming every fault, where the fields do not go together.
  */
@@ -66,7 +67,17 @@ export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: P
       cellWarnings: placed.stock.warnings(placed.assignment, state.frequencyHz),
     }),
     ...(include.cells ? { cells: cellArrays({ ...placed, targetRad: state.targetRad, responses: state.responses }) } : {}),
-    ...(include.cuts ? { cuts: include.cuts.map((request) => patternCut(state.pattern, request, beam, gainOffsetDb)) } : {}),
-    ...(include.uv ? { uv: uvMap(state.pattern, include.uv.size, gainOffsetDb, include.uv.shift) } : {}),
+    ...(include.cuts ? { cuts: include.cuts.map((request) => bothCuts(state, request, beam, gainOffsetDb)) } : {}),
+    ...(include.uv ? { uv: bothMaps(state, include.uv, gainOffsetDb) } : {}),
   };
+}
+
+function bothCuts(state: IlluminatedState, request: CutRequest, beam: Direction, gainOffsetDb: number): Cut {
+  const cut = patternCut(state.pattern, request, beam, gainOffsetDb);
+  return state.vector ? { ...cut, crossGainDbi: patternCut(state.vector.pattern.cross, request, beam, gainOffsetDb).gainDbi } : cut;
+}
+
+function bothMaps(state: IlluminatedState, { size, shift }: NonNullable<PredictionOptions['include']['uv']>, gainOffsetDb: number): UvMap {
+  const map = uvMap(state.pattern, size, gainOffsetDb, shift);
+  return state.vector ? { ...map, crossGainDbi: uvMap(state.vector.pattern.cross, size, gainOffsetDb, shift).gainDbi } : map;
 }

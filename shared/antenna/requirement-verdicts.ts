@@ -58,7 +58,7 @@ export function figureOfLine(line: Verdict['line'], figures: Figures): Figure {
     case 'eirp-density':
       return marginOf(figures.eirpDensityMargin);
     case 'cross-polar':
-      return noFigure('scalar-model', 'the scalar prediction has no cross-polar field');
+      return figures.vector ? worst(figures.vector.crossPolarDiscriminationDb, Math.min) : noFigure('scalar-model', 'the scalar prediction has no cross-polar field');
   }
 }
 

@@ -6,6 +6,8 @@ import { blendedLine, elementPower, type RadiationPattern } from './radiation-pa
 export interface UvMap {
   readonly size: number;
   readonly gainDbi: Float32Array;
+  /** Of the cross-polar field; where the model has one. */
+  readonly crossGainDbi?: Float32Array;
   readonly floorDbi: number;
 }
 

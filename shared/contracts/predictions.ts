@@ -9,7 +9,8 @@ import { figures, verdict, warning } from '../model/figures';
  * name that has not started; the older one is answered 409 `superseded`.
  *
  * In the binary form the head is predictionReply without the arrays, and the arrays are named
- * cells.xMm, cells.yMm, ... , cuts.0.angleDeg, cuts.0.thetaDeg, ... and uv.gainDbi.
+ * cells.xMm, cells.yMm, ... , cuts.0.angleDeg, cuts.0.thetaDeg, ... and uv.gainDbi. In the vector model there are also
+ * cuts.0.crossGainDbi, ... and uv.crossGainDbi.
  */
 
 const step = z.tuple([z.number().min(-180).max(180), z.number().min(-180).max(180), z.number().min(0.001).max(90)]);
@@ -55,10 +56,12 @@ export const cutReply = z.strictObject({
   phiDeg: numbers,
   directivityDbi: numbers,
   gainDbi: numbers,
+  /** Cross-polar, in the vector model. */
+  crossGainDbi: numbers.optional(),
 });
 
 /** Row by row from v = -1 to 1, within a row from u = -1 to 1; outside the visible circle the floor stands. */
-export const uvReply = z.strictObject({ size: z.number().int(), floorDbi: z.number(), gainDbi: numbers });
+export const uvReply = z.strictObject({ size: z.number().int(), floorDbi: z.number(), gainDbi: numbers, crossGainDbi: numbers.optional() });
 
 export const predictionReply = z.strictObject({
   engineVersion: z.string(),

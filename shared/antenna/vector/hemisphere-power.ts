@@ -2,6 +2,7 @@ import { gaussLegendre } from '../../math/quadrature';
 
 /** Nodes beyond what the size of the panel asks for. */
 const SPARE_NODES = 16;
+const RULE_STEP = 32;
 
 /** Power at (v, w) of a line of constant u, in front of the panel. */
 export type PowerLine = (v: number, w: number) => number;
@@ -24,7 +25,8 @@ export function hemispherePower(lineAt: (u: number) => PowerLine, { alongX, alon
   for (let i = 0; i < outer.nodes.length; i++) {
     const alpha = (Math.PI / 2) * outer.nodes[i];
     const cosine = Math.cos(alpha);
-    const inner = gaussLegendre(Math.ceil((alongY * cosine * Math.PI) / 4) + SPARE_NODES);
+    // Few sizes of rule, since each is worked out once and kept.
+    const inner = gaussLegendre(RULE_STEP * Math.ceil(((alongY * cosine * Math.PI) / 4 + SPARE_NODES) / RULE_STEP));
     const line = lineAt(Math.sin(alpha));
     let sum = 0;
     for (let j = 0; j < inner.nodes.length; j++) {

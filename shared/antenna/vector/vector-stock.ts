@@ -5,6 +5,7 @@ import { InvalidDesign } from '../invalid-design';
 import { coPolarWeigher, type CoPolarWeigher } from './co-polar-weights';
 import { isotropicStock } from './isotropic-stock';
 import { matrixStock } from './matrix-stock';
+import { NO_RAYS } from './vector-faults';
 import { vectorLight, type VectorLight, type VectorWaves } from './vector-light';
 import type { VectorForm } from './vector-pattern';
 import type { PanelLattice } from '../panel-lattice';
@@ -41,15 +42,12 @@ export interface VectorPlacement extends VectorArrival {
 /** Undefined where the design asks for the scalar model. */
 export function vectorArrival({ illumination, vectorModel, beams }: SiDesign, lattice: Pick<PanelLattice, 'count' | 'xM' | 'yM'>): VectorArrival | undefined {
   if (!vectorModel) return undefined;
-  if (illumination.kind === 'guided-wave') throw new InvalidDesign([{ pointer: '#/prediction/model', detail: NO_RAYS }]);
+  if (illumination.kind === 'guided-wave') throw new InvalidDesign([NO_RAYS]);
   const form: VectorForm = { ...vectorModel, beam: beams[0].direction };
   const waves = vectorLight(illumination, lattice);
   const weigher = coPolarWeigher(waves, form);
   return { waves, form, weigher, amplitude: Float64Array.from({ length: lattice.count }, (_, n) => weigher.amplitudeAt(n)) };
 }
-
-/** Why a guided wave has no vector prediction. */
-export const NO_RAYS = 'a guided wave meets its cells at no angle, so the vector model has no plane of incidence; choose the scalar one';
 
 /** Cells with a 2x2 response keep it; one response for all polarisations acts on both alike. */
 export function vectorStock(cells: Cells, site: VectorSite): VectorStock {
