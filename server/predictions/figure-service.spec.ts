@@ -46,6 +46,13 @@ describe('headlinesOf', () => {
     expect([first[0].summaryPending, (await second)[0].summary?.cellCount, asked]).toEqual([true, 1600, 1]);
   });
 
+  it('tells the remarks that are more than notes, where and why', async () => {
+    const remark = { code: 'grating-lobe', pointer: '/panel/lattice', message: 'a second beam', numbers: { thetaDeg: 40 } } as const;
+    const warnings = [{ ...remark, severity: 'note' as const }, { ...remark, severity: 'warn' as const }];
+    const [{ summary }] = await serviceOn(() => Promise.resolve({ ...prediction, warnings })).headlinesOf('team', [design('a')]);
+    expect(summary?.remarks).toEqual([{ pointer: '/panel/lattice', severity: 'warn', message: 'a second beam' }]);
+  });
+
   it('has no summary for a design that cannot be predicted, and passes other errors on', async () => {
     const unfit = serviceOn(() => Promise.reject(new InvalidInput([{ pointer: '#/design', detail: 'no' }])));
     expect(await unfit.headlinesOf('team', [design('a')])).toEqual([{ summary: null }]);

@@ -101,8 +101,9 @@ export class FigureService {
   }
 }
 
-function summary({ figures, verdicts }: FigureSet): FiguresSummary {
-  return { cellCount: figures.cellCount, gainDbi: figures.gainDbi, verdicts, overall: overallVerdict(verdicts) };
+function summary({ figures, verdicts, warnings }: FigureSet): FiguresSummary {
+  const remarks = warnings.filter(({ severity }) => severity !== 'note').map(({ pointer, severity, message }) => ({ pointer, severity, message }));
+  return { cellCount: figures.cellCount, gainDbi: figures.gainDbi, verdicts, overall: overallVerdict(verdicts), remarks };
 }
 
 /** The worst of the verdicts; what was not evaluated is worse than what meets, and no line at all is not evaluated. */

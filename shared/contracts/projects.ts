@@ -46,6 +46,8 @@ export const figuresSummary = z.strictObject({
   verdicts: z.array(verdict),
   /** The worst verdict of the lines that have a limit; not-evaluated when there is none. */
   overall: verdictWord,
+  /** Remarks on the design that are more than notes: where, and why. */
+  remarks: z.array(warning.pick({ pointer: true, severity: true, message: true })).optional(),
 });
 
 /** Present while the figures are still being computed: the summary is null until then, and a later list has it. */

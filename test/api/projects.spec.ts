@@ -46,6 +46,14 @@ describe('projects and panels', () => {
     expect(await auditOf(`panel:${panel.id}`)).toEqual([{ action: 'panel.created', detail: { project: project.id, name: 'A, relay', after: panel.draftHash } }]);
   });
 
+  it('tells with the figures which part of a design asks for a look', async () => {
+    const wide = { ...STARTING_DESIGN.panel, lattice: { ...STARTING_DESIGN.panel.lattice, periodXMm: 9, periodYMm: 9 } };
+    const { id } = await newPanel(designer, { ...STARTING_DESIGN, panel: wide });
+    const { items } = bodyOf<{ items: Project[] }>(await designer.get('/api/projects'), 200);
+    const remarks = items.flatMap(({ panels }) => panels).find((panel) => panel.id === id)?.summary?.remarks;
+    expect(remarks).toContainEqual({ pointer: expect.stringContaining('/panel/lattice'), severity: expect.stringMatching(/^(warn|serious)$/), message: expect.stringContaining('lobe') });
+  });
+
   it('computes the figures of a draft once', async () => {
     const { draftHash } = await newPanel(designer, steered(17));
     await designer.get('/api/projects');

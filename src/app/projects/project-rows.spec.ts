@@ -1,39 +1,9 @@
 import type { PanelOverview } from '../../../shared/contracts/projects';
 import { STARTING_DESIGN } from '../../../shared/model/starting-design';
+import { panelOverviewOf } from './project-fixture';
 import { panelRow } from './project-rows';
 
-const hash = 'debfe0abb702'.padEnd(64, '0');
-const revision: PanelOverview['latestRevision'] = {
-  id: '6f1c1b7e-58a4-4f0b-9a53-111111111111',
-  panelId: '6f1c1b7e-58a4-4f0b-9a53-222222222222',
-  number: 3,
-  hash,
-  parentId: null,
-  parentNumber: null,
-  restoredFromNumber: null,
-  author: { id: '6f1c1b7e-58a4-4f0b-9a53-333333333333', name: 'Designer' },
-  message: 'steered',
-  createdAt: '2026-12-01T12:00:00.000Z',
-};
-
-const overview = (more: Partial<PanelOverview> = {}): PanelOverview => ({
-  id: revision.panelId,
-  projectId: revision.id,
-  name: 'A, lighthouse relay',
-  design: STARTING_DESIGN,
-  draftHash: hash,
-  summary: {
-    cellCount: 1600,
-    gainDbi: 34.761,
-    verdicts: [{ line: 'gain', sense: 'at-least', limit: 34, unit: 'dBi', value: 34.761, margin: 0.761, verdict: 'meets' }],
-    overall: 'meets',
-  },
-  latestRevision: revision,
-  draftIsRevision: false,
-  changedAt: '2026-12-01T14:02:00.000Z',
-  changedBy: revision.author,
-  ...more,
-});
+const overview = panelOverviewOf;
 
 describe('line of a panel', () => {
   it('says what it is, where it points, what it gains and by how much it meets', () => {

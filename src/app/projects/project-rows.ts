@@ -1,6 +1,8 @@
 import type { PanelOverview } from '../../../shared/contracts/projects';
 import type { Beam, DesignDocument } from '../../../shared/model/design-document';
 import type { MarkState } from '../ui/state-mark';
+import type { SheetMark } from './sheet-marks';
+import { sheetMarks } from './sheet-marks';
 
 /** A panel as one line of the projects sheet. */
 export interface PanelRow {
@@ -11,6 +13,7 @@ export interface PanelRow {
   readonly gain: string;
   readonly state: MarkState;
   readonly stateText: string;
+  readonly sheets: readonly SheetMark[];
   readonly revision: string;
   readonly revisionNote: string;
   readonly changedAt: string;
@@ -26,6 +29,7 @@ export function panelRow(panel: PanelOverview): PanelRow {
     beams: beamText(panel.design),
     gain: gainText(panel),
     ...stateOf(panel),
+    sheets: sheetMarks(panel),
     ...revisionOf(panel),
     changedAt: panel.changedAt,
     changedBy: panel.changedBy.name,

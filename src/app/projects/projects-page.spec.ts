@@ -121,8 +121,35 @@ describe('projects page', () => {
     expect(element().textContent).toContain('No project yet');
   });
 
-  it('asks nothing for a fabricator, who sees no drafts', async () => {
+  it('leads from the mark of a sheet to the sheet', async () => {
+    await open(['designer'], [project]);
+    const marks = [...element().querySelectorAll<HTMLAnchorElement>('.sheets a')];
+    expect(marks.map((mark) => mark.getAttribute('href')?.split('/').at(-1))).toEqual(['requirement', 'panel', 'illumination', 'cells', 'phase', 'pattern', 'revisions']);
+    expect(marks[1].textContent?.replace(/\s+/g, ' ').trim()).toBe('Panel, in work: Not predicted as it stands; the sheet says why');
+  });
+
+  it('says what waits for a designer, with the way there', async () => {
+    const { id: personId, name } = sessionOf(['designer']).person;
+    const own = { ...project.panels[0], changedBy: { id: personId, name } };
+    await open(['designer'], [{ ...project, panels: [own] }]);
+    const waiting = element().querySelector('section[aria-label="Waiting for you"]');
+    expect(waiting?.textContent).toContain('your draft cannot be predicted as it stands');
+    expect(waiting?.querySelector('a')?.getAttribute('href')).toBe(`/panels/${id(2)}/requirement`);
+  });
+
+  it('says that nothing waits, and says nothing of it to a reviewer', async () => {
+    await open(['designer'], [project]);
+    expect(element().querySelector('section[aria-label="Waiting for you"]')?.textContent).toContain('nothing');
+    element().remove();
+    TestBed.resetTestingModule();
+    await open(['reviewer'], [project]);
+    expect(element().querySelector('section[aria-label="Waiting for you"]')).toBeNull();
+  });
+
+  it('asks nothing for a fabricator, and says what will appear and why nothing does', async () => {
     await open(['fabricator'], null);
-    expect(element().textContent).toContain('A fabricator sees released revisions only');
+    expect(element().textContent).toContain('Released revisions with their files for fabrication will stand here');
+    expect(element().textContent).toContain('cannot be released in this version');
+    expect(element().textContent).not.toContain('No project yet');
   });
 });

@@ -21,6 +21,8 @@ import { FirstSteps } from './first-steps';
 import { PanelThumbnail } from './panel-thumbnail';
 import type { PanelRow } from './project-rows';
 import { panelRow } from './project-rows';
+import { waitingDeeds } from './waiting-deeds';
+import { WaitingList } from './waiting-list';
 
 const EDITIONS_SHOWN = 3;
 
@@ -32,7 +34,7 @@ interface ProjectSection {
 
 @Component({
   selector: 'slant-projects-page',
-  imports: [DatePipe, EmptyState, FaultNote, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle, WhyNot],
+  imports: [DatePipe, EmptyState, FaultNote, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle, WaitingList, WhyNot],
   templateUrl: './projects-page.html',
   styleUrl: './projects-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -63,6 +65,12 @@ export class ProjectsPage {
       unit: `${project.panels.length} ${project.panels.length === 1 ? 'panel' : 'panels'}${project.invented ? ', demo data, invented' : ''}`,
     })),
   );
+  /** Null for roles that have nothing to do here yet. */
+  protected readonly waiting = computed(() => {
+    const person = this.session.current()?.person;
+    if (person === undefined || !this.session.hasRole('designer', 'lab')) return null;
+    return waitingDeeds({ personId: person.id, roles: this.session.roles() }, this.projects() ?? [], this.families());
+  });
   protected readonly titleBlock = computed(() => [
     [
       { label: 'Team', value: this.session.current()?.team.teamName ?? '' },
