@@ -39,7 +39,7 @@ export function inspectUpload(files: readonly NamedBytes[], request: UploadReque
     inspection: {
       ...(inspection as unknown as Pick<Inspection, 'files' | 'detected'>),
       messages: [...inspection.messages, ...notices],
-      quality: edition === null ? null : judgeEdition(edition),
+      quality: assembled?.kind === 'edition' ? judgeEdition(assembled.edition, assembled.origin) : null,
       refusals: [...refusals],
       preview: previewOf(inspected.curves),
       acceptable: edition !== null && !anyRefused,

@@ -1,8 +1,8 @@
-import type { QualityFinding, QualityVerdict } from '../model/cell-family';
+import type { QualityVerdict } from '../model/cell-family';
 import { degFromRad, wrapRad } from '../units/angles';
 import { degreesText } from './angle-text';
 import { curvePlaces, inGHz, inWords, pointIndex, termAt } from './cell-quality-subject';
-import type { CurvePlace, JudgedTerm, QualitySubject } from './cell-quality-subject';
+import type { CurvePlace, JudgedTerm, PointedFinding, QualitySubject } from './cell-quality-subject';
 
 /**
  * How far one phase step may stand off its neighbours, at the least. Near a resonance that the grid resolves the steps
@@ -76,26 +76,26 @@ function oddestStep(subject: QualitySubject, cell: number): OddStep | null {
 }
 
 /** A phase step along frequency that its neighbours deny: a moved cable, two sweeps joined, a wrong sign. */
-export function checkPhaseJumps(subject: QualitySubject): QualityFinding[] {
+export function checkPhaseJumps(subject: QualitySubject): PointedFinding[] {
   const { edition } = subject;
-  return edition.cells.flatMap((cell, index): QualityFinding[] => {
+  return edition.cells.flatMap((cell, index): PointedFinding[] => {
     const odd = oddestStep(subject, index);
     if (odd === null) return [];
     const { standOffDeg, allowanceDeg, place, term, step } = odd;
     const verdict = standOffDeg > allowanceDeg ? 'fail' : standOffDeg > PHASE_JUMP_WARN_SHARE * allowanceDeg ? 'warn' : 'pass';
     const where = `${inGHz(edition.responses.frequenciesHz[step.frequency])} (${term.name}, ${inWords(edition, place)})`;
     const detail = `Oddest phase step ${degreesText(degFromRad(step.stepRad))} at ${where}: ${degreesText(standOffDeg)} beyond the steps beside it, ${degreesText(allowanceDeg)} allowed`;
-    return [{ check: 'phase-jump', verdict, detail, cellId: cell.id, value: standOffDeg, limit: allowanceDeg }];
+    return [{ check: 'phase-jump', verdict, detail, cellId: cell.id, value: standOffDeg, limit: allowanceDeg, point: pointIndex(edition, place, step.frequency) }];
   });
 }
 
 /** The phase of a passive cell falls with frequency (Foster's theorem for a lossless reflection); a rising one means the other time convention. */
-export function checkPhaseSlope(subject: QualitySubject): QualityFinding[] {
+export function checkPhaseSlope(subject: QualitySubject): PointedFinding[] {
   const { edition, terms } = subject;
   let curves = 0;
   let rising = 0;
-  const findings = edition.cells.flatMap((cell, index): QualityFinding[] => {
-    let highest = { changeDeg: Number.NEGATIVE_INFINITY, text: '' };
+  const findings = edition.cells.flatMap((cell, index): PointedFinding[] => {
+    let highest = { changeDeg: Number.NEGATIVE_INFINITY, text: '', point: 0 };
     for (const place of curvePlaces(edition, index))
       for (const term of terms) {
         const steps = phaseSteps(subject, place, term);
@@ -103,17 +103,17 @@ export function checkPhaseSlope(subject: QualitySubject): QualityFinding[] {
         const changeDeg = degFromRad(steps.reduce((sum, { stepRad }) => sum + stepRad, 0));
         curves += 1;
         if (changeDeg > RISING_PHASE_DEG) rising += 1;
-        if (changeDeg > highest.changeDeg) highest = { changeDeg, text: `${term.name}, ${inWords(edition, place)}` };
+        if (changeDeg > highest.changeDeg) highest = { changeDeg, text: `${term.name}, ${inWords(edition, place)}`, point: pointIndex(edition, place, 0) };
       }
     if (highest.text === '') return [];
     const verdict: QualityVerdict = highest.changeDeg > RISING_PHASE_DEG ? 'fail' : 'pass';
     const detail = `The phase changes by at most ${degreesText(highest.changeDeg)} across the given band (${highest.text}); it must fall`;
-    return [{ check: 'phase-slope', verdict, detail, cellId: cell.id, value: highest.changeDeg, limit: RISING_PHASE_DEG }];
+    return [{ check: 'phase-slope', verdict, detail, cellId: cell.id, value: highest.changeDeg, limit: RISING_PHASE_DEG, point: highest.point, isWholeCurve: true }];
   });
   return [...findings, familySlope(curves, rising, subject)];
 }
 
-function familySlope(curves: number, rising: number, { edition }: QualitySubject): QualityFinding {
+function familySlope(curves: number, rising: number, { edition }: QualitySubject): PointedFinding {
   if (curves === 0) return { check: 'phase-slope', verdict: 'not-evaluated', detail: 'No curve has enough points for a slope' };
   const suspects = 2 * rising > curves ? `: the time convention ${edition.description.timeConvention} is probably the other one` : '';
   return { check: 'phase-slope', verdict: rising === 0 ? 'pass' : 'fail', detail: `The phase rises with frequency on ${rising} of ${curves} curves${suspects}`, value: rising, limit: 0 };

@@ -6,7 +6,7 @@ import { amplitudeRatioToDb } from '../units/decibels';
 import { degreesText } from './angle-text';
 import { groundedSlabReflection } from './grid-model';
 import { curvePlaces, inGHz, pointIndex, termAt } from './cell-quality-subject';
-import type { CurvePlace, JudgedTerm, QualitySubject } from './cell-quality-subject';
+import type { CurvePlace, JudgedTerm, PointedFinding, QualitySubject } from './cell-quality-subject';
 
 /** Noise of -40 dB moves a phase by about 0.6 degrees, of -26 dB by 3. */
 export const NOISE_WARN_DB = -40;
@@ -55,7 +55,7 @@ function roughness({ edition, judged }: QualitySubject, place: CurvePlace, term:
  * Whether phases are given at the top of the slab: the smallest patch must reflect nearly as the bare slab does. A constant
  * lag is a plane in front of it, 2 k0 times the distance.
  */
-export function checkReferencePlane(subject: QualitySubject): QualityFinding[] {
+export function checkReferencePlane(subject: QualitySubject): PointedFinding[] {
   const { edition, judged, designIndex, terms } = subject;
   const unjudged = (detail: string): QualityFinding[] => [{ check: 'reference-plane', verdict: 'not-evaluated', detail }];
   const normal = edition.responses.thetasRad.findIndex((thetaRad) => thetaRad === 0);
@@ -75,7 +75,7 @@ export function checkReferencePlane(subject: QualitySubject): QualityFinding[] {
   const side = offsetMm > 0 ? 'above' : 'below';
   const detail = `The smallest patch (${edition.cells[cell].id}) lags the bare slab by ${degreesText(deg)} at ${inGHz(frequencyHz)}`;
   const meaning = isOff ? `: the reference plane seems to lie ${Math.abs(offsetMm).toFixed(2)} mm ${side} the patches` : '';
-  return [{ check: 'reference-plane', verdict: isOff ? 'warn' : 'pass', detail: `${detail}${meaning}`, value: deg, limit: REFERENCE_PLANE_WARN_DEG }];
+  return [{ check: 'reference-plane', verdict: isOff ? 'warn' : 'pass', detail: `${detail}${meaning}`, value: deg, limit: REFERENCE_PLANE_WARN_DEG, point }];
 }
 
 /** The smallest cell of a family of plain patches, when it is small enough; null otherwise. */

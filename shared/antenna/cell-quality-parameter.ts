@@ -4,7 +4,7 @@ import type { QualityFinding, QualityVerdict } from '../model/cell-family';
 import { degFromRad, positiveDeg, wrapRad } from '../units/angles';
 import { degreesText } from './angle-text';
 import { inGHz, inWords, pointIndex, termAt } from './cell-quality-subject';
-import type { JudgedTerm, QualitySubject } from './cell-quality-subject';
+import type { JudgedTerm, PointedFinding, QualitySubject } from './cell-quality-subject';
 
 /** A reflecting panel wants a turn; with 300 degrees the worst phase error of a cell is 30. */
 export const PHASE_RANGE_WARN_DEG = 300;
@@ -112,22 +112,29 @@ export function largestGapDeg(phasesDeg: readonly number[]): number {
  * Cells whose phase lies outside that of their neighbours in size over most of the band: a file that belongs to another cell, a
  * reference plane of its own. The middle value over the band counts, since near a resonance the sizes may be too coarse to compare.
  */
-export function checkOutliers(subject: QualitySubject): QualityFinding[] {
+export function checkOutliers(subject: QualitySubject): PointedFinding[] {
   const { edition } = subject;
-  const worst = edition.cells.map(() => ({ deg: -1, text: '' }));
+  const worst = edition.cells.map((): WorstOutside => ({ deg: -1, text: '', point: 0 }));
   edition.description.parameters.forEach((_, parameter) => {
     for (const cells of parameterLines(subject, parameter)) for (const view of judgedViews(subject)) judgeLine(subject, cells, view, worst);
   });
-  return edition.cells.map((cell, index): QualityFinding => {
-    const { deg, text } = worst[index];
+  return edition.cells.map((cell, index): PointedFinding => {
+    const { deg, text, point } = worst[index];
     if (deg < 0) return { check: 'outlier', verdict: 'not-evaluated', detail: 'The cell has no neighbours on both sides in any parameter', cellId: cell.id };
     const verdict: QualityVerdict = deg > OUTLIER_FAIL_DEG ? 'fail' : deg > OUTLIER_WARN_DEG ? 'warn' : 'pass';
     const detail = deg === 0 ? 'Its phases lie between those of the neighbours in size' : `Over the band its phase lies ${degreesText(deg)} outside those of the neighbours in size (${text})`;
-    return { check: 'outlier', verdict, detail, cellId: cell.id, value: deg, limit: OUTLIER_FAIL_DEG };
+    return { check: 'outlier', verdict, detail, cellId: cell.id, value: deg, limit: OUTLIER_FAIL_DEG, point, isWholeCurve: true };
   });
 }
 
-function judgeLine(subject: QualitySubject, cells: readonly number[], view: JudgedView, worst: { deg: number; text: string }[]): void {
+/** How far a cell lies outside its neighbours, in which view, and a point of that curve. */
+interface WorstOutside {
+  readonly deg: number;
+  readonly text: string;
+  readonly point: number;
+}
+
+function judgeLine(subject: QualitySubject, cells: readonly number[], view: JudgedView, worst: WorstOutside[]): void {
   const outsideOf = new Map<number, number[]>();
   subject.edition.responses.frequenciesHz.forEach((_, frequency) => {
     const phases = phasesOf(subject, cells, view, frequency);
@@ -139,7 +146,7 @@ function judgeLine(subject: QualitySubject, cells: readonly number[], view: Judg
   });
   for (const [cell, outsideRad] of outsideOf) {
     const deg = degFromRad(median(outsideRad));
-    if (deg > worst[cell].deg) worst[cell] = { deg, text: `${view.term.name}, ${inWords(subject.edition, view)}` };
+    if (deg > worst[cell].deg) worst[cell] = { deg, text: `${view.term.name}, ${inWords(subject.edition, view)}`, point: pointIndex(subject.edition, { ...view, cell }, 0) };
   }
 }
 

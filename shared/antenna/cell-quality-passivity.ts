@@ -1,7 +1,6 @@
-import type { QualityFinding } from '../model/cell-family';
 import { amplitudeRatioToDb } from '../units/decibels';
 import { curvePlaces, inGHz, inWords, NUMBERS_PER_POINT, pointIndex } from './cell-quality-subject';
-import type { QualitySubject } from './cell-quality-subject';
+import type { PointedFinding, QualitySubject } from './cell-quality-subject';
 
 /** A calibration drifts by about a tenth of a decibel; more than that above 1 is a fault. */
 export const PASSIVITY_LIMIT_DB = 0.1;
@@ -9,10 +8,10 @@ export const PASSIVITY_LIMIT_DB = 0.1;
 const PRINTED_DIGITS_DB = 1e-5;
 
 /** A cell without a source cannot return more power than comes in: no singular value of S exceeds 1. */
-export function checkPassivity(subject: QualitySubject): QualityFinding[] {
+export function checkPassivity(subject: QualitySubject): PointedFinding[] {
   const { edition, judged } = subject;
   return edition.cells.flatMap((cell, index) => {
-    let worst = { singular: -1, text: '' };
+    let worst = { singular: -1, text: '', point: 0 };
     let above = 0;
     let points = 0;
     for (const place of curvePlaces(edition, index))
@@ -22,13 +21,13 @@ export function checkPassivity(subject: QualitySubject): QualityFinding[] {
         points += 1;
         const singular = largestSingularValue(edition.responses.values, point * NUMBERS_PER_POINT);
         if (amplitudeRatioToDb(singular) > PRINTED_DIGITS_DB) above += 1;
-        if (singular > worst.singular) worst = { singular, text: `${inGHz(frequencyHz)}, ${inWords(edition, place)}` };
+        if (singular > worst.singular) worst = { singular, text: `${inGHz(frequencyHz)}, ${inWords(edition, place)}`, point };
       });
     if (points === 0) return [];
     const db = amplitudeRatioToDb(worst.singular);
     const verdict = db > PASSIVITY_LIMIT_DB ? 'fail' : db > PRINTED_DIGITS_DB ? 'warn' : 'pass';
     const detail = `Largest singular value of S ${worst.singular.toFixed(4)} (${db.toFixed(2)} dB) at ${worst.text}; above 1 at ${above} of ${points} points`;
-    return [{ check: 'passivity', verdict, detail, cellId: cell.id, value: db, limit: PASSIVITY_LIMIT_DB }];
+    return [{ check: 'passivity', verdict, detail, cellId: cell.id, value: db, limit: PASSIVITY_LIMIT_DB, point: worst.point }];
   });
 }
 

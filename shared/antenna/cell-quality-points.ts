@@ -1,13 +1,13 @@
 import type { QualityFinding } from '../model/cell-family';
 import { curvePlaces, inGHz, inWords, markRegion, pointIndex } from './cell-quality-subject';
-import type { CurvePlace, QualitySubject } from './cell-quality-subject';
+import type { CurvePlace, PointedFinding, QualitySubject } from './cell-quality-subject';
 
 /** Above this share of missing points a curve is no longer interpolated but invented. */
 const MISSING_SHARE_LIMIT = 0.1;
 const LISTED_FREQUENCIES = 10;
 
 /** Points of the grid that were never given, outside excluded regions. A gap at the design frequency fails. */
-export function checkMissingPoints({ edition, excluded, designIndex }: QualitySubject): QualityFinding[] {
+export function checkMissingPoints({ edition, excluded, designIndex }: QualitySubject): PointedFinding[] {
   return edition.cells.map((cell, index) => {
     const missing = curvePlaces(edition, index).flatMap((place) => missingAt(place));
     const total = curvePlaces(edition, index).length * edition.responses.frequenciesHz.length;
@@ -19,10 +19,10 @@ export function checkMissingPoints({ edition, excluded, designIndex }: QualitySu
     const more = frequencies.length > LISTED_FREQUENCIES ? ' and more' : '';
     const design = atDesign > 0 ? '; the design frequency is among them' : '';
     const detail = missing.length === 0 ? `All ${total} points are given` : `${missing.length} of ${total} points are missing: ${listed.join(', ')}${more}${design}`;
-    return { check: 'missing-points', verdict, detail, cellId: cell.id, value: missing.length, limit: 0 };
+    return { check: 'missing-points', verdict, detail, cellId: cell.id, value: missing.length, limit: 0, ...(missing.length === 0 ? {} : { point: missing[0].point, isWholeCurve: true as const }) };
   });
 
-  function missingAt(place: CurvePlace): { readonly frequency: number }[] {
+  function missingAt(place: CurvePlace): { readonly frequency: number; readonly point: number }[] {
     return Array.from(edition.responses.frequenciesHz, (_, frequency) => ({ frequency, point: pointIndex(edition, place, frequency) })).filter(
       ({ point }) => edition.responses.present[point] === 0 && excluded[point] === 0,
     );

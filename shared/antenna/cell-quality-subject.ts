@@ -1,4 +1,5 @@
 import type { CellEdition, FamilyDescription, QualityFinding } from '../model/cell-family';
+import type { RepeatedCurve } from '../model/response-origin';
 import { degFromRad } from '../units/angles';
 
 /** The terms whose phase a panel uses, with the number of the term in S11, S21, S12, S22. */
@@ -25,21 +26,29 @@ export interface QualitySubject {
   readonly hasTwoModes: boolean;
   /** Grid frequency nearest to the design frequency; null when the band does not hold it. */
   readonly designIndex: number | null;
+  /** Cells measured again. */
+  readonly repeats: readonly RepeatedCurve[];
+}
+
+/** A finding with the place in the table that it speaks of: a point, or any point of a curve as a whole. */
+export interface PointedFinding extends QualityFinding {
+  readonly point?: number;
+  readonly isWholeCurve?: true;
 }
 
 /** A check looks at the whole edition; findings with a `cellId` go to that cell. */
-export type QualityCheck = (subject: QualitySubject) => readonly QualityFinding[];
+export type QualityCheck = (subject: QualitySubject) => readonly PointedFinding[];
 
 export const NUMBERS_PER_POINT = 8;
 /** Angles and lengths come from decimals in files; this is far below any real step and above their rounding. */
 const SAME = 1e-6;
 
-export function prepareSubject(edition: CellEdition): QualitySubject {
+export function prepareSubject(edition: CellEdition, repeats: readonly RepeatedCurve[] = []): QualitySubject {
   const excluded = excludedPoints(edition);
   const judged = edition.responses.present.map((flag, i) => (flag === 1 && excluded[i] === 0 ? 1 : 0));
   const { ports, operation } = edition.description;
   const hasTwoModes = ports === 'x-and-y' || ports === 'te-and-tm';
-  return { edition, judged, excluded, hasTwoModes, terms: judgedTerms(ports, operation), designIndex: designIndex(edition) };
+  return { edition, judged, excluded, repeats, hasTwoModes, terms: judgedTerms(ports, operation), designIndex: designIndex(edition) };
 }
 
 function judgedTerms(ports: FamilyDescription['ports'], operation: FamilyDescription['operation']): readonly JudgedTerm[] {

@@ -98,7 +98,7 @@ describe('judging a clean edition', () => {
   });
 
   it('lists every check it runs under a name of the report', () => {
-    const report = judgeEdition(sample({ description: { excludedRegions: [{ reason: 'edge', fromGHz: 15 }] } }));
+    const report = judgeEdition(sample({ description: { provenance: 'measured', excludedRegions: [{ reason: 'edge', fromGHz: 15 }] } }));
     const names = new Set([...report.family, ...report.cells.flatMap((cell) => cell.findings)].map(({ check }) => check));
     expect([...names].sort()).toEqual(CELL_CHECKS.flatMap(({ finds }) => finds).sort());
   });
@@ -108,6 +108,39 @@ describe('judging a clean edition', () => {
     expect(troubled(report, 'fail')).toEqual([]);
     expect(findings(report, 'phase-slope').find(({ cellId }) => cellId === undefined)?.detail).toBe('The phase rises with frequency on 0 of 60 curves');
     expect(findings(report, 'coverage')[0].detail).toMatch(/2 x 1 incidences up to θ 30°, φ 0°/);
+  });
+});
+
+describe('findings and the files they speak of', () => {
+  const perCell = FREQUENCIES_HZ.length;
+  const origin = {
+    fileOfCurve: SIZES_MM.map((_, cell) => (cell === 3 ? null : `cell-${cell}.s1p`)),
+    // The first record of every file stands on line 5.
+    lineOfPoint: Int32Array.from({ length: SIZES_MM.length * perCell }, (_, point) => 5 + (point % perCell)),
+    repeats: [],
+  };
+  const placeOf = (report: QualityReport, check: string, cell: number) => findings(report, check).filter(({ cellId }) => cellId === `cell-${cell}`).map(({ file, line }) => [file, line]);
+
+  it('have file and line where they speak of one point', () => {
+    const loud = damage(sample(), CELL, { from: 20, to: 21, gain: 1.5 });
+    expect(placeOf(judgeEdition(loud, origin), 'passivity', CELL)).toEqual([['cell-7.s1p', 25]]);
+    const stepped = damage(sample(), CELL, { from: 22, turnDeg: -47 });
+    expect(placeOf(judgeEdition(stepped, origin), 'phase-jump', CELL)).toEqual([['cell-7.s1p', 27]]);
+  });
+
+  it('have the file alone where they speak of a whole curve or cell', () => {
+    const turned = judgeEdition(damage(sample(), CELL, { turnDeg: 90 }), origin);
+    expect(placeOf(turned, 'outlier', CELL)).toEqual([['cell-7.s1p', undefined]]);
+    expect(placeOf(turned, 'noise', CELL)).toEqual([['cell-7.s1p', undefined]]);
+    const present = sample().responses.present.map((flag, point) => (point === CELL * perCell + 3 ? 0 : flag));
+    const gap = judgeEdition({ ...sample(), responses: { ...sample().responses, present } }, origin);
+    expect(placeOf(gap, 'missing-points', CELL)).toEqual([['cell-7.s1p', undefined]]);
+  });
+
+  it('have none where no file gave the curve, or where the origin is not known', () => {
+    expect(placeOf(judgeEdition(sample(), origin), 'passivity', 3)).toEqual([[undefined, undefined]]);
+    expect(placeOf(judgeEdition(sample()), 'passivity', CELL)).toEqual([[undefined, undefined]]);
+    expect(judgeEdition(sample(), origin).family.every(({ file }) => file === undefined || file === 'cell-0.s1p')).toBe(true);
   });
 });
 

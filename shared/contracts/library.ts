@@ -43,6 +43,8 @@ const named = <T extends z.ZodRawShape>(shape: T) => z.array(z.strictObject({ fi
 /** A person's decisions about an import; every part is optional, detection fills the rest. */
 export const importMapping = z.strictObject({
   ignoredFiles: z.array(fileName).max(10_000).optional(),
+  /** Files that measure cells again: they are compared with the first measurement (check `repeatability`), not put into the table. */
+  repeatFiles: z.array(fileName).max(10_000).optional(),
   /** Option lines for files that have none, such as `# GHz S RI R 50`. */
   optionLines: named({ optionLine: text.max(200) }).optional(),
   /** Cut-off files of which only the first complete records are kept: a recorded choice. */

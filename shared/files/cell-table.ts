@@ -164,5 +164,6 @@ function toCurve(group: CurveRows, portCount: number, file: { readonly name: str
     portCount,
     frequenciesHz: Float64Array.from(kept, (point) => point.frequencyHz),
     values: Float64Array.from(kept.flatMap((point) => point.terms)),
+    lines: Int32Array.from(kept, (point) => point.line),
   };
 }

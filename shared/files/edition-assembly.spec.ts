@@ -44,6 +44,35 @@ function refusal(files: readonly NamedFile[], change: Partial<FamilyDescription>
   return result.messages.map(({ text }) => text).join('\n');
 }
 
+describe('the origin of responses', () => {
+  it('names the file of every curve and the line of every point', () => {
+    const result = assembleEdition(inspectFamilyFiles(twoSides), description);
+    if (result.kind === 'refused') throw new Error('refused');
+    const { fileOfCurve, lineOfPoint, repeats } = result.origin;
+    // One comment and the option line stand above the first record; a has no second frequency.
+    expect([fileOfCurve, Array.from(lineOfPoint), repeats]).toEqual([['a.s1p', 'b.s1p'], [3, 0, 3, 4], []]);
+  });
+
+  it('holds a repeated measurement as the table would: conjugated where the table is', () => {
+    const repeat = network('b2.s1p', ['side_mm = 4', 'cell_id = b'], '10 0.11 0.21\n11 0.31 0.41\n');
+    const result = assembleEdition(inspectFamilyFiles([...twoSides, repeat], { repeatFiles: ['b2.s1p'] }), { ...description, timeConvention: 'exp(-jwt)' });
+    if (result.kind === 'refused') throw new Error(JSON.stringify(result.messages));
+    expect(result.edition.cells.map(({ id }) => id)).toEqual(['a', 'b']);
+    expect(Array.from(result.edition.responses.values.subarray(24, 26))).toEqual([0.3, -0.4]);
+    expect(result.origin.repeats).toEqual([
+      {
+        file: 'b2.s1p',
+        cell: 1,
+        theta: 0,
+        phi: 0,
+        frequenciesHz: Float64Array.of(10e9, 11e9),
+        values: Float64Array.of(0.11, -0.21, 0, -0, 0, -0, 0.11, -0.21, 0.31, -0.41, 0, -0, 0, -0, 0.31, -0.41).map((value) => value + 0),
+        lines: Int32Array.of(4, 5),
+      },
+    ]);
+  });
+});
+
 describe('assembleEdition', () => {
   it('sorts cells by parameter, repeats a one-port in S22 and marks what was not given', () => {
     const { edition, said } = assembled(twoSides);

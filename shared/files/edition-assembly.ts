@@ -1,11 +1,12 @@
 import type { CellEdition, CellEntry, FamilyDescription } from '../model/cell-family';
+import type { RepeatedCurve, ResponseOrigin } from '../model/response-origin';
 import { parameterId } from './family-facts';
 import type { FamilyCurve, InspectedFamily } from './family-inspection';
 import { FileFaults } from './file-faults';
 import type { FileMessage } from './file-message';
 
 export type AssemblyResult =
-  | { readonly kind: 'edition'; readonly edition: CellEdition; readonly messages: readonly FileMessage[] }
+  | { readonly kind: 'edition'; readonly edition: CellEdition; readonly origin: ResponseOrigin; readonly messages: readonly FileMessage[] }
   | { readonly kind: 'refused'; readonly messages: readonly FileMessage[] };
 
 /** Points [cell][theta][phi][frequency] of one edition; each takes 65 bytes. */
@@ -19,22 +20,25 @@ const NUMBERS_PER_POINT = 8;
  */
 export function assembleEdition(family: InspectedFamily, description: FamilyDescription): AssemblyResult {
   const faults = new FileFaults();
-  const { inspection, curves } = family;
+  const { inspection, curves, repeats } = family;
   const blocking = inspection.messages.filter((message) => message.severity === 'error');
   for (const message of blocking) faults.add('error', message);
   if (faults.hasErrors) return { kind: 'refused', messages: faults.messages() };
   const parameterOrder = orderParameters(family, description, faults);
-  checkPorts(curves, description, faults);
+  checkPorts([...curves, ...repeats], description, faults);
   checkTimeConvention(family, description, faults);
   const cells = parameterOrder === null ? [] : entriesOf(curves, parameterOrder, faults);
   const grid = gridOf(curves, cells);
   const size = cells.length * grid.thetasDeg.length * grid.phisDeg.length * grid.frequenciesHz.length;
   if (size > MOST_GRID_POINTS) faults.error(0, `The grid of cells, angles and frequencies has ${size} points; at most ${MOST_GRID_POINTS} are kept`, 'Bring the files to common frequencies, or publish the family in parts');
   if (faults.hasErrors) return { kind: 'refused', messages: faults.messages() };
-  const responses = fillGrid(curves, cells, grid, description.timeConvention === 'exp(-jwt)');
+  const isConjugated = description.timeConvention === 'exp(-jwt)';
+  const places = placesOf(cells, grid);
+  const { responses, fileOfCurve, lineOfPoint } = fillGrid(curves, places, isConjugated);
+  const origin = { fileOfCurve, lineOfPoint, repeats: repeats.map((curve) => repeatedCurve(curve, places, isConjugated)) };
   const given = responses.present.reduce((count, flag) => count + flag, 0);
   if (given < size) faults.notice(0, `${size - given} of ${size} points of the grid are not given`);
-  return { kind: 'edition', edition: { description, cells, responses }, messages: faults.messages() };
+  return { kind: 'edition', edition: { description, cells, responses }, origin, messages: faults.messages() };
 }
 
 /** For each parameter of the description the detected name it takes: by name, or by order when the counts agree. */
@@ -109,24 +113,67 @@ function distinct(values: readonly number[]): number[] {
   return [...new Set(values)].sort((a, b) => a - b);
 }
 
-function fillGrid(curves: readonly FamilyCurve[], cells: readonly CellEntry[], grid: Grid, isConjugated: boolean): CellEdition['responses'] {
-  const place = (list: readonly (number | string)[]) => new Map(list.map((value, i) => [value, i]));
-  const cellAt = place(cells.map(({ id }) => id));
-  const [thetaAt, phiAt, frequencyAt] = [place(grid.thetasDeg), place(grid.phisDeg), place(grid.frequenciesHz)];
-  const size = cells.length * grid.thetasDeg.length * grid.phisDeg.length * grid.frequenciesHz.length;
+/** A grid with the place of each of its values. */
+interface GridPlaces {
+  readonly grid: Grid;
+  readonly cellCount: number;
+  readonly cellAt: ReadonlyMap<string, number>;
+  readonly thetaAt: ReadonlyMap<number, number>;
+  readonly phiAt: ReadonlyMap<number, number>;
+  readonly frequencyAt: ReadonlyMap<number, number>;
+}
+
+function placesOf(cells: readonly CellEntry[], grid: Grid): GridPlaces {
+  const place = <Value>(list: readonly Value[]): ReadonlyMap<Value, number> => new Map(list.map((value, i) => [value, i]));
+  return {
+    grid,
+    cellCount: cells.length,
+    cellAt: place(cells.map(({ id }) => id)),
+    thetaAt: place(grid.thetasDeg),
+    phiAt: place(grid.phisDeg),
+    frequencyAt: place(grid.frequenciesHz),
+  };
+}
+
+const placeOf = (curve: FamilyCurve, { cellAt, thetaAt, phiAt }: GridPlaces): { cell: number; theta: number; phi: number } => ({
+  cell: cellAt.get(curve.cellId) ?? 0,
+  theta: thetaAt.get(curve.thetaDeg) ?? 0,
+  phi: phiAt.get(curve.phiDeg) ?? 0,
+});
+
+interface FilledGrid extends Pick<ResponseOrigin, 'fileOfCurve' | 'lineOfPoint'> {
+  readonly responses: CellEdition['responses'];
+}
+
+function fillGrid(curves: readonly FamilyCurve[], places: GridPlaces, isConjugated: boolean): FilledGrid {
+  const { grid, cellCount, frequencyAt } = places;
+  const curveCount = cellCount * grid.thetasDeg.length * grid.phisDeg.length;
+  const size = curveCount * grid.frequenciesHz.length;
   const values = new Float64Array(size * NUMBERS_PER_POINT);
   const present = new Uint8Array(size);
+  const lineOfPoint = new Int32Array(size);
+  const fileOfCurve = new Array<string | null>(curveCount).fill(null);
   for (const curve of curves) {
-    const cell = cellAt.get(curve.cellId) ?? 0;
-    const row = (cell * grid.thetasDeg.length + (thetaAt.get(curve.thetaDeg) ?? 0)) * grid.phisDeg.length + (phiAt.get(curve.phiDeg) ?? 0);
+    const { cell, theta, phi } = placeOf(curve, places);
+    const row = (cell * grid.thetasDeg.length + theta) * grid.phisDeg.length + phi;
+    fileOfCurve[row] = curve.file;
     curve.frequenciesHz.forEach((frequencyHz, i) => {
       const point = row * grid.frequenciesHz.length + (frequencyAt.get(frequencyHz) ?? 0);
       present[point] = 1;
+      lineOfPoint[point] = curve.lines?.[i] ?? 0;
       writeTerms(values, point * NUMBERS_PER_POINT, { curve, index: i, sign: isConjugated ? -1 : 1 });
     });
   }
   const radians = (degrees: readonly number[]) => Float64Array.from(degrees, (value) => (value * Math.PI) / 180);
-  return { cellCount: cells.length, frequenciesHz: Float64Array.from(grid.frequenciesHz), thetasRad: radians(grid.thetasDeg), phisRad: radians(grid.phisDeg), values, present };
+  const responses = { cellCount, frequenciesHz: Float64Array.from(grid.frequenciesHz), thetasRad: radians(grid.thetasDeg), phisRad: radians(grid.phisDeg), values, present };
+  return { responses, fileOfCurve, lineOfPoint };
+}
+
+/** A repeat in the order and the time convention of the table. */
+function repeatedCurve(curve: FamilyCurve, places: GridPlaces, isConjugated: boolean): RepeatedCurve {
+  const values = new Float64Array(curve.frequenciesHz.length * NUMBERS_PER_POINT);
+  curve.frequenciesHz.forEach((_, index) => writeTerms(values, index * NUMBERS_PER_POINT, { curve, index, sign: isConjugated ? -1 : 1 }));
+  return { file: curve.file, ...placeOf(curve, places), frequenciesHz: curve.frequenciesHz, values, lines: curve.lines ?? new Int32Array(0) };
 }
 
 /** S11, S21, S12, S22 of one point from the row-by-row order of a curve; a one-port stands in both diagonal places. */

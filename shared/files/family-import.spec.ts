@@ -14,6 +14,29 @@ function said(family: InspectedFamily): string {
   return family.inspection.messages.map((m) => `${m.severity}: ${m.text}`).join('\n');
 }
 
+describe('a cell measured twice', () => {
+  const files = [file('a.s1p', network(['a_mm = 1', 'cell_id = A'])), file('again.s1p', network(['a_mm = 1', 'cell_id = A'], '10 0.1 0.21\n'))];
+
+  it('is refused with both ways out until a person says which', () => {
+    const { inspection } = inspectFamilyFiles(files);
+    expect(inspection.messages).toContainEqual(
+      expect.objectContaining({ severity: 'error', text: 'a.s1p and again.s1p both describe A at theta 0 deg, phi 0 deg', suggestion: 'Leave one of them aside, or say that it measures the cell again' }),
+    );
+  });
+
+  it('is kept apart from the family once the second file is said to measure it again', () => {
+    const { inspection, curves, repeats } = inspectFamilyFiles(files, { repeatFiles: ['again.s1p'] });
+    expect(inspection.messages.filter(({ severity }) => severity === 'error')).toEqual([]);
+    expect([curves, repeats].map((list) => list.map((curve) => [curve.file, Array.from(curve.lines ?? [])]))).toEqual([[['a.s1p', [4, 5]]], [['again.s1p', [4]]]]);
+    expect(inspection.detected.frequencyCount).toBe(2);
+  });
+
+  it('needs a first measurement', () => {
+    const alone = inspectFamilyFiles([files[0], file('other.s1p', network(['a_mm = 2', 'cell_id = B']))], { repeatFiles: ['other.s1p'] });
+    expect(said(alone)).toContain('error: other.s1p is to measure B at theta 0 deg, phi 0 deg again, but no other file measures that');
+  });
+});
+
 describe('inspectFamilyFiles', () => {
   it('detects parameters, angles, ports, provenance and time convention from comments', () => {
     const comments = (side: number, theta: number) => [

@@ -56,10 +56,13 @@ export function inspectFamilyFiles(files: readonly NamedFile[], mapping: FamilyM
     else job.files.push(plainEntry(file, 'other', 'ignored', [{ severity: 'notice', line: 0, text: 'Neither a response nor a description; kept aside' }]));
   }
   checkIndex(job);
+  const repeated = new Set(mapping.repeatFiles ?? []);
+  const curves = job.curves.filter(({ file }) => !repeated.has(file));
+  const repeats = job.curves.filter(({ file }) => repeated.has(file));
   const detected = summariseFamily(
     {
       files: job.files,
-      curves: job.curves,
+      curves,
       surroundings: job.surroundings,
       description: job.description,
       ...(mapping.parameterNames === undefined ? {} : { parameterNames: mapping.parameterNames }),
@@ -67,8 +70,9 @@ export function inspectFamilyFiles(files: readonly NamedFile[], mapping: FamilyM
     },
     job.faults,
   );
-  reportGaps(job);
-  return { inspection: { files: job.files, detected, messages: job.faults.messages() }, curves: job.curves };
+  reportGaps(job, curves);
+  reportLoneRepeats(repeats, curves, job.faults);
+  return { inspection: { files: job.files, detected, messages: job.faults.messages() }, curves, repeats };
 }
 
 function isTable(file: NamedFile): boolean {
@@ -149,6 +153,7 @@ function inspectNetwork(file: NamedFile, job: Import): void {
     portCount: data.portCount,
     frequenciesHz: data.frequenciesHz,
     values: scattering.values,
+    ...(data.recordLines === undefined ? {} : { lines: data.recordLines }),
   });
 }
 
@@ -220,7 +225,7 @@ function checkIndex({ index, files, faults }: Import): void {
   if (unlisted.length > 0) faults.warn(0, `${unlisted.length} file(s) are not in the index: ${unlisted.slice(0, 5).join(', ')}`);
 }
 
-function reportGaps({ files, curves, faults }: Import): void {
+function reportGaps({ files, faults }: Import, curves: readonly FamilyCurve[]): void {
   const networks = files.filter((file) => file.kind === 'touchstone' && file.status === 'read');
   const refused = files.filter((file) => file.status === 'refused');
   if (curves.length === 0) faults.error(0, 'No file holds a response of a cell');
@@ -230,14 +235,23 @@ function reportGaps({ files, curves, faults }: Import): void {
   const bare = networks.filter((file) => file.parameters.length === 0);
   if (bare.length > 0) faults.error(0, `${bare.length} file(s) name no parameter of the cell: ${bare.slice(0, 5).map((file) => file.name).join(', ')}`, 'Give the parameters by hand or in an index.csv');
   const clashes = sameCurve(curves);
-  for (const [a, b] of clashes.slice(0, 5)) faults.error(0, `${a.file} and ${b.file} both describe ${a.cellId} at theta ${a.thetaDeg} deg, phi ${a.phiDeg} deg`, 'Leave one of them aside');
+  for (const [a, b] of clashes.slice(0, 5)) faults.error(0, `${a.file} and ${b.file} both describe ${a.cellId} at theta ${a.thetaDeg} deg, phi ${a.phiDeg} deg`, 'Leave one of them aside, or say that it measures the cell again');
+}
+
+const curveKey = ({ cellId, thetaDeg, phiDeg }: FamilyCurve): string => JSON.stringify([cellId, thetaDeg, phiDeg]);
+
+/** A second measurement needs a first one. */
+function reportLoneRepeats(repeats: readonly FamilyCurve[], curves: readonly FamilyCurve[], faults: FileFaults): void {
+  const first = new Set(curves.map(curveKey));
+  for (const repeat of repeats.filter((curve) => !first.has(curveKey(curve))).slice(0, 5))
+    faults.error(0, `${repeat.file} is to measure ${repeat.cellId} at theta ${repeat.thetaDeg} deg, phi ${repeat.phiDeg} deg again, but no other file measures that`, 'Take it as a first measurement, or leave it aside');
 }
 
 function sameCurve(curves: readonly FamilyCurve[]): (readonly [FamilyCurve, FamilyCurve])[] {
   const seen = new Map<string, FamilyCurve>();
   const clashes: (readonly [FamilyCurve, FamilyCurve])[] = [];
   for (const curve of curves) {
-    const key = JSON.stringify([curve.cellId, curve.thetaDeg, curve.phiDeg]);
+    const key = curveKey(curve);
     const before = seen.get(key);
     if (before !== undefined) clashes.push([before, curve]);
     else seen.set(key, curve);

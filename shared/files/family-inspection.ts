@@ -114,6 +114,8 @@ export interface CellTableMapping {
 export interface FamilyMapping {
   /** Files to leave aside. */
   readonly ignoredFiles?: readonly string[];
+  /** Files that measure cells again: they are compared with the first measurement and kept out of the table. */
+  readonly repeatFiles?: readonly string[];
   /** Option lines for files that have none, such as `# GHz S RI R 50`. */
   readonly optionLines?: readonly { readonly file: string; readonly optionLine: string }[];
   /** Cut-off files of which only the first complete records are kept: a recorded choice. */
@@ -149,10 +151,14 @@ export interface FamilyCurve {
   readonly frequenciesHz: Float64Array;
   /** re, im pairs in the order [frequency][row][column], as in the file: not yet conjugated. */
   readonly values: Float64Array;
+  /** Line of each frequency in the file, where known. */
+  readonly lines?: Int32Array;
 }
 
 /** The outcome of an inspection: the part that is shown, and the numbers it speaks of. */
 export interface InspectedFamily {
   readonly inspection: FamilyInspection;
   readonly curves: readonly FamilyCurve[];
+  /** Cells measured again: compared with the curves, not part of the family. */
+  readonly repeats: readonly FamilyCurve[];
 }

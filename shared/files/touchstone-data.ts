@@ -37,6 +37,8 @@ export interface TouchstoneData {
   readonly referenceOhm: readonly number[];
   readonly comments: readonly TouchstoneComment[];
   readonly noise?: TouchstoneNoise;
+  /** Line of each frequency, of a file that was read. */
+  readonly recordLines?: Int32Array;
 }
 
 export type TouchstoneResult =

@@ -76,6 +76,7 @@ function readBody(reading: Reading): TouchstoneResult {
     parameter: header.option.parameter,
     frequenciesHz: read.frequenciesHz,
     values: read.values,
+    recordLines: read.lines,
     referenceOhm: layout.referenceOhm,
     comments: reading.comments,
     ...(noise === undefined ? {} : { noise }),

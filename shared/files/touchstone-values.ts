@@ -22,6 +22,8 @@ export interface ValueLayout {
 export interface ReadValues {
   readonly frequenciesHz: Float64Array;
   readonly values: Float64Array;
+  /** Line of each frequency. */
+  readonly lines: Int32Array;
   /** Index of the first record that cannot be used, or infinity. */
   readonly firstBad: number;
 }
@@ -69,6 +71,7 @@ export function readValues(records: readonly TouchstoneRecord[], layout: ValueLa
   const size = recordSize(layout.portCount, layout.matrixFormat);
   const frequenciesHz = new Float64Array(records.length);
   const values = new Float64Array(records.length * width);
+  const lines = new Int32Array(records.length);
   const row = new Float64Array(width);
   let count = 0;
   let firstBad = Number.POSITIVE_INFINITY;
@@ -81,6 +84,7 @@ export function readValues(records: readonly TouchstoneRecord[], layout: ValueLa
     else if (frequencyHz > last) {
       frequenciesHz[count] = frequencyHz;
       values.set(row, count * width);
+      lines[count] = record.line;
       count += 1;
     } else if (frequencyHz === last && row.every((value, i) => value === values[(count - 1) * width + i])) {
       faults.warn(record.line, `The frequency ${frequencyHz} Hz stands twice with the same values; it was merged`);
@@ -89,7 +93,7 @@ export function readValues(records: readonly TouchstoneRecord[], layout: ValueLa
       reportOrder(record.line, frequencyHz, last, faults);
     }
   });
-  return { frequenciesHz: frequenciesHz.slice(0, count), values: values.slice(0, count * width), firstBad };
+  return { frequenciesHz: frequenciesHz.slice(0, count), values: values.slice(0, count * width), lines: lines.slice(0, count), firstBad };
 }
 
 function reportOrder(line: number, frequencyHz: number, lastHz: number, faults: FileFaults): void {

@@ -84,12 +84,13 @@ export const cellEntry = z.strictObject({
 export const qualityVerdict = z.enum(['pass', 'warn', 'fail', 'not-evaluated']);
 
 export const qualityFinding = z.strictObject({
-  /** Which check speaks: passivity, phase-range, largest-gap, missing-points, duplicate-points, phase-jump, outlier, phase-slope, coverage, excluded-region, reciprocity. */
+  /** Which check speaks: passivity, phase-range, largest-gap, missing-points, duplicate-points, phase-jump, outlier, phase-slope, coverage, excluded-region, reciprocity, noise, reference-plane, repeatability. */
   check: z.string(),
   verdict: qualityVerdict,
   /** What was found, with numbers and units. */
   detail: z.string(),
   cellId: z.string().optional(),
+  /** Where the numbers came from, as far as the finding speaks of one place. */
   file: z.string().optional(),
   line: z.number().int().optional(),
   value: z.number().optional(),

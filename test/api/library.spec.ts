@@ -70,6 +70,28 @@ describe('cell library', () => {
     expect(failing('passivity')).toEqual([expect.stringContaining('06.50')]);
     expect(failing('phase-jump')).toEqual([expect.stringContaining('08.20')]);
     expect(quality?.cells.find(({ cellId }) => cellId.includes('09.20'))?.findings.map(({ check }) => check)).toContain('missing-points');
+    const jump = quality?.cells.flatMap(({ findings }) => findings).find(({ check, verdict }) => check === 'phase-jump' && verdict === 'fail');
+    expect(jump).toMatchObject({ file: expect.stringContaining('08.20'), line: expect.any(Number) });
+    const at = / at ([\d.]+) GHz/.exec(jump?.detail ?? '')?.[1];
+    const text = cellFilesOf(folder).find(({ name }) => name === jump?.file)?.bytes.toString();
+    expect(Number(text?.split('\n')[(jump?.line ?? 0) - 1].trim().split(/\s+/)[0])).toBeCloseTo(Number(at), 3);
+  });
+
+  it('compares a cell that was measured again with its first measurement, and keeps it out of the table', async () => {
+    const files = cellFilesOf(FOUR);
+    const first = files.find(({ name }) => name.endsWith('.s1p'));
+    if (first === undefined) throw new Error('the family has no network file');
+    const others = files.filter(({ name }) => !/index\.csv$/.test(name));
+    const again = { name: 'again.s1p', bytes: first.bytes };
+    const corrections = [{ file: again.name, cellId: first.name.replace(/\.s1p$/, '') }];
+    const form = (mapping: object): FormData =>
+      uploadForm([...others, again], { inspection: { mapping: { corrections, ...mapping }, description: descriptionOf(FOUR) } });
+    const refused = (await inspect(form({}))).json as Inspection;
+    expect([refused.acceptable, refused.messages.some(({ text }) => text.includes('both describe'))]).toEqual([false, true]);
+    const { acceptable, quality, detected } = (await inspect(form({ repeatFiles: [again.name] }))).json as Inspection;
+    expect([acceptable, detected.cellCount]).toEqual([true, 4]);
+    const findings = quality?.cells.flatMap((cell) => cell.findings).filter(({ check }) => check === 'repeatability');
+    expect(findings).toEqual([expect.objectContaining({ verdict: 'pass', file: again.name, detail: expect.stringContaining('over 41 responses') })]);
   });
 
   it('names the file and the line of what it cannot read', async () => {

@@ -7,7 +7,7 @@ import type { MarkState } from '../ui/state-mark';
 const MARKS: Readonly<Record<FileMessage['severity'], MarkState>> = { error: 'falls-short', warning: 'stale', notice: 'meets' };
 const AT_FIRST = 30;
 
-/** What every file holds and what is wrong with it, with the decisions a person can take: leave out, keep what is complete, name the option line. */
+/** What every file holds and what is wrong with it, with the decisions a person can take: leave out, take as a second measurement, keep what is complete, name the option line. */
 @Component({
   selector: 'slant-file-findings',
   imports: [CheckField, StateMark],
@@ -38,6 +38,15 @@ export class FileFindings {
   protected setIgnored(name: string, ignored: boolean): void {
     const others = (this.mapping().ignoredFiles ?? []).filter((file) => file !== name);
     this.changed.emit({ ...this.mapping(), ignoredFiles: ignored ? [...others, name] : others });
+  }
+
+  protected isRepeat(name: string): boolean {
+    return this.mapping().repeatFiles?.includes(name) ?? false;
+  }
+
+  protected setRepeat(name: string, repeats: boolean): void {
+    const others = (this.mapping().repeatFiles ?? []).filter((file) => file !== name);
+    this.changed.emit({ ...this.mapping(), repeatFiles: repeats ? [...others, name] : others });
   }
 
   protected keepRecords(file: string, records: number): void {

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input, signal } from '@an
 import type { QualityReport } from '../../../shared/model/cell-family';
 import { CheckField } from '../ui/check-field';
 import { StateMark } from '../ui/state-mark';
-import { checkText, verdictMark, verdictText } from './verdict-words';
+import { checkText, originText, verdictMark, verdictText } from './verdict-words';
 
 const AT_FIRST = 40;
 
@@ -32,6 +32,7 @@ export class QualityList {
   protected readonly mark = verdictMark;
   protected readonly word = verdictText;
   protected readonly name = checkText;
+  protected readonly origin = originText;
 
   protected showMore(): void {
     this.limit.update((limit) => limit + 200);
