@@ -47,7 +47,7 @@ export function designFigures(state: IlluminatedState): DesignFigures {
     ...(state.vector && placed.vector ? { vector: vectorFigures(state.vector, placed.vector.form, beams) } : {}),
     uncertainty: radiates ? uncertainties(state, read.peakThetaDeg, peakUncertaintyDeg) : {},
     ...lawFigures(state),
-    ...transmissionFigures(state, read),
+    ...transmissionFigures(state, { ...read, ...(state.vector ? { cross: { pattern: state.vector.pattern.cross, gainOffsetDb: state.vector.gainOffsetDb } } : {}) }),
   };
   return { figures, gratingLobeCount: orders.reduce((sum, order) => sum + order.count, 0), maxIncidence };
 }
