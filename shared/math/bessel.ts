@@ -13,6 +13,15 @@ export function gamma(x: number): number {
   return Math.sqrt(2 * Math.PI) * Math.pow(t, x - 0.5) * Math.exp(-t) * sum;
 }
 
+let lastOrder = 0;
+let lastGamma = 1;
+
+/** gamma(order + 1), kept for the order last asked for: a table of Bessel functions asks for the same one at every z. */
+function gammaAfter(order: number): number {
+  if (order !== lastOrder) [lastOrder, lastGamma] = [order, gamma(order + 1)];
+  return lastGamma;
+}
+
 /**
  * gamma(order + 1) (2/z)^order J_order(z): the Bessel function of the first kind divided by its first series term,
  * so it is 1 at z = 0 and even in z.
@@ -24,7 +33,7 @@ export function gamma(x: number): number {
 export function besselRatio(order: number, z: number): number {
   const x = Math.abs(z);
   if (x * x < 12 * (order + 1)) return ascendingSeries(order, x);
-  const scale = gamma(order + 1) * Math.pow(2 / x, order);
+  const scale = gammaAfter(order) * Math.pow(2 / x, order);
   return scale * (x > Math.max(25, order * order * 0.75) ? hankelExpansion(order, x) : backwardRecurrence(order, x));
 }
 
