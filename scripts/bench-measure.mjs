@@ -12,17 +12,28 @@ function referenceEnvironment() {
   return { ...Object.fromEntries(Object.entries(process.env).filter(([name]) => !pinning.includes(name))), ...oneThread };
 }
 
-/** "numpy 2.1.0, scipy 1.14.0", or null where they are not to be had. */
-export function referenceVersions() {
+/** Debian's Python where it has scipy, else the one on the path. */
+const pythons = ['/usr/bin/python3', 'python3'];
+
+/** { python, versions } of the first Python that has numpy and scipy, or null. */
+export function findReference() {
   const code = 'import numpy, scipy; print(f"numpy {numpy.__version__}, scipy {scipy.__version__}")';
-  const { status, stdout } = spawnSync('python3', ['-c', code], { encoding: 'utf8', env: referenceEnvironment() });
-  return status === 0 ? stdout.trim() : null;
+  for (const python of pythons) {
+    const { status, stdout } = spawnSync(python, ['-c', code], { encoding: 'utf8', env: referenceEnvironment() });
+    if (status === 0) return { python, versions: stdout.trim() };
+  }
+  return null;
 }
 
 /** The reference, alive for the whole run so that its memory is as warm as ours. */
 export class Reference {
-  #child = spawn('python3', [join(import.meta.dirname, 'bench-reference.py')], { stdio: ['pipe', 'pipe', 'inherit'], env: referenceEnvironment() });
-  #lines = createInterface({ input: this.#child.stdout })[Symbol.asyncIterator]();
+  #child;
+  #lines;
+
+  constructor(python) {
+    this.#child = spawn(python, [join(import.meta.dirname, 'bench-reference.py')], { stdio: ['pipe', 'pipe', 'inherit'], env: referenceEnvironment() });
+    this.#lines = createInterface({ input: this.#child.stdout })[Symbol.asyncIterator]();
+  }
 
   async #ask(request) {
     this.#child.stdin.write(`${JSON.stringify(request)}\n`);
@@ -71,7 +82,11 @@ export function latencies(work, count) {
     work(i);
     times.push(performance.now() - started);
   }
+  return percentiles(times);
+}
+
+export function percentiles(times) {
   times.sort((a, b) => a - b);
   const at = (share) => times[Math.min(times.length - 1, Math.ceil(share * times.length) - 1)];
-  return { p50Ms: at(0.5), p95Ms: at(0.95) };
+  return { leastMs: times[0], p50Ms: at(0.5), p95Ms: at(0.95) };
 }

@@ -30,14 +30,20 @@ def cut():
   call: 'cut()',
 };
 
+/** From -90 to 90 degrees: the kernel gives every direction together with its opposite. */
 function exactCut(load) {
-  const { exactFarField } = load('antenna/exact-far-field');
-  const farField = exactFarField(panelField(100), wavenumber);
+  const { createKernelFourierEngine } = load('server/engine/kernel/kernel-fourier-engine');
+  const { grid, re, im } = panelField(100);
+  const engine = createKernelFourierEngine();
+  const sines = Float64Array.from({ length: 1801 }, (_, i) => Math.sin((i * 0.05 * Math.PI) / 180));
   const power = new Float64Array(3601);
   return () => {
-    for (let i = 0; i < power.length; i++) {
-      const sine = Math.sin(((i * 0.05 - 90) * Math.PI) / 180);
-      power[i] = farField.powerAt(sine * Math.cos(0.3), sine * Math.sin(0.3));
+    const stepXRad = sines.map((sine) => wavenumber * grid.stepXM * sine * Math.cos(0.3));
+    const stepYRad = sines.map((sine) => wavenumber * grid.stepYM * sine * Math.sin(0.3));
+    const sums = engine.latticeSums({ ...grid, re, im, stepXRad, stepYRad });
+    for (let i = 0; i <= 1800; i++) {
+      power[1800 + i] = sums.re[i] ** 2 + sums.im[i] ** 2;
+      power[1800 - i] = sums.oppositeRe[i] ** 2 + sums.oppositeIm[i] ** 2;
     }
     return power;
   };
@@ -89,10 +95,9 @@ function chooseStates(load) {
 
 export const rows = [
   {
-    name: 'cut by plain sums, 10⁴ cells at 3601 angles',
+    name: 'exact cut, 10⁴ cells at 3601 angles',
     against: 'numpy, separable',
     goal: { ratio: 0.7 },
-    rounds: 3,
     prepare: (load) => ({ work: exactCut(load), ...separableCut }),
   },
   {
