@@ -28,7 +28,7 @@ await runScript(async () => {
     forgetBuild('client'); // the development build takes its place
     running.push(watcher('ng', ['build', '--watch', '--configuration', 'development', '--progress=false']));
     await waitFor(() => existsSync(join(projectFolder, 'dist/client/index.html')), { seconds: 120 });
-    running.push(product.launchServer(['--watch']));
+    running.push(product.launchServer(['--watch']), product.launchWorker(['--watch']));
     if (await waitFor(() => product.isReady(), { seconds: 60 })) {
       console.log(`\nSlantwise is ready:  ${product.address}   (${product.demo ? `demonstration password ${product.demoPassword}` : 'no demonstration accounts'})\n`);
     }

@@ -10,6 +10,7 @@ import { Refusal, answers, commandLine, endProcess, isAlive, isFree, run } from 
 
 const entry = (name) => join(serverFolder, 'server', name);
 const mainFile = entry('main.js');
+const workerFile = entry('worker.js');
 
 export class Product {
   /** Opens the data folder and settles what a new one is to be: demo mode, passwords, keys. */
@@ -66,15 +67,17 @@ export class Product {
       throw new Refusal(`The data folder ${this.data.path} is in use by the instance at ${earlier.address} (process ${earlier.pid}).`);
     }
     if (earlier?.serverPid && commandLine(earlier.serverPid).includes(mainFile)) await endProcess(earlier.serverPid);
+    if (earlier?.workerPid && commandLine(earlier.workerPid).includes(workerFile)) await endProcess(earlier.workerPid);
     if (!(await isFree(this.port, this.host))) {
       const answering = (await answers(this.port)) ? 'Something else answers there already.' : 'It may not be used by this user.';
       throw new Refusal(`Port ${this.port} is not free. ${answering} Choose another, for example:\n  PORT=${this.port + 1} npm start`);
     }
-    this.#record(null);
+    this.#record({});
   }
 
-  #record(serverPid) {
-    const record = { pid: process.pid, command: commandLine(process.pid), serverPid, address: this.address };
+  #record(pids) {
+    this.pids = { ...this.pids, ...pids };
+    const record = { pid: process.pid, command: commandLine(process.pid), ...this.pids, address: this.address };
     writeFileSync(this.#instanceFile(), JSON.stringify(record), { mode: 0o600 });
   }
 
@@ -94,14 +97,25 @@ export class Product {
 
   /** Starts the server in a process group of its own, so that Ctrl+C reaches it only through us and it ends in order. */
   launchServer(nodeOptions = []) {
-    const server = spawn(process.execPath, ['--enable-source-maps', ...nodeOptions, mainFile], {
+    const server = this.#launch(mainFile, nodeOptions);
+    this.#record({ serverPid: server.pid });
+    return server;
+  }
+
+  /** Starts a worker, which computes runs; more of them may run anywhere that reaches the database. */
+  launchWorker(nodeOptions = []) {
+    const worker = this.#launch(workerFile, nodeOptions);
+    this.#record({ workerPid: worker.pid });
+    return worker;
+  }
+
+  #launch(file, nodeOptions) {
+    return spawn(process.execPath, ['--enable-source-maps', ...nodeOptions, file], {
       cwd: projectFolder,
       env: this.environment,
       stdio: ['ignore', 'inherit', 'inherit'],
       detached: true,
     });
-    this.#record(server.pid);
-    return server;
   }
 
   async isReady() {
