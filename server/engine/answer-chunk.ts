@@ -2,6 +2,7 @@ import { InvalidDesign } from '../../shared/antenna/invalid-design';
 import { placeCells, type PlacedDesign } from '../../shared/antenna/place-cells';
 import { prepareEdition, type PreparedEdition } from '../../shared/antenna/prepare-edition';
 import type { ChunkOutcome, ChunkTask } from './chunk-task';
+import { useKernel } from './kernel/use-kernel';
 import { RecentMap } from './recent-map';
 import type { RunQuestion } from './run-type';
 import type { RunKind } from '../../shared/contracts/runs';
@@ -21,6 +22,7 @@ class Stopped extends Error {}
 export type ChunkAnswerer = (task: ChunkTask) => ChunkOutcome;
 
 export function createChunkAnswerer(): ChunkAnswerer {
+  useKernel();
   const sites = new RecentMap<Site>(KEPT_DESIGNS);
   const siteOf = ({ contentHash, design, edition }: ChunkTask): Site => {
     const known = sites.get(contentHash);

@@ -2,8 +2,7 @@ import { InvalidDesign } from '../../shared/antenna/invalid-design';
 import { placeCells } from '../../shared/antenna/place-cells';
 import { predictPlaced } from '../../shared/antenna/predict-design';
 import { prepareEdition, type PreparedEdition } from '../../shared/antenna/prepare-edition';
-import { installFourierEngine } from '../../shared/math/active-fourier-engine';
-import { createKernelFourierEngine } from './kernel/kernel-fourier-engine';
+import { useKernel } from './kernel/use-kernel';
 import type { EngineEdition, PredictionOutcome, PredictionTask } from './prediction-task';
 import { RecentMap } from './recent-map';
 
@@ -14,7 +13,7 @@ const KEPT_EDITIONS = 6;
 export type TaskAnswerer = (task: PredictionTask) => PredictionOutcome;
 
 export function createTaskAnswerer(): TaskAnswerer {
-  installFourierEngine(createKernelFourierEngine());
+  useKernel();
   const prepared = new RecentMap<PreparedEdition>(KEPT_EDITIONS);
   const preparedOf = ({ key, edition }: EngineEdition): PreparedEdition => {
     const known = prepared.get(key);
