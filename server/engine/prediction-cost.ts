@@ -25,7 +25,7 @@ export function predictionCost({ design, cuts = [], uvSize = 0 }: Omit<Predictio
   const cellBound = cellCountUpperBound(design.panel);
   const directionCount = uvSize * uvSize + cuts.reduce((sum, cut) => sum + cutSampleCount(cut), 0);
   const cells = Math.min(cellBound, MAX_CELL_COUNT);
-  const seconds = vectorSeconds(design, cells, directionCount) + cells * SECONDS_PER_CELL + directionCount * SECONDS_PER_DIRECTION + outlineTests(design.panel) * SECONDS_PER_ROW_AND_CORNER;
+  const seconds = vectorSeconds(design, cells, directionCount) + synthesisSeconds(design, cells) + cells * SECONDS_PER_CELL + directionCount * SECONDS_PER_DIRECTION + outlineTests(design.panel) * SECONDS_PER_ROW_AND_CORNER;
   return { cellBound, directionCount, seconds };
 }
 
@@ -39,6 +39,13 @@ function vectorSeconds({ prediction, cells: stock }: PredictionQuestion['design'
   const isClosed = (prediction.reradiation ?? 'power-wave') === 'power-wave' && (prediction.cellFactor ?? 'none') === 'none';
   const perCell = (stock.kind === 'edition' ? VECTOR_SECONDS_PER_CELL : SECONDS_PER_CELL) + (isClosed ? 0 : QUADRATURE_SECONDS_PER_CELL);
   return cells * perCell + directionCount * SECONDS_PER_DIRECTION;
+}
+
+// An iteration transforms up to 16 samples to a cell there and back, measured at 40 x 40 cells and doubled.
+const SECONDS_PER_CELL_AND_ITERATION = 2e-5;
+
+function synthesisSeconds({ synthesis }: PredictionQuestion['design'], cells: number): number {
+  return synthesis.kind === 'projections' ? cells * synthesis.iterations * SECONDS_PER_CELL_AND_ITERATION : 0;
 }
 
 export function cutSampleCount(cut: CutRequest): number {

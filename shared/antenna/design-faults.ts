@@ -3,6 +3,7 @@ import { cellCountFault } from './cell-count';
 import { InvalidDesign, type DesignFault } from './invalid-design';
 import { maskFaults } from './masks/mask-faults';
 import { polygonFault } from './polygon-fault';
+import { synthesisFaults } from './synthesis/synthesis-faults';
 import { vectorFaults } from './vector/vector-faults';
 
 /** A horn nearer than this to the plane of the panel lights it at grazing incidence everywhere. */
@@ -17,7 +18,7 @@ export function checkDesign(design: DesignDocument): void {
 /** Faults that no single field shows, of a document whose fields are each valid. */
 export function designFaults(design: DesignDocument): DesignFault[] {
   const shape = shapeFaults(design);
-  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? countFaults(design) : []), ...sourceFaults(design), ...vectorFaults(design)];
+  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design)];
 }
 
 function requirementFaults({ requirement }: DesignDocument): DesignFault[] {
@@ -66,7 +67,7 @@ function guidedWaveFaults(illumination: DesignDocument['illumination'], cells: D
   return [];
 }
 
-function sourceFaults({ illumination, synthesis, cells }: DesignDocument): DesignFault[] {
+function sourceFaults({ illumination, cells }: DesignDocument): DesignFault[] {
   const faults: DesignFault[] = [];
   if (illumination.kind === 'horn') {
     const { positionMm, aimMm } = illumination;
@@ -76,9 +77,6 @@ function sourceFaults({ illumination, synthesis, cells }: DesignDocument): Desig
     if (Math.hypot(...positionMm.map((p, i) => p - aimMm[i])) < LEAST_HORN_HEIGHT_MM) {
       faults.push({ pointer: '#/illumination/aimMm', detail: 'the horn must be aimed at a point other than its own position' });
     }
-  }
-  if (synthesis.kind === 'focus' && synthesis.pointMm[2] <= 0) {
-    faults.push({ pointer: '#/synthesis/pointMm/2', detail: `the focus must lie in front of the panel, z > 0; got z = ${synthesis.pointMm[2]} mm` });
   }
   faults.push(...guidedWaveFaults(illumination, cells));
   if (cells.kind === 'inline' && cells.cells.every((cell) => cell.magnitude === 0)) {

@@ -26,6 +26,7 @@ export function designWarnings(facts: DesignFacts): Warning[] {
     ...latticeWarnings(facts),
     ...guidedWaveWarnings(facts.si, facts.wavelengthM, facts.design.cells.kind === 'resonant'),
     ...imageLobeWarning(facts.design, facts.figures),
+    ...boundsWarning(facts.figures),
     ...tableWarning(facts.design),
   ];
   return warnings.sort((a, b) => RANK[a.severity] - RANK[b.severity]);
@@ -46,6 +47,22 @@ function imageLobeWarning({ synthesis }: DesignDocument, { sidelobeDb: { hemisph
       severity: 'serious',
       message: `A lobe at ${directionText(thetaDeg, phiDeg)} is ${levelDb < AS_STRONG_DB ? 'as strong as' : `${levelDb.toFixed(2)} dB stronger than`} the wanted beam.`,
       numbers: { levelDb, thetaDeg, phiDeg },
+    },
+  ];
+}
+
+/** Projections that did not arrive say so, with how far off they are. */
+function boundsWarning({ projections }: Figures): Warning[] {
+  if (!projections || projections.outcome === 'reached') return [];
+  const { outcome, iterations, worstExcessDb, worstShortfallDb } = projections;
+  const why = outcome === 'stalled' ? 'The projections have stalled: with these amplitudes, or from this start, the bounds are not to be had.' : 'The projections ended while still coming nearer: more iterations may help.';
+  return [
+    {
+      code: 'bounds-not-reached',
+      pointer: '#/synthesis',
+      severity: 'warn',
+      message: `${why} After ${iterations} iterations the pattern exceeds its upper bound by up to ${worstExcessDb.toFixed(2)} dB and falls short of the lower one by up to ${worstShortfallDb.toFixed(2)} dB.`,
+      numbers: { iterations, worstExcessDb, worstShortfallDb },
     },
   ];
 }

@@ -22,7 +22,8 @@ export function panelTargetPhase(design: DesignDocument): PanelTargetPhase {
   const si = siDesign(design);
   const lattice = panelLattice(si.panel);
   const light = illuminateCells(si.illumination, lattice, si.receiveExponent);
-  const targetRad = targetPhasesRad(apertureLaw(si), lattice, light, wavenumberRadPerM(si.designFrequencyHz));
+  const wavenumber = wavenumberRadPerM(si.designFrequencyHz);
+  const targetRad = targetPhasesRad(apertureLaw(si, { lattice, light, wavenumber }), lattice, light, wavenumber);
   const referenceRad = design.referencePhaseDeg === 'search' ? 0 : radFromDeg(design.referencePhaseDeg);
   return { lattice, targetPhaseDeg: Float32Array.from(targetRad, (rad) => phaseInTurnDeg(rad + referenceRad)) };
 }

@@ -37,7 +37,7 @@ export function placeCells(design: DesignDocument, edition?: PreparedEdition): P
   const arrival = vectorArrival(si, lattice);
   const scalarLight = illuminateCells(si.illumination, lattice, si.receiveExponent);
   const light = arrival ? { ...scalarLight, amplitude: arrival.amplitude } : scalarLight;
-  const law = apertureLaw(si);
+  const law = apertureLaw(si, { lattice, light, wavenumber: designWavenumber });
   const bareTargetRad = targetPhasesRad(law, lattice, light, designWavenumber);
   const site = { light, designFrequencyHz: si.designFrequencyHz, si, edition };
   const vector = arrival && { ...arrival, stock: vectorStock(design.cells, { ...site, ...arrival }) };

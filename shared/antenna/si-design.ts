@@ -1,7 +1,8 @@
-import type { DesignDocument, KeepOut, Lattice, Outline, Polarisation } from '../model/design-document';
+import type { DesignDocument, KeepOut, Lattice, Outline, PatternGoal, Polarisation } from '../model/design-document';
 import { radFromDeg } from '../units/angles';
 import { dbToAmplitudeRatio } from '../units/decibels';
 import { directionOf, type Direction } from '../waves/conventions';
+import type { MaskGoal, SectorGoal } from './synthesis/projection-bounds';
 import { feedEdgeM } from './guided-wave/guided-wave-illumination';
 
 /*
@@ -70,7 +71,9 @@ export type SiIllumination = SiHorn | SiPlaneWave | SiGuidedWave;
 export type SiSynthesis =
   | { readonly kind: 'direct' }
   | { readonly kind: 'focus'; readonly point: SiPosition }
-  | { readonly kind: 'vortex'; readonly order: number };
+  | { readonly kind: 'vortex'; readonly order: number }
+  | { readonly kind: 'projections'; readonly goal: SectorGoal | MaskGoal; readonly iterations: number }
+  | { readonly kind: 'diffuse'; readonly blockColumns: number; readonly blockRows: number; readonly states: number; readonly seed: number };
 
 export interface SiDesign {
   readonly designFrequencyHz: number;
@@ -118,7 +121,23 @@ export function siDesign(design: DesignDocument): SiDesign {
 }
 
 function siSynthesis(synthesis: DesignDocument['synthesis']): SiSynthesis {
-  return synthesis.kind === 'focus' ? { kind: 'focus', point: siPosition(synthesis.pointMm) } : synthesis;
+  if (synthesis.kind === 'focus') return { kind: 'focus', point: siPosition(synthesis.pointMm) };
+  return synthesis.kind === 'projections' ? { ...synthesis, goal: siGoal(synthesis.goal) } : synthesis;
+}
+
+function siGoal(goal: PatternGoal): SectorGoal | MaskGoal {
+  if (goal.kind === 'mask') {
+    return { kind: 'mask', peakLossDb: goal.peakLossDb, points: goal.points.map(([deg, levelDb]) => ({ offAxisRad: radFromDeg(deg), levelDb })) };
+  }
+  const span = ([from, to]: readonly [number, number]): [number, number] => [radFromDeg(from), radFromDeg(to)];
+  const { sectors, rippleDb, transitionDeg, outsideDb } = goal;
+  return {
+    kind: 'sectors',
+    sectors: sectors.map(({ azimuthDeg, elevationDeg }) => ({ azimuthRad: span(azimuthDeg), elevationRad: span(elevationDeg) })),
+    rippleDb,
+    transitionRad: radFromDeg(transitionDeg),
+    outsideDb,
+  };
 }
 
 function siVectorModel({ requirement, prediction }: DesignDocument): SiVectorModel {

@@ -102,11 +102,43 @@ export const illumination = z.discriminatedUnion('kind', [
   }),
 ]);
 
+const spanDeg = z.tuple([z.number().min(-89.9).max(89.9), z.number().min(-89.9).max(89.9)]);
+
+/** What a pattern is to look like: flat over sectors, or beams under a mask. */
+export const patternGoal = z.discriminatedUnion('kind', [
+  z.strictObject({
+    kind: z.literal('sectors'),
+    /** Spans of azimuth atan2(x, z) and elevation asin(y), each rising. */
+    sectors: z.array(z.strictObject({ azimuthDeg: spanDeg, elevationDeg: spanDeg })).min(1).max(8),
+    rippleDb: z.number().min(0.05).max(10),
+    transitionDeg: z.number().min(0).max(90),
+    /** Highest level outside, relative to the flat one. */
+    outsideDb: z.number().min(-80).max(-1),
+  }),
+  z.strictObject({
+    kind: z.literal('mask'),
+    /** Pairs of angle off the nearest wanted beam (rising) and highest level relative to the peak (dB). */
+    points: z.array(z.tuple([z.number().min(0).max(180), z.number().min(-100).max(0)])).min(2).max(200),
+    /** How far the peak may fall below all cells in step. */
+    peakLossDb: z.number().min(0).max(20),
+  }),
+]);
+
 export const synthesis = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('direct') }),
   z.strictObject({ kind: z.literal('focus'), pointMm: positionMm }),
   /** Every wanted beam turns its phase this many times about its axis, against the clock for positive orders. */
   z.strictObject({ kind: z.literal('vortex'), order: z.number().int().min(-50).max(50) }),
+  /** Phases found by alternating projections between the amplitudes of the cells and bounds of the pattern. */
+  z.strictObject({ kind: z.literal('projections'), goal: patternGoal, iterations: z.number().int().min(1).max(2000) }),
+  /** Scatters instead of beaming: blocks of cells in a few states, chosen for the lowest peak. */
+  z.strictObject({
+    kind: z.literal('diffuse'),
+    blockColumns: z.number().int().min(1).max(1000),
+    blockRows: z.number().int().min(1).max(1000),
+    states: z.number().int().min(2).max(16),
+    seed: z.number().int().min(0).max(4_294_967_295),
+  }),
 ]);
 
 export const cells = z.discriminatedUnion('kind', [
@@ -164,6 +196,7 @@ export type Lattice = z.infer<typeof lattice>;
 export type Panel = z.infer<typeof panel>;
 export type Illumination = z.infer<typeof illumination>;
 export type Synthesis = z.infer<typeof synthesis>;
+export type PatternGoal = z.infer<typeof patternGoal>;
 export type Cells = z.infer<typeof cells>;
 export type PredictionModel = z.infer<typeof prediction>;
 export type Polarisation = z.infer<typeof polarisation>;

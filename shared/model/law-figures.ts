@@ -45,12 +45,43 @@ export const guidedWaveFigures = z.strictObject({
   unmodulatedLobes: z.array(z.strictObject({ thetaDeg: z.number(), phiDeg: z.number() })),
 });
 
+/** How alternating projections went, before cells are chosen. */
+export const projectionFigures = z.strictObject({
+  /** Within 0.05 dB of every bound; no longer moving; or ended while the cost was still falling. */
+  outcome: z.enum(['reached', 'stalled', 'unfinished']),
+  iterations: z.number().int(),
+  /** Power that violates the bounds, as a share of the whole, before the iteration named. It cannot rise. */
+  costs: z.array(z.strictObject({ iteration: z.number().int(), share: z.number() })),
+  worstExcessDb: z.number(),
+  worstShortfallDb: z.number(),
+});
+
+/** A board that scatters: array factor against a metal plate of the same size. */
+export const diffuseFigures = z.strictObject({
+  peakDb: z.number(),
+  peakThetaDeg: z.number(),
+  peakPhiDeg: z.number(),
+  /** No board lies below: by Parseval over the reciprocal cell, or by the energy of the hemisphere on finer lattices. */
+  boundDb: z.number(),
+  boundBy: z.enum(['parseval', 'energy']),
+  /** Peak over the whole reciprocal cell of the blocks on so many samples a side, which the search made low. */
+  boardPeakDb: z.number(),
+  samples: z.number().int(),
+  method: z.enum(['exhaustive', 'descent']),
+  /** Boards found with the same peak. */
+  equals: z.number().int(),
+});
+
 export const lawFigures = {
+  projections: projectionFigures.optional(),
+  diffuse: diffuseFigures.optional(),
   guidedWave: guidedWaveFigures.optional(),
   focus: z.union([focusFigures, noFigure]).optional(),
   vortex: z.union([vortexFigures, noFigure]).optional(),
 };
 
 export type FocusFigures = z.infer<typeof focusFigures>;
+export type ProjectionFigures = z.infer<typeof projectionFigures>;
+export type DiffuseFigures = z.infer<typeof diffuseFigures>;
 export type GuidedWaveFigures = z.infer<typeof guidedWaveFigures>;
 export type VortexFigures = z.infer<typeof vortexFigures>;

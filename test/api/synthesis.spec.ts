@@ -37,6 +37,19 @@ describe('predicting target phases of every kind', () => {
     expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/cells/kind']]);
   });
 
+  it('answers how projections went and how a board scatters, and refuses a sector that falls', async () => {
+    const goal = { kind: 'sectors', sectors: [{ azimuthDeg: [-15, 15], elevationDeg: [-15, 15] }], rippleDb: 1, transitionDeg: 8, outsideDb: -12 } as const;
+    const panel = { ...STARTING_DESIGN.panel, outline: { kind: 'rectangle', widthMm: 80, heightMm: 80 } } as const;
+    const sectors = goal.sectors.map((sector) => ({ azimuthDeg: [...sector.azimuthDeg] as [number, number], elevationDeg: [...sector.elevationDeg] as [number, number] }));
+    const { projections } = await figuresOf({ panel, synthesis: { kind: 'projections', goal: { ...goal, sectors }, iterations: 5 } });
+    expect(projections).toMatchObject({ iterations: 5, outcome: 'unfinished' });
+    const { diffuse } = await figuresOf({ panel, synthesis: { kind: 'diffuse', blockColumns: 4, blockRows: 4, states: 2, seed: 1 } });
+    expect(diffuse?.peakDb).toBeLessThan(-5);
+    const falling = { ...STARTING_DESIGN, synthesis: { kind: 'projections', goal: { ...goal, sectors: [{ azimuthDeg: [15, -15], elevationDeg: [-15, 15] }] }, iterations: 5 } };
+    const { errors } = (await designer.post('/api/predictions', { design: falling })).json as { errors: { pointer: string }[] };
+    expect(errors.map(({ pointer }) => pointer)).toEqual(['#/design/synthesis/goal/sectors/0/azimuthDeg/1']);
+  });
+
   it('refuses a vortex of half an order by its pointer', async () => {
     const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, synthesis: { kind: 'vortex', order: 0.5 } } });
     const { errors } = answer.json as { errors: { pointer: string }[] };

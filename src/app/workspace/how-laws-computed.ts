@@ -1,7 +1,7 @@
 import type { HowComputed } from './how-computed';
 
 /** Figures of one target phase or one way of lighting, each with how it is computed. */
-export type LawFigureId = 'focus' | 'vortex' | 'guidedWave';
+export type LawFigureId = 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
 
 const EDGES = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction';
 
@@ -13,6 +13,22 @@ export const HOW_LAWS_COMPUTED: Readonly<Record<LawFigureId, HowComputed>> = {
     conventions: 'rₙ from cell n to the point at distance s; aₙ the field of the cells in use, losses and phase errors included; b the radiate exponent, in field',
     validity: `${EDGES}. Spherical waves from every cell: not within about a wavelength of the panel.`,
     source: 'J. W. Sherman, IRE Trans. AP 10(4), 399–408, 1962 (from memory); checks foc-01 and foc-02',
+  },
+  projections: {
+    title: 'Alternating projections',
+    formula: ['F = FFT(a);  clip |F| to [L, U], keep its phase;  a = A exp(j arg FFT⁻¹(F))', 'cost J = Σ (|F| − clipped |F|)² / samples, as a share of Σ A²'],
+    meaning: 'The cost before each clip cannot rise. Reached: within 0.05 dB of both bounds on every sample. Stalled: the cost falls by less than 1 % in a hundred iterations without that; another start, wider transitions or other amplitudes are then needed, not more iterations.',
+    conventions: 'Bounds hold for the pattern with the element factor, taken as at least 0.1; a flat sector holds all the power (Parseval). Three to eight samples to a cell. Start: the analytic broad beam, or beams with a bend of 0.4 rad at the rim',
+    validity: 'A local search: it finds a way down from its start, not the best of all. Between samples lobes may stand a little higher. Before cells are chosen; phases are frozen at other frequencies.',
+    source: 'O. M. Bucci et al., IEE Proc. H 137(6), 349–357, 1990 (from memory); checks ap-01 and ap-02',
+  },
+  diffuse: {
+    title: 'Peak of diffuse scattering',
+    formula: ['peak = max |Σ Aₙ Γₙ exp(jk rₙ·u)|² / (Σ A)² over the hemisphere', 'bound: 1/N (Parseval), or λ² / (2πA) on lattices finer than λ/√2'],
+    meaning: 'The array factor of the panel against that of a metal plate of the same size. The search makes the peak over the whole reciprocal cell of the blocks low, weighted by the pattern of one block.',
+    conventions: 'States 360°/K apart, of what the cells add to the incident wave; refined between samples',
+    validity: 'Boards of 4 × 4 single cells of two states are all tried; others are improved block after block from six seeded boards and may not be the best. Element factor left out.',
+    source: 'Parseval; checks diff-01 and diff-02',
   },
   guidedWave: {
     title: 'A guided wave under the panel',

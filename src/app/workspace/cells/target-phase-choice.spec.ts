@@ -40,6 +40,29 @@ describe('target phase', () => {
     expect(workspace.stepNames()[0]).toBe('Make vortex beams');
   });
 
+  it('shapes sectors, adds and removes them, and keeps the mask in mind', async () => {
+    const { workspace, choose, enter, press, text } = await sheetRig(TargetPhaseChoice, STARTING_DESIGN, []);
+    await choose('Shaped pattern');
+    await enter('Sector 1 azimuth from', '-30');
+    await press('Add sector');
+    expect(workspace.design().synthesis).toMatchObject({ goal: { sectors: [{ azimuthDeg: [-30, 15] }, { azimuthDeg: [-30, 15] }] }, iterations: 200 });
+    await enter('Sector 2 azimuth to', '-40');
+    expect(text()).toContain('must rise; got -30 to -40°');
+    await press('Remove sector 1');
+    await choose('Beams under a mask');
+    expect(workspace.design().synthesis).toMatchObject({ goal: { kind: 'mask', peakLossDb: 1 } });
+    await choose('Flat sectors');
+    expect(workspace.design().synthesis).toMatchObject({ goal: { kind: 'sectors', sectors: [{ azimuthDeg: [-30, 15] }] } });
+  });
+
+  it('scatters from blocks, at first eight along a side', async () => {
+    const { workspace, choose, enter } = await sheetRig(TargetPhaseChoice, STARTING_DESIGN, []);
+    await choose('Diffuse scattering');
+    expect(workspace.design().synthesis).toEqual({ kind: 'diffuse', blockColumns: 5, blockRows: 5, states: 2, seed: 1 });
+    await enter('States', '4');
+    expect(workspace.design().synthesis).toMatchObject({ states: 4 });
+  });
+
   it('shows what a focus turned out to do, with how it is computed', async () => {
     const { workspace, fixture, text } = await sheetRig(TargetPhaseChoice, STARTING_DESIGN, []);
     expect(text()).not.toContain('What the target phase does');

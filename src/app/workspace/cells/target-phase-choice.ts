@@ -1,4 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { latticeGrid } from '../../../../shared/antenna/panel-lattice';
+import { siPanel } from '../../../../shared/antenna/si-design';
 import type { DesignDocument, Synthesis } from '../../../../shared/model/design-document';
 import { ViewTitle } from '../../ui/view-title';
 import { ChoiceRow } from '../fields/choice-row';
@@ -7,23 +9,28 @@ import { PendingEntries } from '../fields/pending-entries';
 import { RemarkList } from '../fields/remark-list';
 import { LawOutcome } from '../laws/law-outcome';
 import { WORKSPACE_STATE } from '../workspace-state';
+import { ProjectionsFields, firstGoal } from './projections-fields';
 
 const OPTIONS = [
   { value: 'direct', label: 'Far beams' },
   { value: 'focus', label: 'Near-field focus' },
   { value: 'vortex', label: 'Vortex beams' },
+  { value: 'projections', label: 'Shaped pattern' },
+  { value: 'diffuse', label: 'Diffuse scattering' },
 ] as const;
 const STEP_NAMES: Readonly<Record<Synthesis['kind'], string>> = {
   direct: 'Steer far beams',
   focus: 'Focus in the near field',
   vortex: 'Make vortex beams',
+  projections: 'Shape the pattern',
+  diffuse: 'Scatter diffusely',
 };
 const MM_PER_WAVELENGTH_GHZ = 299.792458;
 
 /** What the phase of the cells is for: the wanted beams in the far field, or a focus in front of the panel. */
 @Component({
   selector: 'slant-target-phase-choice',
-  imports: [ChoiceRow, DesignField, LawOutcome, RemarkList, ViewTitle],
+  imports: [ChoiceRow, DesignField, LawOutcome, ProjectionsFields, RemarkList, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './target-phase-choice.html',
   styleUrl: '../fields/sheet.scss',
@@ -51,8 +58,24 @@ export class TargetPhaseChoice {
 
 /** What a kind starts from. */
 export function firstSynthesis(design: DesignDocument, kind: Synthesis['kind']): Synthesis {
-  if (kind === 'focus') return firstFocus(design);
-  return kind === 'vortex' ? { kind, order: 1 } : { kind };
+  switch (kind) {
+    case 'direct':
+      return { kind };
+    case 'focus':
+      return firstFocus(design);
+    case 'vortex':
+      return { kind, order: 1 };
+    case 'projections':
+      return { kind, goal: firstGoal('sectors'), iterations: 200 };
+    case 'diffuse':
+      return { kind, ...firstBlocks(design), states: 2, seed: 1 };
+  }
+}
+
+/** Blocks so large that there are at most 8 along a side: a board that is searched at once. */
+function firstBlocks({ panel }: DesignDocument): { blockColumns: number; blockRows: number } {
+  const { columnCount, rowCount } = latticeGrid(siPanel(panel));
+  return { blockColumns: Math.max(1, Math.ceil(columnCount / 8)), blockRows: Math.max(1, Math.ceil(rowCount / 8)) };
 }
 
 /** On the first wanted beam, at about a third of the far-field distance: near enough to be a focus worth the name. */

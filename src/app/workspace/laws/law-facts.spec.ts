@@ -1,6 +1,6 @@
 import { HOW_LAWS_COMPUTED } from '../how-laws-computed';
 import { SAMPLE_FIGURES } from '../sample-prediction';
-import { axialFigure, lawFacts } from './law-facts';
+import { axialFigure, costFigure, lawFacts } from './law-facts';
 
 const focus = {
   distanceMm: 1200,
@@ -34,6 +34,26 @@ describe('what a target phase turned out to do', () => {
   it('tells ring and purity of a vortex', () => {
     const vortex = { order: 2, ringDeg: 6.123, purity: 0.9788, axisDb: { kind: 'null', reason: 'the pattern is zero on the axis' } };
     expect(lawFacts({ ...SAMPLE_FIGURES, vortex }).map(({ value }) => value)).toEqual(['6.12°', '97.9 %', '– (the pattern is zero on the axis)']);
+  });
+});
+
+describe('projections and boards', () => {
+  const projections = { outcome: 'stalled' as const, iterations: 200, costs: [{ iteration: 0, share: 0.1 }, { iteration: 200, share: 0.001 }], worstExcessDb: 8.23, worstShortfallDb: 0.28 };
+
+  it('tell whether the bounds are kept, and how far off they are', () => {
+    expect(lawFacts({ ...SAMPLE_FIGURES, projections }).map(({ value }) => value)).toEqual(['stalled: it no longer comes nearer', '200', '0.100 %', '8.23 dB', '0.28 dB']);
+  });
+
+  it('draw the cost as a level over the iterations', () => {
+    const drawn = costFigure({ ...SAMPLE_FIGURES, projections });
+    expect(Array.from(drawn?.lines[0].y ?? [])).toEqual([-10, -30]);
+    expect(drawn?.x.to).toBe(200);
+    expect(costFigure(SAMPLE_FIGURES)).toBeNull();
+  });
+
+  it('tell the peak of a board, its bound and how it was found', () => {
+    const diffuse = { peakDb: -9.1, peakThetaDeg: 21.4, peakPhiDeg: 45, boundDb: -12.04, boundBy: 'parseval' as const, boardPeakDb: -9.05, samples: 64, method: 'exhaustive' as const, equals: 64 };
+    expect(lawFacts({ ...SAMPLE_FIGURES, diffuse }).map(({ value }) => value)).toEqual(['−9.10 dB at θ 21.4°, φ 45.0°', '−12.04 dB', '−9.05 dB', 'every board tried, 64 reach it']);
   });
 });
 

@@ -9,8 +9,44 @@ export interface LawFact {
 }
 
 /** What a target phase of its own kind turned out to do, in words and numbers. */
-export function lawFacts({ focus, vortex }: Figures): readonly LawFact[] {
-  return [...focusFacts(focus), ...vortexFacts(vortex)];
+export function lawFacts({ focus, vortex, projections, diffuse }: Figures): readonly LawFact[] {
+  return [...focusFacts(focus), ...vortexFacts(vortex), ...projectionFacts(projections), ...diffuseFacts(diffuse)];
+}
+
+const OUTCOMES = { reached: 'every bound is kept to 0.05 dB', stalled: 'stalled: it no longer comes nearer', unfinished: 'ended while still coming nearer' } as const;
+
+function projectionFacts(run: Figures['projections']): readonly LawFact[] {
+  if (run === undefined) return [];
+  const last = run.costs[run.costs.length - 1];
+  return [
+    { name: 'Outcome', value: OUTCOMES[run.outcome] },
+    { name: 'Iterations done', value: figureText(run.iterations, 0) },
+    { name: 'Power outside the bounds', value: `${figureText(last.share * 100, 3)} %` },
+    { name: 'Worst above the upper bound', value: shown(run.worstExcessDb, 2, ' dB') },
+    { name: 'Worst below the lower bound', value: shown(run.worstShortfallDb, 2, ' dB') },
+  ];
+}
+
+function diffuseFacts(board: Figures['diffuse']): readonly LawFact[] {
+  if (board === undefined) return [];
+  return [
+    { name: 'Peak against a metal plate', value: `${shown(board.peakDb, 2, ' dB')} at θ ${figureText(board.peakThetaDeg, 1)}°, φ ${figureText(board.peakPhiDeg, 1)}°` },
+    { name: board.boundBy === 'parseval' ? 'No board lies below (Parseval)' : 'No board lies below (energy of the hemisphere)', value: shown(board.boundDb, 2, ' dB') },
+    { name: `Peak in the search, ${board.samples} × ${board.samples} samples`, value: shown(board.boardPeakDb, 2, ' dB') },
+    { name: 'Search', value: board.method === 'exhaustive' ? `every board tried, ${figureText(board.equals, 0)} reach it` : `descent from six seeded boards, ${figureText(board.equals, 0)} of which reach it` },
+  ];
+}
+
+/** The cost of the projections over their iterations, as a level. */
+export function costFigure({ projections }: Figures): LineFigure | null {
+  if (projections === undefined || projections.costs.length < 2) return null;
+  const levels = projections.costs.map(({ share }) => Math.max(-80, 10 * Math.log10(Math.max(1e-8, share))));
+  return {
+    title: 'Power outside the bounds',
+    x: { title: 'iteration', from: 0, to: projections.iterations },
+    y: { title: 'share of the whole, dB', from: Math.floor(Math.min(...levels) / 10) * 10, to: 0, step: 10 },
+    lines: [{ label: 'cost', x: projections.costs.map(({ iteration }) => iteration), y: levels, ink: 'ink', squares: true }],
+  };
 }
 
 const shown = (figure: Figure, digits: number, unit: string): string => (typeof figure === 'number' ? `${figureText(figure, digits)}${unit}` : `– (${figure.reason})`);

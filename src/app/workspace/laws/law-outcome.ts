@@ -5,7 +5,7 @@ import { HowNote } from '../fields/how-note';
 import { HOW_LAWS_COMPUTED } from '../how-laws-computed';
 import type { LawFigureId } from '../how-laws-computed';
 import { WORKSPACE_STATE } from '../workspace-state';
-import { axialFigure, lawFacts } from './law-facts';
+import { axialFigure, costFigure, lawFacts } from './law-facts';
 
 /** What the target phase does beyond the figures of every panel; nothing for plain beams. */
 @Component({
@@ -16,7 +16,7 @@ import { axialFigure, lawFacts } from './law-facts';
     @if (facts().length > 0) {
       <section>
         <slant-view-title text="What the target phase does" unit="predicted" />
-        @if (axial(); as drawn) {
+        @for (drawn of plots(); track drawn.title) {
           <slant-line-plot [figure]="drawn" [height]="200" />
         }
         <dl>
@@ -41,9 +41,9 @@ export class LawOutcome {
     const figures = this.figures();
     return figures ? lawFacts(figures) : [];
   });
-  protected readonly axial = computed(() => {
+  protected readonly plots = computed(() => {
     const figures = this.figures();
-    return figures ? axialFigure(figures) : null;
+    return figures ? [axialFigure(figures), costFigure(figures)].filter((drawn) => drawn !== null) : [];
   });
   protected readonly hows = computed(() => {
     const figures = this.figures();
@@ -51,4 +51,4 @@ export class LawOutcome {
   });
 }
 
-const LAW_FIGURES = ['focus', 'vortex'] as const satisfies readonly LawFigureId[];
+const LAW_FIGURES = ['focus', 'vortex', 'projections', 'diffuse'] as const satisfies readonly LawFigureId[];
