@@ -1,5 +1,6 @@
 import { readConfig, type Config } from './config';
 import { apiDatabaseLimits, createDataSource } from './database/data-source';
+import { migrateDatabase } from './database/migrate-database';
 import { isSchemaReady } from './database/schema-state';
 import { TransactionRunner } from './database/transaction-runner';
 import { createHouse, type House, type HouseOptions } from './house';
@@ -16,9 +17,9 @@ export interface OpenedHouse {
 export async function openHouse(env: NodeJS.ProcessEnv, options: Pick<HouseOptions, 'predictionRunner'> = {}): Promise<OpenedHouse> {
   const config = readConfig(env);
   const logger = createLogger(config);
+  if (config.migrateAtStart) await migrateDatabase(config.databaseUrl);
   const dataSource = createDataSource({ url: config.databaseUrl, ...apiDatabaseLimits });
   await dataSource.initialize();
-  if (config.migrateAtStart) await dataSource.runMigrations();
   const ground = { config, logger, transactions: new TransactionRunner(dataSource), now: () => new Date() };
   const house = createHouse({ ...options, ground, isSchemaReady: () => isSchemaReady(dataSource) });
   const close = async (): Promise<void> => {

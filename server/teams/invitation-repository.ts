@@ -1,10 +1,15 @@
 import { TeamScopedRepository } from '../database/team-scoped-repository';
-import type { Transaction } from '../database/transaction-runner';
+import { managerOf, type Transaction } from '../database/transaction-runner';
 import { Invitation } from './invitation-entity';
 
 export class InvitationRepository extends TeamScopedRepository<Invitation> {
   constructor() {
     super(Invitation, 'invitation');
+  }
+
+  /** Makes whoever invites one address to one team wait for each other until their transactions end. */
+  async lockAddress(transaction: Transaction, teamId: string, email: string): Promise<void> {
+    await managerOf(transaction).query('SELECT pg_advisory_xact_lock(hashtextextended($1, 0))', [`invitation:${teamId}:${email}`]);
   }
 
   /** Neither accepted nor expired, the newest first. */

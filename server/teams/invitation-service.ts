@@ -182,6 +182,8 @@ export class InvitationService {
 
   private async refuseKnown(transaction: Transaction, teamId: string, email: string): Promise<void> {
     const { ground, people, memberships } = this.parts;
+    // Two administrators may invite at the same moment: the second one must see what the first wrote.
+    await this.invitations.lockAddress(transaction, teamId, email);
     const person = await people.findByEmail(transaction, email);
     if (person !== null && (await memberships.isMember(transaction, teamId, person.id))) {
       throw new Conflict('This address belongs to someone in the team already.');

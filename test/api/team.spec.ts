@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { currentSession } from '../../shared/contracts/session';
 import type { AuditRow, Invitation, Member } from '../../shared/contracts/team';
 import { Api, STRANGER, TEST_PASSWORD } from '../support/api';
-import type { ApiClient } from '../support/api-client';
+import type { Answer, ApiClient } from '../support/api-client';
 import { expectInvalid, expectNotAllowed, expectNotFound, expectNotSignedIn, expectProblem, problemOf } from '../support/problems';
 
 describe('team', () => {
@@ -143,10 +143,21 @@ describe('team', () => {
     ]);
   });
 
+  it('invites once however many administrators invite one address at the same moment', async () => {
+    const second = await api.signedIn('admin');
+    const invite = (client: ApiClient): Promise<Answer> => client.post('/api/team/invitations', { email: 'racing@new.example', roles: ['lab'] });
+    const answers = await Promise.all([invite(admin), invite(second), invite(admin), invite(second)]);
+    const refused = answers.filter(({ status }) => status !== 201);
+    expect(refused).toHaveLength(3);
+    for (const answer of refused) expectProblem(answer, problemOf('conflict', 409, 'This address is invited already. Withdraw that invitation first.'));
+    const { items } = (await admin.get('/api/team/invitations')).json as { items: Invitation[] };
+    expect(items.filter(({ email }) => email === 'racing@new.example')).toHaveLength(1);
+  });
+
   it('takes a second invitation of the same address for what it is', async () => {
     await admin.post('/api/team/invitations', { email: 'pair@new.example', roles: ['lab'] });
     const token = await tokenIn('pair@new.example');
-    // Two administrators may have invited at the same moment: a copy stands for the second letter.
+    // Nobody can invite twice; a copy stands for a row that an older server may have left.
     await api.query(`INSERT INTO invitation SELECT gen_random_uuid(), team_id, email, roles, encode(sha256('the-other-token-of-the-pair'), 'hex'),
       invited_by, created_at, expires_at, accepted_at FROM invitation WHERE email = 'pair@new.example'`);
     const password = 'four quiet river stones';
