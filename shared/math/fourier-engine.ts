@@ -41,6 +41,8 @@ export interface PowerTrials {
   sum(): Float64Array;
   /** Largest |F|^2 of all that were added; a copy. */
   largest(): Float64Array;
+  /** Gives the memory back; nothing may be asked afterwards. What is never released goes with the garbage, late. */
+  release(): void;
 }
 
 export interface ProjectionQuery extends ComplexCells, SampleCounts {
@@ -81,6 +83,8 @@ export interface PatternStep {
   run(re: Float64Array, im: Float64Array): PatternSummary;
   /** 10 log10 |F|^2 of the last run, row after row: sample (m, n) at n columns + m. Overwritten by the next. */
   readonly powerDb: Float32Array;
+  /** Gives the memory back; nothing may be asked afterwards. */
+  release(): void;
 }
 
 /** F of a direction and of the opposite one, phase origin in the cell (0, 0); places as in the query. */

@@ -91,6 +91,7 @@ function plainTrials(query: TrialQuery): PowerTrials {
     },
     sum: () => sum.slice(),
     largest: () => largest.slice(),
+    release: () => undefined,
   };
 }
 
@@ -113,6 +114,7 @@ function plainPatternStep(query: PatternStepQuery): PatternStep {
       }
       return { peak, peakSample, total };
     },
+    release: () => undefined,
   };
 }
 

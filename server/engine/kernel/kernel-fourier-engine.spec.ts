@@ -139,6 +139,20 @@ describe('the kernel against the same in TypeScript', () => {
     expect(difference(got.largest(), wanted.largest())).toBeLessThan(within);
   });
 
+  it('begins anew in memory that was given back', () => {
+    const shape = { columnCount: 13, rowCount: 21, columns: 32, rows: 64, precision: 64 as const };
+    const cells = [scattered(273), scattered(273, 9)] as const;
+    const first = kernel.powerTrials(shape);
+    first.add(...cells);
+    const sum = first.sum();
+    first.release();
+    first.release();
+    const [second, third] = [kernel.powerTrials(shape), kernel.powerTrials(shape)];
+    third.add(cells[1], cells[0]);
+    second.add(...cells);
+    expect(second.sum()).toEqual(sum);
+  });
+
   it('adds trials on grids narrower than a vector', () => {
     const shape = { columnCount: 2, rowCount: 3, columns: 2, rows: 4, precision: 32 as const };
     const [got, wanted] = [kernel.powerTrials(shape), plainFourierEngine.powerTrials(shape)];
@@ -209,6 +223,17 @@ describe('alternating projections in the kernel', () => {
     walk.run(3);
     const { re, im } = walk.cells();
     expect(difference(re.map((a, i) => Math.hypot(a, im[i])), amplitude)).toBeLessThan(1e-14);
+  });
+
+  it('walk on where they stopped, whatever else was done meanwhile', () => {
+    const asked = { ...shape, amplitude, lower, upper, precision: 64 as const };
+    const [once, inParts] = [kernel.alternatingProjections(asked), kernel.alternatingProjections(asked)];
+    once.run(5);
+    inParts.run(2);
+    kernel.spectrum(query([40, 40], [128, 128]));
+    inParts.run(0);
+    inParts.run(3);
+    expect(inParts.cells()).toEqual(once.cells());
   });
 
   it('come nearer to the bounds with every few rounds', () => {

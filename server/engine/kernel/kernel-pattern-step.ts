@@ -7,7 +7,7 @@ const FEWEST_SAMPLES = 16;
 const RESULT_BYTES = 24;
 
 /** The pattern step with its weights and its map in the memory of the instance. */
-export function createPatternStep(instance: KernelInstance, query: PatternStepQuery): PatternStep {
+export function createPatternStep(instance: KernelInstance, query: PatternStepQuery): Omit<PatternStep, 'release'> {
   const { columnCount, rowCount, columns, rows, precision } = query;
   if (Math.min(columns, rows) < FEWEST_SAMPLES) {
     throw new RangeError(`a pattern step needs at least ${FEWEST_SAMPLES} samples along each side; got ${columns} by ${rows}`);

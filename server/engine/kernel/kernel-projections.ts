@@ -1,11 +1,27 @@
-import type { AlternatingProjections, ProjectionQuery } from '../../../shared/math/fourier-engine';
+import type { AlternatingProjections, ComplexSamples, ProjectionQuery } from '../../../shared/math/fourier-engine';
 import type { KernelInstance } from './kernel-instance';
 import { PlaneJob } from './plane-job';
+import type { TransformPlans } from './transform-plan';
 
-/** Alternating projections in the memory of the instance, bounds and amplitudes laid out as the kernel meets them. */
-export function createProjections(instance: KernelInstance, query: ProjectionQuery): AlternatingProjections {
+/**
+ * Alternating projections; between calls the cells live outside the kernel, so that what is begun and forgotten holds no
+ * memory of the instance. Copying bounds and cells in and out costs about as much as a round.
+ */
+export function createProjections(instance: KernelInstance, plans: TransformPlans, query: ProjectionQuery): AlternatingProjections {
+  let cells: ComplexSamples = { re: query.re.slice(), im: query.im.slice() };
+  return {
+    run: (rounds) => {
+      if (rounds > 0) cells = projected(instance, plans, { ...query, ...cells }, rounds);
+    },
+    cells: () => ({ re: cells.re.slice(), im: cells.im.slice() }),
+  };
+}
+
+function projected(instance: KernelInstance, plans: TransformPlans, query: ProjectionQuery, rounds: number): ComplexSamples {
   const { columnCount, rowCount, columns, rows, precision } = query;
-  const job = new PlaneJob(instance, { lineCells: columnCount, lineCount: rowCount, lineSize: columns, crossSize: rows, precision });
+  const chosen = plans.of(columns, rows, precision);
+  const mark = instance.mark();
+  const job = new PlaneJob(instance, { lineCells: columnCount, lineCount: rowCount, lineSize: columns, crossSize: rows, precision }, chosen);
   const lower = writeBounds(job, query.lower);
   // One array for both where they are equal: it is read once from the cache.
   const upper = query.upper === query.lower ? lower : writeBounds(job, query.upper);
@@ -16,18 +32,16 @@ export function createProjections(instance: KernelInstance, query: ProjectionQue
     precision === 64
       ? [exports.transformLines64, exports.projectColumns64, exports.projectLines64]
       : [exports.transformLines32, exports.projectColumns32, exports.projectLines32];
+  for (let i = 0; i < rounds; i++) {
+    transformLines(job.place, 0, rowCount);
+    projectColumns(job.place, 0, columns);
+    projectLines(job.place, 0, rowCount);
+  }
   const inOrder = (numbers: ArrayLike<number>): Float64Array =>
     Float64Array.from({ length: columnCount * rowCount }, (_, i) => numbers[Math.floor(i / columnCount) * job.cellsApart + (i % columnCount)]);
-  return {
-    run: (rounds) => {
-      for (let i = 0; i < rounds; i++) {
-        transformLines(job.place, 0, rowCount);
-        projectColumns(job.place, 0, columns);
-        projectLines(job.place, 0, rowCount);
-      }
-    },
-    cells: () => ({ re: inOrder(job.cellsRe), im: inOrder(job.cellsIm) }),
-  };
+  const cells = { re: inOrder(job.cellsRe), im: inOrder(job.cellsIm) };
+  instance.release(mark);
+  return cells;
 }
 
 function writeBounds(job: PlaneJob, bounds: Float64Array): number {

@@ -1,22 +1,16 @@
 import type { ComplexSamples, SpectrumQuery } from '../../../shared/math/fourier-engine';
 import type { KernelInstance } from './kernel-instance';
 import { PlaneJob } from './plane-job';
-import { writeTransformPlan } from './transform-plan';
+import type { TransformPlans } from './transform-plan';
 
 /** Columns of the grid that are transformed before they are copied out: their rows then fill whole lines of the cache. */
 const COPIED_COLUMNS = 64;
 
 /** Makes spectra in the memory of one instance; only the plans of the sizes seen stay there. */
-export function createSpectrumMaker(instance: KernelInstance): (query: SpectrumQuery) => ComplexSamples {
-  const plans = new Map<number, number>();
-  const planOf = (size: number): number => {
-    const known = plans.get(size) ?? writeTransformPlan(instance, size, 64);
-    plans.set(size, known);
-    return known;
-  };
+export function createSpectrumMaker(instance: KernelInstance, plans: TransformPlans): (query: SpectrumQuery) => ComplexSamples {
   return (query) => {
     // Columns of the panel are the kernel's lines, so that the samples of one column of the spectrum neighbour.
-    const chosen = { linePlan: planOf(query.rows), crossPlan: planOf(query.columns) };
+    const chosen = plans.of(query.rows, query.columns, 64);
     const mark = instance.mark();
     const shape = { lineCells: query.rowCount, lineCount: query.columnCount, lineSize: query.rows, crossSize: query.columns, precision: 64 as const };
     const job = new PlaneJob(instance, shape, chosen);

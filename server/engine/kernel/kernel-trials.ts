@@ -3,7 +3,7 @@ import type { KernelInstance } from './kernel-instance';
 import { PlaneJob } from './plane-job';
 
 /** Sums of |F|^2 over trials, kept in the memory of the instance. */
-export function createTrials(instance: KernelInstance, query: TrialQuery): PowerTrials {
+export function createTrials(instance: KernelInstance, query: TrialQuery): Omit<PowerTrials, 'release'> {
   const { columnCount, rowCount, columns, rows, precision } = query;
   const job = new PlaneJob(instance, { lineCells: columnCount, lineCount: rowCount, lineSize: columns, crossSize: rows, precision });
   const sum = job.takeSamples();

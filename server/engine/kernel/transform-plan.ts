@@ -22,6 +22,25 @@ export function writeTransformPlan(instance: KernelInstance, size: number, preci
   return plan;
 }
 
+/** The plans of one instance, each written once and kept there. */
+export class TransformPlans {
+  private readonly known = new Map<string, number>();
+
+  constructor(private readonly instance: KernelInstance) {}
+
+  /** Both plans of a plane; ask before the instance is marked, or they go with what is released. */
+  of(lineSize: number, crossSize: number, precision: SamplePrecision): { linePlan: number; crossPlan: number } {
+    return { linePlan: this.planOf(lineSize, precision), crossPlan: this.planOf(crossSize, precision) };
+  }
+
+  private planOf(size: number, precision: SamplePrecision): number {
+    const key = `${size}/${precision}`;
+    const place = this.known.get(key) ?? writeTransformPlan(this.instance, size, precision);
+    this.known.set(key, place);
+    return place;
+  }
+}
+
 /** Quarter lengths of the stages of radix four: down to a last one of four, or of eight where the exponent is odd. */
 function quartersOf(size: number): number[] {
   const quarters: number[] = [];
