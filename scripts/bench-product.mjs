@@ -3,6 +3,8 @@ import { spawn } from 'node:child_process';
 import { chmodSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { provideBuild } from './build-output.mjs';
+import { provideMachine } from './machine.mjs';
 import { Refusal, endProcess, freePort, waitFor } from './processes.mjs';
 
 const password = 'only-for-this-bench-run';
@@ -15,6 +17,8 @@ export class BenchProduct {
 
   /** Starts it and signs the demonstration's designer in. */
   static async start() {
+    await provideMachine('postgres', 'chromium');
+    await provideBuild('server', 'client');
     const product = new BenchProduct();
     const port = await freePort();
     product.address = `http://127.0.0.1:${port}`;
