@@ -8,6 +8,8 @@ export interface LawFact {
   readonly value: string;
 }
 
+const shown = (figure: Figure, digits: number, unit: string): string => (typeof figure === 'number' ? `${figureText(figure, digits)}${unit}` : `– (${figure.reason})`);
+
 /** What a target phase of its own kind turned out to do, in words and numbers. */
 export function lawFacts({ focus, vortex, projections, diffuse }: Figures): readonly LawFact[] {
   return [...focusFacts(focus), ...vortexFacts(vortex), ...projectionFacts(projections), ...diffuseFacts(diffuse)];
@@ -48,8 +50,6 @@ export function costFigure({ projections }: Figures): LineFigure | null {
     lines: [{ label: 'cost', x: projections.costs.map(({ iteration }) => iteration), y: levels, ink: 'ink', squares: true }],
   };
 }
-
-const shown = (figure: Figure, digits: number, unit: string): string => (typeof figure === 'number' ? `${figureText(figure, digits)}${unit}` : `– (${figure.reason})`);
 
 function focusFacts(focus: Figures['focus']): readonly LawFact[] {
   if (focus === undefined) return [];
