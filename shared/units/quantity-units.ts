@@ -105,7 +105,13 @@ const INCOMPLETE_UNITS: Readonly<Partial<Record<QuantityDimension, readonly (rea
 
 export type UnitMatch =
   | { readonly kind: 'unit'; readonly unit: QuantityUnit; readonly note?: string }
-  | { readonly kind: 'refused'; readonly reason: string; readonly instead?: string };
+  | {
+      readonly kind: 'refused';
+      readonly reason: string;
+      readonly instead?: string;
+      /** A unit of something else: its number says nothing about this quantity. */
+      readonly isForeign?: true;
+    };
 
 function spellingsOf(unit: QuantityUnit): readonly string[] {
   return [unit.symbol, ...(unit.spellings ?? [])];
@@ -120,7 +126,11 @@ export function matchUnit(text: string, dimension: QuantityDimension): UnitMatch
   if (refused) return { kind: 'refused', reason: `"${text}" is the ${refused.meaning}`, instead: refused.instead };
   const incomplete = INCOMPLETE_UNITS[dimension]?.find(([beginning]) => beginning === text);
   if (incomplete) return { kind: 'refused', reason: `"${text}" is not a whole unit`, instead: incomplete[1] };
-  if (exact.length > 0) return { kind: 'refused', reason: `"${text}" is a unit of ${exact[0].dimension}, and this is ${named(dimension)}` };
+  if (exact.length > 0) {
+    const reason = `"${text}" is a unit of ${exact[0].dimension}, and this is ${named(dimension)}`;
+    // A single m may also be the beginning of megahertz.
+    return text === 'm' && dimension === 'frequency' ? { kind: 'refused', reason, instead: 'MHz' } : { kind: 'refused', reason, isForeign: true };
+  }
   return matchIgnoringCase(text, dimension);
 }
 

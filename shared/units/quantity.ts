@@ -62,10 +62,10 @@ function readBare(number: string, dimension: QuantityDimension, field: QuantityF
 function readWithUnit(number: string, unitText: string, dimension: QuantityDimension, field: QuantityField): ParsedQuantity {
   if (dimension === 'number') return { kind: 'refused', reason: `This is a number without a unit; got "${unitText}"`, suggestion: number };
   const match = matchUnit(unitText, dimension);
-  if (match.kind === 'refused')
-    return match.instead === undefined
-      ? { kind: 'refused', reason: match.reason, suggestion: `${number} ${field.shownUnit ?? DOCUMENT_UNITS[dimension]}` }
-      : { kind: 'refused', reason: match.reason, suggestion: `${number} ${match.instead}` };
+  if (match.kind === 'refused') {
+    if (match.isForeign) return { kind: 'refused', reason: match.reason };
+    return { kind: 'refused', reason: match.reason, suggestion: `${number} ${match.instead ?? field.shownUnit ?? DOCUMENT_UNITS[dimension]}` };
+  }
   if (field.shownUnit === 'dB' && match.unit.symbol === 'dBi')
     return { kind: 'refused', reason: 'dBi is a gain against an isotropic radiator; this level is relative', suggestion: `${number} dB` };
   const read = scaled(number, match.unit);

@@ -136,7 +136,7 @@ describe('the entrance', () => {
     await guest.page.getByRole('heading', { name: 'Forgotten password' }).waitFor(); // the page before it has a field E-mail too
     await guest.page.getByLabel('E-mail').fill(email);
     await guest.page.getByRole('button', { name: 'Send the letter' }).click();
-    await guest.page.getByRole('status').filter({ hasText: 'a letter with a link is on its way' }).waitFor();
+    await guest.page.getByRole('status').filter({ hasText: 'a letter with a link has been written' }).waitFor();
     await guest.page.goto(await linkInLetterTo(admin.page, email, '/new-password'));
     await guest.page.getByLabel('New password').fill(newPassword);
     await guest.page.getByRole('button', { name: 'Set the password' }).click();

@@ -62,7 +62,7 @@ describe('team page', () => {
     call.flush(changed);
     await settled();
     await read([people[0], changed, people[2]], []);
-    expect(element().querySelector('[role="status"]')?.textContent).toBe('Nora New works as reviewer, designer.');
+    expect(element().querySelector('[role="status"]')?.textContent).toContain('Nora New works as reviewer, designer.');
   });
 
   it('asks before it disables somebody, and lets nobody disable themselves', async () => {
@@ -100,6 +100,25 @@ describe('team page', () => {
     expect(email.getAttribute('aria-invalid')).toBe('true');
     expect(element().querySelector('.field-fault')?.textContent?.trim()).toBe('is no e-mail address');
     expect(email.value).toBe('nora@@merrow');
+  });
+
+  it.each([
+    [true, 'its letter stands on the Letters page', '/letters'],
+    [false, 'A letter with it is on its way', undefined],
+  ])('says truly where the letter is (no mail server: %s)', async (letterBox, text, link) => {
+    await open(['administrator']);
+    TestBed.inject(SessionStore).take({ ...sessionOf(['administrator']), letterBox });
+    const email = element().querySelector<HTMLInputElement>('input[type="email"]');
+    if (email === null) throw new Error('no field for the address');
+    email.value = 'nora@merrow.example';
+    element().querySelector('form')?.dispatchEvent(new Event('submit', { cancelable: true }));
+    const invited = { id: id(7), email: email.value, roles: ['designer'], invitedBy: { id: id(1), name: 'Ada' }, createdAt: '2026-12-01T12:00:00.000Z', expiresAt: '2026-12-08T12:00:00.000Z' };
+    http.expectOne({ method: 'POST', url: '/api/team/invitations' }).flush(invited);
+    await settled();
+    await read(people, []);
+    const said = element().querySelector('.done');
+    expect(said?.textContent).toContain(text);
+    expect(said?.querySelector('a')?.getAttribute('href')).toBe(link);
   });
 
   it('shows people who do not run the team all of it, but lets them change nothing', async () => {

@@ -39,6 +39,8 @@ export class TeamPage {
   protected readonly wantedRoles = signal<readonly Role[]>(['designer']);
   protected readonly fault = signal<CallFault | null>(null);
   protected readonly done = signal<string | null>(null);
+  /** A letter was written that nobody sends. */
+  protected readonly letterWaits = signal(false);
   protected readonly isAdministrator = computed(() => this.session.hasRole('administrator'));
   protected readonly whyNot = computed(() => (this.isAdministrator() ? null : `This needs the role administrator. You work as ${this.session.roles().join(', ')}.`));
   protected readonly ownId = computed(() => this.session.current()?.person.id);
@@ -79,7 +81,11 @@ export class TeamPage {
   protected async invite(event: Event, field: HTMLInputElement): Promise<void> {
     event.preventDefault();
     const email = field.value.trim();
-    if (await this.attempt(() => this.client.invite(email, this.wantedRoles()), `A letter with the invitation is on its way to ${email}. It holds for seven days.`)) field.value = '';
+    const way = this.session.current()?.letterBox ? 'No mail server is set: its letter stands on the Letters page, and its link has to be handed over.' : 'A letter with it is on its way.';
+    if (await this.attempt(() => this.client.invite(email, this.wantedRoles()), `${email} is invited for seven days. ${way}`)) {
+      field.value = '';
+      this.letterWaits.set(this.session.current()?.letterBox === true);
+    }
   }
 
   protected async withdraw(invitation: Invitation): Promise<void> {
@@ -89,6 +95,7 @@ export class TeamPage {
   private async attempt(work: () => Promise<unknown>, done: string | null): Promise<boolean> {
     this.fault.set(null);
     this.done.set(null);
+    this.letterWaits.set(false);
     try {
       await work();
       await this.load();

@@ -28,8 +28,8 @@ describe('editField', () => {
   });
 
   it('refuses a value out of range with the limit and what was given', () => {
-    expect(typed(entry('2 THz'))).toEqual({ kind: 'refused', reason: 'must be at most 1000; got 2000', suggestion: null });
-    expect(typed(period('-4'))).toEqual({ kind: 'refused', reason: 'must be greater than 0; got -4', suggestion: null });
+    expect(typed(entry('2 THz'))).toEqual({ kind: 'refused', reason: 'must be at most 1\u00a0000 GHz; got 2\u00a0000 GHz', suggestion: null });
+    expect(typed(period('-4'))).toEqual({ kind: 'refused', reason: 'must be greater than 0 mm; got \u22124 mm', suggestion: null });
   });
 
   it('refuses what would break the design elsewhere, with the numbers', () => {

@@ -1,3 +1,4 @@
+import type { Figure } from '../../../shared/model/figures';
 import { SAMPLE_FIGURES, SAMPLE_VERDICTS } from './sample-prediction';
 import { figureText, signedText, stripFigures } from './strip-figures';
 import type { PredictedFigures, StripFigure } from './strip-figures';
@@ -39,6 +40,13 @@ describe('stripFigures', () => {
       verdicts: [{ ...SAMPLE_VERDICTS[0], value: { kind: 'no-lobe', reason: 'No lobe found' }, margin: { kind: 'no-lobe', reason: 'No lobe found' }, verdict: 'not-evaluated' }],
     };
     expect(figure('gain', open)).toMatchObject({ value: '–', limit: '≥ 34.0, not evaluated', margin: null, verdict: 'not-evaluated', gauge: null });
+  });
+
+  it('shows one dash and no unit where there is no beamwidth at all, and a dash for the one that is missing', () => {
+    const none: Figure = { kind: 'no-beam', reason: 'the beam has no half-power point' };
+    const shown = (along: Figure, across: Figure) => figure('beamwidth', { ...now, figures: { ...SAMPLE_FIGURES, halfPowerBeamwidthDeg: { along, across } } });
+    expect(shown(none, none)).toMatchObject({ value: '–', unit: '', reason: 'the beam has no half-power point' });
+    expect(shown(3.291, none)).toMatchObject({ value: '3.29×–', unit: '°' });
   });
 
   it('shows both beamwidths and the count of cells', () => {

@@ -90,10 +90,11 @@ function plainFigure(row: FigureRow, now: PredictedFigures, parent: PredictedFig
 
 function beamwidthFigure(row: FigureRow, { halfPowerBeamwidthDeg: { along, across } }: Figures): StripFigure {
   const missing = [along, across].find((figure) => typeof figure !== 'number');
+  const isThere = typeof along === 'number' || typeof across === 'number';
   const shown = [along, across].map((figure) => (typeof figure === 'number' ? figureText(figure, row.digits) : '–')).join('×');
   return {
-    ...{ id: row.id, label: row.label, unit: row.unit, trend: null, margin: null, verdict: null, gauge: null },
-    value: shown,
+    ...{ id: row.id, label: row.label, unit: isThere ? row.unit : '', trend: null, margin: null, verdict: null, gauge: null },
+    value: isThere ? shown : '–',
     limit: 'no limit set',
     reason: missing && typeof missing !== 'number' ? missing.reason : null,
   };

@@ -55,6 +55,14 @@ describe('CellsSheet', () => {
     expect(workspace.design().cells).toEqual({ kind: 'ideal', levels: 8 });
   });
 
+  it('takes the controls of ideal cells away while an edition is being chosen', async () => {
+    const { text, choose } = await rig();
+    expect(text()).toContain('Phase of ideal cells');
+    await choose('Library edition');
+    expect(text()).toContain('Choose one of the published editions');
+    expect(text()).not.toContain('Phase of ideal cells');
+  });
+
   it('uses an edition of the library, which it says how it suits', async () => {
     const { workspace, press, text, fixture } = await rig();
     await fixture.whenStable();
