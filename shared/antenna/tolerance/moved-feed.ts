@@ -4,6 +4,7 @@ import { illuminateCells, type CellIllumination } from '../illumination';
 import type { PlacedDesign } from '../place-cells';
 import type { PreparedEdition } from '../prepare-edition';
 import type { SiPosition } from '../si-design';
+import { vectorArrival, vectorStock } from '../vector/vector-stock';
 
 /** Responses of the placed cells under another light. */
 export interface RelitCells {
@@ -31,7 +32,8 @@ export function relitCells({ assignment, si }: PlacedDesign, light: CellIllumina
 
 /**
  * The same panel under a horn that stands elsewhere: its aim and all cells stay, path, amplitude and incidence are computed
- * anew. Exact, and as slow as placing the panel; trials use `feedShift`. Throws where the panel has no horn.
+ * anew, by the model of the design. As slow as placing the panel; trials use `feedShift`. In the vector model the responses
+ * beside the cells are still those of the scalar mixture, the field is not. Throws where the panel has no horn.
  */
 export function movedFeed(placed: PlacedDesign, move: SiPosition, edition?: PreparedEdition): PlacedDesign {
   const { si, lattice, design, assignment } = placed;
@@ -39,7 +41,11 @@ export function movedFeed(placed: PlacedDesign, move: SiPosition, edition?: Prep
   if (horn.kind !== 'horn') throw new RangeError(`A horn is to be moved, and the panel is lit by a ${horn.kind}`);
   const position = { xM: horn.position.xM + move.xM, yM: horn.position.yM + move.yM, zM: horn.position.zM + move.zM };
   const moved = { ...si, illumination: { ...horn, position } };
-  const light = illuminateCells(moved.illumination, lattice, si.receiveExponent);
-  const stock = cellStock(design.cells, { light, designFrequencyHz: si.designFrequencyHz, si: moved, edition });
-  return { ...placed, si: moved, light, stock, assignment: { cellIndex: assignment.cellIndex, ...relitCells(placed, light, edition) } };
+  const arrival = vectorArrival(moved, lattice);
+  const scalarLight = illuminateCells(moved.illumination, lattice, si.receiveExponent);
+  const light = arrival ? { ...scalarLight, amplitude: arrival.amplitude } : scalarLight;
+  const site = { light, designFrequencyHz: si.designFrequencyHz, si: moved, edition };
+  const vector = arrival && { ...arrival, stock: vectorStock(design.cells, { ...site, ...arrival }) };
+  const responses = relitCells(placed, light, edition);
+  return { ...placed, si: moved, light, stock: vector?.stock ?? cellStock(design.cells, site), assignment: { cellIndex: assignment.cellIndex, ...responses }, ...(vector ? { vector } : {}) };
 }

@@ -31,6 +31,17 @@ describe('toleranceBench', () => {
     expect(reading.maskMarginDb).toBeCloseTo(numberIn('marginDb' in figures.maskMargin ? figures.maskMargin.marginDb : figures.maskMargin), 6);
   });
 
+  it('starts from the gain of the vector model where the design asks for it', () => {
+    const vector: DesignDocument = { ...design, prediction: { ...design.prediction, model: 'vector' } };
+    const bench = benchOf(vector);
+    const { figures } = predictPlaced(placeCells(vector, edition), { include: {} });
+    expect(bench.read(bench.patternOf('all', null)).gainDbi).toBeCloseTo(numberIn(figures.gainAtBeamDbi), 9);
+    // The pattern is that of one polarisation with a scalar element factor: lobes near the beam agree to a tenth of a decibel.
+    const { hemisphere } = figures.sidelobeDb;
+    const sidelobeDb = numberIn('levelDb' in hemisphere ? hemisphere.levelDb : hemisphere);
+    expect(Math.abs(numberIn(bench.read(bench.patternOf('all', null)).sidelobeDb) - sidelobeDb)).toBeLessThan(0.1);
+  });
+
   it('reads the cuts as the prediction does', () => {
     const bench = benchOf(design);
     const pattern = bench.patternOf('all', null);

@@ -2,38 +2,29 @@ import { exactFarField } from '../../../shared/antenna/exact-far-field';
 import type { FarField } from '../../../shared/antenna/far-field';
 import { illuminatedState } from '../../../shared/antenna/illuminated-state';
 import { placeCells, type PlacedDesign } from '../../../shared/antenna/place-cells';
-import { prepareEdition, type PreparedEdition } from '../../../shared/antenna/prepare-edition';
+import type { PreparedEdition } from '../../../shared/antenna/prepare-edition';
 import { deviationDrawer, NO_DEVIATIONS, type Deviations } from '../../../shared/antenna/tolerance/deviations';
 import { correlatedGainRatio, meanPower, randomPhaseLossDb, reflectorPhaseRad } from '../../../shared/antenna/tolerance/phase-error-laws';
 import { toleranceModel } from '../../../shared/antenna/tolerance/tolerance-model';
 import { trialField } from '../../../shared/antenna/tolerance/trial-field';
 import { trialGauge } from '../../../shared/antenna/tolerance/trial-gauge';
 import { refinePeak, type PatternPeak } from '../../../shared/antenna/refine-peak';
-import type { RadiationPattern } from '../../../shared/antenna/radiation-pattern';
-import { assembleEdition } from '../../../shared/files/edition-assembly';
-import { inspectFamilyFiles } from '../../../shared/files/family-import';
+import { directivityRatio, type RadiationPattern } from '../../../shared/antenna/radiation-pattern';
+import { movedFeed } from '../../../shared/antenna/tolerance/moved-feed';
 import { randomStream } from '../../../shared/math/seeded-random';
 import { mean, quantile } from '../../../shared/math/statistics';
 import { wilsonInterval } from '../../../shared/math/wilson-interval';
+import type { DesignDocument } from '../../../shared/model/design-document';
 import type { ContributorId, ToleranceContributor } from '../../../shared/model/tolerance-run';
-import { radFromDeg } from '../../../shared/units/angles';
+import { degFromRad, radFromDeg } from '../../../shared/units/angles';
 import { powerRatioToDb } from '../../../shared/units/decibels';
-import { cellFilesOf, descriptionOf } from '../../support/cell-files';
+import { angleBetweenRad, outwardDirection } from '../../../shared/waves/conventions';
 import { expectWithin } from '../expect-within';
 import { numberIn, numbersIn, toleranceOf, type CheckTable, type PublishedCheck } from '../published-check';
 import { hornAt, testDesign } from '../test-designs';
+import { obliquePatches, vectorDesign } from '../vector-panels';
 
-const EDITION_ID = '00000000-0000-4000-8000-000000000005';
 const MATERIAL = { expansionPpmPerK: 0, permittivityPpmPerK: 0 };
-
-function libraryEdition(folder: string): PreparedEdition {
-  const assembled = assembleEdition(inspectFamilyFiles(cellFilesOf(folder)), descriptionOf(folder));
-  if (assembled.kind !== 'edition') throw new Error(JSON.stringify(assembled.messages));
-  return prepareEdition(assembled.edition);
-}
-
-let squarePatch5: PreparedEdition | undefined;
-const squarePatch = (): PreparedEdition => (squarePatch5 ??= libraryEdition('square-patch-5-oblique'));
 
 interface Bench {
   readonly placed: PlacedDesign;
@@ -104,21 +95,10 @@ function compareIndependent(check: PublishedCheck, beam: { thetaDeg: number; phi
   for (const [quantity, got, value] of rows) expectWithin({ quantity, unit: 'dB', got, expected: value as number | number[], tolerance: toleranceOf(check, 'dB') });
 }
 
-/** The horn-fed panel of square patches that a check describes. */
-function patchBench({ inputs }: PublishedCheck, contributors: readonly ToleranceContributor[]): Bench {
-  const horn = inputs['horn'] as Record<string, unknown>;
-  const beam = inputs['beam'] as Record<string, unknown>;
-  const design = testDesign({
-    frequencyGHz: numberIn(inputs, 'f0_GHz'),
-    periodMm: numberIn(inputs, 'period_mm'),
-    columns: numberIn(inputs, 'nx'),
-    rows: numberIn(inputs, 'ny'),
-    beams: [{ thetaDeg: numberIn(beam, 'theta'), phiDeg: numberIn(beam, 'phi') }],
-    illumination: hornAt(numbersIn(horn, 'pos_mm'), numberIn(horn, 'qE')),
-    cells: { kind: 'edition', editionId: EDITION_ID, rule: 'nearest-phase', excludedCells: [] },
-  });
-  return benchOf(design, contributors, squarePatch());
-}
+/** The horn-fed panel of square patches that a check describes, for the scalar model. */
+const patchDesign = ({ inputs }: PublishedCheck): DesignDocument => ({ ...vectorDesign(inputs, {}), prediction: { receiveExponent: 0.5, radiateExponent: 0.5 } });
+
+const patchBench = (check: PublishedCheck, contributors: readonly ToleranceContributor[]): Bench => benchOf(patchDesign(check), contributors, obliquePatches());
 
 const peakOf = ({ placed }: Bench, pattern: RadiationPattern): PatternPeak => refinePeak(pattern, placed.si.beams[0].direction.u, placed.si.beams[0].direction.v);
 
@@ -163,6 +143,27 @@ export const toleranceChecks: CheckTable = {
       ['percentiles', [0.05, 0.5, 0.95].map((p) => powerRatioToDb(quantile(powers, p))), expected['independent_p5_p50_p95_dB']],
     ];
     for (const [quantity, got, value] of rows) expectWithin({ quantity, unit: 'dB', got, expected: value as number | number[], tolerance: toleranceOf(check, 'dB') });
+  },
+  'tol-04': (check) => {
+    const placed = placeCells(vectorDesign(check.inputs, { reradiation: 'aperture', cellFactor: 'normal' }), obliquePatches());
+    const [beam] = placed.si.beams;
+    // The power of the horn does not change, so ratios of the co-polar power are ratios of gain.
+    const patternOf = (state: PlacedDesign): RadiationPattern => ({ ...illuminatedState(state).pattern, radiatedPower: 1 });
+    const topOf = (pattern: RadiationPattern): PatternPeak => refinePeak(pattern, beam.direction.u, beam.direction.v);
+    const before = patternOf(placed);
+    const topBefore = topOf(before);
+    for (const row of check.expected['rows'] as Record<string, unknown>[]) {
+      const [xM, yM, zM] = numbersIn(row, 'move_mm').map((mm) => mm * 1e-3);
+      const after = patternOf(movedFeed(placed, { xM, yM, zM }, obliquePatches()));
+      const topAfter = topOf(after);
+      const shift = degFromRad(angleBetweenRad(outwardDirection(topAfter.u, topAfter.v), outwardDirection(topBefore.u, topBefore.v)));
+      const rows: [string, number, string, string][] = [
+        ['change of the gain at the beam', powerRatioToDb(directivityRatio(after, beam.direction) / directivityRatio(before, beam.direction)), 'gain_at_beam_change_dB', 'dB'],
+        ['change of the peak', powerRatioToDb(topAfter.directivityRatio / topBefore.directivityRatio), 'peak_change_dB', 'dB'],
+        ['shift of the beam', shift, 'beam_shift_deg', 'deg'],
+      ];
+      for (const [quantity, got, name, unit] of rows) expectWithin({ quantity: `${quantity}, ${JSON.stringify(row['move_mm'])}`, unit, got, expected: numberIn(row, name), tolerance: toleranceOf(check, unit) });
+    }
   },
   'tol-05': (check) => {
     const bench = patchBench(check, [{ id: 'bow', spread: 0.5, distribution: 'normal' }]);
