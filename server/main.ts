@@ -5,7 +5,7 @@ import { drain } from './http/drain';
 import { openHouse, runProgram } from './opened-house';
 
 const HEADERS_TIMEOUT_MS = 10_000;
-/** Uploads need longer than the minute that is enough for anything else. */
+/** As long as the longest limit of a route: each route's own, a minute as a rule, comes first (`http/time-limit.ts`). */
 const REQUEST_TIMEOUT_MS = 600_000;
 const DRAIN_MS = 30_000;
 void runProgram(async () => {

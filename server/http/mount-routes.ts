@@ -12,6 +12,7 @@ import { addressKey, rateLimiters, rateLimits, type RateLimit } from './rate-lim
 import type { Policy, RateClass, Route, RouteContext, UploadedFile } from './route';
 import { parseBody, parseParameters } from './schema-faults';
 import { sendAnswer, type AnswerOptions } from './send-answer';
+import { isOverdue, timeLimitOf, timeLimitStep } from './time-limit';
 
 const MAX_BODY_BYTES = 1024 * 1024;
 
@@ -114,6 +115,7 @@ function uploadedFiles(request: Request): UploadedFile[] {
 }
 
 function contextOf(route: Route, request: Request, response: Response): RouteContext<Policy, unknown, unknown, unknown> {
+  const late = timeLimitOf(response);
   const gone = new AbortController();
   response.on('close', () => {
     if (!response.writableFinished) gone.abort();
@@ -128,7 +130,7 @@ function contextOf(route: Route, request: Request, response: Response): RouteCon
     wants: (mediaType) => (request.headers.accept ?? '').split(',').some((part) => part.split(';')[0]?.trim() === mediaType),
     address: request.ip ?? '',
     requestId: requestIdOf(response),
-    signal: gone.signal,
+    signal: AbortSignal.any([gone.signal, ...(late === undefined ? [] : [late])]),
   };
 }
 
@@ -141,9 +143,10 @@ export function mountRoutes(app: Express, routes: readonly Route[], options: Mou
     const answer: RequestHandler = async (request, response) => {
       const context = contextOf(route, request, response);
       const result = route.idempotent === true ? await runOnce(options.replays, route, context) : await route.run(context);
-      await sendAnswer(route, result, response, options);
+      // Whoever asked has been told already that it took too long.
+      if (!isOverdue(response)) await sendAnswer(route, result, response, options);
     };
-    const steps = [identify, limiters[route.rate ?? 'general'], guardStep(route, options), ...bodySteps(route), answer];
+    const steps = [timeLimitStep(route), identify, limiters[route.rate ?? 'general'], guardStep(route, options), ...bodySteps(route), answer];
     for (const step of steps) mounted.add(step);
     app[route.method](route.path, ...steps);
   }

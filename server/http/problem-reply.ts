@@ -2,6 +2,7 @@ import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
 import type { Logger } from 'pino';
 import type { Problem as ProblemBody } from '../../shared/contracts/common';
 import type { Cause } from './problems';
+import { isOverdue } from './time-limit';
 import {
   BadRequest,
   InvalidInput,
@@ -29,6 +30,7 @@ const answers: Readonly<Record<Cause, { readonly status: number; readonly title:
   'stale-version': { status: 412, title: 'Changed in the meantime' },
   'version-required': { status: 428, title: 'The version is missing' },
   'too-large': { status: 413, title: 'Too large' },
+  'too-slow': { status: 408, title: 'The request came too slowly' },
   'unsupported-type': { status: 415, title: 'This media type is not accepted' },
   'not-acceptable': { status: 406, title: 'No such representation' },
   'too-many': { status: 429, title: 'Too many requests' },
@@ -100,6 +102,10 @@ export function problemReply(logger: Logger): ErrorRequestHandler {
     const requestId = requestIdOf(response);
     if (response.destroyed) {
       logger.debug({ err: error, requestId }, 'the caller went away');
+      return;
+    }
+    if (isOverdue(response) && response.headersSent) {
+      logger.debug({ err: error, requestId }, 'ended after its time was over');
       return;
     }
     if (response.headersSent) {

@@ -21,6 +21,7 @@ export type Cause =
   | 'stale-version'
   | 'version-required'
   | 'too-large'
+  | 'too-slow'
   | 'unsupported-type'
   | 'not-acceptable'
   | 'too-many'
@@ -109,6 +110,14 @@ export class VersionRequired extends Problem {
 
 export class TooLarge extends Problem {
   readonly kind = 'too-large';
+}
+
+/** The body did not come within the time that its address allows. */
+export class RequestTooSlow extends Problem {
+  readonly kind = 'too-slow';
+  constructor(limitSeconds: number) {
+    super(`The request did not arrive within ${limitSeconds} s.`);
+  }
 }
 
 export class UnsupportedType extends Problem {

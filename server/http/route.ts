@@ -25,7 +25,7 @@ import type { BytesReply, Reply } from './reply';
  *    `Ground` (server/database/ground.ts) and other services. Routes and services never import the house itself.
  *
  * What comes before the handler, in this order: rate limit, sign-in (401), role and scope (403), forgery check (403),
- * If-Match (428), type and size of the body (415, 413), schemas of params, query and body with every fault named (422).
+ * If-Match (428), type and size of the body (415, 413), all within the time limit (408, 503), schemas of params, query and body with every fault named (422).
  * Schemas must be strict objects: unknown fields are refused. The handler returns the plain value, a Reply (status,
  * ETag, Location), a BytesReply (bytes, stream, download), or nothing (204). To refuse, throw from `problems.ts`.
  */
@@ -99,6 +99,8 @@ interface RouteFrame<Pol extends Policy, P extends Schema, Q extends Schema, B e
   /** Largest JSON body; 1 MB unless said. */
   readonly maxBodyBytes?: number;
   readonly rate?: RateClass;
+  /** Longest time from the headers of the request to the head of the answer; a minute unless said. */
+  readonly timeLimitSeconds?: number;
 }
 
 export interface RouteSpec<Pol extends Policy, P extends Schema, Q extends Schema, B extends Schema, R extends Schema>

@@ -17,6 +17,8 @@ const readers: readonly Role[] = ['designer', 'lab', 'reviewer', 'range', 'admin
 const read = { kind: 'signed-in', roles: readers, scope: 'read' } as const;
 const edit = { kind: 'signed-in', roles: ['lab'] as readonly Role[], scope: 'library' } as const;
 
+/** Twenty megabytes over a slow line, and 30 s to read them. */
+const UPLOAD_SECONDS = 600;
 const upload = { maxFileBytes: 20 * 1024 * 1024, maxFiles: ARCHIVE_LIMITS.entries } as const;
 
 /** A text field of a form that holds JSON. */
@@ -126,6 +128,7 @@ function importRoutes({ imports }: Parts): Route[] {
       policy: edit,
       upload,
       rate: 'upload',
+      timeLimitSeconds: UPLOAD_SECONDS,
       body: inspectionForm,
       reply: contract.inspection,
       handler: ({ files, body }) => imports.inspect(named(files), body.inspection ?? {}),
@@ -137,6 +140,7 @@ function importRoutes({ imports }: Parts): Route[] {
       policy: edit,
       upload,
       rate: 'upload',
+      timeLimitSeconds: UPLOAD_SECONDS,
       idempotent: true,
       body: importForm,
       reply: contract.editionDetail,
@@ -154,6 +158,7 @@ function importRoutes({ imports }: Parts): Route[] {
       params: z.strictObject({ id }),
       upload,
       rate: 'upload',
+      timeLimitSeconds: UPLOAD_SECONDS,
       idempotent: true,
       body: importForm,
       reply: contract.editionDetail,

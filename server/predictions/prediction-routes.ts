@@ -2,6 +2,7 @@ import { predictionReply, predictionRequest, type CutRequest, type PredictionReq
 import { InvalidInput, NotAcceptable } from '../http/problems';
 import { BytesReply, MAX_JSON_NUMBERS } from '../http/reply';
 import { defineRoute, type Route } from '../http/route';
+import { COMPUTE_SECONDS } from '../http/time-limit';
 import { predictionBlockOf, predictionReplyOf } from './prediction-reply';
 import type { PredictionService, PredictionWish } from './prediction-service';
 import { MAX_CUT_SAMPLES, arrayNumberBound, cutSamples } from './prediction-size';
@@ -46,6 +47,7 @@ export const predictionRoutes = ({ predictions }: { predictions: PredictionServi
     summary: 'Predict a design without storing anything; as JSON, or as a binary block with Accept: application/octet-stream',
     policy: { kind: 'signed-in', scope: 'predict' },
     rate: 'compute',
+    timeLimitSeconds: COMPUTE_SECONDS,
     body: predictionRequest,
     reply: predictionReply,
     bytes: [BLOCK],

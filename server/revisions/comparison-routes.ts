@@ -3,6 +3,7 @@ import { comparison, comparisonQuery } from '../../shared/contracts/comparisons'
 import { NotAcceptable } from '../http/problems';
 import { BytesReply, MAX_JSON_NUMBERS } from '../http/reply';
 import { defineRoute, type Route } from '../http/route';
+import { COMPUTE_SECONDS } from '../http/time-limit';
 import { comparisonBlockOf, comparisonReplyOf } from './comparison-reply';
 import { comparedNumberBound, type ComparisonService } from './comparison-service';
 
@@ -17,6 +18,7 @@ export const comparisonRoutes = ({ comparisons }: { comparisons: ComparisonServi
     summary: 'Compare two states, each `revision:<id>` or `draft:<panel id>`; as JSON, or as a binary block with Accept: application/octet-stream',
     policy: { kind: 'signed-in', roles: readers, scope: 'read' },
     rate: 'compute',
+    timeLimitSeconds: COMPUTE_SECONDS,
     query: comparisonQuery,
     reply: comparison,
     bytes: [BLOCK],

@@ -6,6 +6,8 @@ import type { ExportService } from './export-service';
 
 /** A fabricator gets released revisions, and those by another way. */
 const readers: readonly Role[] = ['designer', 'lab', 'reviewer', 'range', 'administrator'];
+/** A million cells take half a minute to predict and as long to write, and exports wait for each other. */
+const EXPORT_SECONDS = 300;
 const read = { kind: 'signed-in', roles: readers, scope: 'read' } as const;
 
 export const exportRoutes = ({ exports }: { exports: ExportService }): readonly Route[] => [
@@ -15,6 +17,7 @@ export const exportRoutes = ({ exports }: { exports: ExportService }): readonly 
     summary: 'A revision as a zip of tables, design, manifest and checksums; the same bytes every time',
     policy: read,
     rate: 'export',
+    timeLimitSeconds: EXPORT_SECONDS,
     params: idParams,
     bytes: ['application/zip'],
     handler: async ({ caller, params }) => {
@@ -30,6 +33,7 @@ export const exportRoutes = ({ exports }: { exports: ExportService }): readonly 
     summary: 'What the archive of a revision holds: names, sizes, hashes, the first lines',
     policy: read,
     rate: 'export',
+    timeLimitSeconds: EXPORT_SECONDS,
     params: idParams,
     reply: exportPreview,
     handler: ({ caller, params }) => exports.preview(caller.teamId, params.id),
