@@ -1,11 +1,11 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import { RouterLink } from '@angular/router';
 import type { Letter } from '../../../shared/contracts/session';
 import { SessionClient } from '../api/session-client';
 import { EmptyState } from '../ui/empty-state';
 import { FaultNote } from '../ui/fault-note';
 import { SheetFrame } from '../ui/sheet-frame';
+import { UtcTime } from '../ui/utc-time';
 import { letterParts } from './letter-parts';
 import type { CallFault } from './call-fault';
 import { callFault } from './call-fault';
@@ -13,7 +13,7 @@ import { callFault } from './call-fault';
 /** What this server wrote while no mail server is set: for development and demonstration only. */
 @Component({
   selector: 'slant-letters-page',
-  imports: [DatePipe, EmptyState, FaultNote, RouterLink, SheetFrame],
+  imports: [EmptyState, FaultNote, RouterLink, SheetFrame, UtcTime],
   templateUrl: './letters-page.html',
   styleUrl: './letters-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,5 +1,5 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
-import { DatePipe, JsonPipe } from '@angular/common';
+import { JsonPipe } from '@angular/common';
 import { RouterLink } from '@angular/router';
 import type { AuditRow } from '../../../shared/contracts/team';
 import { TeamClient } from '../api/team-client';
@@ -8,13 +8,14 @@ import { callFault } from '../session/call-fault';
 import { FaultNote } from '../ui/fault-note';
 import { SheetFrame } from '../ui/sheet-frame';
 import { StateMark } from '../ui/state-mark';
+import { UtcTime } from '../ui/utc-time';
 import { ViewTitle } from '../ui/view-title';
 import { detailText, objectText } from './audit-text';
 
 /** What was done, by whom and when, with the verdict on the chain of hashes that guards it. */
 @Component({
   selector: 'slant-audit-page',
-  imports: [DatePipe, FaultNote, JsonPipe, RouterLink, SheetFrame, StateMark, ViewTitle],
+  imports: [FaultNote, JsonPipe, RouterLink, SheetFrame, StateMark, UtcTime, ViewTitle],
   templateUrl: './audit-page.html',
   styleUrl: './team-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -1,16 +1,16 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import type { OwnSession } from '../../../shared/contracts/session';
 import { SessionClient } from '../api/session-client';
 import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { FaultNote } from '../ui/fault-note';
+import { UtcTime } from '../ui/utc-time';
 import { ViewTitle } from '../ui/view-title';
 import { browserName } from './browser-name';
 
 @Component({
   selector: 'slant-own-sessions',
-  imports: [DatePipe, FaultNote, ViewTitle],
+  imports: [FaultNote, UtcTime, ViewTitle],
   template: `
     <section aria-label="Sessions">
       <slant-view-title text="Sessions" unit="where you are signed in" />
@@ -27,8 +27,8 @@ import { browserName } from './browser-name';
               <tr [class.chosen]="session.current">
                 <td class="text" [attr.title]="session.browser">{{ browserName(session.browser) }}</td>
                 <td class="text">{{ session.address }}</td>
-                <td>{{ session.createdAt | date: 'yyyy-MM-dd HH:mm' }}</td>
-                <td>{{ session.lastUsedAt | date: 'yyyy-MM-dd HH:mm' }}</td>
+                <td>{{ session.createdAt | utcTime }}</td>
+                <td>{{ session.lastUsedAt | utcTime }}</td>
                 <td>
                   @if (session.current) {
                     this one

@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import { scope } from '../../../shared/contracts/common';
 import type { Scope } from '../../../shared/contracts/common';
 import type { PersonalToken, TokenCreated } from '../../../shared/contracts/session';
@@ -9,12 +8,13 @@ import { callFault } from '../session/call-fault';
 import { CheckField } from '../ui/check-field';
 import { Confirm } from '../ui/confirm';
 import { FaultNote } from '../ui/fault-note';
+import { UtcTime } from '../ui/utc-time';
 import { ViewTitle } from '../ui/view-title';
 
 /** Personal tokens for scripts: scoped, expiring, shown once. */
 @Component({
   selector: 'slant-own-tokens',
-  imports: [CheckField, DatePipe, FaultNote, ViewTitle],
+  imports: [CheckField, FaultNote, UtcTime, ViewTitle],
   templateUrl: './own-tokens.html',
   styleUrl: './own-tokens.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,

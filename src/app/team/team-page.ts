@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import { RouterLink } from '@angular/router';
 import { role } from '../../../shared/contracts/common';
 import type { Role } from '../../../shared/contracts/common';
@@ -14,6 +13,7 @@ import { EmptyState } from '../ui/empty-state';
 import { FaultNote } from '../ui/fault-note';
 import { AskName } from '../ui/name-dialog';
 import { SheetFrame } from '../ui/sheet-frame';
+import { UtcTime } from '../ui/utc-time';
 import { ViewTitle } from '../ui/view-title';
 import { WhyNot } from '../ui/why-not';
 import { ROLE_DUTIES } from './role-duties';
@@ -21,7 +21,7 @@ import { ROLE_DUTIES } from './role-duties';
 /** Who works in the team and as what. Administrators change it; everybody may look. */
 @Component({
   selector: 'slant-team-page',
-  imports: [CheckField, DatePipe, EmptyState, FaultNote, RouterLink, SheetFrame, ViewTitle, WhyNot],
+  imports: [CheckField, EmptyState, FaultNote, RouterLink, SheetFrame, UtcTime, ViewTitle, WhyNot],
   templateUrl: './team-page.html',
   styleUrl: './team-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
