@@ -1,6 +1,6 @@
 import type { DesignDocument } from './design-document';
 
-/** What a new panel starts from: an offset-fed reflecting square at 28 GHz with ideal cells. */
+/** An offset-fed reflecting square at 28 GHz with ideal cells, by the model that the document takes where none is named. */
 export const STARTING_DESIGN: DesignDocument = {
   schemaVersion: 1,
   requirement: {
@@ -23,3 +23,6 @@ export const STARTING_DESIGN: DesignDocument = {
   referencePhaseDeg: 0,
   prediction: { receiveExponent: 0.5, radiateExponent: 0.5 },
 };
+
+/** What a new panel of the workspace starts from: the same by the vector model. */
+export const NEW_PANEL_DESIGN: DesignDocument = { ...STARTING_DESIGN, prediction: { ...STARTING_DESIGN.prediction, model: 'vector' } };

@@ -5,7 +5,7 @@ import type { ComponentFixture } from '@angular/core/testing';
 import { provideRouter } from '@angular/router';
 import type { Role } from '../../../shared/contracts/common';
 import type { Project } from '../../../shared/contracts/projects';
-import { STARTING_DESIGN } from '../../../shared/model/starting-design';
+import { NEW_PANEL_DESIGN, STARTING_DESIGN } from '../../../shared/model/starting-design';
 import { sessionOf } from '../session/session-fixture';
 import { SessionStore } from '../session/session-store';
 import { ProjectsPage } from './projects-page';
@@ -78,6 +78,23 @@ describe('projects page', () => {
     expect(element().textContent).toContain('demo data, invented');
     const link = [...element().querySelectorAll('a')].find(({ textContent }) => textContent === 'A, lighthouse relay');
     expect(link?.getAttribute('href')).toBe(`/panels/${id(2)}/requirement`);
+  });
+
+  it('makes a panel that starts by the vector model', async () => {
+    await open(['designer'], [project]);
+    button('New panel').click();
+    await settled();
+    const field = document.querySelector<HTMLInputElement>('slant-name-dialog input');
+    if (field === null) throw new Error('no dialog opened');
+    field.value = 'C, harbour wall';
+    button('Make the panel').click();
+    // The dialog closes over a moment.
+    await new Promise((done) => setTimeout(done, 300));
+    const call = http.expectOne({ method: 'POST', url: `/api/projects/${project.id}/panels` });
+    expect(call.request.body).toEqual({ name: 'C, harbour wall', design: NEW_PANEL_DESIGN });
+    expect(NEW_PANEL_DESIGN.prediction.model).toBe('vector');
+    call.flush({ type: 'about:blank', title: 'Forbidden', status: 403 }, { status: 403, statusText: 'Forbidden' });
+    await settled();
   });
 
   it('makes a project of the given name', async () => {

@@ -4,6 +4,7 @@ import { MatMenuModule } from '@angular/material/menu';
 import { Router, RouterLink } from '@angular/router';
 import type { FamilySummary } from '../../../shared/contracts/library';
 import type { Project } from '../../../shared/contracts/projects';
+import { NEW_PANEL_DESIGN } from '../../../shared/model/starting-design';
 import { LibraryClient } from '../api/library-client';
 import { ProjectClient } from '../api/project-client';
 import type { CallFault } from '../session/call-fault';
@@ -110,7 +111,7 @@ export class ProjectsPage {
   protected async addPanel(project: Project): Promise<void> {
     const name = await this.names.ask({ title: `New panel in ${project.name}`, label: 'Name', deed: 'Make the panel', hint: 'It starts as a 28 GHz reflecting panel of 40 × 40 cells with an offset horn.' });
     if (name === undefined) return;
-    const panel = await this.attempt(() => this.client.addPanel(project.id, { name }));
+    const panel = await this.attempt(() => this.client.addPanel(project.id, { name, design: NEW_PANEL_DESIGN }));
     if (panel !== null) await this.open(panel.id);
   }
 

@@ -22,7 +22,7 @@ export function computedPrediction(design: DesignDocument, options: { readonly e
     head: { engineVersion: 'spec', figures: answer.figures, verdicts: answer.verdicts, warnings: answer.warnings, cellCount: arrays.xMm.length },
     cells,
     cuts: answer.cuts.map((cut) => ({ ...cut, request: requestOf(cut.request) })),
-    uv: answer.uv ? { size: answer.uv.size, floorDbi: answer.uv.floorDbi, gainDbi: Float32Array.from(answer.uv.gainDbi) } : null,
+    uv: answer.uv ?? null,
     of: design,
   };
 }

@@ -14,6 +14,8 @@ export interface PredictedCut {
   readonly phiDeg: BlockArray;
   readonly directivityDbi: BlockArray;
   readonly gainDbi: BlockArray;
+  /** Of the cross-polar field; the vector model alone has one. */
+  readonly crossGainDbi?: BlockArray;
 }
 
 /** Row by row from v = -1 to 1, within a row from u = -1 to 1. */
@@ -21,6 +23,7 @@ export interface PredictedUv {
   readonly size: number;
   readonly floorDbi: number;
   readonly gainDbi: Float32Array;
+  readonly crossGainDbi?: Float32Array;
 }
 
 /** What one answer of the prediction call holds, and the design it is of. */

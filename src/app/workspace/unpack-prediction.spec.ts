@@ -32,6 +32,14 @@ describe('unpackPrediction', () => {
     expect(prediction.of).toBe(STARTING_DESIGN);
   });
 
+  it('keeps the cross-polar field of the vector model', () => {
+    const both = { ...arrays, 'cuts.0.crossGainDbi': Float64Array.of(-20, -21, -22), 'uv.crossGainDbi': Float64Array.of(-1, -2, -3, -4) };
+    const prediction = unpackPrediction(received(both), STARTING_DESIGN);
+    expect(prediction.cuts[0].crossGainDbi?.[1]).toBe(-21);
+    expect(prediction.uv?.crossGainDbi).toEqual(Float32Array.of(-1, -2, -3, -4));
+    expect(unpackPrediction(received(arrays), STARTING_DESIGN).cuts[0].crossGainDbi).toBeUndefined();
+  });
+
   it('has no map where none was asked for', () => {
     const { uv: _uv, ...plain } = head;
     expect(unpackPrediction({ head: plain, arrays }, STARTING_DESIGN).uv).toBeNull();

@@ -31,12 +31,17 @@ function cellsOf(head: PredictionHead, arrays: Arrays): PredictedCells {
 function cutsOf(head: PredictionHead, arrays: Arrays): readonly PredictedCut[] {
   return (head.cuts ?? []).map(({ request }, place) => {
     const entries = CUT_ARRAY_NAMES.map((name) => [name, arrayNamed(arrays, `cuts.${place}.${name}`)] as const);
-    return { request, ...(Object.fromEntries(entries) as Omit<PredictedCut, 'request'>) };
+    const cross = arrays[`cuts.${place}.crossGainDbi`];
+    return { request, ...(Object.fromEntries(entries) as Omit<PredictedCut, 'request'>), ...(cross ? { crossGainDbi: cross } : {}) };
   });
 }
 
 function uvOf(head: PredictionHead, arrays: Arrays): PredictedUv | null {
   if (!head.uv) return null;
-  const gain = arrayNamed(arrays, 'uv.gainDbi');
-  return { ...head.uv, gainDbi: gain instanceof Float32Array ? gain : Float32Array.from(gain) };
+  const cross = arrays['uv.crossGainDbi'];
+  return { ...head.uv, gainDbi: singles(arrayNamed(arrays, 'uv.gainDbi')), ...(cross ? { crossGainDbi: singles(cross) } : {}) };
+}
+
+function singles(values: BlockArray): Float32Array {
+  return values instanceof Float32Array ? values : Float32Array.from(values);
 }

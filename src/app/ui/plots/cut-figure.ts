@@ -24,6 +24,8 @@ export interface CutFigure {
   readonly angleTitle: string;
   readonly levelTitle: string;
   readonly main: CutTrace;
+  /** The cross-polar field over the same angles, dotted. */
+  readonly cross?: CutTrace;
   /** What it is compared with, dashed. */
   readonly overlay: CutTrace | null;
   readonly forbidden: readonly ForbiddenEdge[];

@@ -20,6 +20,8 @@ export const CUT_MARGIN = { left: 40, right: 12, top: 10, bottom: 36 } as const;
 /** The library also takes lengths of strokes and gaps, which its types leave out. */
 const PARENT_DASH = ('5px,3px' as string) as Dash;
 
+const CROSS_DASH = ('1.5px,2.5px' as string) as Dash;
+
 export interface CutAxes {
   readonly x: LinearAxis;
   readonly y: LinearAxis;
@@ -44,6 +46,7 @@ export function cutDrawing(figure: CutFigure, size: CutDrawingSize, theme: PlotT
   const data: Data[] = [
     ...figure.forbidden.flatMap((edge) => forbiddenTraces(edge, size.window, theme)),
     ...(figure.overlay ? [line(figure.overlay.angleDeg, figure.overlay.levelDb, { color: theme.patina, width: 1.1, dash: PARENT_DASH })] : []),
+    ...(figure.cross ? [line(figure.cross.angleDeg, figure.cross.levelDb, { color: theme.copper, width: 1.2, dash: CROSS_DASH })] : []),
     line(figure.main.angleDeg, figure.main.levelDb, { color: theme.ink, width: 1.5 }),
     ...(figure.least ? [leastTrace(figure.least, axes.x, theme)] : []),
     ...markTraces(figure, size, axes, theme),

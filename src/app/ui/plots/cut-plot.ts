@@ -65,12 +65,14 @@ export class CutPlot implements ExportablePlot {
   protected readonly readOut = computed(() => {
     const angle = this.cursorDeg();
     if (angle === null) return '';
-    const { main, overlay, levelTitle } = this.figure();
+    const { main, cross, overlay, levelTitle } = this.figure();
     const level = levelAt(main, angle);
     if (!level) return '';
     const other = overlay && levelAt(overlay, angle);
     const unit = levelTitle.replace(/^.*, /, '');
     const parts = [`${fullNumberText(angle)}°: ${fullNumberText(level.levelDb)} ${unit}`];
+    const crossLevel = cross && levelAt(cross, angle);
+    if (cross && crossLevel) parts.push(`${cross.label} ${fullNumberText(crossLevel.levelDb)}`);
     if (overlay && other) parts.push(`${overlay.label.replace(/,.*$/, '')} ${fullNumberText(other.levelDb)}`);
     if (level.interpolated || other?.interpolated) parts.push('interpolated');
     return parts.join('; ');
@@ -183,8 +185,9 @@ export class CutPlot implements ExportablePlot {
   }
 
   exportTable(): PlotTable {
-    const { angleTitle, levelTitle, main, overlay } = this.figure();
+    const { angleTitle, levelTitle, main, cross, overlay } = this.figure();
     const columns = [{ head: angleTitle, values: main.angleDeg }, { head: `${levelTitle} (${main.label})`, values: main.levelDb }];
+    if (cross) columns.push({ head: `${levelTitle} (${cross.label})`, values: cross.levelDb });
     if (overlay) columns.push({ head: `${angleTitle} (${overlay.label})`, values: overlay.angleDeg }, { head: `${levelTitle} (${overlay.label})`, values: overlay.levelDb });
     return { columns };
   }

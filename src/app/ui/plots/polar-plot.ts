@@ -33,6 +33,10 @@ export class PolarPlot implements ExportablePlot {
   protected readonly grid = computed(() => polarGrid(this.frame(), this.figure()));
   protected readonly half = computed(() => this.figure().fromDeg >= -90 && this.figure().toDeg <= 90);
   protected readonly mainPath = computed(() => polarPath(this.frame(), this.figure().main));
+  protected readonly crossPath = computed(() => {
+    const { cross } = this.figure();
+    return cross ? polarPath(this.frame(), cross) : null;
+  });
   protected readonly overlayPath = computed(() => {
     const overlay = this.figure().overlay;
     return overlay ? polarPath(this.frame(), overlay) : null;
@@ -56,8 +60,9 @@ export class PolarPlot implements ExportablePlot {
   }
 
   exportTable(): PlotTable {
-    const { angleTitle, levelTitle, main, overlay } = this.figure();
+    const { angleTitle, levelTitle, main, cross, overlay } = this.figure();
     const columns = [{ head: angleTitle, values: main.angleDeg }, { head: `${levelTitle} (${main.label})`, values: main.levelDb }];
+    if (cross) columns.push({ head: `${levelTitle} (${cross.label})`, values: cross.levelDb });
     if (overlay) columns.push({ head: `${angleTitle} (${overlay.label})`, values: overlay.angleDeg }, { head: `${levelTitle} (${overlay.label})`, values: overlay.levelDb });
     return { columns };
   }

@@ -16,7 +16,9 @@ export function illuminationOfKind(design: DesignDocument, kind: Illumination['k
 /** The design lit in another way, with cells that can be: an edition is measured under waves from outside, resonant cells need a guided one. */
 export function designOfIllumination(design: DesignDocument, kind: Illumination['kind']): DesignDocument {
   const illumination = illuminationOfKind(design, kind);
-  const { cells } = design;
+  const { cells, prediction } = design;
+  // A guided wave has no angle of incidence, so the vector model has nothing to go by.
+  if (kind === 'guided-wave' && prediction.model === 'vector') return designOfIllumination({ ...design, prediction: { ...prediction, model: 'scalar' } }, kind);
   if (kind === 'guided-wave' && cells.kind === 'edition') return { ...design, illumination, cells: { kind: 'resonant', rule: 'projection', states: null } };
   if (kind !== 'guided-wave' && cells.kind === 'resonant') return { ...design, illumination, cells: { kind: 'ideal', levels: null } };
   return { ...design, illumination };

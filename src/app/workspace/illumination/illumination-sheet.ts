@@ -18,6 +18,7 @@ import { designOfIllumination } from './illumination-choices';
 import { geometryFacts, illuminationSubtitle, predictedFacts } from './illumination-facts';
 import { amplitudeLayer, cellPlaces, incidenceLayer, incidentPhaseLayer } from './illumination-layers';
 import { IlluminationSketch } from './illumination-sketch';
+import { ModelFields } from './model-fields';
 
 const KIND_OPTIONS = [
   { value: 'horn', label: 'Horn' },
@@ -34,7 +35,7 @@ const POLARISATION_OPTIONS = [
 /** What lights the panel: drawn from the side to scale, with what falls on each cell. */
 @Component({
   selector: 'slant-illumination-sheet',
-  imports: [ColourKey, DesignChoice, DesignField, GuidedWaveFields, HowNote, IlluminationSketch, PanelMap, RemarkList, SheetNotes, ViewTitle],
+  imports: [ColourKey, DesignChoice, DesignField, GuidedWaveFields, HowNote, IlluminationSketch, ModelFields, PanelMap, RemarkList, SheetNotes, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './illumination-sheet.html',
   styleUrls: ['../fields/sheet.scss', './illumination-sheet.scss'],

@@ -14,6 +14,8 @@ export interface ShownCut {
   readonly thetaDeg: ArrayLike<number>;
   readonly phiDeg: ArrayLike<number>;
   readonly gainDbi: ArrayLike<number>;
+  /** Of the cross-polar field; the vector model alone has one. */
+  readonly crossGainDbi?: ArrayLike<number>;
   /** Angle of the wanted beam on this cut, or of what comes nearest to it. */
   readonly beamDeg: number;
   readonly angleTitle: string;
@@ -40,8 +42,8 @@ export function cutRequests({ choice, beam, planePhiDeg }: CutWish): readonly Cu
 export function shownCut({ cuts }: LivePrediction, wish: CutWish): ShownCut | null {
   const cut = cuts.find(({ request }) => fits(request, wish)) ?? (wish.choice === 'along' ? cuts.find(({ request }) => 'phiDeg' in request) : undefined);
   if (!cut) return null;
-  const { angleDeg, thetaDeg, phiDeg, gainDbi, request } = cut;
-  const arrays = { angleDeg, thetaDeg, phiDeg, gainDbi };
+  const { angleDeg, thetaDeg, phiDeg, gainDbi, crossGainDbi, request } = cut;
+  const arrays = { angleDeg, thetaDeg, phiDeg, gainDbi, ...(crossGainDbi ? { crossGainDbi } : {}) };
   if (!('phiDeg' in request)) return { ...arrays, beamDeg: 0, angleTitle: 'angle across the beam, °' };
   return { ...arrays, beamDeg: nearestThetaDeg(wish.beam, request.phiDeg), angleTitle: `θ in the plane φ = ${tidy(request.phiDeg)}°, °` };
 }

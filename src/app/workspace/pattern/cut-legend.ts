@@ -8,6 +8,9 @@ import { drawnId } from '../../ui/plots/drawn-id';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <span class="entry"><svg width="26" height="8" aria-hidden="true"><path class="ink" d="M0 4H26" /></svg>{{ figure().main.label }}</span>
+    @if (figure().cross; as cross) {
+      <span class="entry"><svg width="26" height="8" aria-hidden="true"><path class="copper" d="M0 4H26" /></svg>{{ cross.label }}</span>
+    }
     @if (figure().overlay; as overlay) {
       <span class="entry"><svg width="26" height="8" aria-hidden="true"><path class="patina" d="M0 4H26" /></svg>{{ overlay.label }}</span>
     }
@@ -47,6 +50,11 @@ import { drawnId } from '../../ui/plots/drawn-id';
     .ink {
       stroke: var(--ink);
       stroke-width: 1.6;
+    }
+    .copper {
+      stroke: var(--copper);
+      stroke-width: 1.6;
+      stroke-dasharray: 1.5 2.5;
     }
     .patina {
       stroke: var(--patina);

@@ -39,6 +39,10 @@ export class PatternControls {
     { id: 'absolute', label: 'Absolute' },
     { id: 'relative', label: 'Relative' },
   ];
+  protected readonly fields = [
+    { id: 'co', label: 'Co-polar' },
+    { id: 'cross', label: 'Cross-polar' },
+  ];
   protected readonly beams = computed(() => this.state.design().requirement.beams);
   protected readonly beamTabs = computed(() => this.beams().map((_, i) => ({ id: String(i), label: String(i + 1) })));
   protected readonly beam = computed(() => Math.min(this.link().beam, this.beams().length - 1));
@@ -52,6 +56,7 @@ export class PatternControls {
     return `${numberText(k * Math.sin(radFromDeg(this.wanted().thetaDeg)), 2)} rad/m`;
   });
   protected readonly parentNumber = computed(() => this.state.panel()?.latestRevision?.number ?? null);
+  protected readonly hasCross = computed(() => this.state.design().prediction.model === 'vector');
   protected readonly hasMask = computed(() => this.state.design().requirement.mask?.kind === 'custom');
 
   protected chooseCut(cut: CutChoice): void {
@@ -60,6 +65,10 @@ export class PatternControls {
 
   protected chooseForm(form: string): void {
     this.changed.emit({ form: form === 'relative' ? 'relative' : 'absolute', window: null });
+  }
+
+  protected chooseField(field: string): void {
+    this.changed.emit({ field: field === 'cross' ? 'cross' : 'co' });
   }
 
   protected chooseBeam(id: string): void {

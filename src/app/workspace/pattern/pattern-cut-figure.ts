@@ -20,6 +20,8 @@ export interface CutFigureSource {
   readonly depthDb: number;
   readonly parent: { readonly label: string; readonly cut: ShownCut; readonly peakDbi: number } | null;
   readonly marks: readonly CutMark[];
+  /** Whether the cross-polar curve is drawn where there is one. */
+  readonly showCross: boolean;
 }
 
 /** The figure of a cut, in dBi or relative to the peak of its beam. */
@@ -35,7 +37,8 @@ export function patternCutFigure(source: CutFigureSource): CutFigure {
     title: source.title,
     angleTitle: cut.angleTitle,
     levelTitle: relative ? 'gain relative to the peak, dB' : 'gain, dBi',
-    main: { label: 'draft', angleDeg: cut.angleDeg, levelDb: shifted(cut.gainDbi, shiftDb) },
+    main: { label: cut.crossGainDbi ? 'draft, co-polar' : 'draft', angleDeg: cut.angleDeg, levelDb: shifted(cut.gainDbi, shiftDb) },
+    ...(source.showCross && cut.crossGainDbi ? { cross: { label: 'cross-polar', angleDeg: cut.angleDeg, levelDb: shifted(cut.crossGainDbi, shiftDb) } } : {}),
     overlay: parent ? { label: parent.label, angleDeg: parent.cut.angleDeg, levelDb: shifted(parent.cut.gainDbi, relative ? parent.peakDbi : 0) } : null,
     forbidden: forbiddenEdges(source.mask, beams, cut, shiftDb),
     forbiddenLabel: 'forbidden by the mask',

@@ -11,8 +11,8 @@ describe('address of the Pattern sheet', () => {
   });
   it.each<Partial<PatternLink>>([
     { cut: 'plane', planePhiDeg: -22.5, form: 'relative' },
-    { depthDb: 40, show: { parent: false, mask: false, lobes: false, specular: false } },
-    { show: { parent: true, mask: true, lobes: true, specular: true }, beam: 2, polarWide: true },
+    { depthDb: 40, show: { parent: false, mask: false, lobes: false, specular: false, cross: false } },
+    { show: { parent: true, mask: true, lobes: true, specular: true, cross: true }, field: 'cross', beam: 2, polarWide: true },
     { marksDeg: [-44.8, 14.91], window: { fromDeg: 0, toDeg: 40, floorDb: -10.5, topDb: 40 } },
   ])('reads back what it says: %j', (part) => {
     const link = { ...first, ...part };

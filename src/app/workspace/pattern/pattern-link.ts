@@ -9,6 +9,7 @@ export interface PatternShow {
   readonly mask: boolean;
   readonly lobes: boolean;
   readonly specular: boolean;
+  readonly cross: boolean;
 }
 
 /** What the address of the sheet says of the view, so that a link shows the same. */
@@ -16,6 +17,8 @@ export interface PatternLink {
   readonly cut: CutChoice;
   readonly planePhiDeg: number;
   readonly form: LevelForm;
+  /** Which field the map of the hemisphere shows. */
+  readonly field: 'co' | 'cross';
   /** How far below the peak map and cut reach, in dB, positive. */
   readonly depthDb: number;
   readonly show: PatternShow;
@@ -31,8 +34,8 @@ export interface PatternLink {
 export const DEEPEST_DB = 100;
 export const SHALLOWEST_DB = 10;
 
-const FIRST_SHOW: PatternShow = { parent: true, mask: true, lobes: true, specular: false };
-const SHOW_NAMES = ['parent', 'mask', 'lobes', 'specular'] as const;
+const FIRST_SHOW: PatternShow = { parent: true, mask: true, lobes: true, specular: false, cross: true };
+const SHOW_NAMES = ['parent', 'mask', 'lobes', 'specular', 'cross'] as const;
 
 export function readPatternLink(query: ParamMap): PatternLink {
   const cut = query.get('cut');
@@ -40,6 +43,7 @@ export function readPatternLink(query: ParamMap): PatternLink {
     cut: cut === 'across' || cut === 'plane' ? cut : 'along',
     planePhiDeg: numberIn(query.get('phi'), { from: -360, to: 360, otherwise: 45 }),
     form: query.get('level') === 'relative' ? 'relative' : 'absolute',
+    field: query.get('field') === 'cross' ? 'cross' : 'co',
     depthDb: numberIn(query.get('floor'), { from: SHALLOWEST_DB, to: DEEPEST_DB, otherwise: 50 }),
     show: readShow(query.get('show')),
     beam: Math.round(numberIn(query.get('beam'), { from: 1, to: 32, otherwise: 1 })) - 1,
@@ -57,7 +61,7 @@ function numberIn(text: string | null, { from, to, otherwise }: { readonly from:
 function readShow(text: string | null): PatternShow {
   if (text === null) return FIRST_SHOW;
   const on = new Set(text.split('_'));
-  return { parent: on.has('parent'), mask: on.has('mask'), lobes: on.has('lobes'), specular: on.has('specular') };
+  return { parent: on.has('parent'), mask: on.has('mask'), lobes: on.has('lobes'), specular: on.has('specular'), cross: on.has('cross') };
 }
 
 function readWindow(text: string | null): CutWindow | null {
@@ -74,6 +78,7 @@ export function writePatternLink(link: PatternLink): Params {
     cut: link.cut === 'along' ? null : link.cut,
     phi: link.planePhiDeg === 45 ? null : String(link.planePhiDeg),
     level: link.form === 'absolute' ? null : 'relative',
+    field: link.field === 'co' ? null : 'cross',
     floor: link.depthDb === 50 ? null : String(link.depthDb),
     show: sameShow ? null : SHOW_NAMES.filter((name) => show[name]).join('_') || 'nothing',
     beam: link.beam === 0 ? null : String(link.beam + 1),

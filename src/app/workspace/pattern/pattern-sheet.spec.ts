@@ -1,4 +1,5 @@
 import { PlotLibrary } from '../../ui/plots/plot-library';
+import { computedPrediction } from '../computed-prediction';
 import { sheetRig } from '../fields/sheet-rig';
 import { PatternSheet } from './pattern-sheet';
 import { MASKED_DESIGN, SAMPLE_PATTERN } from './sample-pattern';
@@ -69,5 +70,26 @@ describe('PatternSheet', () => {
     const { element, press } = await shown();
     await press('Larger');
     expect(element.querySelector('.pair.wide slant-polar-plot .balloon-text')?.textContent).toBe('1');
+  });
+
+  it('shows the cross-polar field, its figures and a gain budget that adds up, by the vector model', async () => {
+    const design = { ...MASKED_DESIGN, prediction: { ...MASKED_DESIGN.prediction, model: 'vector' as const } };
+    jest.spyOn(HTMLCanvasElement.prototype, 'getContext').mockReturnValue(null);
+    const rig = await sheetRig(PatternSheet, design, [{ provide: PlotLibrary, useValue: drawnNothing }]);
+    rig.workspace.prediction.set(computedPrediction(design, { cuts: [{ phiDeg: 0, thetaDeg: [-90, 90, 0.5] }], uvSize: 33 }));
+    await rig.fixture.whenStable();
+    expect(rig.header.head().subtitle).toContain('vector model, power waves, no cell factor');
+    expect(rig.text()).toContain('draft, co-polar');
+    expect(rig.element.querySelector('slant-cut-legend')?.textContent).toContain('cross-polar');
+    expect(rig.text()).toContain('XPD at the beam');
+    expect(rig.text()).toContain('Gain at the beam, dBi');
+    await rig.press('Cross-polar');
+    expect(rig.text()).toContain('Cross-polar gain below the co-polar peak, dB');
+  });
+
+  it('offers no cross-polar field in the scalar model, and says where the other model is chosen', async () => {
+    const { element, text } = await shown();
+    expect(element.querySelector('slant-vector-tables')).toBeNull();
+    expect(text()).toContain('The vector model is chosen on the Illumination sheet.');
   });
 });

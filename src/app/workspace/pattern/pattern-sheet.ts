@@ -28,6 +28,7 @@ import { PatternControls } from './pattern-controls';
 import { readPatternLink, writePatternLink } from './pattern-link';
 import type { PatternLink } from './pattern-link';
 import { patternNotes, patternSubtitle } from './pattern-notes';
+import { VectorTables } from './vector-tables';
 
 /** Three samples to a pixel of the map at its largest would be waste; this is one to two pixels. */
 const UV_SIZE = 241;
@@ -35,7 +36,7 @@ const UV_SIZE = 241;
 /** The pattern of the panel: the hemisphere to steer in, one cut with its mask and markers, lobes. */
 @Component({
   selector: 'slant-pattern-sheet',
-  imports: [ColourKey, CutLegend, CutPlot, EmptyState, MarkerTable, PatternControls, PlotTools, PolarPlot, SheetNotes, UvMap, ViewTitle],
+  imports: [ColourKey, CutLegend, CutPlot, EmptyState, MarkerTable, PatternControls, PlotTools, PolarPlot, SheetNotes, UvMap, VectorTables, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './pattern-sheet.html',
   styleUrl: './pattern-sheet.scss',
@@ -66,9 +67,12 @@ export class PatternSheet {
     const prediction = this.prediction();
     return prediction ? this.cutOf(prediction) : null;
   });
+  /** The scalar model has a co-polar field alone. */
+  protected readonly mapField = computed(() => (this.prediction()?.uv?.crossGainDbi ? this.link().field : 'co'));
   protected readonly uv = computed(() => {
     const uv = this.prediction()?.uv;
-    return uv ? { size: uv.size, levelDb: uv.gainDbi } : null;
+    if (!uv) return null;
+    return { size: uv.size, levelDb: this.mapField() === 'cross' && uv.crossGainDbi ? uv.crossGainDbi : uv.gainDbi };
   });
   /** Level of the highest lobe of all: the top of the map. */
   protected readonly topDbi = computed(() => {
@@ -90,7 +94,7 @@ export class PatternSheet {
     if (!cut || !found) return null;
     const marks = this.markers().map(({ name, angleDeg, levelDbi }) => ({ name, angleDeg, levelDb: levelDbi }));
     const parent = link.show.parent ? this.parentCut() : null;
-    return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, depthDb: link.depthDb, parent, mask: link.show.mask ? this.mask() : null, marks });
+    return patternCutFigure({ title: this.cutTitle(), cut, design: this.drawnDesign(), peakDbi: found.peak.levelDb, form: link.form, showCross: link.show.cross, depthDb: link.depthDb, parent, mask: link.show.mask ? this.mask() : null, marks });
   });
   /** By itself, because every save brings a new panel and the plot must not be drawn again for that. */
   private readonly parentNumber = computed(() => this.state.panel()?.latestRevision?.number ?? null);
@@ -124,9 +128,13 @@ export class PatternSheet {
     const prediction = this.prediction();
     return prediction ? markedDirections(prediction.head.figures, prediction.of, { specular: this.link().show.specular, beam: this.beamIndex() }) : [];
   });
+  protected readonly vectorFigures = computed(() => {
+    const figures = this.prediction()?.head.figures;
+    return figures?.vector ? figures : null;
+  });
   protected readonly notes = computed(() => patternNotes(this.prediction()));
   protected readonly cutHeading = computed(() => this.headingOf(this.cutTitle()));
-  protected readonly uvHeading = computed(() => this.headingOf('Gain over the hemisphere'));
+  protected readonly uvHeading = computed(() => this.headingOf(this.mapField() === 'cross' ? 'Cross-polar gain over the hemisphere' : 'Gain over the hemisphere'));
   protected readonly polarHeading = computed(() => this.headingOf(`${this.cutTitle()}, polar form`));
 
   constructor() {
