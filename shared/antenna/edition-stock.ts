@@ -3,6 +3,7 @@ import { candidateBins } from './candidate-bins';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
 import { editionChooser, type CellChooser } from './edition-choice';
+import { crossResponseWarning } from './cross-response-warning';
 import { editionWarnings } from './edition-warnings';
 import { permittedNodes, type PermittedNodes } from './excluded-nodes';
 import { regionFilter, type RegionFilter } from './excluded-regions';
@@ -32,7 +33,7 @@ export function editionStock(cells: EditionCells, site: StockSite): CellStock {
     assign: (targetRad) => assignCells(own, targetRad),
     respond: (assignment, frequencyHz) => (frequencyHz === own.designFrequencyHz ? assignment : respondAt(own, assignment, frequencyHz)),
     searchReferenceRad: (query) => searchReferenceRad(own, query),
-    warnings: (assignment, frequencyHz) => editionWarnings(own, assignment, frequencyHz),
+    warnings: (assignment, frequencyHz) => [...editionWarnings(own, assignment, frequencyHz), ...crossResponseWarning(own, assignment, frequencyHz)],
   };
 }
 

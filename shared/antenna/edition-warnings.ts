@@ -2,7 +2,6 @@ import type { Warning } from '../model/figures';
 import { degFromRad } from '../units/angles';
 import { degreesText } from './angle-text';
 import type { CellAssignment } from './cell-stock';
-import { crossResponseWarning } from './cross-response-warning';
 import type { EditionSite } from './edition-stock';
 import { permittedNodes, type PermittedNodes } from './excluded-nodes';
 import { nearestAzimuth, regionFilter } from './excluded-regions';
@@ -17,7 +16,6 @@ export function editionWarnings(site: EditionSite, assignment: CellAssignment, f
     ...incidenceWarning(site),
     ...azimuthWarning(site),
     ...regionWarning(site, assignment, frequencyHz),
-    ...crossResponseWarning(site, assignment, frequencyHz),
     ...periodWarning(site),
     ...provenanceWarnings(site),
   ];
