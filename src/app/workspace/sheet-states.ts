@@ -37,6 +37,8 @@ const judges: Readonly<Record<SheetId, (facts: PanelFacts) => Judgement>> = {
   cells: (facts) => faultOf(facts, ['/cells', '/referencePhaseDeg']) ?? cellsJudgement(facts),
   phase: (facts) => faultOf(facts, ['/synthesis']) ?? phaseJudgement(facts),
   pattern: (facts) => staleOf(facts) ?? patternJudgement(facts),
+  band: bandJudgement,
+  tolerance: toleranceJudgement,
   revisions: revisionsJudgement,
 };
 
@@ -84,6 +86,9 @@ const LINE_NAMES: Readonly<Record<Verdict['line'], string>> = {
   'eirp-density': 'EIRP density',
 };
 
+/** A line of the requirement in running text. */
+export const lineName = (line: Verdict['line']): string => LINE_NAMES[line];
+
 function lineNames(verdicts: readonly Verdict[]): string {
   return verdicts.map((verdict) => LINE_NAMES[verdict.line]).join(', ');
 }
@@ -121,6 +126,18 @@ function patternJudgement(facts: PanelFacts): Judgement {
   if (requirement.word !== 'meets') return requirement;
   const lobe = facts.predicted?.warnings.find(({ code, severity }) => (code === 'grating-lobe' || code === 'image-lobe') && severity !== 'note');
   return lobe ? { word: 'in-work', reason: lobe.message } : requirement;
+}
+
+/** Runs are not part of the prediction, so the mark says only whether there is a band to compute. */
+function bandJudgement({ design }: PanelFacts): Judgement {
+  return design.requirement.bandGHz ? { word: 'in-work', reason: 'Judged by a run over the band' } : { word: 'empty', reason: 'The requirement names no band' };
+}
+
+/** Runs are not part of the prediction, so the mark says only whether there is something that a run could judge. */
+function toleranceJudgement(facts: PanelFacts): Judgement {
+  if (!facts.predicted) return waiting(facts);
+  const judged = facts.predicted.verdicts.length > 0;
+  return judged ? { word: 'in-work', reason: 'Judged by a run of panels made by chance' } : { word: 'empty', reason: 'No limit set that panels could miss' };
 }
 
 function revisionsJudgement({ revisionCount, draftIsRevision }: PanelFacts): Judgement {

@@ -6,6 +6,8 @@ export const SHEETS = [
   { id: 'cells', title: 'Cells' },
   { id: 'phase', title: 'Phase' },
   { id: 'pattern', title: 'Pattern' },
+  { id: 'band', title: 'Band' },
+  { id: 'tolerance', title: 'Tolerance' },
   { id: 'revisions', title: 'Revisions' },
 ] as const;
 

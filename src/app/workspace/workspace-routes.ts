@@ -13,6 +13,8 @@ export const WORKSPACE_ROUTES: Routes = [
       { path: 'cells', title: 'Cells', loadComponent: () => import('./cells/cells-sheet').then((file) => file.CellsSheet) },
       { path: 'phase', title: 'Phase', loadComponent: () => import('./phase/phase-sheet').then((file) => file.PhaseSheet) },
       { path: 'pattern', title: 'Pattern', loadComponent: () => import('./pattern/pattern-sheet').then((file) => file.PatternSheet) },
+      { path: 'band', title: 'Band', loadComponent: () => import('./band/band-sheet').then((file) => file.BandSheet) },
+      { path: 'tolerance', title: 'Tolerance', loadComponent: () => import('./tolerance/tolerance-sheet').then((file) => file.ToleranceSheet) },
       { path: 'revisions', title: 'Revisions', loadComponent: () => import('./revisions/revisions-sheet').then((file) => file.RevisionsSheet) },
       { path: 'revisions/compare', title: 'Compare revisions', loadComponent: () => import('./revisions/revision-compare').then((file) => file.RevisionCompare) },
     ],

@@ -1,0 +1,110 @@
+import type { BandLine, BandPoint, BandResult, Extreme, GainBandwidth } from '../../../../shared/model/band-run';
+import type { Figure, VerdictWord } from '../../../../shared/model/figures';
+import { numberText, signedNumberText } from '../../ui/plots/plot-text';
+import { lineName } from '../sheet-states';
+
+/** A line of the requirement over the whole band. */
+export interface BandLineRow {
+  readonly line: string;
+  readonly name: string;
+  readonly limit: string;
+  readonly value: string;
+  readonly margin: string;
+  readonly at: string;
+  readonly word: VerdictWord;
+  readonly reason: string | null;
+}
+
+export function lineRows({ lines }: BandResult): readonly BandLineRow[] {
+  return lines.map((line) => ({
+    line: line.line,
+    name: capital(lineName(line.line)),
+    limit: `${line.sense === 'at-least' ? '≥' : '≤'} ${numberText(line.limit, 2)} ${line.unit}`,
+    value: typeof line.value === 'number' ? numberText(line.value, digitsOf(line)) : '–',
+    margin: typeof line.margin === 'number' ? signedNumberText(line.margin, digitsOf(line)) : '–',
+    at: gigahertz(line.frequencyGHz),
+    word: line.verdict,
+    reason: line.reason ?? null,
+  }));
+}
+
+const digitsOf = ({ unit }: BandLine): number => (unit === '°' ? 3 : 2);
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+export const gigahertz = (frequencyGHz: number): string => numberText(frequencyGHz, 3);
+
+export interface BandwidthRow {
+  readonly name: string;
+  readonly from: string;
+  readonly to: string;
+  readonly width: string;
+  /** Why an edge has no number. */
+  readonly reason: string | null;
+}
+
+export function bandwidthRows({ bandwidths }: BandResult): readonly BandwidthRow[] {
+  return bandwidths.map((bandwidth) => ({
+    name: `${numberText(bandwidth.dropDb, 0)} dB`,
+    from: edgeText(bandwidth.lowerGHz),
+    to: edgeText(bandwidth.upperGHz),
+    width: widthText(bandwidth),
+    reason: typeof bandwidth.widthGHz === 'number' ? null : bandwidth.widthGHz.reason,
+  }));
+}
+
+const edgeText = (edge: Figure): string => (typeof edge === 'number' ? gigahertz(edge) : 'not reached');
+
+function widthText({ widthGHz, widthPercent }: GainBandwidth): string {
+  if (typeof widthGHz === 'number' && typeof widthPercent === 'number') return `${gigahertz(widthGHz)} (${numberText(widthPercent, 1)} %)`;
+  const least = typeof widthGHz === 'number' ? undefined : widthGHz['atLeastGHz'];
+  return typeof least === 'number' ? `> ${gigahertz(least)}` : '–';
+}
+
+export interface ExtremeRow {
+  readonly name: string;
+  readonly value: string;
+  readonly at: string;
+}
+
+export function extremeRows({ extremes }: BandResult): readonly ExtremeRow[] {
+  return [
+    extremeRow('Highest gain, wanted direction, dBi', extremes.highestGainAtBeamDbi, 2),
+    extremeRow('Lowest gain, wanted direction, dBi', extremes.lowestGainAtBeamDbi, 2),
+    extremeRow('Largest pointing error, °', extremes.largestPointingErrorDeg, 3),
+    extremeRow('Highest sidelobe, dB', extremes.highestSidelobeDb, 2),
+  ];
+}
+
+function extremeRow(name: string, extreme: Extreme, digits: number): ExtremeRow {
+  return 'frequencyGHz' in extreme && typeof extreme.value === 'number' && typeof extreme.frequencyGHz === 'number'
+    ? { name, value: numberText(extreme.value, digits), at: gigahertz(extreme.frequencyGHz) }
+    : { name, value: 'reason' in extreme ? String(extreme.reason) : '–', at: '–' };
+}
+
+export interface PointRow {
+  readonly frequency: string;
+  readonly cells: readonly string[];
+  readonly covered: boolean;
+}
+
+export const POINT_HEADS = ['Gain at beam, dBi', 'Gain at peak, dBi', 'Squint along, °', 'Squint across, °', 'Sidelobe, dB', 'Width along, °', 'Width across, °', 'Cell loss, dB', 'RMS error, °', 'Spatial part, dBi'] as const;
+
+export function pointRows({ points }: BandResult): readonly PointRow[] {
+  return points.map((point) => ({ frequency: gigahertz(point.frequencyGHz), cells: cellsOf(point), covered: point.covered }));
+}
+
+function cellsOf(point: BandPoint): readonly string[] {
+  const signed = (figure: Figure): string => (typeof figure === 'number' ? signedNumberText(figure, 3) : '–');
+  const plain = (figure: Figure | undefined, digits: number): string => (typeof figure === 'number' ? numberText(figure, digits) : '–');
+  return [
+    plain(point.gainAtBeamDbi, 2),
+    plain(point.gainDbi, 2),
+    signed(point.squintAlongDeg),
+    signed(point.squintAcrossDeg),
+    plain(point.sidelobeDb, 2),
+    plain(point.beamwidthAlongDeg, 2),
+    plain(point.beamwidthAcrossDeg, 2),
+    plain(point.cellLossDb, 2),
+    plain(point.phaseErrorRmsDeg, 1),
+    plain(point.spatial?.gainAtBeamDbi, 2),
+  ];
+}
