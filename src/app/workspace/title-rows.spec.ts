@@ -1,6 +1,7 @@
 import type { PanelDetail } from '../../../shared/contracts/projects';
 import { STARTING_DESIGN } from '../../../shared/model/starting-design';
 import type { SaveProgress } from './save-progress';
+import { SHEETS } from './sheets';
 import { standingText, titleRows } from './title-rows';
 
 const author = { id: '6f9619ff-8b86-4d01-b42d-00cf4fc964fd', name: 'Designer' };
@@ -32,7 +33,7 @@ describe('titleRows', () => {
       Revision: 'Draft after revision 3',
       Hash: 'debfe0abb702',
       Scale: '1 : 1.43',
-      Sheet: '5 of 7',
+      Sheet: `5 of ${SHEETS.length}`,
     });
   });
 

@@ -1,3 +1,4 @@
+import { SHEETS } from './sheets';
 import { workspaceKey } from './workspace-keys';
 
 const press = (key: string, held: readonly ('ctrl' | 'meta' | 'shift' | 'alt')[] = []) =>
@@ -6,8 +7,9 @@ const press = (key: string, held: readonly ('ctrl' | 'meta' | 'shift' | 'alt')[]
 describe('workspaceKey', () => {
   it('opens sheets by their number in the rail', () => {
     expect(press('1')).toEqual({ kind: 'sheet', sheet: 'requirement' });
-    expect(press('7')).toEqual({ kind: 'sheet', sheet: 'revisions' });
-    expect(press('8')).toBeNull();
+    expect(press('7')).toEqual({ kind: 'sheet', sheet: 'band' });
+    expect(press(String(SHEETS.length))).toEqual({ kind: 'sheet', sheet: 'revisions' });
+    expect(press('0')).toBeNull();
   });
 
   it('undoes and redoes with either key of the platforms', () => {

@@ -85,7 +85,7 @@ describe('WorkspacePage', () => {
   it('shows panel, sheets with their states, figures and title block', async () => {
     const { text, element } = await rig();
     expect(text()).toContain('Merrow Point sea-rescue link');
-    expect(element.querySelectorAll('slant-rail nav li')).toHaveLength(7);
+    expect(element.querySelectorAll('slant-rail nav li')).toHaveLength(SHEETS.length);
     expect(element.querySelectorAll('slant-figure-cell')).toHaveLength(8);
     expect(element.querySelector('slant-figure-cell')?.textContent).toContain('34.76');
     expect(element.querySelector('slant-title-block')?.textContent).toContain('Draft, no revision yet');
