@@ -21,7 +21,7 @@ export class QualityList {
   protected readonly counts = computed(() => {
     const cells = this.report().cells;
     const count = (verdict: string): number => cells.filter((cell) => cell.verdict === verdict).length;
-    return `${count('pass')} of ${cells.length} cells pass, ${count('warn')} to look at, ${count('fail')} fail`;
+    return `${count('pass')} of ${cells.length} cells pass, ${count('warn')} with remarks, ${count('fail')} fail`;
   });
   protected readonly cellRows = computed(() =>
     this.report().cells.flatMap((cell) =>

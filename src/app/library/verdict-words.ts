@@ -2,7 +2,7 @@ import type { QualityFinding, QualityVerdict } from '../../../shared/model/cell-
 import type { MarkState } from '../ui/state-mark';
 
 const MARKS: Readonly<Record<QualityVerdict, MarkState>> = { pass: 'meets', warn: 'stale', fail: 'falls-short', 'not-evaluated': 'not-evaluated' };
-const WORDS: Readonly<Record<QualityVerdict, string>> = { pass: 'passes', warn: 'to look at', fail: 'fails', 'not-evaluated': 'not evaluated' };
+const WORDS: Readonly<Record<QualityVerdict, string>> = { pass: 'passes', warn: 'passes with remarks', fail: 'fails', 'not-evaluated': 'not evaluated' };
 
 /** The mark of a quality verdict: the amber hatch stands for what a person must look at. */
 export const verdictMark = (verdict: QualityVerdict): MarkState => MARKS[verdict];

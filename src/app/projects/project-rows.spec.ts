@@ -8,7 +8,7 @@ const overview = panelOverviewOf;
 describe('line of a panel', () => {
   it('says what it is, where it points, what it gains and by how much it meets', () => {
     expect(panelRow(overview())).toMatchObject({
-      kind: 'reflecting, 1\u2009600 cells, 28 GHz',
+      kind: 'reflecting, 1\u00a0600 cells, 28 GHz',
       beams: 'θ 20.0°, φ 0.0°',
       gain: '34.76 dBi, margin +0.76 dB',
       state: 'meets',

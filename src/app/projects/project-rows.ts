@@ -1,5 +1,6 @@
 import type { PanelOverview } from '../../../shared/contracts/projects';
 import type { Beam, DesignDocument } from '../../../shared/model/design-document';
+import { numberText, signedNumberText } from '../ui/plots/plot-text';
 import type { MarkState } from '../ui/state-mark';
 import type { SheetMark } from './sheet-marks';
 import { sheetMarks } from './sheet-marks';
@@ -39,30 +40,28 @@ export function panelRow(panel: PanelOverview): PanelRow {
 
 function kindText({ design, summary }: PanelOverview): string {
   const operation = design.panel.operation === 'reflect' ? 'reflecting' : 'transmitting';
-  const cells = summary === null ? '' : `, ${summary.cellCount.toLocaleString('en').replaceAll(',', '\u2009')} cells`;
+  const cells = summary === null ? '' : `, ${numberText(summary.cellCount, 0)} cells`;
   return `${operation}${cells}, ${design.requirement.designFrequencyGHz} GHz`;
 }
 
 function beamText({ requirement }: DesignDocument): string {
   const [first, ...others] = requirement.beams;
-  const theta = ({ thetaDeg }: Beam): string => `θ ${thetaDeg.toFixed(1)}°`;
-  const phi = ({ phiDeg }: Beam): string => `φ ${phiDeg.toFixed(1)}°`;
+  const theta = ({ thetaDeg }: Beam): string => `θ ${numberText(thetaDeg, 1)}°`;
+  const phi = ({ phiDeg }: Beam): string => `φ ${numberText(phiDeg, 1)}°`;
   const one = (beam: Beam): string => `${theta(beam)}, ${phi(beam)}`;
   if (others.length === 0) return one(first);
   if (others.length > 1) return `${one(first)} and ${others.length} more`;
   const [second] = others;
-  return second.thetaDeg === first.thetaDeg ? `${one(first)} and ${second.phiDeg.toFixed(1)}°` : `${one(first)} and ${one(second)}`;
+  return second.thetaDeg === first.thetaDeg ? `${one(first)} and ${numberText(second.phiDeg, 1)}°` : `${one(first)} and ${one(second)}`;
 }
 
 function gainText({ summary, summaryPending }: PanelOverview): string {
   if (summary === null) return summaryPending ? 'being computed' : 'no prediction';
   if (typeof summary.gainDbi !== 'number') return summary.gainDbi.reason;
   const line = summary.verdicts.find(({ line: name }) => name === 'gain');
-  const margin = typeof line?.margin === 'number' ? `, margin ${signed(line.margin)} dB` : '';
-  return `${summary.gainDbi.toFixed(2)} dBi${margin}`;
+  const margin = typeof line?.margin === 'number' ? `, margin ${signedNumberText(line.margin, 2)} dB` : '';
+  return `${numberText(summary.gainDbi, 2)} dBi${margin}`;
 }
-
-const signed = (value: number): string => `${value < 0 ? '−' : '+'}${Math.abs(value).toFixed(2)}`;
 
 function stateOf({ summary, summaryPending }: PanelOverview): { state: MarkState; stateText: string } {
   if (summary === null) return summaryPending ? { state: 'not-evaluated', stateText: 'being computed' } : { state: 'in-work', stateText: 'in work' };

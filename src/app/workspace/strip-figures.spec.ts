@@ -51,7 +51,7 @@ describe('stripFigures', () => {
 
   it('shows both beamwidths and the count of cells', () => {
     expect(figure('beamwidth')).toMatchObject({ value: '3.29×3.13', unit: '°', limit: 'no limit set' });
-    expect(figure('cells')).toMatchObject({ value: '1600', limit: 'all propagating' });
+    expect(figure('cells')).toMatchObject({ value: '1\u00a0600', limit: 'all propagating' });
     const evanescent = { ...now, figures: { ...SAMPLE_FIGURES, evanescentCells: 12 } };
     expect(figure('cells', evanescent).limit).toBe('12 evanescent');
   });

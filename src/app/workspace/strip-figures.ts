@@ -121,11 +121,11 @@ function gaugeOf(verdict: Verdict, reach: number): FigureGauge | null {
 
 const MINUS = '\u2212';
 
-/** A figure with a fixed number of decimals, a true minus sign and a space every three digits from 10 000 up. */
+/** A figure with a fixed number of decimals, a true minus sign and a space every three digits. */
 export function figureText(value: number, digits: number): string {
   const fixed = Math.abs(value).toFixed(digits);
   const [whole, part] = fixed.split('.');
-  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, '\u00a0') : whole;
+  const grouped = whole.length > 3 ? whole.replace(/\B(?=(\d{3})+$)/g, '\u00a0') : whole;
   const negative = value < 0 && Number(fixed) !== 0;
   return `${negative ? MINUS : ''}${grouped}${part === undefined ? '' : `.${part}`}`;
 }

@@ -3,7 +3,7 @@ import { digitsOfStep, fullNumberText, numberText, signedNumberText } from './pl
 it('writes a true minus, groups from five digits on and gives zero no sign', () => {
   expect(numberText(-3.014, 2)).toBe('\u22123.01');
   expect(numberText(-0.001, 2)).toBe('0.00');
-  expect([numberText(1600, 0), numberText(1000000, 0)]).toEqual(['1600', '1\u00a0000\u00a0000']);
+  expect([numberText(1600, 0), numberText(1000000, 0)]).toEqual(['1\u00a0600', '1\u00a0000\u00a0000']);
 });
 
 it('always shows the sign of a difference but none of zero', () => {

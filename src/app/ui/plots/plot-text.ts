@@ -2,11 +2,11 @@ const MINUS = '\u2212';
 /** Figures stand in the mono face, which lacks the thin space; this one never breaks. */
 const GROUP_SPACE = '\u00a0';
 
-/** A number with fixed decimals, a true minus sign and a space every three digits from 10 000 up. Zero has no sign. */
+/** A number with fixed decimals, a true minus sign and a space every three digits. Zero has no sign. */
 export function numberText(value: number, digits: number): string {
   const fixed = Math.abs(value).toFixed(digits);
   const [whole, part] = fixed.split('.');
-  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, GROUP_SPACE) : whole;
+  const grouped = whole.length > 3 ? whole.replace(/\B(?=(\d{3})+$)/g, GROUP_SPACE) : whole;
   const negative = value < 0 && Number(fixed) !== 0;
   return `${negative ? MINUS : ''}${grouped}${part === undefined ? '' : `.${part}`}`;
 }

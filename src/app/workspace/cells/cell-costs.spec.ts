@@ -10,7 +10,7 @@ describe('cellCosts', () => {
     expect(Object.fromEntries(costs.map(({ name, value }) => [name, value]))).toEqual({
       'RMS phase error': '4.48°',
       'Largest phase error': '18.50°',
-      'Cells off by more than 15°': '2 of 1600',
+      'Cells off by more than 15°': '2 of 1\u00a0600',
       'Phase loss': '−0.030 dB',
       'Cell loss': '−0.210 dB',
       'Reference phase in use': '0.0°',

@@ -27,8 +27,8 @@ async function rig() {
 describe('EditionCells', () => {
   it('shows parameter, phase and use of each cell, page by page', async () => {
     const { element, fixture } = await rig();
-    expect(element.querySelector('tbody tr')?.textContent?.replace(/\s+/g, ' ').trim()).toBe('L00.000144.50excluded');
-    expect(element.textContent).toContain('Cells 1 to 8 of 11, 1 excluded');
+    expect(element.querySelector('tbody tr')?.textContent?.replace(/\s+/g, ' ').trim()).toBe('L00.000144.50left out');
+    expect(element.textContent).toContain('Cells 1 to 8 of 11, 1 left out');
     [...element.querySelectorAll('button')].find((button) => button.textContent?.trim() === 'Later')?.click();
     await fixture.whenStable();
     expect(element.querySelectorAll('tbody tr')).toHaveLength(3);
@@ -43,6 +43,6 @@ describe('EditionCells', () => {
     boxes[1].click();
     await fixture.whenStable();
     expect(workspace.design().cells).toMatchObject({ excludedCells: ['L0'] });
-    expect(workspace.stepNames()).toEqual(['Exclude cell L0', 'Use cell L1 again']);
+    expect(workspace.stepNames()).toEqual(['Leave out cell L0', 'Use cell L1 again']);
   });
 });

@@ -55,6 +55,6 @@ export class EditionCells {
   protected exclude(cellId: string, excluded: boolean): void {
     const rest = [...this.excluded()].filter((id) => id !== cellId);
     const edit = editValue(this.state.design(), '/cells/excludedCells', excluded ? [...rest, cellId] : rest);
-    if (edit.kind === 'changed') this.state.change(excluded ? `Exclude cell ${cellId}` : `Use cell ${cellId} again`, () => edit.design);
+    if (edit.kind === 'changed') this.state.change(excluded ? `Leave out cell ${cellId}` : `Use cell ${cellId} again`, () => edit.design);
   }
 }

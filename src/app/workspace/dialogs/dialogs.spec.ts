@@ -58,7 +58,7 @@ describe('ConflictDialog', () => {
 
   it('can take one side for everything, and can wait', async () => {
     const { closings, press } = await opened(ConflictDialog, conflict);
-    await press('All mine');
+    await press('Tick all mine');
     await press('Keep as chosen');
     await press('Decide later');
     expect(closings).toEqual([{ '/a': 'mine', '/b': 'mine' }, undefined]);

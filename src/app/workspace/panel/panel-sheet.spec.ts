@@ -7,10 +7,10 @@ describe('PanelSheet', () => {
   it('counts the cells and names what follows from the size', async () => {
     const { text, header } = await sheetRig(PanelSheet);
     // 200 mm square at 28 GHz: diagonal 282.84 mm, 26.42 wavelengths of 10.707 mm, 2 D^2 / lambda = 14.94 m
-    expect(text()).toContain('Cells1600, at most 1 000 000');
+    expect(text()).toContain('Cells1 600, at most 1 000 000');
     expect(text()).toContain('282.8 mm, 26.42 λ');
     expect(text()).toContain('14.94 m');
-    expect(header.head().subtitle).toBe('reflecting rectangle 200 × 200 mm, rectangular lattice, 1600 cells');
+    expect(header.head().subtitle).toBe('reflecting rectangle 200 × 200 mm, rectangular lattice, 1\u00a0600 cells');
   });
 
   it('holds the spacing against both limits with numbers, as it is typed', async () => {

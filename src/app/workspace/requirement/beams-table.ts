@@ -4,6 +4,7 @@ import { editValue } from '../design-field-edit';
 import { DesignField } from '../fields/design-field';
 import { PendingEntries } from '../fields/pending-entries';
 import { RemarkList } from '../fields/remark-list';
+import { figureText } from '../strip-figures';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { AzElField } from './az-el-field';
 import { tangentialWavenumberRadPerM } from './beam-direction';
@@ -30,7 +31,7 @@ export class BeamsTable {
     const { wavelengthMm } = derivedValues(design);
     return design.requirement.beams.map((beam, place) => ({
       pointer: `/requirement/beams/${place}`,
-      wavenumber: tangentialWavenumberRadPerM(wavelengthMm, beam.thetaDeg).toFixed(2),
+      wavenumber: figureText(tangentialWavenumberRadPerM(wavelengthMm, beam.thetaDeg), 2),
       remarks: [`/requirement/beams/${place}`],
     }));
   });

@@ -42,7 +42,7 @@ describe('rows of a comparison', () => {
       ['Gain at the peak, dBi', '34.74', '34.76', '+0.02'],
       ['Beamwidth along, °', '3.127', '3.127', '='],
       ['Mask margin, dB', '\u22120.29', '0.61', '+0.90'],
-      ['Cells', '1600', '1600', '='],
+      ['Cells', '1\u00a0600', '1\u00a0600', '='],
       ['Cross-polar, dB', '–', '–', '–'],
     ]);
     expect(rows.map(({ deciding }) => deciding)).toEqual([false, false, true, false, false]);
