@@ -1,5 +1,4 @@
 import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
-import { DatePipe } from '@angular/common';
 import { MatMenuModule } from '@angular/material/menu';
 import { Router, RouterLink } from '@angular/router';
 import type { FamilySummary } from '../../../shared/contracts/library';
@@ -16,6 +15,7 @@ import { AskName } from '../ui/name-dialog';
 import { SheetFrame } from '../ui/sheet-frame';
 import { StateMark } from '../ui/state-mark';
 import { TitleBlock } from '../ui/title-block';
+import { UtcTime } from '../ui/utc-time';
 import { ViewTitle } from '../ui/view-title';
 import { WhyNot } from '../ui/why-not';
 import { FirstSteps } from './first-steps';
@@ -35,7 +35,7 @@ interface ProjectSection {
 
 @Component({
   selector: 'slant-projects-page',
-  imports: [DatePipe, EmptyState, FaultNote, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, ViewTitle, WaitingList, WhyNot],
+  imports: [EmptyState, FaultNote, FirstSteps, MatMenuModule, PanelThumbnail, RouterLink, SheetFrame, StateMark, TitleBlock, UtcTime, ViewTitle, WaitingList, WhyNot],
   templateUrl: './projects-page.html',
   styleUrl: './projects-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
