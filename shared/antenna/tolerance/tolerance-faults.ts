@@ -1,6 +1,6 @@
 import type { DesignDocument } from '../../model/design-document';
 import { CONTRIBUTORS } from '../../model/tolerance-contributors';
-import type { ToleranceParameters } from '../../model/tolerance-run';
+import type { ToleranceContributor, ToleranceParameters } from '../../model/tolerance-run';
 import type { DesignFault } from '../invalid-design';
 
 /** A design with what is asked of its tolerances. */
@@ -9,14 +9,15 @@ export interface ToleranceQuestion {
   readonly parameters: ToleranceParameters;
 }
 
-const GEOMETRY = ['etch-random', 'etch-common', 'permittivity', 'thickness', 'temperature'];
-
 /** Faults between the parameters of a tolerance run and its design. */
 export function toleranceFaults({ design, parameters }: ToleranceQuestion): DesignFault[] {
   const varied = parameters.contributors.filter(({ spread }) => spread > 0);
   if (varied.length === 0) return [{ pointer: '#/parameters/contributors', detail: 'give at least one contributor a spread above 0' }];
-  const acts = ({ id }: { id: string }): boolean =>
-    !(GEOMETRY.includes(id) && design.cells.kind !== 'edition') && !(id.startsWith('feed-') && design.illumination.kind !== 'horn');
+  const present = { geometry: design.cells.kind === 'edition', horn: design.illumination.kind === 'horn' };
+  const acts = ({ id }: ToleranceContributor): boolean => {
+    const { needs } = CONTRIBUTORS[id];
+    return needs === null || present[needs];
+  };
   if (varied.some(acts)) return [];
   const names = varied.map(({ id }) => CONTRIBUTORS[id].label.toLowerCase()).join(', ');
   return [{ pointer: '#/parameters/contributors', detail: `nothing that acts on this design is varied: ${names} need cells of an edition or a horn` }];

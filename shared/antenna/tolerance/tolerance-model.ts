@@ -1,3 +1,4 @@
+import { CONTRIBUTORS } from '../../model/tolerance-contributors';
 import type { ContributorId, MaterialDrift, ToleranceContributor } from '../../model/tolerance-run';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from '../cell-response';
 import type { EditionAtFrequency } from '../edition-at-frequency';
@@ -65,14 +66,13 @@ export function toleranceModel(subject: ToleranceSubject): ToleranceModel {
 
 /** Why a contributor cannot act on this design; null where it can. */
 function obstacle(id: ContributorId, { placed, edition }: ToleranceSubject): string | null {
-  if (['etch-random', 'etch-common', 'permittivity', 'thickness', 'temperature'].includes(id) && edition === undefined) {
-    return 'only the cells of an edition have a geometry';
-  }
+  const { needs } = CONTRIBUTORS[id];
+  if (needs === 'geometry' && edition === undefined) return 'only the cells of an edition have a geometry';
   if (['permittivity', 'thickness', 'temperature'].includes(id) && placed.si.operation === 'transmit') {
     return 'the estimate holds for cells on metal, and these transmit';
   }
   if (['etch-random', 'etch-common'].includes(id) && (edition?.edition.cells.length ?? 0) < 2) return 'the edition has one size alone';
-  if (id.startsWith('feed-') && placed.si.illumination.kind !== 'horn') return 'there is no horn to move';
+  if (needs === 'horn' && placed.si.illumination.kind !== 'horn') return 'there is no horn to move';
   return null;
 }
 
