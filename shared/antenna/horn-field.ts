@@ -1,3 +1,4 @@
+import type { Direction } from '../waves/conventions';
 import type { SiHorn, SiPosition } from './si-design';
 
 /** What a horn gives at one point of the panel plane. Reused between calls: read it before asking again. */
@@ -69,6 +70,19 @@ export function hornSampler(horn: SiHorn): (xM: number, yM: number) => HornSampl
     sample.field = pattern / distance;
     return sample;
   };
+}
+
+/** Field of the scalar horn's far pattern in a direction of space; 0 behind it. */
+export function hornPatternField(horn: SiHorn, { u, v, w }: Direction): number {
+  const [bx, by, bz] = hornAxis(horn);
+  const [px, py, pz] = planeOfE(horn, [bx, by, bz]);
+  const cosine = u * bx + v * by + w * bz;
+  if (cosine <= 0) return 0;
+  const sineSquared = Math.max(0, 1 - cosine * cosine);
+  const alongE = u * px + v * py + w * pz;
+  const circular = horn.polarisation === 'rhcp' || horn.polarisation === 'lhcp';
+  const shareE = circular || sineSquared < 1e-18 ? 0.5 : Math.min(1, (alongE * alongE) / sineSquared);
+  return shareE * Math.pow(cosine, horn.exponentE) + (1 - shareE) * Math.pow(cosine, horn.exponentH);
 }
 
 /**

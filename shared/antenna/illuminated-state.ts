@@ -1,10 +1,12 @@
 import type { Figure } from '../model/figures';
+import type { BlockageFigures } from '../model/law-figures';
 import { wavenumberRadPerM } from '../waves/conventions';
 import { apertureField } from './aperture-field';
 import { apertureLosses, commonPhaseRad, phaseErrorsRad, type ApertureLosses } from './aperture-figures';
 import { capturedPower, countedCellLossDb } from './captured-power';
 import type { CellResponses } from './cell-stock';
-import { sumFigures } from './no-figure';
+import { blockageFigures, openResponses } from './feed/blocked-state';
+import { noFigure, sumFigures } from './no-figure';
 import type { PlacedDesign } from './place-cells';
 import { radiationPattern, type RadiationPattern } from './radiation-pattern';
 import { targetPhasesRad } from './target-phase';
@@ -30,6 +32,8 @@ export interface IlluminatedState {
   /** Gain less directivity. */
   readonly gainOffsetDb: Figure;
   readonly litCount: number;
+  /** Present where horn and mount are described. */
+  readonly blockage?: BlockageFigures;
   /** Present where the vector model is in use; `pattern` is then its co-polar part. */
   readonly vector?: VectorState;
 }
@@ -42,6 +46,8 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
   const targetRad = targetInUse(placed, responses, frequencyHz);
   const losses = apertureLosses(light, responses, phaseErrorsRad(responses.phaseRad, targetRad));
   if (placed.vector) return vectorLit({ placed, vector: placed.vector, frequencyHz, wavenumber, responses, targetRad, losses });
+  const open = openResponses(responses, placed.shadow);
+  const blockage = blockageOf(placed, responses, wavenumber);
   const { capturedDb, ...spillover } = capturedPower(si);
   const cellLossDb = countedCellLossDb(placed.design.cells, losses.cellLossDb);
   return {
@@ -51,12 +57,17 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
     wavelengthM: (2 * Math.PI) / wavenumber,
     responses,
     targetRad,
-    pattern: radiationPattern(apertureField(lattice, light, responses, wavenumber), wavenumber, si.radiateExponent),
+    pattern: radiationPattern(apertureField(lattice, light, open, wavenumber), wavenumber, si.radiateExponent),
     losses: { ...losses, cellLossDb },
     ...spillover,
-    gainOffsetDb: placed.design.cells.kind === 'resonant' ? capturedDb : sumFigures(capturedDb, cellLossDb),
+    gainOffsetDb: placed.design.cells.kind === 'resonant' ? capturedDb : sumFigures(capturedDb, cellLossDb, blockage?.powerDb ?? 0),
+    ...(blockage ? { blockage } : {}),
     litCount: litCells(light.amplitude),
   };
+}
+
+function blockageOf({ si, lattice, light, shadow }: PlacedDesign, responses: CellResponses, wavenumber: number): BlockageFigures | undefined {
+  return shadow && blockageFigures({ si, lattice, light, responses, shadow, wavenumber });
 }
 
 function litCells(amplitude: Float64Array): number {
@@ -70,6 +81,7 @@ interface LitVector extends Pick<IlluminatedState, 'placed' | 'frequencyHz' | 'w
 /** The same by the vector model: powers of all polarisations, the co-polar pattern, phase errors of what goes to the beam. */
 function vectorLit({ placed, vector, frequencyHz, wavenumber, responses, targetRad, losses }: LitVector): IlluminatedState {
   const state = vectorState({ ...placed, vector }, frequencyHz, wavenumber);
+  const blockage = blockageOf(placed, responses, wavenumber);
   const { result, spilloverDb, spilloverUncertaintyDb, gainOffsetDb, cellLossDb } = state;
   return {
     placed,
@@ -85,6 +97,7 @@ function vectorLit({ placed, vector, frequencyHz, wavenumber, responses, targetR
     gainOffsetDb,
     litCount: litCells(placed.light.amplitude),
     vector: state,
+    ...(blockage ? { blockage: { ...blockage, powerDb: noFigure('vector-model', 'in the vector model it is part of the cell loss') } } : {}),
   };
 }
 

@@ -3,6 +3,8 @@ import { wavenumberRadPerM } from '../waves/conventions';
 import { apertureLaw, type ApertureLaw } from './aperture-law';
 import { cellStock, type CellAssignment, type CellStock } from './cell-stock';
 import { checkDesign } from './design-faults';
+import { shadowOf } from './feed/blocked-state';
+import { openVectorStock } from './feed/open-vector-stock';
 import { illuminateCells, type CellIllumination } from './illumination';
 import { panelLattice, type PanelLattice } from './panel-lattice';
 import type { PreparedEdition } from './prepare-edition';
@@ -24,6 +26,8 @@ export interface PlacedDesign {
   /** At the design frequency, reference phase included. */
   readonly targetRad: Float64Array;
   readonly assignment: CellAssignment;
+  /** 1 for the cells in the shadow of horn and mount, where those are described. */
+  readonly shadow?: Uint8Array;
   /** Present where the vector model is in use; responses are then what the cells send into the beam. */
   readonly vector?: VectorPlacement;
 }
@@ -40,14 +44,15 @@ export function placeCells(design: DesignDocument, edition?: PreparedEdition): P
   const law = apertureLaw(si, { lattice, light, wavenumber: designWavenumber });
   const bareTargetRad = targetPhasesRad(law, lattice, light, designWavenumber);
   const site = { light, designFrequencyHz: si.designFrequencyHz, si, edition };
-  const vector = arrival && { ...arrival, stock: vectorStock(design.cells, { ...site, ...arrival }) };
+  const shadow = shadowOf(si, lattice);
+  const vector = arrival && { ...arrival, stock: openVectorStock(vectorStock(design.cells, { ...site, ...arrival }), shadow) };
   const stock = vector?.stock ?? cellStock(design.cells, site);
   const referencePhaseRad =
     si.referencePhaseRad === 'search'
       ? stock.searchReferenceRad({ targetRad: bareTargetRad, ...beamWeights({ si, lattice, light, wavenumber: designWavenumber }) })
       : si.referencePhaseRad;
   const targetRad = bareTargetRad.map((rad) => rad + referencePhaseRad);
-  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad), ...(vector ? { vector } : {}) };
+  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad), ...(vector ? { vector } : {}), ...(shadow ? { shadow } : {}) };
 }
 
 interface WeightQuery {

@@ -9,6 +9,7 @@ import { patternCut, type Cut, type CutRequest } from './pattern-cut';
 import { placeCells, type PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
 import { requirementVerdicts } from './requirement-verdicts';
+import { withRimSpillover } from './feed/rim-spillover-cut';
 import { illuminatedState, type IlluminatedState } from './illuminated-state';
 import { uvMap, type UvMap, type UvShift } from './uv-map';
 import { isNumber } from './no-figure';
@@ -73,7 +74,7 @@ export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: P
 }
 
 function bothCuts(state: IlluminatedState, request: CutRequest, beam: Direction, gainOffsetDb: number): Cut {
-  const cut = patternCut(state.pattern, request, beam, gainOffsetDb);
+  const cut = withRimSpillover(patternCut(state.pattern, request, beam, gainOffsetDb), state.placed.si, gainOffsetDb);
   return state.vector ? { ...cut, crossGainDbi: patternCut(state.vector.pattern.cross, request, beam, gainOffsetDb).gainDbi } : cut;
 }
 

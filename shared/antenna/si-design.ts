@@ -47,6 +47,7 @@ export interface SiHorn {
   readonly exponentE: number;
   readonly exponentH: number;
   readonly polarisation: Polarisation;
+  readonly blockageRadiusM?: number;
 }
 
 export interface SiPlaneWave {
@@ -172,8 +173,9 @@ function siIllumination(illumination: DesignDocument['illumination'], outline: S
     const source = directionOf(radFromDeg(illumination.thetaDeg), radFromDeg(illumination.phiDeg));
     return { kind: 'plane-wave', source, polarisation: illumination.polarisation };
   }
-  const { exponentE, exponentH, polarisation, positionMm, aimMm } = illumination;
-  return { kind: 'horn', position: siPosition(positionMm), aim: siPosition(aimMm), exponentE, exponentH, polarisation };
+  const { exponentE, exponentH, polarisation, positionMm, aimMm, blockageRadiusMm } = illumination;
+  const blockage = blockageRadiusMm === undefined ? {} : { blockageRadiusM: blockageRadiusMm * M_PER_MM };
+  return { kind: 'horn', position: siPosition(positionMm), aim: siPosition(aimMm), exponentE, exponentH, polarisation, ...blockage };
 }
 
 function siGuidedWave(wave: Extract<DesignDocument['illumination'], { kind: 'guided-wave' }>, outline: SiOutline): SiGuidedWave {

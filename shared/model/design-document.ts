@@ -83,6 +83,8 @@ export const illumination = z.discriminatedUnion('kind', [
     exponentE: exponent,
     exponentH: exponent,
     polarisation,
+    /** Of the disc that horn and mount make in the way of the beam of a reflecting panel; without it nothing is blocked. */
+    blockageRadiusMm: lengthMm.optional(),
   }),
   z.strictObject({ kind: z.literal('plane-wave'), thetaDeg, phiDeg, polarisation }),
   /** A wave that runs under the panel and leaks through the cells. */

@@ -97,6 +97,7 @@ const LABELS: readonly (readonly [path: string, label: string, unit: string])[] 
   ['illumination/aimMm/2', 'Horn aim z', 'mm'],
   ['illumination/exponentE', 'Horn exponent, E-plane', ''],
   ['illumination/exponentH', 'Horn exponent, H-plane', ''],
+  ['illumination/blockageRadiusMm', 'Radius of horn and mount', 'mm'],
   ['illumination/polarisation', 'Polarisation of the illumination', ''],
   ['illumination/thetaDeg', 'Plane wave from θ', '°'],
   ['illumination/phiDeg', 'Plane wave from φ', '°'],

@@ -72,7 +72,25 @@ export const diffuseFigures = z.strictObject({
   equals: z.number().int(),
 });
 
+/** Horn and mount in the way of the beam. */
+export const blockageFigures = z.strictObject({
+  /** Cells whose ray towards the beam meets the disc. */
+  cells: z.number().int(),
+  /** What the field at the beam loses; taper and directivity of the rest are part of it. */
+  atBeamDb: figure,
+  /** What the radiated power loses: counts in the gain beside the directivity, which is that of the open cells. */
+  powerDb: figure,
+});
+
+/** Where the part of the response that all cells share sends the light. */
+export const specularFigures = z.strictObject({
+  /** Field against a metal plate: the mean response weighted by the power on the cells. */
+  meanResponseDb: figure,
+});
+
 export const lawFigures = {
+  blockage: blockageFigures.optional(),
+  specular: specularFigures.optional(),
   projections: projectionFigures.optional(),
   diffuse: diffuseFigures.optional(),
   guidedWave: guidedWaveFigures.optional(),
@@ -83,5 +101,7 @@ export const lawFigures = {
 export type FocusFigures = z.infer<typeof focusFigures>;
 export type ProjectionFigures = z.infer<typeof projectionFigures>;
 export type DiffuseFigures = z.infer<typeof diffuseFigures>;
+export type BlockageFigures = z.infer<typeof blockageFigures>;
+export type SpecularFigures = z.infer<typeof specularFigures>;
 export type GuidedWaveFigures = z.infer<typeof guidedWaveFigures>;
 export type VortexFigures = z.infer<typeof vortexFigures>;

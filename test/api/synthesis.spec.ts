@@ -50,6 +50,13 @@ describe('predicting target phases of every kind', () => {
     expect(errors.map(({ pointer }) => pointer)).toEqual(['#/design/synthesis/goal/sectors/0/azimuthDeg/1']);
   });
 
+  it('answers what the feed blocks where its radius is given', async () => {
+    const { illumination } = STARTING_DESIGN;
+    if (illumination.kind !== 'horn') throw new Error('no horn');
+    const { blockage } = await figuresOf({ illumination: { ...illumination, positionMm: [0, 0, 180], blockageRadiusMm: 15 } });
+    expect(blockage).toMatchObject({ cells: expect.any(Number) as number, atBeamDb: expect.any(Number) as number });
+  });
+
   it('refuses a vortex of half an order by its pointer', async () => {
     const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, synthesis: { kind: 'vortex', order: 0.5 } } });
     const { errors } = answer.json as { errors: { pointer: string }[] };

@@ -6,7 +6,9 @@ import { cellMatrixChecks } from './tables/cell-matrix-checks';
 import { conventionsChecks } from './tables/conventions-checks';
 import { linkChecks } from './tables/link-checks';
 import { maskChecks } from './tables/mask-checks';
+import { feedChecks } from './tables/feed-checks';
 import { guidedWaveChecks } from './tables/guided-wave-checks';
+import { measuringCellChecks } from './tables/measuring-cell-checks';
 import { panelChecks } from './tables/panel-checks';
 import { phaseChecks } from './tables/phase-checks';
 import { refractionChecks } from './tables/refraction-checks';
@@ -17,7 +19,7 @@ import { vectorFormChecks } from './tables/vector-form-checks';
 import { vectorPanelChecks } from './tables/vector-panel-checks';
 import { vectorSpecialChecks } from './tables/vector-special-checks';
 
-const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...linkChecks, ...guidedWaveChecks, ...synthesisChecks, ...toleranceChecks };
+const tables: CheckTable = { ...conventionsChecks, ...refractionChecks, ...arrayChecks, ...apertureChecks, ...phaseChecks, ...panelChecks, ...cellChecks, ...maskChecks, ...linkChecks, ...feedChecks, ...guidedWaveChecks, ...measuringCellChecks, ...synthesisChecks, ...toleranceChecks };
 /** Run by specs of their own beside this one, since they take longer. */
 const elsewhere: CheckTable = { ...vectorChecks, ...cellMatrixChecks, ...vectorFormChecks, ...vectorPanelChecks, ...vectorSpecialChecks };
 const checks = loadChecks();

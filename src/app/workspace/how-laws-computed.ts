@@ -1,7 +1,7 @@
 import type { HowComputed } from './how-computed';
 
 /** Figures of one target phase or one way of lighting, each with how it is computed. */
-export type LawFigureId = 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
+export type LawFigureId = 'blockage' | 'specular' | 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
 
 const EDGES = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction';
 
@@ -13,6 +13,22 @@ export const HOW_LAWS_COMPUTED: Readonly<Record<LawFigureId, HowComputed>> = {
     conventions: 'rₙ from cell n to the point at distance s; aₙ the field of the cells in use, losses and phase errors included; b the radiate exponent, in field',
     validity: `${EDGES}. Spherical waves from every cell: not within about a wavelength of the panel.`,
     source: 'J. W. Sherman, IRE Trans. AP 10(4), 399–408, 1962 (from memory); checks foc-01 and foc-02',
+  },
+  blockage: {
+    title: 'Blockage by horn and mount',
+    formula: ['blocked: α = (F − rₙ)·u₀ > 0 and |F − rₙ − αu₀| < radius', 'at the beam = 20 log |Σ open s / Σ s|', 'G = D of the open cells + spillover + cell loss + power not radiated'],
+    meaning: 'Cells whose ray towards the first beam meets the disc of horn and mount re-radiate nothing. What the field at the beam loses is more than the power: the hole also costs taper, and that part stands in the directivity.',
+    conventions: 'F is the phase centre; the disc stands across the beam. Only reflecting panels: the horn of a transmitting one is behind',
+    validity: 'Null field: no scattering by horn and mount, no shadow on the way from the horn to the cells. In the vector model the power is part of the cell loss.',
+    source: 'Blocked-aperture subtraction (from memory); checks block-01, blk-01, blk-02',
+  },
+  specular: {
+    title: 'The specular part',
+    formula: ['mean response = Σ A² Γ / Σ A²', 'behind the panel: G = horn gain where the ray misses the outline'],
+    meaning: 'The part of the response that all cells share radiates as the mirror image of the feed, whatever their phases; its level is against a metal plate of the same size. The pattern holds it already. Spillover past the rim stands in cuts behind a reflecting panel.',
+    conventions: 'Weighted by the power that falls on each cell',
+    validity: 'A mean over the panel: a lobe that the chosen cells happen to make there adds to it. Spillover is not added to the field in front of the panel, nor are rims diffracting.',
+    source: 'Derived; checks spec-01 and spill-dir-01',
   },
   projections: {
     title: 'Alternating projections',

@@ -38,7 +38,7 @@ export function geometryFacts(design: DesignDocument): readonly Fact[] {
 export function predictedFacts(figures: Figures): readonly Fact[] {
   const taper = { name: 'Taper loss, held by the directivity', value: told(figures.taperDb, 2, ' dB') };
   if (figures.guidedWave === undefined) {
-    return [{ name: 'Edge taper', value: told(figures.edgeTaperDb, 2, ' dB') }, { name: 'Spillover', value: told(figures.spilloverDb, 2, ' dB') }, taper];
+    return [{ name: 'Edge taper', value: told(figures.edgeTaperDb, 2, ' dB') }, { name: 'Spillover', value: told(figures.spilloverDb, 2, ' dB') }, taper, ...blockageFacts(figures), ...specularFacts(figures)];
   }
   const { lengthMm, leakedShare, beamRelativeDb, modulationEfficiency } = figures.guidedWave;
   return [
@@ -48,6 +48,19 @@ export function predictedFacts(figures: Figures): readonly Fact[] {
     { name: 'Beam against cells of free phase', value: told(beamRelativeDb, 2, ' dB') },
     { name: 'Modulation efficiency, held by the directivity', value: `${figureText(modulationEfficiency * 100, 1)} %` },
   ];
+}
+
+function blockageFacts({ blockage }: Figures): readonly Fact[] {
+  if (!blockage) return [];
+  return [
+    { name: 'Cells in the shadow of the feed', value: figureText(blockage.cells, 0) },
+    { name: 'Blockage, field at the beam', value: told(blockage.atBeamDb, 2, ' dB') },
+    { name: 'Blockage, power not radiated', value: told(blockage.powerDb, 2, ' dB') },
+  ];
+}
+
+function specularFacts({ specular }: Figures): readonly Fact[] {
+  return specular ? [{ name: 'Specular part against a plate', value: told(specular.meanResponseDb, 1, ' dB') }] : [];
 }
 
 /** Between the axis of the horn and the normal of the panel. */

@@ -33,6 +33,20 @@ describe('IlluminationSheet', () => {
     expect(text()).toContain('Keep-outs count as hit; a remark says how many dB they take.');
   });
 
+  it('takes the radius of horn and mount, shows what it blocks, and lets it go again', async () => {
+    const { workspace, fixture, enter, text } = await sheetRig(IlluminationSheet);
+    await enter('Radius of horn and mount', '2 cm');
+    expect(workspace.design().illumination).toMatchObject({ blockageRadiusMm: 20 });
+    const figures = { ...SAMPLE_HEAD.figures, blockage: { cells: 32, atBeamDb: -0.633, powerDb: -0.31 }, specular: { meanResponseDb: -18.2 } };
+    workspace.prediction.set({ ...prediction, cells: { ...cells, xMm: new Float64Array(0) }, head: { ...SAMPLE_HEAD, figures } });
+    await fixture.whenStable();
+    expect(text()).toContain('Cells in the shadow of the feed32');
+    expect(text()).toContain('Blockage, field at the beam−0.63 dB');
+    expect(text()).toContain('Specular part against a plate−18.2 dB');
+    await enter('Radius of horn and mount', '');
+    expect(workspace.design().illumination).not.toHaveProperty('blockageRadiusMm');
+  });
+
   it('keeps the place of the horn in mind when a wave takes over', async () => {
     const { workspace, choose, header } = await sheetRig(IlluminationSheet);
     await choose('Plane wave');

@@ -60,7 +60,11 @@ export class IlluminationSheet {
     const prediction = this.state.prediction();
     return prediction ? predictedFacts(prediction.head.figures) : [];
   });
-  protected readonly guidedHow = HOW_LAWS_COMPUTED.guidedWave;
+  protected readonly hows = computed(() => {
+    const { kind } = this.illumination();
+    if (kind === 'guided-wave') return [HOW_LAWS_COMPUTED.guidedWave];
+    return kind === 'horn' ? [HOW_LAWS_COMPUTED.blockage, HOW_LAWS_COMPUTED.specular] : [HOW_LAWS_COMPUTED.specular];
+  });
   protected readonly describe = (cell: number): string => {
     const maps = this.maps();
     if (!maps) return '';
