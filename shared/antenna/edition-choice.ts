@@ -24,6 +24,10 @@ export function editionChooser(at: EditionAtFrequency, rule: CellRule): CellChoo
   const boundOf = rule === 'nearest-phase' ? (phaseBound: number): number => phaseBound : leastComplexError;
   const unasked: PolarResponse = { magnitude: 0, phaseRad: 0 };
   return (targetRad, weights, allowed, chosen = unasked) => {
+    if (allowed.length === 1) {
+      coPolarResponse(at, allowed[0], weights, chosen);
+      return allowed[0];
+    }
     let promising = -1;
     for (let i = 0; i < allowed.length; i++) {
       const k = allowed[i];
