@@ -19,9 +19,10 @@ function steered(design, side, i) {
 
 /** One preview after the other, as the client sends them. */
 async function previews(product, side, count) {
-  // The lighthouse's first design has ideal cells, the slipway's cells of a library edition at oblique incidence.
-  const { design } = await product.demoPanel(side === 40 ? 'A, ' : 'B, ');
-  const base = side === 40 ? { ...design, cells: { kind: 'ideal', levels: null } } : design;
+  const { design } = await product.demoPanel('A, ');
+  // The slipway wall is made of cells of a library edition at oblique incidence, of the same lattice.
+  const cells = side === 40 ? { kind: 'ideal', levels: null } : (await product.demoPanel('B, ')).design.cells;
+  const base = { ...design, cells };
   const headers = { accept: 'application/octet-stream', 'slantwise-preview': 'bench' };
   const times = [];
   for (let i = -5; i < count; i++) {
