@@ -77,7 +77,7 @@ function marginSentence(margin: NonNullable<Figures['crossPolarMaskMargin']>): s
 }
 
 /** The published envelopes by their short names. */
-export const PUBLISHED_CHOICES = PUBLISHED_MASKS.map(({ id, title }) => ({ value: id, label: title.replace('ITU-R ', '') }));
+export const PUBLISHED_CHOICES = PUBLISHED_MASKS.map(({ id, title }) => ({ value: id, label: title.replace(/^(?:ITU-R|47 CFR) /, '') }));
 
 const FALLEN_BACK_GAIN_DBI = 30;
 /** How far below the co-polar levels a first cross-polar mask lies. */

@@ -26,7 +26,7 @@ describe('MaskSection', () => {
   it('takes a declared spillover region where the text knows one', async () => {
     const { workspace, choose, press, enter } = await sheetRig(MaskSection);
     await choose('Published');
-    await choose('47 CFR 25.209(a)(1)');
+    await choose('25.209(a)(1)');
     await press('Declare a spillover region');
     await enter('Spillover from', '70');
     expect(workspace.design().requirement.mask).toEqual({ kind: 'published', id: 'fcc-25-209-a1', spilloverDeg: [70, 120] });

@@ -15,6 +15,7 @@ let nextPattern = 0;
 export class MaskSketch {
   readonly points = input.required<readonly (readonly [number, number])[]>();
   readonly traces = input<readonly OffAxisTrace[]>([]);
+  readonly unit = input('dBi');
   /** Draws a square at every point: for points that a person has set. */
   readonly marked = input(true);
   readonly height = input(240);

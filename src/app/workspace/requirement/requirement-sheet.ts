@@ -15,6 +15,7 @@ import { ChoiceTabs } from '../../ui/choice-tabs';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { BeamsTable } from './beams-table';
+import { ExposureSection } from './exposure-section';
 import { MaskSection } from './mask-section';
 import { requirementLines } from './requirement-lines';
 import { SizingSection } from './sizing-section';
@@ -31,7 +32,7 @@ const FIRST_BAND_SHARE = 0.02;
 /** What must be met: beams, band, limits and mask, each with the verdict of the prediction. */
 @Component({
   selector: 'slant-requirement-sheet',
-  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, MaskSection, RemarkList, SheetNotes, SizingSection, TransmissionSection, VerdictTable, ViewTitle],
+  imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, ExposureSection, MaskSection, RemarkList, SheetNotes, SizingSection, TransmissionSection, VerdictTable, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './requirement-sheet.html',
   styleUrl: '../fields/sheet.scss',

@@ -23,7 +23,7 @@ const FALLEN_BACK_GAIN_DBI = 30;
       <slant-view-title text="Sizing advice" unit="a proposal, from the requirement" />
       <div class="fields">
         <slant-view-number label="Gain wanted" dimension="level" unit="dBi" [value]="gainDbi()" [least]="5" [most]="70" (changed)="gainDbi.set($event)" />
-        <slant-view-number label="For cells, dB" dimension="level" unit="dB" [value]="allowanceDb()" [least]="0" [most]="15" (changed)="allowanceDb.set($event)" />
+        <slant-view-number label="Allowance" dimension="level" unit="dB" [value]="allowanceDb()" [least]="0" [most]="15" (changed)="allowanceDb.set($event)" />
         <slant-view-number label="Edge taper" dimension="level" unit="dB" [value]="edgeTaperDb()" [least]="-30" [most]="-3" (changed)="edgeTaperDb.set($event)" />
         <slant-view-number label="f/D" dimension="number" [value]="focalRatio()" [least]="0.3" [most]="3" (changed)="focalRatio.set($event)" />
       </div>
@@ -34,7 +34,7 @@ const FALLEN_BACK_GAIN_DBI = 30;
         }
       </dl>
       <p class="hint">
-        Area from G λ² = 4π A cos θ η, η spillover times taper of this horn on this outline; period λ/(1 + sin) at the upper band edge for the steepest scan and incidence. The horn stands at the
+        The allowance is for losses, rounding and tolerances of the cells. Area from G λ² = 4π A cos θ η, η spillover times taper of this horn on this outline; period λ/(1 + sin) at the upper band edge for the steepest scan and incidence. The horn stands at the
         specular angle of the first beam. What the panel then does is for the prediction to say.
       </p>
       @if (canEdit()) {

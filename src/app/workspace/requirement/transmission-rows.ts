@@ -13,7 +13,7 @@ export interface LimitRow {
   readonly limit: string;
   readonly averaging: string;
   readonly distance: string;
-  /** Why there is no distance, or what a distance of 0 means. */
+  /** Why there is no distance. */
   readonly note: string | null;
 }
 
@@ -61,7 +61,7 @@ function limitRow(limit: ExposureLimit | NoFigure, source: string, audience: str
   const { limitWPerM2, averagingMin, distanceM } = limit;
   const told = { source, audience, limit: estimateText(limitWPerM2, 'W/m²'), averaging: `${averagingMin}${THIN}min` };
   if (typeof distanceM !== 'number') return { ...told, distance: '–', note: distanceM.reason };
-  return { ...told, distance: estimateText(distanceM, 'm'), note: distanceM === 0 ? 'the near-field maximum does not pass it' : null };
+  return { ...told, distance: estimateText(distanceM, 'm'), note: null };
 }
 
 export function zoneRows(exposure: ExposureFigures): readonly FactRow[] {

@@ -7,7 +7,7 @@ import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { MaskSection } from './mask-section';
 import { RequirementParts } from './requirement-part';
-import { limitRows, linkRows, receiverRows, transmitterRows, zoneRows } from './transmission-rows';
+import { linkRows, receiverRows, transmitterRows } from './transmission-rows';
 
 const LINK_KINDS = [
   { value: 'none', label: 'No link' },
@@ -15,7 +15,7 @@ const LINK_KINDS = [
   { value: 'relay', label: 'Over the panel' },
 ] as const;
 
-/** Transmitter, link and receiver around the panel, with EIRP, received power, G/T and the exposure estimate. */
+/** Transmitter, link and receiver around the panel, with EIRP, received power and G/T. */
 @Component({
   selector: 'slant-transmission-section',
   imports: [ChoiceRow, DesignField, MaskSection, RemarkList, ViewTitle],
@@ -46,13 +46,6 @@ export class TransmissionSection {
     const figures = this.figures();
     return figures && figures.systemTemperatureK !== undefined ? receiverRows(figures) : [];
   });
-  protected readonly exposure = computed(() => {
-    const exposure = this.figures()?.exposure;
-    if (exposure === undefined) return null;
-    if ('reason' in exposure) return { limits: [], zones: [], reason: String(exposure.reason) };
-    return { limits: limitRows(exposure), zones: zoneRows(exposure), reason: null };
-  });
-
   protected setTransmitter(): void {
     this.parts.put('transmitter', { powerW: 1, lossDb: 0, dutyPercent: 100 }, 'Set transmitter');
   }
