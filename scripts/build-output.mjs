@@ -14,12 +14,14 @@ const parts = {
     sources: ['src', 'shared'],
     settings: ['angular.json', 'tsconfig.base.json', 'tsconfig.client.json', 'package-lock.json'],
     product: join(clientFolder, 'index.html'),
+    takes: 'up to a minute',
     make: () => program('ng', ['build', '--progress=false']),
   },
   kernel: {
     sources: [kernelSources],
     settings: ['scripts/kernel.mjs', 'package-lock.json'],
     product: kernelFile,
+    takes: 'some seconds',
     make: makeKernel,
   },
   server: {
@@ -27,6 +29,7 @@ const parts = {
     sources: ['server', 'shared'],
     settings: ['tsconfig.base.json', 'tsconfig.server.json', 'package-lock.json'],
     product: join(serverFolder, 'server/main.js'),
+    takes: 'up to half a minute',
     make: makeServer,
   },
 };
@@ -92,7 +95,7 @@ export async function provideBuild(...asked) {
   if (stale().length === 0) return;
   await exclusively(join(projectFolder, '.cache/locks/build'), async () => {
     for (const name of stale()) {
-      console.error(`Building the ${name} ...`);
+      console.error(`Building the ${name}, ${parts[name].takes} on two free cores ...`);
       const stamp = fingerprint(parts[name]); // taken before: a change made during the build counts as new
       forgetBuild(name);
       await parts[name].make();

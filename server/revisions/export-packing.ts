@@ -48,10 +48,18 @@ export async function previewExport(sources: ExportSources): Promise<ExportPrevi
     bytes: bytes.length,
     sha256,
     function: purpose,
-    // A letter takes at most four bytes.
-    head: bytes.subarray(0, 4 * PREVIEW_LENGTH).toString('utf8').slice(0, PREVIEW_LENGTH),
+    head: headOf(bytes),
   }));
   return { archiveName: `${archiveName(sources)}.zip`, contentBytes: files.reduce((sum, { bytes }) => sum + bytes, 0), files };
+}
+
+/** The first lines of a file. None is cut, unless the first alone is longer than a preview. */
+export function headOf(bytes: Buffer): string {
+  // A letter takes at most four bytes.
+  const text = bytes.subarray(0, 4 * PREVIEW_LENGTH).toString('utf8');
+  if (text.length <= PREVIEW_LENGTH && bytes.length <= 4 * PREVIEW_LENGTH) return text;
+  const head = text.slice(0, PREVIEW_LENGTH);
+  return head.slice(0, head.lastIndexOf('\n') + 1) || head;
 }
 
 const archiveName = ({ header, projectName, panelName }: ExportSources): string => `${fileNamePart(projectName, 'project')}_${fileNamePart(panelName, 'panel')}_r${header.number}`;

@@ -6,10 +6,12 @@ import type { EditionUse, KeptFile } from '../../../shared/contracts/library';
 import { LibraryClient } from '../api/library-client';
 import type { EditionWithResponses } from '../api/library-client';
 import { LibraryDesk } from '../api/library-desk';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { SessionStore } from '../session/session-store';
 import { ChoiceTabs } from '../ui/choice-tabs';
 import { Confirm } from '../ui/confirm';
+import { FaultNote } from '../ui/fault-note';
 import { AskName } from '../ui/name-dialog';
 import { LinePlot } from '../ui/plots/line-plot';
 import { SheetFrame } from '../ui/sheet-frame';
@@ -26,7 +28,7 @@ import { verdictMark, verdictText } from './verdict-words';
 /** One edition: its cells, curves, checks, description, files and uses; the lab publishes or discards it here. */
 @Component({
   selector: 'slant-edition-page',
-  imports: [CellDrawing, ChoiceTabs, DescriptionList, LinePlot, QualityList, RouterLink, SheetFrame, TitleBlock, ViewTitle],
+  imports: [CellDrawing, ChoiceTabs, DescriptionList, FaultNote, LinePlot, QualityList, RouterLink, SheetFrame, TitleBlock, ViewTitle],
   templateUrl: './edition-page.html',
   styleUrls: ['./library-page.scss', './edition-page.scss'],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -43,7 +45,7 @@ export class EditionPage {
   protected readonly uses = signal<readonly EditionUse[]>([]);
   protected readonly files = signal<readonly KeptFile[]>([]);
   protected readonly nextFiles = signal<string | null>(null);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
   protected readonly axis = signal<CurveAxis>('parameter');
   protected readonly cellIndex = signal(0);
   protected readonly frequencyIndex = signal(0);
@@ -98,7 +100,7 @@ export class EditionPage {
   private async load(id: string): Promise<void> {
     const outcome = await this.client.edition(id);
     if (outcome.kind === 'missing') {
-      this.fault.set(outcome.reason);
+      this.fault.set({ detail: outcome.reason, fields: {} });
       return;
     }
     this.edition.set(outcome.edition);
@@ -157,7 +159,7 @@ export class EditionPage {
       await work();
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 }

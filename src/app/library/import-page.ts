@@ -2,9 +2,11 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, input, si
 import { Router, RouterLink } from '@angular/router';
 import type { Inspection } from '../../../shared/contracts/library';
 import { LibraryDesk } from '../api/library-desk';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { SessionStore } from '../session/session-store';
 import { EmptyState } from '../ui/empty-state';
+import { FaultNote } from '../ui/fault-note';
 import { LinePlot } from '../ui/plots/line-plot';
 import { SheetFrame } from '../ui/sheet-frame';
 import { ViewTitle } from '../ui/view-title';
@@ -18,7 +20,7 @@ import { QualityList } from './quality-list';
 /** Detect, preview, map, describe, validate, accept with a note: nothing is stored before the last step. */
 @Component({
   selector: 'slant-import-page',
-  imports: [EmptyState, FileDrop, FileFindings, LinePlot, QualityList, RouterLink, SheetFrame, ViewTitle],
+  imports: [EmptyState, FaultNote, FileDrop, FileFindings, LinePlot, QualityList, RouterLink, SheetFrame, ViewTitle],
   providers: [ImportJob],
   templateUrl: './import-page.html',
   styleUrls: ['./library-page.scss', './import-page.scss'],
@@ -32,7 +34,7 @@ export class ImportPage {
   /** Set when a family gets another edition. */
   readonly family = input<string>();
   protected readonly familyName = signal<string | null>(null);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
   protected readonly noteMissing = signal(false);
   protected readonly fields = DESCRIPTION_FIELDS;
   protected readonly descriptionFaults = computed<Readonly<Record<string, string>>>(() => {
@@ -65,7 +67,7 @@ export class ImportPage {
       this.familyName.set(family.name);
       this.job.prefill(family.description);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 

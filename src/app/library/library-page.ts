@@ -4,9 +4,11 @@ import type { FamilySummary } from '../../../shared/contracts/library';
 import { parseQuantity } from '../../../shared/units/quantity';
 import { LibraryClient } from '../api/library-client';
 import type { FamilySearch } from '../api/library-client';
+import type { CallFault } from '../session/call-fault';
 import { callFault } from '../session/call-fault';
 import { SessionStore } from '../session/session-store';
 import { EmptyState } from '../ui/empty-state';
+import { FaultNote } from '../ui/fault-note';
 import { SheetFrame } from '../ui/sheet-frame';
 import { StateMark } from '../ui/state-mark';
 import { ViewTitle } from '../ui/view-title';
@@ -16,7 +18,7 @@ import { verdictMark, verdictText } from './verdict-words';
 /** Families of cells with their editions, filtered by name, frequency, period and angle. The filter stands in the address. */
 @Component({
   selector: 'slant-library-page',
-  imports: [EmptyState, RouterLink, SheetFrame, StateMark, ViewTitle],
+  imports: [EmptyState, FaultNote, RouterLink, SheetFrame, StateMark, ViewTitle],
   templateUrl: './library-page.html',
   styleUrl: './library-page.scss',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -30,7 +32,7 @@ export class LibraryPage {
   readonly period = input<string>();
   readonly angle = input<string>();
   protected readonly families = signal<readonly FamilySummary[] | null>(null);
-  protected readonly fault = signal<string | null>(null);
+  protected readonly fault = signal<CallFault | null>(null);
   protected readonly isLab = computed(() => this.session.hasRole('lab'));
   protected readonly filtered = computed(() => [this.text(), this.frequency(), this.period(), this.angle()].some((value) => (value ?? '') !== ''));
   protected readonly search = computed(() => readSearch({ text: this.text() ?? '', frequency: this.frequency() ?? '', period: this.period() ?? '', angle: this.angle() ?? '' }));
@@ -50,7 +52,7 @@ export class LibraryPage {
       this.families.set(await this.client.families(search));
       this.fault.set(null);
     } catch (error) {
-      this.fault.set(callFault(error).detail);
+      this.fault.set(callFault(error));
     }
   }
 

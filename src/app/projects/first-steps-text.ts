@@ -12,7 +12,7 @@ export const FIRST_STEPS: Readonly<Record<Role, readonly FirstStep[]>> = {
     { id: 'steer', text: 'Open a panel and drag its beam on the Pattern sheet, or type the angles: gain, sidelobes and the cut follow.' },
     { id: 'cells', text: 'On the Cells sheet choose an edition of the library; on the Phase sheet read the error it leaves, cell by cell.' },
     { id: 'freeze', text: 'Freeze a revision with a message, change something, freeze another, and compare the two under Revisions.' },
-    { id: 'export', text: 'Export a revision: the element layout, figures and cuts as CSV with their checksums.' },
+    { id: 'export', text: 'Export a revision: its cells, figures and cuts as CSV with their checksums.' },
   ],
   lab: [
     { id: 'import', text: 'Import a family under Library: drop its network files or one zip, look at what was found, complete the description.' },
