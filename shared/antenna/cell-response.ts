@@ -72,13 +72,16 @@ function fillShares(shares: Float64Array, kind: PreparedEdition['ports']['kind']
 
 /** Gives the Lagrange weights through the `most` nodes about `x`, zero for the others. */
 export function windowedWeigher(nodes: Float64Array, most: number): (x: number, weights: Float64Array) => void {
-  if (nodes.length <= most) return lagrangeWeigher(nodes);
+  if (nodes.length <= most) {
+    const weigh = lagrangeWeigher(nodes);
+    return (x, weights) => weigh(x, weights);
+  }
   const weighers = Array.from({ length: nodes.length - most + 1 }, (_, first) => lagrangeWeigher(nodes.subarray(first, first + most)));
   return (x, weights) => {
     let first = 0;
     while (first + most < nodes.length && Math.abs(nodes[first + most] - x) < Math.abs(nodes[first] - x)) first += 1;
     weights.fill(0);
-    weighers[first](x, weights.subarray(first, first + most));
+    weighers[first](x, weights, first);
   };
 }
 

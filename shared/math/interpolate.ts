@@ -48,19 +48,19 @@ export function lagrangeWeights(nodes: ArrayLike<number>, x: number, weights: Fl
   return weights;
 }
 
-/** The same for many `x` of the same nodes, whose differences are divided by once. */
-export function lagrangeWeigher(nodes: ArrayLike<number>): (x: number, weights: Float64Array) => void {
+/** The same for many `x` of the same nodes, whose differences are divided by once; written from place `from` on. */
+export function lagrangeWeigher(nodes: ArrayLike<number>): (x: number, weights: Float64Array, from?: number) => void {
   const xs = Float64Array.from(nodes);
   const scale = xs.map((node, i) => xs.reduce((product, other, j) => (j === i ? product : product / (node - other)), 1));
-  return (x, weights) => {
+  return (x, weights, from = 0) => {
     let before = 1;
     for (let i = 0; i < xs.length; i++) {
-      weights[i] = before * scale[i];
+      weights[from + i] = before * scale[i];
       before *= x - xs[i];
     }
     let after = 1;
     for (let i = xs.length - 1; i >= 0; i--) {
-      weights[i] *= after;
+      weights[from + i] *= after;
       after *= x - xs[i];
     }
   };
