@@ -5,6 +5,20 @@ import { niceStep } from '../../ui/plots/axis-ticks';
 import type { FigureLevel, LineFigure, LineInk, PlottedLine } from '../../ui/plots/line-figure';
 import { numberText } from '../../ui/plots/plot-text';
 
+/** Another run to lay over the one that is drawn. */
+export interface OtherBand {
+  readonly label: string;
+  readonly result: BandResult;
+}
+
+/** What is drawn besides the run itself. */
+export interface Besides {
+  readonly limits: Limits;
+  /** Place among the points that is marked. */
+  readonly chosen: number | null;
+  readonly against: OtherBand | null;
+}
+
 interface Curve {
   readonly label: string;
   readonly ink: LineInk;
@@ -17,8 +31,7 @@ interface Drawing {
   readonly axis: string;
   readonly curves: readonly Curve[];
   readonly levels: readonly FigureLevel[];
-  /** Place among the points that is marked. */
-  readonly chosen: number | null;
+  readonly besides: Besides;
 }
 
 type Limits = Pick<Requirement, 'minGainDbi' | 'pointingToleranceDeg' | 'maxSidelobeDb'>;
@@ -28,36 +41,41 @@ const SQUARES_UP_TO = 60;
 const FARTHEST_LEVEL = 3;
 
 /** Gain where it is wanted and where it is highest, over frequency, with the least gain required. */
-export function gainFigure(result: BandResult, { minGainDbi }: Limits, chosen: number | null): LineFigure {
+export function gainFigure(result: BandResult, besides: Besides): LineFigure {
+  const { minGainDbi } = besides.limits;
   const levels = minGainDbi === undefined ? [] : [{ at: minGainDbi, label: `≥ ${numberText(minGainDbi, 1)} dBi` }];
   const curves: Curve[] = [
     { label: 'wanted direction', ink: 'ink', figure: ({ gainAtBeamDbi }) => gainAtBeamDbi },
     { label: 'peak', ink: 'patina', dashed: true, figure: ({ gainDbi }) => gainDbi },
-    { label: 'spatial part alone', ink: 'copper', dashed: true, figure: ({ spatial }) => spatial?.gainAtBeamDbi },
+    { label: 'spatial part alone', ink: 'patina', figure: ({ spatial }) => spatial?.gainAtBeamDbi },
   ];
-  return drawn(result, { title: 'Gain over the band', axis: 'gain, dBi', curves, levels, chosen });
+  return drawn(result, { title: 'Gain over the band', axis: 'gain, dBi', curves, levels, besides });
 }
 
 /** Where the beam stands against where it is wanted, in both planes, between the tolerances. */
-export function squintFigure(result: BandResult, { pointingToleranceDeg }: Limits, chosen: number | null): LineFigure {
-  const tolerance = pointingToleranceDeg;
+export function squintFigure(result: BandResult, besides: Besides): LineFigure {
+  const tolerance = besides.limits.pointingToleranceDeg;
   const levels = tolerance === undefined ? [] : [tolerance, -tolerance].map((at) => ({ at, label: `${at > 0 ? '≤ ' : '≥ '}${numberText(at, 2)}°` }));
   const curves: Curve[] = [
     { label: 'along', ink: 'ink', figure: ({ squintAlongDeg }) => squintAlongDeg },
     { label: 'across', ink: 'patina', dashed: true, figure: ({ squintAcrossDeg }) => squintAcrossDeg },
   ];
-  return drawn(result, { title: 'Squint over the band', axis: 'squint, °', curves, levels, chosen });
+  return drawn(result, { title: 'Squint over the band', axis: 'squint, °', curves, levels, besides });
 }
 
 /** The highest sidelobe of the hemisphere. */
-export function sidelobeFigure(result: BandResult, { maxSidelobeDb }: Limits, chosen: number | null): LineFigure {
+export function sidelobeFigure(result: BandResult, besides: Besides): LineFigure {
+  const { maxSidelobeDb } = besides.limits;
   const levels = maxSidelobeDb === undefined ? [] : [{ at: maxSidelobeDb, label: `≤ ${numberText(maxSidelobeDb, 1)} dB` }];
   const curves: Curve[] = [{ label: 'highest sidelobe', ink: 'ink', figure: ({ sidelobeDb }) => sidelobeDb }];
-  return drawn(result, { title: 'Highest sidelobe over the band', axis: 'level, dB', curves, levels, chosen });
+  return drawn(result, { title: 'Highest sidelobe over the band', axis: 'level, dB', curves, levels, besides });
 }
 
-function drawn({ points, bandGHz }: BandResult, { title, axis, curves, levels, chosen }: Drawing): LineFigure {
-  const lines = curves.map((curve) => lineOf(points, curve)).filter(({ x }) => x.length > 0);
+function drawn({ points, bandGHz }: BandResult, { title, axis, curves, levels, besides }: Drawing): LineFigure {
+  const { chosen, against } = besides;
+  const own = curves.map((curve) => lineOf(points, curve));
+  const other = against === null ? [] : [lineOf(against.result.points, { ...curves[0], label: `${curves[0].label}, ${against.label}`, ink: 'copper', dashed: false })];
+  const lines = [...own, ...other].filter(({ x }) => x.length > 0);
   const range = rangeOf(lines.flatMap(({ y }) => Array.from(y)), levels);
   const mark = chosen === null ? null : markOf(lines[0], points[chosen]?.frequencyGHz);
   return {

@@ -1,4 +1,4 @@
-import { bandwidthRows, extremeRows, lineRows, pointRows } from './band-rows';
+import { bandTable, bandwidthRows, extremeRows, lineRows, pointRows } from './band-rows';
 import { SAMPLE_BAND } from './sample-band';
 
 describe('rows of a band', () => {
@@ -19,6 +19,13 @@ describe('rows of a band', () => {
   it('give an extreme with its frequency, or the reason why there is none', () => {
     expect(extremeRows(SAMPLE_BAND)[2]).toEqual({ name: 'Largest pointing error, °', value: '0.600', at: '27.000' });
     expect(extremeRows(SAMPLE_BAND)[3]).toEqual({ name: 'Highest sidelobe, dB', value: 'no lobe besides the beam', at: '–' });
+  });
+
+  it('give every point with its full values to a file, and an empty place where there is none', () => {
+    const { columns } = bandTable({ ...SAMPLE_BAND, points: SAMPLE_BAND.points.map((point) => ({ ...point, sidelobeDb: { kind: 'none', reason: 'none' } })) });
+    expect(columns.find(({ head }) => head === 'gain in the wanted direction, dBi')?.values).toEqual([29, 30.5, 28.2]);
+    expect(columns.find(({ head }) => head === 'highest sidelobe, dB')?.values).toEqual(['', '', '']);
+    expect(columns.at(-1)?.values).toEqual(['yes', 'yes', 'no']);
   });
 
   it('mark frequencies beyond the data of the cells', () => {

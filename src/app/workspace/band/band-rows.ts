@@ -1,5 +1,6 @@
 import type { BandLine, BandPoint, BandResult, Extreme, GainBandwidth } from '../../../../shared/model/band-run';
 import type { Figure, VerdictWord } from '../../../../shared/model/figures';
+import type { PlotTable } from '../../ui/plots/plot-export';
 import { numberText, signedNumberText } from '../../ui/plots/plot-text';
 import { lineName } from '../sheet-states';
 
@@ -107,4 +108,33 @@ function cellsOf(point: BandPoint): readonly string[] {
     plain(point.phaseErrorRmsDeg, 1),
     plain(point.spatial?.gainAtBeamDbi, 2),
   ];
+}
+
+/** Every point with its full values, for a file. A figure without value leaves its place empty. */
+export function bandTable({ points }: BandResult): PlotTable {
+  const column = (head: string, figure: (point: BandPoint) => Figure | undefined): PlotTable['columns'][number] => ({
+    head,
+    values: points.map((point) => {
+      const value = figure(point);
+      return typeof value === 'number' ? value : '';
+    }),
+  });
+  return {
+    columns: [
+      column('frequency, GHz', ({ frequencyGHz }) => frequencyGHz),
+      column('gain in the wanted direction, dBi', ({ gainAtBeamDbi }) => gainAtBeamDbi),
+      column('gain at the peak, dBi', ({ gainDbi }) => gainDbi),
+      column('directivity in the wanted direction, dBi', ({ directivityAtBeamDbi }) => directivityAtBeamDbi),
+      column('pointing error, deg', ({ pointingErrorDeg }) => pointingErrorDeg),
+      column('squint along, deg', ({ squintAlongDeg }) => squintAlongDeg),
+      column('squint across, deg', ({ squintAcrossDeg }) => squintAcrossDeg),
+      column('highest sidelobe, dB', ({ sidelobeDb }) => sidelobeDb),
+      column('beamwidth along, deg', ({ beamwidthAlongDeg }) => beamwidthAlongDeg),
+      column('beamwidth across, deg', ({ beamwidthAcrossDeg }) => beamwidthAcrossDeg),
+      column('cell loss, dB', ({ cellLossDb }) => cellLossDb),
+      column('RMS phase error, deg', ({ phaseErrorRmsDeg }) => phaseErrorRmsDeg),
+      column('gain in the wanted direction, spatial part alone, dBi', ({ spatial }) => spatial?.gainAtBeamDbi),
+      { head: 'within the data of the cells', values: points.map(({ covered }) => (covered ? 'yes' : 'no')) },
+    ],
+  };
 }

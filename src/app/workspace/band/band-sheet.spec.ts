@@ -33,6 +33,9 @@ async function shown(known: readonly RunDetail[] = []) {
 
 const done = sampleRun({ state: 'done' }, { result: SAMPLE_BAND });
 
+/** The first test compiles every template of the sheet, on a machine that may be busy. */
+jest.setTimeout(30_000);
+
 describe('BandSheet', () => {
   it('says what will stand here and why nothing does yet', async () => {
     const { text, header } = await shown();

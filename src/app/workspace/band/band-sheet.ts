@@ -20,6 +20,7 @@ import { sheetNumber } from '../sheets';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { FEWEST_FREQUENCIES, FIRST_FORM, MOST_FREQUENCIES, bandOf, bandParametersOf, formFault } from './band-form';
 import type { BandForm } from './band-form';
+import type { OtherBand } from './band-figures';
 import { BandOutcome } from './band-outcome';
 
 type NumberField = 'fromGHz' | 'toGHz' | 'frequencyCount' | 'lowerOffsetMm' | 'upperOffsetMm';
@@ -68,6 +69,12 @@ export class BandSheet {
   protected readonly result = computed((): BandResult | null => {
     const answer = this.desk.shown()?.answer;
     return answer?.kind === 'band' ? answer.result : null;
+  });
+  /** The result laid over the shown one, by its name. */
+  protected readonly against = computed((): OtherBand | null => {
+    const other = this.desk.against();
+    if (other === null || other.id === this.desk.shown()?.id || other.answer.kind !== 'band' || other.answer.result === null) return null;
+    return { label: sourceText(other), result: other.answer.result };
   });
   protected readonly staleText = computed(() => {
     const shown = this.desk.shown();

@@ -28,6 +28,8 @@ export class RunDesk {
   readonly history = signal<readonly RunSummary[] | null>(null);
   /** The run whose result is shown. */
   readonly shown = signal<RunDetail | null>(null);
+  /** Another result to lay over the shown one. */
+  readonly against = signal<RunDetail | null>(null);
   readonly trouble = signal('');
   readonly busy = signal(false);
   /** The newest run that waits or computes. */
@@ -60,6 +62,13 @@ export class RunDesk {
     const outcome = await this.client.read(runId);
     this.trouble.set(outcomeText(outcome) ?? '');
     if (outcome.kind === 'found') this.shown.set(outcome.value);
+  }
+
+  /** Lays another result over the shown one, or takes it away. */
+  async compare(runId: string | null): Promise<void> {
+    const outcome = runId === null ? null : await this.client.read(runId);
+    this.trouble.set(outcome === null ? '' : (outcomeText(outcome) ?? ''));
+    this.against.set(outcome?.kind === 'found' ? outcome.value : null);
   }
 
   /** Starts a run on the draft, once it is saved, or on a revision. The server may answer with a result that it has already. */

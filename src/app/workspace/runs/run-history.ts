@@ -35,7 +35,12 @@ export class RunHistory {
   readonly shown = input<string | null>(null);
   /** Hash of the draft as it is saved: runs of other contents say so. */
   readonly draftHash = input<string | null>(null);
+  /** Id of the run laid over the shown one, where the sheet offers that. */
+  readonly against = input<string | null>(null);
+  readonly comparable = input(false);
   readonly chosen = output<string>();
+  /** A run to lay over the shown one; null for none. */
+  readonly compared = output<string | null>();
 
   protected readonly utc = utcText;
   protected readonly of = sourceText;
