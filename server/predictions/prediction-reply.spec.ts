@@ -1,7 +1,7 @@
 import { predictDesign } from '../../shared/antenna/predict-design';
 import { readBinaryBlock } from '../../shared/contracts/binary-block';
 import { CELL_ARRAY_NAMES, CUT_ARRAY_NAMES, predictionHead, predictionReply } from '../../shared/contracts/predictions';
-import { STARTING_DESIGN } from '../../shared/model/starting-design';
+import { NEW_PANEL_DESIGN, STARTING_DESIGN } from '../../shared/model/starting-design';
 import { predictionBlockOf, predictionReplyOf } from './prediction-reply';
 
 describe('the two forms of a prediction', () => {
@@ -22,6 +22,16 @@ describe('the two forms of a prediction', () => {
     });
     expect(Array.from(block.arrays['uv.gainDbi'])).toEqual(reply.uv?.gainDbi);
     expect(Object.keys(block.arrays)).toHaveLength(CELL_ARRAY_NAMES.length + 2 * CUT_ARRAY_NAMES.length + 1);
+  });
+
+  it('hold the cross-polar field in the vector model', () => {
+    const both = predictDesign(NEW_PANEL_DESIGN, { include: { cuts, uv: { size: 16 } } });
+    const plain = predictionReplyOf(both);
+    expect(predictionReply.parse(plain)).toEqual(plain);
+    const { arrays } = readBinaryBlock(new Uint8Array(predictionBlockOf(both)).buffer);
+    expect(Array.from(arrays['cuts.1.crossGainDbi'])).toEqual(plain.cuts?.[1].crossGainDbi);
+    expect(Array.from(arrays['uv.crossGainDbi'])).toEqual(plain.uv?.crossGainDbi);
+    expect(reply.uv?.crossGainDbi).toBeUndefined();
   });
 
   it('leave out what was not asked for', () => {

@@ -19,6 +19,7 @@ const facts: ReadmeFacts = {
   invented: false,
   edition: { familyName: 'Ring and patch', number: 2, provenance: 'simulated', limits: 'Normal incidence only.' },
   warnings: [{ code: 'image-lobe', pointer: '#/cells', severity: 'warn', message: 'Two levels give an image.', numbers: {} }],
+  design: { prediction: { receiveExponent: 0.5, radiateExponent: 0.5 } },
   engineVersion: 'scalar-1',
   productVersion: '0.1.0',
 };
@@ -35,6 +36,14 @@ describe('the text of an export', () => {
     expect(text).toContain('- The cells come from "Ring and patch", edition 2: simulated. Normal incidence only.');
     expect(text).toContain('- Two levels give an image.');
     expect(text).not.toContain('INVENTED');
+  });
+
+  it('says which model predicted and what it leaves out', () => {
+    expect(flat(exportReadme(facts))).toContain('by a scalar model of independent cells; nothing was measured on this panel. There is no cross-polar field in it');
+    const design = { prediction: { receiveExponent: 0.5, radiateExponent: 0.5, model: 'vector', cellFactor: 'normal' } } as const;
+    const text = flat(exportReadme({ ...facts, design }));
+    expect(text).toContain('by a vector model of independent cells (power-wave re-radiation, cell factor normal)');
+    expect(text).toContain('the cuts hold the cross-polar one too');
   });
 
   it('cautions whoever mounts or lights the panel, and calls nothing safe or compliant', () => {

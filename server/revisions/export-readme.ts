@@ -1,3 +1,4 @@
+import type { DesignDocument } from '../../shared/model/design-document';
 import type { RevisionHeader } from '../../shared/contracts/projects';
 import type { Warning } from '../../shared/model/figures';
 
@@ -8,6 +9,7 @@ export interface ReadmeFacts {
   readonly invented: boolean;
   readonly edition: { readonly familyName: string; readonly number: number; readonly provenance: string; readonly limits: string } | null;
   readonly warnings: readonly Warning[];
+  readonly design: Pick<DesignDocument, 'prediction'>;
   readonly engineVersion: string;
   readonly productVersion: string;
 }
@@ -63,9 +65,17 @@ const GENERAL_CAUTIONS = [
   'Mounting, wind, ice, seismic, lightning and grounding design must follow local codes and be done or checked by a licensed professional.',
 ];
 
-function cautions({ edition, warnings, invented }: ReadmeFacts): string[] {
+/** Which model predicted, and what it leaves out. */
+function modelCaution({ prediction }: ReadmeFacts['design']): string {
+  const leftOut = 'no scattering from edges, struts or the horn';
+  if (prediction.model !== 'vector') return `Everything here is predicted by a scalar model of independent cells; nothing was measured on this panel. There is no cross-polar field in it, ${leftOut}.`;
+  const form = `${prediction.reradiation ?? 'power-wave'} re-radiation, cell factor ${prediction.cellFactor ?? 'none'}`;
+  return `Everything here is predicted by a vector model of independent cells (${form}); nothing was measured on this panel. Gain and beam figures are of the co-polar field; the cuts hold the cross-polar one too. There is ${leftOut} in it.`;
+}
+
+function cautions({ edition, warnings, invented, design }: ReadmeFacts): string[] {
   return [
-    'Everything here is predicted by a scalar model of independent cells; nothing was measured on this panel. There is no cross-polar field in it, no scattering from edges, struts or the horn.',
+    modelCaution(design),
     'This archive is no release for fabrication: it says nothing of who reviewed the revision.',
     ...(edition === null
       ? ['The cells are ideal or a what-if table: they have no geometry and cannot be made as they stand.']

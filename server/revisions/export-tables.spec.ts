@@ -21,6 +21,24 @@ describe('the table of a cut', () => {
   });
 });
 
+describe('the table of a cut by the vector model', () => {
+  const design = exampleDesign({ cells: onEdition, prediction: { receiveExponent: 0.5, radiateExponent: 0.5, model: 'vector' } });
+  const { cuts = [], figures, verdicts } = predictDesign(design, { edition, include: { cuts: [{ plane: 'across', angleDeg: [0, 4, 2] }] } });
+
+  it('holds the cross-polar gain beside the co-polar one', () => {
+    const [head, ...rows] = linesOf(cutTable(cuts[0])).map((line) => line.split(','));
+    expect(head).toEqual(['angle_deg', 'theta_deg', 'phi_deg', 'directivity_dbi', 'gain_dbi', 'cross_polar_gain_dbi']);
+    expect(rows.map((row) => Number(row[5]))).toEqual(Array.from(cuts[0].crossGainDbi ?? [], (level) => Math.round(level * 1e4) / 1e4));
+  });
+
+  it('lists the budget and the discrimination among the figures', () => {
+    const rows = new Map(linesOf(figureTable(figures, verdicts)).map((line) => [line.split(',')[0], line.split(',')]));
+    expect(Number(rows.get('vector.budget.spilloverDb')?.[1])).toBeCloseTo(figures.spilloverDb as number, 9);
+    expect(rows.get('vector.crossPolarDiscriminationDb.0')?.[2]).toBe('dB');
+    expect(rows.get('vector.axialRatioDb')?.[7]).toContain('circular beam only');
+  });
+});
+
 describe('the table of figures', () => {
   it('gives value, unit and uncertainty, and the reason where there is no value', () => {
     const { figures, verdicts } = predicted({ kind: 'ideal', levels: null });

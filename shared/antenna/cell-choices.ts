@@ -9,6 +9,7 @@ import type { PlacedDesign } from './place-cells';
 import type { PreparedEdition } from './prepare-edition';
 import { newCellStates, type CellStates } from './reference-search';
 import { radFromDeg } from '../units/angles';
+import type { VectorStock } from './vector/vector-stock';
 
 /** One cell that could stand at a position, at that position's angle of incidence and the design frequency. */
 export interface CellChoice {
@@ -22,7 +23,10 @@ export interface CellChoice {
 }
 
 /** What the choice at a position needs of a placed design; light and targets may be those of a few positions alone. */
-export type ChoiceSite = Pick<PlacedDesign, 'design' | 'si' | 'light' | 'targetRad'>;
+export type ChoiceSite = Pick<PlacedDesign, 'design' | 'si' | 'light' | 'targetRad'> & {
+  /** In the vector model, what cells send into the beam. */
+  readonly vector?: { readonly stock: Pick<VectorStock, 'sendStates'> };
+};
 
 /** The three cells that come nearest at one position, best first by the design's own rule. None for a continuous ideal phase. */
 export function cellChoices(placed: ChoiceSite, position: number, edition?: PreparedEdition): CellChoice[] {
@@ -31,6 +35,7 @@ export function cellChoices(placed: ChoiceSite, position: number, edition?: Prep
   }
   const targetRad = placed.targetRad[position];
   const states = statesOf(placed, position, edition);
+  placed.vector?.stock.sendStates(position, states);
   const { cells } = placed.design;
   const byLoss = cells.kind === 'resonant' || (cells.kind === 'edition' && cells.rule === 'least-error');
   const choices = Array.from({ length: states.count }, (_, i) => choiceOf(states, i, targetRad));

@@ -60,6 +60,8 @@ const ROWS: readonly Row[] = [
   { id: 'spillover', label: 'Spillover', unit: 'dB', of: ({ spilloverDb }) => spilloverDb },
   { id: 'aperture-efficiency', label: 'Aperture efficiency', unit: '%', of: ({ apertureEfficiency }) => percent(apertureEfficiency) },
   judged('cross-polar', 'Cross-polar', 'dB'),
+  { id: 'worst-cross-polar', label: 'Worst XPD within half power', unit: 'dB', where: 'asked', of: ({ vector }) => vector?.worstDiscriminationDb ?? UNASKED },
+  { id: 'axial-ratio', label: 'Axial ratio', unit: 'dB', where: 'asked', of: ({ vector }) => vector?.axialRatioDb ?? UNASKED },
   { ...judged('cross-polar-mask', 'Cross-polar mask margin', 'dB'), where: 'asked' },
   { ...judged('received-power', 'Received power', 'dBm'), where: 'asked' },
   { ...judged('gain-over-temperature', 'Gain over temperature', 'dB/K'), where: 'asked' },

@@ -1,4 +1,5 @@
-import { neighbours, type EditionAtFrequency } from '../edition-at-frequency';
+import { neighbours } from '../edition-at-frequency';
+import type { PermittedNodes } from '../excluded-nodes';
 import type { PreparedEdition } from '../prepare-edition';
 
 /** Entries of a response: S11, S21, S12, S22. */
@@ -46,8 +47,12 @@ function tellingAzimuths(phisRad: Float64Array, azimuths: PreparedEdition['azimu
   return symmetrySines(phisRad, azimuths).flatMap((sine, a) => (Math.abs(sine) > ON_SYMMETRY ? [a] : []));
 }
 
-/** Cross terms at a frequency: linear between the points given, as complex numbers, then turned by the half sum of the phases. */
-export function crossTermsAt(prepared: PreparedEdition, at: EditionAtFrequency): CrossTerms {
+/**
+ * Cross terms at a frequency: linear between the points given, as complex numbers, then turned by the half sum of the phases. At an
+ * excluded angle the nearest one permitted stands in, so that no number of such a region is read.
+ */
+export function crossTermsAt(prepared: PreparedEdition, nodes: PermittedNodes): CrossTerms {
+  const { at } = nodes;
   const { responses } = prepared.edition;
   const { azimuths, ports } = prepared;
   const sines = symmetrySines(responses.phisRad, azimuths);
@@ -61,10 +66,11 @@ export function crossTermsAt(prepared: PreparedEdition, at: EditionAtFrequency):
   for (let cell = 0; cell < responses.cellCount; cell++) {
     for (let theta = 0; theta < thetaCount; theta++) {
       telling.forEach((a, place) => {
-        const series = (cell * thetaCount + theta) * responses.phisRad.length + azimuths.indices[a];
+        const told = permittedTheta(responses.thetasRad, theta, { from: nodes.lowestRad[cell * azimuthCount + a], to: nodes.highestRad[cell * azimuthCount + a] });
+        const series = (cell * thetaCount + told) * responses.phisRad.length + azimuths.indices[a];
         const points = neighbours(responses, series, at.frequencyHz);
         if (!points) return;
-        const first = (cell * at.entryCount) * at.nodeCount + theta * azimuthCount + a;
+        const first = cell * at.entryCount * at.nodeCount + told * azimuthCount + a;
         const halfSum = (at.phaseRad[first] + at.phaseRad[first + at.nodeCount]) / 2;
         const scale = odd ? 1 / sines[a] : 1;
         const to = cell * nodeCount + theta * telling.length + place;
@@ -74,6 +80,15 @@ export function crossTermsAt(prepared: PreparedEdition, at: EditionAtFrequency):
     }
   }
   return { azimuths: telling, nodeCount, ...table };
+}
+
+/** The node nearest to one whose angle is permitted; the node itself where none is. */
+function permittedTheta(thetasRad: Float64Array, theta: number, { from, to }: { from: number; to: number }): number {
+  if (to < from) return theta;
+  let nearest = theta;
+  while (thetasRad[nearest] > to && nearest > 0) nearest -= 1;
+  while (thetasRad[nearest] < from && nearest < thetasRad.length - 1) nearest += 1;
+  return nearest;
 }
 
 interface PointPair {

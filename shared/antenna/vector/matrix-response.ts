@@ -1,5 +1,6 @@
 import { bracket } from '../../math/interpolate';
 import { entryLogMagnitude, entryPhaseRad, incidenceWeigher, MOST_AZIMUTH_NODES, MOST_THETA_NODES, weightedSum, windowedWeigher } from '../cell-response';
+import { permittedNodes, type PermittedNodes } from '../excluded-nodes';
 import type { PreparedEdition } from '../prepare-edition';
 import { crossTermsAt, type CrossTerms } from './cross-terms';
 
@@ -28,6 +29,11 @@ export interface MatrixSampler {
   sample(cell: number, out: MatrixSample): MatrixSample;
 }
 
+/** Every angle of an edition at a frequency, excluded ones too. */
+export function allNodes(prepared: PreparedEdition, frequencyHz: number): PermittedNodes {
+  return permittedNodes(prepared, { isEmpty: true, mark: () => false }, prepared.atFrequency(frequencyHz));
+}
+
 const keptCrossTerms = new WeakMap<object, CrossTerms>();
 
 /**
@@ -35,10 +41,10 @@ const keptCrossTerms = new WeakMap<object, CrossTerms>();
  * phase by Lagrange in sin^2 theta and in cos 4 phi (or cos 2 phi). Cross terms relative to the half sum of the two phases, in sin^2
  * theta and, being odd about the planes of symmetry of the cell, as sin 4 phi (or sin 2 phi) times an even function.
  */
-export function matrixSampler(prepared: PreparedEdition, frequencyHz: number, thetaRule: ThetaRule = 'poly'): MatrixSampler {
-  const at = prepared.atFrequency(frequencyHz);
+export function matrixSampler(prepared: PreparedEdition, permitted: PermittedNodes, thetaRule: ThetaRule = 'poly'): MatrixSampler {
+  const { at } = permitted;
   if (at.entryCount !== 2) throw new RangeError('a description of one response holds no matrix');
-  const cross = keptCrossTerms.get(at) ?? crossTermsAt(prepared, at);
+  const cross = keptCrossTerms.get(at) ?? crossTermsAt(prepared, permitted);
   keptCrossTerms.set(at, cross);
   const weigh = incidenceWeigher(prepared, 'x');
   const thetaWeights = thetaWeigher(prepared, thetaRule);

@@ -5,10 +5,12 @@ import type { CellAssignment, CellResponses } from '../cell-stock';
 import { complexError } from '../edition-choice';
 import { allowedLister, editionSite, type EditionSite } from '../edition-stock';
 import { editionWarnings } from '../edition-warnings';
+import { permittedNodes } from '../excluded-nodes';
+import { regionFilter } from '../excluded-regions';
 import { searchStateReferenceRad } from '../reference-search';
 import { arrivingXY, newCoPolarWeights, type CoPolarWeights, type MatrixAxes } from './co-polar-weights';
 import { crossTermsGiven } from './cross-terms';
-import { matrixSampler, newMatrixSample, type MatrixSample, type ThetaRule } from './matrix-response';
+import { allNodes, matrixSampler, newMatrixSample, type MatrixSample, type ThetaRule } from './matrix-response';
 import { waveWeights } from './reradiation';
 import { newVectorWaves, type VectorWaves } from './vector-light';
 import type { VectorSite, VectorStock } from './vector-stock';
@@ -54,16 +56,45 @@ function sent(g: CoPolarWeights, s: MatrixSample): [number, number] {
   ];
 }
 
+interface PositionSampler {
+  at(n: number): void;
+  sample(cell: number, out: MatrixSample): MatrixSample;
+}
+
+/**
+ * Responses of cells at the angles of the positions. At another frequency cells are placed already: inside a region excluded
+ * there they do what the laboratory gave, as `editionWarnings` says.
+ */
+function positionSampler(site: MatrixSite, frequencyHz: number): PositionSampler {
+  const { light, edition, thetaRule, designFrequencyHz } = site;
+  if (frequencyHz === designFrequencyHz) {
+    const sampler = matrixSampler(edition, site.permitted, thetaRule);
+    return { at: (n) => sampler.setAngle(light.incidenceRad[n], light.azimuthRad[n]), sample: sampler.sample };
+  }
+  const regions = regionFilter(edition.edition, edition.azimuths, frequencyHz);
+  const given = matrixSampler(edition, allNodes(edition, frequencyHz), thetaRule);
+  const permitted = regions.isEmpty ? given : matrixSampler(edition, permittedNodes(edition, regions, edition.atFrequency(frequencyHz)), thetaRule);
+  const barred = new Uint8Array(edition.edition.cells.length);
+  return {
+    at: (n) => {
+      given.setAngle(light.incidenceRad[n], light.azimuthRad[n]);
+      permitted.setAngle(light.incidenceRad[n], light.azimuthRad[n]);
+      barred.fill(0);
+      regions.mark(light.incidenceRad[n], light.azimuthRad[n], barred);
+    },
+    sample: (cell, out) => (barred[cell] ? given : permitted).sample(cell, out),
+  };
+}
+
 /** What a cell sends into the beam from a position, at a frequency. */
 function sender(site: MatrixSite, frequencyHz: number): { at(n: number): void; q(cell: number): [number, number] } {
-  const { light, vector, edition, axes, thetaRule } = site;
-  const sampler = matrixSampler(edition, frequencyHz, thetaRule);
+  const sampler = positionSampler(site, frequencyHz);
   const weights = newCoPolarWeights();
   const matrix = newMatrixSample();
   return {
     at: (n) => {
-      sampler.setAngle(light.incidenceRad[n], light.azimuthRad[n]);
-      vector.weigher.weigh(n, axes, weights);
+      sampler.at(n);
+      site.vector.weigher.weigh(n, site.axes, weights);
     },
     q: (cell) => sent(weights, sampler.sample(cell, matrix)),
   };
@@ -130,13 +161,13 @@ function fillAllowed(site: MatrixSite, fill: StateSender, n: number, states: Par
 }
 
 function leavingWaves(site: MatrixSite, { cellIndex }: CellAssignment, frequencyHz: number): VectorWaves {
-  const { light, edition, axes, thetaRule, vector } = site;
-  const sampler = matrixSampler(edition, frequencyHz, thetaRule);
+  const { axes, vector } = site;
+  const sampler = positionSampler(site, frequencyHz);
   const s = newMatrixSample();
   const leaving = newVectorWaves(cellIndex.length);
   for (let n = 0; n < cellIndex.length; n++) {
     if (cellIndex[n] < 0) continue;
-    sampler.setAngle(light.incidenceRad[n], light.azimuthRad[n]);
+    sampler.at(n);
     sampler.sample(cellIndex[n], s);
     if (axes === 'te-tm') throughPlane(s, vector, leaving, n);
     else throughAxes(s, vector, leaving, n);

@@ -1,4 +1,4 @@
-import { matrixSampler, newMatrixSample, type MatrixSample, type ThetaRule } from '../../../shared/antenna/vector/matrix-response';
+import { allNodes, matrixSampler, newMatrixSample, type MatrixSample, type ThetaRule } from '../../../shared/antenna/vector/matrix-response';
 import { singularValues } from '../../../shared/antenna/vector/scattering';
 import { radFromDeg } from '../../../shared/units/angles';
 import { expectWithin } from '../expect-within';
@@ -16,7 +16,7 @@ interface Point {
 }
 
 function sampleAt(patchMm: number, { frequencyGHz, thetaDeg, phiDeg }: Point, rule: ThetaRule): MatrixSample {
-  const sampler = matrixSampler(obliquePatches(), frequencyGHz * 1e9, rule);
+  const sampler = matrixSampler(obliquePatches(), allNodes(obliquePatches(), frequencyGHz * 1e9), rule);
   sampler.setAngle(radFromDeg(thetaDeg), radFromDeg(phiDeg));
   return sampler.sample(cellOf(patchMm), newMatrixSample());
 }

@@ -13,6 +13,17 @@ describe('best cells of one position', () => {
     // The prediction travels in single precision.
     alone.forEach(({ errorDeg }, i) => expect(errorDeg).toBeCloseTo(whole[i].errorDeg, 3));
   });
+  it('are those of what cells send into the beam, by the vector model', () => {
+    const design = { ...SAMPLE_DESIGN, prediction: { ...SAMPLE_DESIGN.prediction, model: 'vector' as const } };
+    const prediction = computedPrediction(design, { edition: SAMPLE_PREPARED });
+    const placed = placeCells(design, SAMPLE_PREPARED);
+    for (const position of [7, 200]) {
+      const alone = bestCells(prediction, position, SAMPLE_PREPARED);
+      expect(alone[0].cellIndex).toBe(prediction.cells.cellIndex[position]);
+      const whole = cellChoices(placed, position, SAMPLE_PREPARED);
+      alone.forEach(({ errorDeg }, i) => expect(errorDeg).toBeCloseTo(whole[i].errorDeg, 3));
+    }
+  });
   it('begin with the cell that stands there', () => {
     expect(bestCells(SAMPLE_PHASE, 57, SAMPLE_PREPARED)[0].cellIndex).toBe(SAMPLE_PHASE.cells.cellIndex[57]);
   });

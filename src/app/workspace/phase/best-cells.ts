@@ -2,6 +2,7 @@ import { cellChoices } from '../../../../shared/antenna/cell-choices';
 import type { CellChoice } from '../../../../shared/antenna/cell-choices';
 import type { PreparedEdition } from '../../../../shared/antenna/prepare-edition';
 import { siDesign } from '../../../../shared/antenna/si-design';
+import { vectorArrival, vectorStock } from '../../../../shared/antenna/vector/vector-stock';
 import { radFromDeg } from '../../../../shared/units/angles';
 import type { LivePrediction } from '../live-prediction-data';
 
@@ -16,5 +17,8 @@ export function bestCells({ cells, of }: LivePrediction, position: number, editi
     incidenceRad: one(radFromDeg(cells.incidenceDeg[position])),
     azimuthRad: one(radFromDeg(cells.incidenceAzimuthDeg[position])),
   };
-  return cellChoices({ design: of, si: siDesign(of), light, targetRad: one(radFromDeg(cells.targetPhaseDeg[position])) }, 0, edition ?? undefined);
+  const si = siDesign(of);
+  const arrival = vectorArrival(si, { count: 1, xM: one(cells.xMm[position] / 1000), yM: one(cells.yMm[position] / 1000) });
+  const vector = arrival && { stock: vectorStock(of.cells, { light, designFrequencyHz: si.designFrequencyHz, si, edition: edition ?? undefined, ...arrival }) };
+  return cellChoices({ design: of, si, light, targetRad: one(radFromDeg(cells.targetPhaseDeg[position])), vector }, 0, edition ?? undefined);
 }
