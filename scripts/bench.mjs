@@ -82,6 +82,11 @@ async function loadRows(words) {
   return chosen.sort((a, b) => Number('sample' in a) - Number('sample' in b) || Number('rssMb' in b.goal) - Number('rssMb' in a.goal));
 }
 
+/** A product runs in a process group of its own, so that an ended bench must end it. */
+for (const signal of ['SIGINT', 'SIGTERM']) {
+  process.once(signal, () => void Promise.resolve(product?.end()).finally(() => process.exit(1)));
+}
+
 await runScript(async () => {
   checkNode();
   await provideDependencies();
