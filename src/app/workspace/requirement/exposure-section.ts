@@ -1,12 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
+import { HowNote } from './how-note';
 import { limitRows, zoneRows } from './transmission-rows';
 
 /** Power densities in front of the transmitting panel and the distances to published limits, with the cautions. */
 @Component({
   selector: 'slant-exposure-section',
-  imports: [ViewTitle],
+  imports: [HowNote, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './exposure-section.html',
   styleUrls: ['../fields/sheet.scss', './transmission-section.scss'],

@@ -5,6 +5,7 @@ import type { Mask } from '../../../../shared/model/mask';
 import type { MaskFindings } from '../../../../shared/model/mask-figures';
 import type { ChoiceOption } from '../fields/choice-row';
 import { figureText } from '../strip-figures';
+import type { RequirementFigure } from './requirement-how';
 
 /** What a mask of the requirement is held against. */
 export type MaskUse = 'gain' | 'cross-polar' | 'density';
@@ -21,6 +22,8 @@ interface MaskOfUse {
   readonly unit: string;
   readonly kinds: readonly ChoiceOption[];
   readonly whenNone: string;
+  /** The note on its margin; the mask of the gain has its own behind the figure of the strip. */
+  readonly how: RequirementFigure | null;
   /** What the traces show. */
   readonly traced: string;
   /** What the predicted gain is raised by to be drawn against it; null where gain is not what is held against it. */
@@ -43,6 +46,7 @@ export const MASK_USES: Readonly<Record<MaskUse, MaskOfUse>> = {
     unit: 'dBi',
     kinds: WITH_PUBLISHED,
     whenNone: 'No mask is set. A mask is the highest level allowed at each angle off the beam: points joined by straight lines, a formula, or a published envelope.',
+    how: null,
     traced: 'the predicted gain',
     shiftDb: () => 0,
     verdict: ({ maskMargin, maskFindings }) => ({ margin: maskMargin, findings: maskFindings ?? 'Not evaluated.' }),
@@ -54,6 +58,7 @@ export const MASK_USES: Readonly<Record<MaskUse, MaskOfUse>> = {
     unit: 'dBi',
     kinds: WITH_PUBLISHED,
     whenNone: 'No cross-polar mask is set. It is held against the cross-polar gain of the vector model; the scalar model has none, and then it is not evaluated.',
+    how: 'cross-polar-mask',
     traced: '',
     shiftDb: () => null,
     verdict: ({ crossPolarMaskMargin }) => (crossPolarMaskMargin ? { margin: crossPolarMaskMargin, findings: marginSentence(crossPolarMaskMargin) } : null),
@@ -65,6 +70,7 @@ export const MASK_USES: Readonly<Record<MaskUse, MaskOfUse>> = {
     unit: 'dBW',
     kinds: ANY_LEVEL,
     whenNone: 'No limit of EIRP density is set. It is dBW in the reference bandwidth at each angle off the beam.',
+    how: 'eirp-density',
     traced: 'the predicted EIRP density',
     shiftDb: ({ eirpDensityDbw, gainDbi }) => (typeof eirpDensityDbw === 'number' && typeof gainDbi === 'number' ? eirpDensityDbw - gainDbi : null),
     verdict: ({ eirpDensityMargin }) => (eirpDensityMargin ? { margin: eirpDensityMargin, findings: marginSentence(eirpDensityMargin) } : null),

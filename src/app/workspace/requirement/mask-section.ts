@@ -18,6 +18,7 @@ import { WORKSPACE_STATE } from '../workspace-state';
 import { FormulaField } from './formula-field';
 import { firstMask, MASK_USES, PUBLISHED_CHOICES } from './mask-choices';
 import type { MaskUse } from './mask-choices';
+import { HowNote } from './how-note';
 import { offAxisTraces } from './mask-drawing';
 import { MaskFindingsTable } from './mask-findings-table';
 import { MaskSketch } from './mask-sketch';
@@ -27,7 +28,7 @@ const FIRST_SPILLOVER_DEG = [60, 120];
 /** A mask of the requirement: as points, as a formula or by the name of a published envelope, with what stands above it. */
 @Component({
   selector: 'slant-mask-section',
-  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, FormulaField, MaskFindingsTable, MaskSketch, RemarkList, ViewTitle],
+  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, FormulaField, HowNote, MaskFindingsTable, MaskSketch, RemarkList, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './mask-section.html',
   styleUrls: ['../fields/sheet.scss', './mask-section.scss'],

@@ -4,6 +4,7 @@ import { PendingEntries } from '../fields/pending-entries';
 import { ViewNumber } from '../pattern/view-number';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
+import { HowNote } from './how-note';
 import { sizingRows } from './sizing-rows';
 
 /** The optimum of a flat panel lies between -11.5 and -11.0 dB for usual focal ratios. */
@@ -16,7 +17,7 @@ const FALLEN_BACK_GAIN_DBI = 30;
 /** Proposes aperture, horn and period for the requirement; "use these" puts them into the design in one step. */
 @Component({
   selector: 'slant-sizing-section',
-  imports: [ViewNumber, ViewTitle],
+  imports: [HowNote, ViewNumber, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <section>
@@ -33,10 +34,8 @@ const FALLEN_BACK_GAIN_DBI = 30;
           <dd>{{ fact.value }}</dd>
         }
       </dl>
-      <p class="hint">
-        The allowance is for losses, rounding and tolerances of the cells. Area from G λ² = 4π A cos θ η, η spillover times taper of this horn on this outline; period λ/(1 + sin) at the upper band edge for the steepest scan and incidence. The horn stands at the
-        specular angle of the first beam. What the panel then does is for the prediction to say.
-      </p>
+      <p class="hint">The allowance is for losses, rounding and tolerances of the cells. What the panel then does is for the prediction to say.</p>
+      <slant-how-note figure="sizing" />
       @if (canEdit()) {
         <div class="actions"><button type="button" class="button" (click)="use()">Use these</button></div>
       }

@@ -17,20 +17,20 @@ export interface LimitRow {
   readonly note: string | null;
 }
 
-/** Not-broken space between number and unit. */
-const THIN = '\u202f';
+/** Unbroken space between number and unit. */
+const UNBROKEN = '\u00a0';
 
 /** A figure with its unit, or the reason why there is none. */
 export function withUnit(value: Figure | undefined, digits: number, unit: string): string {
   if (value === undefined) return '–';
-  return typeof value === 'number' ? `${figureText(value, digits)}${THIN}${unit}` : value.reason;
+  return typeof value === 'number' ? `${figureText(value, digits)}${UNBROKEN}${unit}` : value.reason;
 }
 
 /** Three significant digits: an estimate claims no more. */
 export function estimateText(value: number, unit: string): string {
-  if (value === 0) return `0${THIN}${unit}`;
+  if (value === 0) return `0${UNBROKEN}${unit}`;
   const digits = Math.max(0, 2 - Math.floor(Math.log10(Math.abs(value))));
-  return `${figureText(Number(value.toPrecision(3)), Math.min(6, digits))}${THIN}${unit}`;
+  return `${figureText(Number(value.toPrecision(3)), Math.min(6, digits))}${UNBROKEN}${unit}`;
 }
 
 const isReason = (value: object): value is NoFigure => 'reason' in value;
@@ -59,7 +59,7 @@ export function limitRows(exposure: ExposureFigures): readonly LimitRow[] {
 function limitRow(limit: ExposureLimit | NoFigure, source: string, audience: string): LimitRow {
   if (isReason(limit)) return { source, audience, limit: '–', averaging: '–', distance: '–', note: limit.reason };
   const { limitWPerM2, averagingMin, distanceM } = limit;
-  const told = { source, audience, limit: estimateText(limitWPerM2, 'W/m²'), averaging: `${averagingMin}${THIN}min` };
+  const told = { source, audience, limit: estimateText(limitWPerM2, 'W/m²'), averaging: `${averagingMin}${UNBROKEN}min` };
   if (typeof distanceM !== 'number') return { ...told, distance: '–', note: distanceM.reason };
   return { ...told, distance: estimateText(distanceM, 'm'), note: null };
 }

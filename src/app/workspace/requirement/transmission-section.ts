@@ -5,6 +5,7 @@ import { DesignField } from '../fields/design-field';
 import { RemarkList } from '../fields/remark-list';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
+import { HowNote } from './how-note';
 import { MaskSection } from './mask-section';
 import { RequirementParts } from './requirement-part';
 import { linkRows, receiverRows, transmitterRows } from './transmission-rows';
@@ -18,7 +19,7 @@ const LINK_KINDS = [
 /** Transmitter, link and receiver around the panel, with EIRP, received power and G/T. */
 @Component({
   selector: 'slant-transmission-section',
-  imports: [ChoiceRow, DesignField, MaskSection, RemarkList, ViewTitle],
+  imports: [ChoiceRow, DesignField, HowNote, MaskSection, RemarkList, ViewTitle],
   providers: [RequirementParts],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './transmission-section.html',
