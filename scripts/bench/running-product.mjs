@@ -38,9 +38,10 @@ async function previews(product, side, count) {
 function paintedAfterKey() {
   const figures = () => [...document.querySelectorAll('button .value b')].map((element) => element.textContent).join(' ');
   const before = figures();
-  return new Promise((resolve) => {
+  return new Promise((resolve, reject) => {
+    setTimeout(() => reject(new Error('No figure of the strip has changed for a minute.')), 60_000);
     let pressed = null;
-    document.addEventListener('keydown', () => (pressed ??= performance.now()), { capture: true, once: true });
+    document.addEventListener('keydown', ({ key }) => key.startsWith('Arrow') && (pressed ??= performance.now()), { capture: true });
     const watch = new MutationObserver(() => {
       if (pressed === null || figures() === before) return;
       watch.disconnect();
@@ -64,7 +65,8 @@ async function paints(product, count) {
     const times = [];
     for (let i = -5; i < count; i++) {
       const painted = page.evaluate(paintedAfterKey);
-      await page.keyboard.press('ArrowUp');
+      // A whole degree, to and fro, so that some figure changes in the digits that are shown.
+      await page.keyboard.press(i % 20 < 10 ? 'Shift+ArrowUp' : 'Shift+ArrowDown');
       const ms = await painted;
       if (i >= 0) times.push(ms);
       await page.waitForTimeout(150);
