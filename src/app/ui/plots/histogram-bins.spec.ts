@@ -17,6 +17,11 @@ describe('symmetric bins', () => {
     const bins = symmetricBins([10, -10], 180);
     expect([bins.beyond, bins.counts[bins.counts.length - 1]]).toEqual([0, 1]);
   });
+  it('pass over places without a value', () => {
+    const bins = symmetricBins([Number.NaN, -3, 3], 180);
+    expect(bins.counts.reduce((sum, count) => sum + count, 0)).toBe(2);
+    expect(bins.from).toBeCloseTo(-3, 6);
+  });
   it('stand for a design without any error', () => {
     const bins = symmetricBins([0, 0, 0], 180);
     expect(bins.counts[binOf(bins, 0)]).toBe(3);

@@ -12,7 +12,8 @@ export interface HistogramBins {
 /** Bins of a round width, symmetric about zero, that reach the largest magnitude or the limit, whichever is nearer. */
 export function symmetricBins(values: ArrayLike<number>, limit: number, aboutBins = 30): HistogramBins {
   let largest = 0;
-  for (let i = 0; i < values.length; i++) largest = Math.max(largest, Math.abs(values[i]));
+  // Comparisons pass over NaN, which stands where there is no value.
+  for (let i = 0; i < values.length; i++) if (Math.abs(values[i]) > largest) largest = Math.abs(values[i]);
   const reach = Math.min(limit, largest > 0 ? largest : 1);
   const width = niceStep(2 * reach, aboutBins);
   const half = Math.max(1, Math.ceil(reach / width - 1e-9));

@@ -9,7 +9,7 @@ function recordingContext(): { context: CanvasRenderingContext2D; calls: string[
   const calls: string[] = [];
   const keep = (name: string) => (...args: unknown[]) => calls.push([name, ...args.filter((arg) => typeof arg === 'number').map((arg) => Math.round((arg as number) * 100) / 100)].join(' '));
   const context = {
-    clearRect: keep('clear'), drawImage: keep('image'), fillRect: keep('fill'), strokeRect: keep('stroke'), putImageData: keep('put'),
+    clearRect: keep('clear'), beginPath: keep('begin'), moveTo: keep('move'), lineTo: keep('line'), stroke: keep('hatch'), drawImage: keep('image'), fillRect: keep('fill'), strokeRect: keep('stroke'), putImageData: keep('put'),
     createImageData: (width: number, height: number) => ({ data: new Uint8ClampedArray(4 * width * height) }),
   };
   return { context: context as unknown as CanvasRenderingContext2D, calls };
@@ -37,9 +37,9 @@ describe('paintPanelMap', () => {
     return new TileSheets(document);
   };
   afterEach(() => jest.restoreAllMocks());
-  const painted = (sidePx: number, kept = sheets()): string[] => {
+  const painted = (sidePx: number, kept = sheets(), shown = picture): string[] => {
     const { context, calls } = recordingContext();
-    paintPanelMap(context, viewOf(index.extent, { width: sidePx, height: sidePx }, null), picture, { inks, sheets: kept, devicePxRatio: 1 });
+    paintPanelMap(context, viewOf(index.extent, { width: sidePx, height: sidePx }, null), shown, { inks, sheets: kept, devicePxRatio: 1 });
     return calls;
   };
 
@@ -51,6 +51,10 @@ describe('paintPanelMap', () => {
     expect(calls.filter((call) => call === 'fill 3 13 4 4')).toHaveLength(1);
     expect(calls).toContain('stroke 0.5 0.5 9 9');
     expect(painted(18).filter((call) => /^fill .* 3\.6 3\.6$/.test(call))).toEqual([]);
+  });
+  it('hatches the bare cells that the layer marks, and no other', () => {
+    const hatched = (isHatched: (cell: number) => boolean): number => painted(20, sheets(), { ...picture, layer: { ...picture.layer, isHatched } }).filter((call) => call === 'hatch').length;
+    expect([hatched(() => true), hatched((cell) => cell !== 2), hatched((cell) => cell === 2)]).toEqual([1, 0, 1]);
   });
   it('makes the tiles of a layer once, however often the map is moved', () => {
     const kept = sheets();

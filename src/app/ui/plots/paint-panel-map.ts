@@ -15,6 +15,8 @@ export interface MapLayer {
   readonly digits: number;
   readonly values: ArrayLike<number>;
   readonly scale: ColourScale;
+  /** Bare places of another meaning than the others, drawn hatched. */
+  readonly isHatched?: (cell: number) => boolean;
 }
 
 /** What stands on a map: where its cells are, their colours, their copper. */
@@ -102,6 +104,7 @@ function paintCells(context: CanvasRenderingContext2D, view: MapView, picture: M
     const yPx = screenY(view, places.yMm[cell]);
     const bare = Number.isNaN(value);
     if (bare) outlineBareCell(context, { view, places, xPx, yPx }, how.inks);
+    if (bare && layer.isHatched?.(cell)) hatchCell(context, { view, places, xPx, yPx }, how.inks);
     if (!copperOf) continue;
     const colour = colourIndex(layer.scale, value);
     const ground = bare ? how.inks.substrate : cssColour(map, colour);
@@ -110,7 +113,28 @@ function paintCells(context: CanvasRenderingContext2D, view: MapView, picture: M
   }
 }
 
-function outlineBareCell(context: CanvasRenderingContext2D, at: { readonly view: MapView; readonly places: MapPlaces; readonly xPx: number; readonly yPx: number }, inks: MapInks): void {
+interface CellAt {
+  readonly view: MapView;
+  readonly places: MapPlaces;
+  readonly xPx: number;
+  readonly yPx: number;
+}
+
+/** Three strokes from lower left to upper right, within the outline. */
+function hatchCell(context: CanvasRenderingContext2D, { view, places, xPx, yPx }: CellAt, inks: MapInks): void {
+  const [w, h] = [places.pitchXMm * view.pxPerMm - 1, places.pitchYMm * view.pxPerMm - 1];
+  const [left, top] = [xPx - w / 2, yPx - h / 2];
+  context.strokeStyle = inks.rule;
+  context.lineWidth = 1;
+  context.beginPath();
+  for (const [x1, y1, x2, y2] of [[0, 0.5, 0.5, 0], [0, 1, 1, 0], [0.5, 1, 1, 0.5]]) {
+    context.moveTo(left + x1 * w, top + y1 * h);
+    context.lineTo(left + x2 * w, top + y2 * h);
+  }
+  context.stroke();
+}
+
+function outlineBareCell(context: CanvasRenderingContext2D, at: CellAt, inks: MapInks): void {
   const [w, h] = [at.places.pitchXMm * at.view.pxPerMm, at.places.pitchYMm * at.view.pxPerMm];
   context.fillStyle = inks.substrate;
   context.fillRect(at.xPx - w / 2, at.yPx - h / 2, w, h);

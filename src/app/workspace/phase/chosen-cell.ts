@@ -5,6 +5,7 @@ import { numberText, signedNumberText } from '../../ui/plots/plot-text';
 import type { LivePrediction } from '../live-prediction-data';
 import type { EditionInUse } from '../workspace-state';
 import { cellName, editionOf } from './cell-name';
+import { emptyPlaces } from './empty-places';
 
 /** One line of the list of facts. `tone` is for what is yours (copper) or wants attention (warn). */
 export interface CellFact {
@@ -45,12 +46,20 @@ export function cellFacts(source: CellFactSource): readonly CellFact[] {
     plain('x, y', `${numberText(cells.xMm[cell], 2)}, ${numberText(cells.yMm[cell], 2)} mm`),
     plain('Target phase', `${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°`, wrapDeg(cells.targetPhaseDeg[cell])),
     plain('Cell', cellName(of, source.edition, cells.cellIndex[cell])),
-    plain('Cell phase', `${numberText(wrapDeg(cells.phaseDeg[cell]), 1)}°`, wrapDeg(cells.phaseDeg[cell])),
-    { ...plain('Phase error', `${signedNumberText(cells.errorDeg[cell], 2)}°`, cells.errorDeg[cell]), tone: 'copper' },
-    plain('Next best', nextBestText(source)),
-    plain('Response', `${numberText(cells.responseDb[cell], 2)} dB`, cells.responseDb[cell]),
+    ...(emptyPlaces(prediction)(cell) ? [plain('Cell phase', '–'), plain('Phase error', 'none: no cell may stand here'), plain('Response', 'none')] : responseFacts(source)),
     plain('Illumination', `${numberText(illuminationDb(cells.amplitude[cell], brightest), 2)} dB`, illuminationDb(cells.amplitude[cell], brightest)),
     incidenceFact(source),
+  ];
+}
+
+function responseFacts(source: CellFactSource): readonly CellFact[] {
+  const { cells } = source.prediction;
+  const [phaseDeg, errorDeg, responseDb] = [wrapDeg(cells.phaseDeg[source.cell]), cells.errorDeg[source.cell], cells.responseDb[source.cell]];
+  return [
+    { name: 'Cell phase', value: `${numberText(phaseDeg, 1)}°`, tone: 'plain', full: String(phaseDeg) },
+    { name: 'Phase error', value: `${signedNumberText(errorDeg, 2)}°`, tone: 'copper', full: String(errorDeg) },
+    { name: 'Next best', value: nextBestText(source), tone: 'plain' },
+    { name: 'Response', value: `${numberText(responseDb, 2)} dB`, tone: 'plain', full: String(responseDb) },
   ];
 }
 
@@ -80,5 +89,6 @@ function incidenceFact({ prediction, edition, cell }: CellFactSource): CellFact 
 /** The short form for the line under the map. */
 export function cellSentence(prediction: LivePrediction, cell: number): string {
   const { cells } = prediction;
+  if (emptyPlaces(prediction)(cell)) return `${cellPlaceText(prediction, cell)}: target ${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°, no cell may stand here`;
   return `${cellPlaceText(prediction, cell)}: target ${numberText(wrapDeg(cells.targetPhaseDeg[cell]), 1)}°, error ${signedNumberText(cells.errorDeg[cell], 2)}°`;
 }

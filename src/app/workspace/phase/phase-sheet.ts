@@ -29,6 +29,7 @@ import type { DetailSource } from './cell-detail-drawing';
 import { cellName, editionOf } from './cell-name';
 import { cellFacts, cellPlaceText, cellSentence } from './chosen-cell';
 import { copperLookup } from './copper-lookup';
+import { countEmpty } from './empty-places';
 import { libraryCurve } from './library-curve';
 import { cellOfPlace, readPhaseLink, writePhaseLink } from './phase-link';
 import { phaseNotes, phaseSubtitle } from './phase-notes';
@@ -79,6 +80,13 @@ export class PhaseSheet {
   protected readonly coloured = computed(() => {
     const prediction = this.prediction();
     return prediction ? phaseLayer(this.link().view, { prediction, parent: this.state.parentPrediction(), parentNumber: this.parentNumber(), edition: this.edition() }) : null;
+  });
+  /** Said beside the colours where places without a cell are hatched. */
+  protected readonly emptyText = computed(() => {
+    const [prediction, coloured] = [this.prediction(), this.coloured()];
+    if (!prediction || coloured?.kind !== 'layer' || !coloured.layer.isHatched) return null;
+    const count = countEmpty(prediction);
+    return `${numberText(count, 0)} of ${numberText(prediction.cells.xMm.length, 0)} positions carry no cell: none of the edition may stand there`;
   });
   private readonly copper = computed(() => {
     const prediction = this.prediction();
@@ -211,7 +219,8 @@ export class PhaseSheet {
   /** From a bin of the histogram to the brightest cell in it. */
   protected chooseByError(range: { readonly from: number; readonly to: number }): void {
     const prediction = this.prediction();
-    if (prediction) this.choose(brightestCell(prediction, (cell) => prediction.cells.errorDeg[cell] >= range.from && prediction.cells.errorDeg[cell] < range.to));
+    const values = this.errors()?.values;
+    if (prediction && values) this.choose(brightestCell(prediction, (cell) => values[cell] >= range.from && values[cell] < range.to));
   }
 
   /** From a sample of the library curve to the brightest cell that uses it. */

@@ -5,6 +5,7 @@ import { amplitudeLayer, incidenceLayer } from '../illumination/illumination-lay
 import type { LivePrediction } from '../live-prediction-data';
 import type { EditionInUse } from '../workspace-state';
 import { editionOf } from './cell-name';
+import { countEmpty, emptyPlaces, withoutEmpty } from './empty-places';
 
 export const PHASE_VIEWS = [
   { id: 'target', label: 'Target phase' },
@@ -32,7 +33,10 @@ export interface PhaseViewSource {
 export type PhaseLayer = { readonly kind: 'layer'; readonly layer: MapLayer; readonly note: string } | { readonly kind: 'none'; readonly reason: string };
 
 export function phaseLayer(view: PhaseView, source: PhaseViewSource): PhaseLayer {
-  return LAYERS[view](source);
+  const found = LAYERS[view](source);
+  const isBareWhereEmpty = view === 'error' || view === 'cell' || view === 'changed';
+  if (found.kind === 'none' || !isBareWhereEmpty || countEmpty(source.prediction) === 0) return found;
+  return { ...found, layer: { ...found.layer, isHatched: emptyPlaces(source.prediction) } };
 }
 
 const LAYERS: Readonly<Record<PhaseView, (source: PhaseViewSource) => PhaseLayer>> = {
@@ -49,11 +53,13 @@ function drawn(layer: MapLayer, note = ''): PhaseLayer {
 }
 
 /** The error on a scale centred on zero that just holds the largest one. */
-export function errorLayer({ cells }: LivePrediction): MapLayer {
+export function errorLayer(prediction: LivePrediction): MapLayer {
+  // A place without a cell achieves no phase that could be in error.
+  const values = withoutEmpty(prediction, prediction.cells.errorDeg);
   let largest = 0;
-  for (let i = 0; i < cells.errorDeg.length; i++) largest = Math.max(largest, Math.abs(cells.errorDeg[i]));
+  for (let i = 0; i < values.length; i++) if (Math.abs(values[i]) > largest) largest = Math.abs(values[i]);
   const limit = roundLimit(largest, 180);
-  return { title: 'Phase error', unit: '°', digits: 2, values: cells.errorDeg, scale: { map: 'diverging', from: -limit, to: limit } };
+  return { title: 'Phase error', unit: '°', digits: 2, values, scale: { map: 'diverging', from: -limit, to: limit } };
 }
 
 /** The next round number, at least one and at most the whole. */
@@ -96,7 +102,9 @@ function changedLayer({ prediction, parent, parentNumber }: PhaseViewSource): Ph
   const [now, before] = [prediction.cells, parent.cells];
   if (!sameLattice(now, before)) return { kind: 'none', reason: `Revision ${parentNumber} stands on another lattice or outline, so cells cannot be matched one to one.` };
   // Single precision keeps phases to about 2e-5 degrees.
+  const [isEmpty, wasEmpty] = [emptyPlaces(prediction), emptyPlaces(parent)];
   const values = Float64Array.from(now.phaseDeg, (phase, i) => {
+    if (isEmpty(i) || wasEmpty(i)) return Number.NaN;
     const change = wrapDeg(phase - before.phaseDeg[i]);
     return Math.abs(change) < 1e-3 ? Number.NaN : change;
   });

@@ -1,4 +1,5 @@
 import type { LivePrediction } from '../live-prediction-data';
+import { emptyPlaces } from './empty-places';
 
 /** Of the phase error over selected cells, each counted once. */
 export interface SelectionStatistics {
@@ -10,8 +11,11 @@ export interface SelectionStatistics {
   readonly largestAt: number;
 }
 
-/** Null of an empty selection: no cells have no mean. */
-export function selectionStatistics({ cells }: LivePrediction, selected: ArrayLike<number>): SelectionStatistics | null {
+/** Null where no cell is selected: no cells have no mean. Places without a cell do not count. */
+export function selectionStatistics(prediction: LivePrediction, places: ArrayLike<number>): SelectionStatistics | null {
+  const { cells } = prediction;
+  const isEmpty = emptyPlaces(prediction);
+  const selected = Array.from(places).filter((place) => !isEmpty(place));
   if (selected.length === 0) return null;
   let [sum, squares, largestAt] = [0, 0, selected[0]];
   for (let i = 0; i < selected.length; i++) {

@@ -1,13 +1,15 @@
 import type { LivePrediction } from '../live-prediction-data';
+import { emptyPlaces } from './empty-places';
 
 /** The cells of largest phase error, largest first; of equal errors the brighter cell first. */
-export function worstCells({ cells }: LivePrediction, count: number): readonly number[] {
-  const { errorDeg, amplitude } = cells;
+export function worstCells(prediction: LivePrediction, count: number): readonly number[] {
+  const { errorDeg, amplitude } = prediction.cells;
+  const isEmpty = emptyPlaces(prediction);
   const worse = (one: number, other: number): number => Math.abs(errorDeg[other]) - Math.abs(errorDeg[one]) || amplitude[other] - amplitude[one];
   // One pass that keeps a short sorted list: a panel may have a million cells.
   const worst: number[] = [];
   for (let i = 0; i < errorDeg.length; i++) {
-    if (worst.length === count && worse(worst[count - 1], i) <= 0) continue;
+    if (isEmpty(i) || (worst.length === count && worse(worst[count - 1], i) <= 0)) continue;
     let at = worst.length;
     while (at > 0 && worse(worst[at - 1], i) > 0) at--;
     worst.splice(at, 0, i);
