@@ -50,7 +50,7 @@ describe('keepOutShare', () => {
         expect(most).toBeGreaterThanOrEqual(fewer - 1e-6);
         expect(most).toBeLessThanOrEqual(Math.min(hit(outline), keepOuts.reduce((sum, keepOut) => sum + hit(keepOut), 0)) + 1e-6);
       }),
-      { numRuns: 30 },
+      { numRuns: 15 },
     );
   });
 });

@@ -6,7 +6,7 @@ import type { SiHorn, SiOutline, SiPanel } from './si-design';
 /** Share of the horn's power below which a part is not halved further: 10^-8 is 4e-8 dB of a well-lit panel. */
 const ENOUGH = 1e-8;
 const MOST_HALVINGS = 12;
-const NODES = 10;
+const NODES = 6;
 /** Parts of one run of a row. */
 const MOST_PARTS = 8;
 
@@ -29,10 +29,14 @@ export function keepOutShare(horn: SiHorn, { outline, keepOuts }: SiPanel): numb
   };
   // The footprint of cos^2q seen from height h falls off over about h / sqrt(q + 1).
   const partM = Math.abs(horn.position.zM) / Math.sqrt(Math.max(horn.exponentE, horn.exponentH) + 1);
-  const rowShare = (yM: number): number => runsOf(outline, keepOuts, yM).reduce((sum, run) => sum + alongRun(run, yM, { density, partM }), 0);
   const breaks = rowBreaks([outline, ...keepOuts]);
+  const spans = keepOuts.map((keepOut) => ({ keepOut, ...outlineBounds(keepOut) }));
   let share = 0;
-  for (let i = 0; i + 1 < breaks.length; i++) share += overRows([breaks[i], breaks[i + 1]], rowShare);
+  for (let i = 0; i + 1 < breaks.length; i++) {
+    const met = spans.filter(({ bottomM, topM }) => bottomM < breaks[i + 1] && topM > breaks[i]).map(({ keepOut }) => keepOut);
+    if (met.length === 0) continue;
+    share += overRows([breaks[i], breaks[i + 1]], (yM) => runsOf(outline, met, yM).reduce((sum, run) => sum + alongRun(run, yM, { density, partM }), 0));
+  }
   return Math.min(1, Math.max(0, share));
 }
 
