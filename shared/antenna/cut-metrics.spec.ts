@@ -32,6 +32,14 @@ describe('the figures of a cut', () => {
     expect(sidelobeDb).toBeCloseTo(3.01, 1);
   });
 
+  it('finds the higher of two tops though its samples lie lower', () => {
+    // Two equal lobes but for 0.01 dB; the higher one falls between two samples, the lower one on a sample.
+    const step = Math.PI / 200;
+    const bump = (a: number, at: number, height: number): number => height * Math.exp(-(((a - at) / (2 * step)) ** 2));
+    const power = (a: number): number => bump(a, 0, 1) + bump(a, -40 * step, 0.1) + bump(a, 40.5 * step, 0.1 * 10 ** 0.001);
+    expect(Number(cutMetrics({ power, ...arc, samples: 200 }).sidelobeDb)).toBeCloseTo(-9.99, 4);
+  });
+
   it('says so when half power is not reached or nothing lies outside', () => {
     const broad = cutMetrics({ power: () => 1, ...arc, samples: 200 });
     expect(broad.halfPowerBeamwidthDeg).toEqual({ kind: 'not-reached', reason: expect.any(String) });

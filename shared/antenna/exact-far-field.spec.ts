@@ -75,3 +75,18 @@ describe('the derivatives of the far field', () => {
     for (const direction of [[0.1, -0.2], [0.5, 0.5]]) checkSlopes(far, direction, 2e-2);
   });
 });
+
+describe('a line of constant u', () => {
+  it.each([['summed exactly', 9], ['interpolated', 40]])('holds the same field as single directions, %s', (_way, columnCount) => {
+    const field = exampleField({ columnCount, rowCount: 25, stagger: 'even' });
+    const far = farFieldOf(field, apertureSpectrum(field), wavenumber);
+    const line = far.lineAt(0.3);
+    for (const v of [-0.6, 0, 0.21]) {
+      const along = { ...line(v) };
+      const { re, im } = { ...far.fieldAt(0.3, v) };
+      expect(Math.hypot(along.re - re, along.im - im)).toBeLessThan(1e-9 * Math.hypot(re, im));
+      expect(re * re + im * im).toBeCloseTo(far.powerAt(0.3, v), 6);
+      far.lineAt(0.3);
+    }
+  });
+});
