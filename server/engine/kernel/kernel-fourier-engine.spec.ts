@@ -116,6 +116,11 @@ describe('the kernel against the same in TypeScript', () => {
     expect(difference(got.im, wanted.im)).toBeLessThan(2e-15 * Math.log2(samples[0] * samples[1] + 2) * 4);
   });
 
+  it('refuses more cells than samples, and sizes that are no powers of two', () => {
+    expect(() => kernel.spectrum(query([9, 4], [8, 4]))).toThrow('4 by 9 cells do not fit into 4 by 8 samples');
+    expect(() => kernel.spectrum(query([9, 4], [12, 4]))).toThrow('a power of two from 2 on as its size; got 12');
+  });
+
   it('leaves nothing behind: a spectrum is the same after any other', () => {
     const asked = query([30, 20], [64, 64]);
     const before = kernel.spectrum(asked);

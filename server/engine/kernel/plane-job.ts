@@ -45,6 +45,10 @@ export class PlaneJob {
     },
   ) {
     const { lineCells, lineCount, lineSize, crossSize, precision } = shape;
+    // The kernel checks nothing and would write over whatever stands beside.
+    if (lineCells > lineSize || lineCount > crossSize) {
+      throw new RangeError(`${lineCells} by ${lineCount} cells do not fit into ${lineSize} by ${crossSize} samples`);
+    }
     const bytes = precision / 8;
     this.block = Math.min(crossSize <= NARROW_UP_TO ? 32 : 64, Math.max(VECTOR_BYTES, lineSize * bytes));
     this.place = instance.take(4 * FIELDS.length);
