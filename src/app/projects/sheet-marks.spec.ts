@@ -19,7 +19,7 @@ describe('marks of the sheets of a panel', () => {
       { pointer: '/illumination/position', severity: 'warn' as const, message: 'the horn stands in the beam' },
     ];
     const [, panel, illumination, cells] = sheetMarks(panelOverviewOf({ summary: summary && { ...summary, remarks } }));
-    expect(panel).toEqual({ id: 'panel', title: 'Panel', state: 'falls-short', detail: 'a lobe that is not wanted' });
+    expect(panel).toEqual({ id: 'panel', title: 'Panel', state: 'objection', detail: 'a lobe that is not wanted' });
     expect(illumination).toMatchObject({ state: 'in-work', detail: 'the horn stands in the beam' });
     expect(cells).toMatchObject({ state: 'in-work', detail: 'Ideal cells cannot be etched' });
   });

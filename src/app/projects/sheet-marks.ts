@@ -52,7 +52,7 @@ function fieldJudgement(panel: PanelOverview, id: string, roots: readonly string
 function worstRemark({ remarks = [] }: Summary, roots: readonly string[]): Judgement | null {
   const own = remarks.filter(({ pointer }) => roots.some((root) => isUnder(pointer.replace(/^#/, ''), root)));
   const [worst] = [...own.filter(({ severity }) => severity === 'serious'), ...own];
-  return worst === undefined ? null : { state: worst.severity === 'serious' ? 'falls-short' : 'in-work', detail: worst.message };
+  return worst === undefined ? null : { state: worst.severity === 'serious' ? 'objection' : 'in-work', detail: worst.message };
 }
 
 const isUnder = (pointer: string, root: string): boolean => pointer === root || pointer.startsWith(`${root}/`);

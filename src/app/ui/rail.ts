@@ -25,5 +25,5 @@ export class Rail {
   readonly project = input.required<string>();
   readonly panel = input.required<string>();
   readonly items = input.required<readonly RailItem[]>();
-  protected readonly legend: readonly MarkState[] = ['meets', 'falls-short', 'in-work', 'stale', 'empty'];
+  protected readonly legend: readonly MarkState[] = ['meets', 'falls-short', 'objection', 'in-work', 'stale', 'empty'];
 }

@@ -2,7 +2,7 @@ import { TestBed } from '@angular/core/testing';
 import { StateMark, markWord } from './state-mark';
 import type { MarkState } from './state-mark';
 
-const STATES: readonly MarkState[] = ['empty', 'in-work', 'meets', 'falls-short', 'stale', 'not-evaluated'];
+const STATES: readonly MarkState[] = ['empty', 'in-work', 'meets', 'falls-short', 'objection', 'stale', 'not-evaluated'];
 
 async function shown(state: MarkState, inputs: { showWord?: boolean; detail?: string } = {}): Promise<HTMLElement> {
   const fixture = TestBed.createComponent(StateMark);

@@ -1,12 +1,13 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
 
-export type MarkState = 'empty' | 'in-work' | 'meets' | 'falls-short' | 'stale' | 'not-evaluated';
+export type MarkState = 'empty' | 'in-work' | 'meets' | 'falls-short' | 'objection' | 'stale' | 'not-evaluated';
 
 const WORDS: Readonly<Record<MarkState, string>> = {
   empty: 'empty',
   'in-work': 'in work',
   meets: 'meets',
   'falls-short': 'falls short',
+  objection: 'serious remark',
   stale: 'stale',
   'not-evaluated': 'not evaluated',
 };

@@ -47,8 +47,8 @@ describe('sheetStates', () => {
     expect(state('requirement', { ...facts, predicted: { figures: SAMPLE_FIGURES, warnings: [], verdicts: [] } })).toMatchObject({ word: 'in-work', reason: 'No limit set' });
   });
 
-  it('takes a serious remark for a shortfall and a mild one for work to do, on the sheet of its field', () => {
-    expect(state('panel', warned('#/panel/lattice/periodXMm', 'serious'))).toMatchObject({ word: 'falls-short', reason: 'Period 8.0 mm exceeds 6.2 mm' });
+  it('takes a serious remark for an objection, which is no verdict, and a mild one for work to do, on the sheet of its field', () => {
+    expect(state('panel', warned('#/panel/lattice/periodXMm', 'serious'))).toMatchObject({ word: 'objection', reason: 'Period 8.0 mm exceeds 6.2 mm' });
     expect(state('panel', warned('/panel/lattice/periodXMm', 'warn')).word).toBe('in-work');
     expect(state('panel', warned('/panel/lattice/periodXMm', 'note')).word).toBe('meets');
     expect(state('illumination', warned('/panel/lattice/periodXMm', 'serious')).word).toBe('meets');
@@ -74,7 +74,7 @@ describe('sheetStates', () => {
 
   it('asks for evanescent cells on the phase sheet', () => {
     const evanescent: PanelFacts = { ...facts, predicted: { figures: { ...SAMPLE_FIGURES, evanescentCells: 3 }, verdicts: SAMPLE_VERDICTS, warnings: [] } };
-    expect(state('phase', evanescent)).toMatchObject({ word: 'falls-short', reason: '3 of 1600 cells ask for a wave that does not travel' });
+    expect(state('phase', evanescent)).toMatchObject({ word: 'objection', reason: '3 of 1600 cells ask for a wave that does not travel' });
   });
 
   it('follows the draft and its revisions', () => {

@@ -4,7 +4,7 @@ import type { Figures, Verdict, Warning } from '../../../shared/model/figures';
 import { SHEETS } from './sheets';
 import type { SheetId } from './sheets';
 
-export type SheetStateWord = 'empty' | 'in-work' | 'meets' | 'falls-short' | 'stale';
+export type SheetStateWord = 'empty' | 'in-work' | 'meets' | 'falls-short' | 'objection' | 'stale';
 
 export interface SheetState {
   readonly id: SheetId;
@@ -97,7 +97,8 @@ function remarkOf(facts: PanelFacts, roots: readonly string[]): Judgement {
   if (!facts.predicted) return waiting(facts);
   const remarks = facts.predicted.warnings.filter((warning) => roots.some((root) => pointerIsUnder(warning.pointer, root)));
   const serious = remarks.find((warning) => warning.severity === 'serious');
-  if (serious) return { word: 'falls-short', reason: serious.message };
+  // Not a verdict: no line of the requirement is measured by it.
+  if (serious) return { word: 'objection', reason: serious.message };
   const mild = remarks.find((warning) => warning.severity === 'warn');
   if (mild) return { word: 'in-work', reason: mild.message };
   return { word: 'meets', reason: 'No objection' };
@@ -117,7 +118,7 @@ function phaseJudgement(facts: PanelFacts): Judgement {
   if (stale) return stale;
   if (!facts.predicted) return waiting(facts);
   const { evanescentCells, cellCount } = facts.predicted.figures;
-  if (evanescentCells > 0) return { word: 'falls-short', reason: `${evanescentCells} of ${cellCount} cells ask for a wave that does not travel` };
+  if (evanescentCells > 0) return { word: 'objection', reason: `${evanescentCells} of ${cellCount} cells ask for a wave that does not travel` };
   return remarkOf(facts, ['/synthesis', '/requirement/beams']);
 }
 
