@@ -77,7 +77,7 @@ describe('programs of the built server', () => {
   it('migrate an empty database, and find nothing to do the second time', async () => {
     expect(await program('database/run-migrations.js')).toEqual({ code: 0, out: '', errors: '' });
     expect(await program('database/run-migrations.js')).toEqual({ code: 0, out: '', errors: '' });
-  });
+  }, 30_000);
 
   it('fill demo mode once: what is there stays as it is', async () => {
     expect((await program('seed.js')).code).toBe(0);
