@@ -19,6 +19,8 @@ export interface CellResponses {
 export interface CellAssignment extends CellResponses {
   /** Index into the edition's cells, the inline table or the ideal levels; -1 for a continuous ideal phase or where none fits. */
   readonly cellIndex: Int32Array;
+  /** What a fit over the band has left at each of its frequencies, where cells were chosen so. */
+  readonly band?: readonly { readonly frequencyHz: number; readonly errorRmsRad: number }[];
 }
 
 /** What the search for a reference phase needs: target phases and what each cell's unit response adds at the wanted beam. */
@@ -46,6 +48,8 @@ export interface StockSite {
   readonly designFrequencyHz: number;
   readonly si: SiDesign;
   readonly edition?: PreparedEdition;
+  /** Target phases at another frequency, reference phase not added; for rules that look at more than one. */
+  targetAt?(frequencyHz: number): Float64Array;
 }
 
 type StockMaker<Kind extends Cells['kind']> = (cells: Extract<Cells, { kind: Kind }>, site: StockSite) => CellStock;

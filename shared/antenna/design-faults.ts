@@ -18,7 +18,14 @@ export function checkDesign(design: DesignDocument): void {
 /** Faults that no single field shows, of a document whose fields are each valid. */
 export function designFaults(design: DesignDocument): DesignFault[] {
   const shape = shapeFaults(design);
-  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design)];
+  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design), ...bandFitFaults(design)];
+}
+
+/** A band fit needs more than the design frequency, and reckons with one response per cell. */
+function bandFitFaults({ cells, requirement, prediction }: DesignDocument): DesignFault[] {
+  if (cells.kind !== 'edition' || cells.rule !== 'band-fit') return [];
+  if (prediction.model === 'vector') return [{ pointer: '#/cells/rule', detail: 'a band fit chooses by the scalar model; choose the scalar model or another rule' }];
+  return cells.fitFrequenciesGHz || requirement.bandGHz ? [] : [{ pointer: '#/cells/rule', detail: 'a band fit needs the band of the requirement, or frequencies of its own' }];
 }
 
 function requirementFaults({ requirement }: DesignDocument): DesignFault[] {

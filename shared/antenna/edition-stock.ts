@@ -1,4 +1,6 @@
 import type { Cells } from '../model/design-document';
+import { bandFit, bandReferenceRad, type BandFitSite } from './assignment/band-fit';
+import { levelSubset } from './assignment/level-subset';
 import { candidateBins } from './candidate-bins';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
@@ -19,6 +21,8 @@ type EditionCells = Extract<Cells, { kind: 'edition' }>;
 export interface EditionSite extends StockSite {
   readonly edition: PreparedEdition;
   readonly rule: CellRule;
+  /** Frequencies of its own for a band fit; the edges of the band where there are none. */
+  readonly fitFrequenciesHz: readonly number[];
   /** Indices of cells that may be used at the design frequency, rising; regions by angle come on top. */
   readonly allowed: Int32Array;
   readonly regions: RegionFilter;
@@ -30,9 +34,9 @@ export interface EditionSite extends StockSite {
 export function editionStock(cells: EditionCells, site: StockSite): CellStock {
   const own = editionSite(cells, site);
   return {
-    assign: (targetRad) => assignCells(own, targetRad),
+    assign: (targetRad) => (own.rule === 'band-fit' ? assignOverBand(own, targetRad) : assignCells(own, targetRad)),
     respond: (assignment, frequencyHz) => (frequencyHz === own.designFrequencyHz ? assignment : respondAt(own, assignment, frequencyHz)),
-    searchReferenceRad: (query) => searchReferenceRad(own, query),
+    searchReferenceRad: (query) => (own.rule === 'band-fit' ? bandReferenceRad(bandSite(own, query.targetRad)) : searchReferenceRad(own, query)),
     warnings: (assignment, frequencyHz) => [...editionWarnings(own, assignment, frequencyHz), ...crossResponseWarning(own, assignment, frequencyHz)],
   };
 }
@@ -52,7 +56,9 @@ export function editionSite(cells: EditionCells, site: StockSite): EditionSite {
     throw new InvalidDesign([{ pointer: '#/cells/excludedCells', detail }]);
   }
   const regions = regionFilter(edition.edition, edition.azimuths, site.designFrequencyHz);
-  return { ...site, edition, rule: cells.rule, allowed, regions, permitted: permittedNodes(edition, regions, at) };
+  const { polarisation } = site.si.illumination;
+  const chosen = cells.levels === undefined ? allowed : levelSubset({ edition, at, polarisation, allowed, levels: cells.levels });
+  return { ...site, edition, rule: cells.rule, fitFrequenciesHz: (cells.fitFrequenciesGHz ?? []).map((ghz) => ghz * 1e9), allowed: chosen, regions, permitted: permittedNodes(edition, regions, at) };
 }
 
 function operationFaults({ edition: { description } }: PreparedEdition, operation: SiDesign['operation']): DesignFault[] {
@@ -154,6 +160,31 @@ function respondAt(site: EditionSite, assignment: CellAssignment, frequencyHz: n
     magnitude[n] = response.magnitude;
   }
   return { phaseRad, magnitude };
+}
+
+/** The band with the design frequency first, under targets that hold the reference phase or, for its search, do not. */
+function bandSite(site: EditionSite, targetRad: Float64Array): BandFitSite {
+  const { edition, light, si, designFrequencyHz, targetAt } = site;
+  if (!targetAt) throw new TypeError('a band fit needs the targets at other frequencies');
+  const own = site.fitFrequenciesHz.length > 0 ? site.fitFrequenciesHz : (si.bandHz ?? []);
+  const others = own.filter((hz) => Math.abs(hz - designFrequencyHz) > 1);
+  const band = [{ frequencyHz: designFrequencyHz, targetRad }, ...others.map((frequencyHz) => ({ frequencyHz, targetRad: targetAt(frequencyHz) }))];
+  return { edition, polarisation: si.illumination.polarisation, light, allowedAt: allowedLister(site), band };
+}
+
+function assignOverBand(site: EditionSite, targetRad: Float64Array): CellAssignment {
+  const over = bandSite(site, targetRad);
+  const { cellIndex, errorRmsRad } = bandFit(over, 0);
+  const weigh = incidenceWeigher(site.edition, over.polarisation);
+  const made = { ...emptyAssignment(targetRad.length), cellIndex, band: over.band.map(({ frequencyHz }, f) => ({ frequencyHz, errorRmsRad: errorRmsRad[f] })) };
+  const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
+  for (let n = 0; n < cellIndex.length; n++) {
+    if (cellIndex[n] < 0) continue;
+    coPolarResponse(site.permitted.at, cellIndex[n], weigh(site.light.incidenceRad[n], site.light.azimuthRad[n]), response);
+    made.magnitude[n] = response.magnitude;
+    made.phaseRad[n] = response.phaseRad;
+  }
+  return made;
 }
 
 function searchReferenceRad(site: EditionSite, query: ReferenceQuery): number {

@@ -26,6 +26,8 @@ export interface PlacedDesign {
   /** At the design frequency, reference phase included. */
   readonly targetRad: Float64Array;
   readonly assignment: CellAssignment;
+  /** The edition that the cells are of, where they are of one. */
+  readonly edition?: PreparedEdition;
   /** 1 for the cells in the shadow of horn and mount, where those are described. */
   readonly shadow?: Uint8Array;
   /** Present where the vector model is in use; responses are then what the cells send into the beam. */
@@ -43,7 +45,8 @@ export function placeCells(design: DesignDocument, edition?: PreparedEdition): P
   const light = arrival ? { ...scalarLight, amplitude: arrival.amplitude } : scalarLight;
   const law = apertureLaw(si, { lattice, light, wavenumber: designWavenumber });
   const bareTargetRad = targetPhasesRad(law, lattice, light, designWavenumber);
-  const site = { light, designFrequencyHz: si.designFrequencyHz, si, edition };
+  const targetAt = (hz: number): Float64Array => targetPhasesRad(law, lattice, light, wavenumberRadPerM(hz));
+  const site = { light, designFrequencyHz: si.designFrequencyHz, si, edition, targetAt };
   const shadow = shadowOf(si, lattice);
   const vector = arrival && { ...arrival, stock: openVectorStock(vectorStock(design.cells, { ...site, ...arrival }), shadow) };
   const stock = vector?.stock ?? cellStock(design.cells, site);
@@ -52,7 +55,7 @@ export function placeCells(design: DesignDocument, edition?: PreparedEdition): P
       ? stock.searchReferenceRad({ targetRad: bareTargetRad, ...beamWeights({ si, lattice, light, wavenumber: designWavenumber }) })
       : si.referencePhaseRad;
   const targetRad = bareTargetRad.map((rad) => rad + referencePhaseRad);
-  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad), ...(vector ? { vector } : {}), ...(shadow ? { shadow } : {}) };
+  return { design, si, designWavenumber, lattice, light, law, stock, referencePhaseRad, targetRad, assignment: stock.assign(targetRad), ...(vector ? { vector } : {}), ...(shadow ? { shadow } : {}), ...(edition ? { edition } : {}) };
 }
 
 interface WeightQuery {

@@ -13,7 +13,7 @@ export function newCellStates(capacity: number): CellStates {
   return { count: 0, index: new Int32Array(capacity), phaseRad: new Float64Array(capacity), magnitude: new Float64Array(capacity) };
 }
 
-export type CellRule = 'nearest-phase' | 'least-error';
+export type CellRule = 'nearest-phase' | 'least-error' | 'band-fit';
 
 /** References judged: 0, 1, ... 359 degrees. */
 const REFERENCE_COUNT = 360;

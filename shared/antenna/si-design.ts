@@ -78,6 +78,8 @@ export type SiSynthesis =
 
 export interface SiDesign {
   readonly designFrequencyHz: number;
+  /** Edges of the band, where the requirement has one. */
+  readonly bandHz?: readonly [number, number];
   readonly beams: readonly SiBeam[];
   readonly operation: 'reflect' | 'transmit';
   readonly panel: SiPanel;
@@ -105,6 +107,7 @@ export function siDesign(design: DesignDocument): SiDesign {
   const { requirement, panel, prediction, referencePhaseDeg } = design;
   return {
     designFrequencyHz: requirement.designFrequencyGHz * HZ_PER_GHZ,
+    ...(requirement.bandGHz ? { bandHz: [requirement.bandGHz[0] * HZ_PER_GHZ, requirement.bandGHz[1] * HZ_PER_GHZ] as const } : {}),
     beams: requirement.beams.map((beam) => ({
       direction: directionOf(radFromDeg(beam.thetaDeg), radFromDeg(beam.phiDeg)),
       amplitude: dbToAmplitudeRatio(beam.levelDb ?? 0),

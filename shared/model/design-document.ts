@@ -148,8 +148,14 @@ export const cells = z.discriminatedUnion('kind', [
   z.strictObject({
     kind: z.literal('edition'),
     editionId: z.uuid(),
-    rule: z.enum(['nearest-phase', 'least-error']),
+    rule: z.enum(['nearest-phase', 'least-error', 'band-fit']),
     excludedCells: z.array(z.string().min(1).max(200)).max(10_000),
+    /** Where a band fit is judged beside the design frequency; the edges of the band when absent. */
+    fitFrequenciesGHz: z.array(frequencyGHz).min(1).max(8).optional(),
+    /** Only so many cells are used: those nearest to as many phases evenly spaced round the circle. */
+    levels: z.number().int().min(2).max(64).optional(),
+    /** A change of the first parameter from a cell to its neighbour beyond this is counted. */
+    neighbourStepMm: lengthMm.optional(),
   }),
   z.strictObject({
     kind: z.literal('inline'),

@@ -88,7 +88,16 @@ export const specularFigures = z.strictObject({
   meanResponseDb: figure,
 });
 
+/** What the choice of cells leaves beyond the design frequency, and between neighbours. */
+export const assignmentFigures = z.strictObject({
+  /** Of a band fit, the design frequency first: phase errors left with the common phase of each frequency taken off. */
+  band: z.array(z.strictObject({ frequencyGHz: z.number(), phaseErrorRmsDeg: z.number() })).optional(),
+  /** Where a largest step is given. */
+  neighbours: z.strictObject({ pairs: z.number().int(), violations: z.number().int(), largestMm: z.number() }).optional(),
+});
+
 export const lawFigures = {
+  assignment: assignmentFigures.optional(),
   blockage: blockageFigures.optional(),
   specular: specularFigures.optional(),
   projections: projectionFigures.optional(),
@@ -103,5 +112,6 @@ export type ProjectionFigures = z.infer<typeof projectionFigures>;
 export type DiffuseFigures = z.infer<typeof diffuseFigures>;
 export type BlockageFigures = z.infer<typeof blockageFigures>;
 export type SpecularFigures = z.infer<typeof specularFigures>;
+export type AssignmentFigures = z.infer<typeof assignmentFigures>;
 export type GuidedWaveFigures = z.infer<typeof guidedWaveFigures>;
 export type VortexFigures = z.infer<typeof vortexFigures>;

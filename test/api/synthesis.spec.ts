@@ -4,6 +4,7 @@ import { STARTING_DESIGN } from '../../shared/model/starting-design';
 import { Api } from '../support/api';
 import type { ApiClient } from '../support/api-client';
 import { bodyOf } from '../support/panels';
+import { onEdition, publishedEdition } from '../support/published-edition';
 
 /** Predictions run in the test's own thread here. */
 jest.setTimeout(30_000);
@@ -55,6 +56,20 @@ describe('predicting target phases of every kind', () => {
     if (illumination.kind !== 'horn') throw new Error('no horn');
     const { blockage } = await figuresOf({ illumination: { ...illumination, positionMm: [0, 0, 180], blockageRadiusMm: 15 } });
     expect(blockage).toMatchObject({ cells: expect.any(Number) as number, atBeamDb: expect.any(Number) as number });
+  });
+
+  it('fits the cells of an edition over a band, with a limit of different cells, and refuses to without a band', async () => {
+    const { id } = await publishedEdition(api);
+    const base = onEdition(id);
+    if (base.cells.kind !== 'edition') throw new Error('no edition');
+    const panel = { ...base.panel, outline: { kind: 'rectangle', widthMm: 60, heightMm: 60 } } as const;
+    const cells = { ...base.cells, rule: 'band-fit' as const, levels: 2, neighbourStepMm: 0.5 };
+    const { assignment } = await figuresOf({ ...base, panel, cells, requirement: { ...base.requirement, bandGHz: [27.9, 28.1] } });
+    expect(assignment?.band?.map(({ frequencyGHz }) => frequencyGHz)).toEqual([28, 27.9, 28.1]);
+    expect(assignment?.neighbours?.pairs).toBe(2 * 12 * 11);
+    const answer = await designer.post('/api/predictions', { design: { ...base, cells } });
+    const { errors } = answer.json as { errors: { pointer: string }[] };
+    expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/cells/rule']]);
   });
 
   it('refuses a vortex of half an order by its pointer', async () => {

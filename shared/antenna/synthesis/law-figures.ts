@@ -2,6 +2,7 @@ import type { Figures } from '../../model/figures';
 import type { IlluminatedState } from '../illuminated-state';
 import type { SpecularFigures } from '../../model/law-figures';
 import { amplitudeRatioToDb } from '../../units/decibels';
+import { assignmentFigures } from '../assignment/assignment-figures';
 import { meanResponse } from '../feed/specular-part';
 import { noFigure } from '../no-figure';
 import { guidedWaveFigures } from '../guided-wave/guided-wave-figures';
@@ -10,13 +11,15 @@ import { focusFigures } from './focus-figures';
 import { vortexFigures } from './vortex-figures';
 
 /** Figures that only this target phase or this way of lighting has. */
-export function lawFigures(state: IlluminatedState): Pick<Figures, 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave' | 'blockage' | 'specular'> {
+export function lawFigures(state: IlluminatedState): Pick<Figures, 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave' | 'blockage' | 'specular' | 'assignment'> {
   if (state.pattern.radiatedPower <= 0) return {};
   const { illumination } = state.placed.si;
+  const assignment = assignmentFigures(state.placed);
   return {
     ...synthesisFigures(state),
     ...(illumination.kind === 'guided-wave' ? { guidedWave: guidedWaveFigures(state, illumination) } : { specular: specularFigures(state) }),
     ...(state.blockage ? { blockage: state.blockage } : {}),
+    ...(assignment ? { assignment } : {}),
   };
 }
 

@@ -1,7 +1,7 @@
 import type { HowComputed } from './how-computed';
 
 /** Figures of one target phase or one way of lighting, each with how it is computed. */
-export type LawFigureId = 'blockage' | 'specular' | 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
+export type LawFigureId = 'assignment' | 'blockage' | 'specular' | 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
 
 const EDGES = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction';
 
@@ -13,6 +13,14 @@ export const HOW_LAWS_COMPUTED: Readonly<Record<LawFigureId, HowComputed>> = {
     conventions: 'rₙ from cell n to the point at distance s; aₙ the field of the cells in use, losses and phase errors included; b the radiate exponent, in field',
     validity: `${EDGES}. Spherical waves from every cell: not within about a wavelength of the panel.`,
     source: 'J. W. Sherman, IRE Trans. AP 10(4), 399–408, 1962 (from memory); checks foc-01 and foc-02',
+  },
+  assignment: {
+    title: 'Assignment over a band and between neighbours',
+    formula: ['band fit: least Σ over f of |Γ(f) − exp(j(φ(f) + c(f)))|²', 'c(f) = arg Σ A²|Γ| exp(j(φ cell − φ(f))), c at the design frequency = reference phase'],
+    meaning: 'Cells and common phases are chosen in turn until nothing changes, at most eight rounds. A common phase of the panel, and so any delay, costs nothing at any frequency. A searched reference phase is the one, in steps of 15°, that leaves the least over the whole band.',
+    conventions: 'φ(f) is the target phase of the same law at f, each cell at its own angle of incidence. Fewer different cells: those nearest to N even phases, of all turns the one with the least squared error',
+    validity: 'A local choice: another start could end lower. The step to a neighbour is that of the first parameter along rows and columns; steps are counted because the data hold for endless lattices of equal cells.',
+    source: 'Least squares, by definition; checked on its own properties, no published check',
   },
   blockage: {
     title: 'Blockage by horn and mount',

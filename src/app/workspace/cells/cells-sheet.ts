@@ -6,22 +6,25 @@ import { LinePlot } from '../../ui/plots/line-plot';
 import { ViewTitle } from '../../ui/view-title';
 import { editValue } from '../design-field-edit';
 import { ChoiceRow } from '../fields/choice-row';
-import { DesignChoice } from '../fields/design-choice';
 import { DesignField } from '../fields/design-field';
 import { DesignTable } from '../fields/design-table';
 import type { DesignColumn } from '../fields/design-table';
+import { HowNote } from '../fields/how-note';
 import { PendingEntries } from '../fields/pending-entries';
 import { RemarkList } from '../fields/remark-list';
 import { SheetNotes } from '../fields/sheet-notes';
+import { HOW_LAWS_COMPUTED } from '../how-laws-computed';
 import { SheetHeader } from '../sheet-header';
 import { figureText } from '../strip-figures';
 import { WORKSPACE_STATE } from '../workspace-state';
+import { AssignmentFields } from './assignment-fields';
 import { cellCosts } from './cell-costs';
 import { EditionCells } from './edition-cells';
 import { EditionChooser } from './edition-chooser';
 import { editionCurve } from './edition-curve';
 import { cellUse, phaseCoverage } from './phase-coverage';
 import { ResonantFields } from './resonant-fields';
+import { ruleText } from './rule-options';
 import { TargetPhaseChoice } from './target-phase-choice';
 
 const KIND_OPTIONS = [
@@ -29,10 +32,6 @@ const KIND_OPTIONS = [
   { value: 'edition', label: 'Library edition' },
   { value: 'inline', label: 'What-if table' },
   { value: 'resonant', label: 'Resonant' },
-] as const;
-const RULE_OPTIONS = [
-  { value: 'nearest-phase', label: 'Nearest phase' },
-  { value: 'least-error', label: 'Least complex error' },
 ] as const;
 const INLINE_COLUMNS: readonly DesignColumn[] = [
   { key: 'phaseDeg', label: 'Phase', dimension: 'angle', unit: '°' },
@@ -54,7 +53,7 @@ const FIRST_CELLS: Readonly<Record<Cells['kind'], Cells | null>> = {
 /** Which cells stand on the panel: ideal ones, an edition of the library, or a what-if table; and what the choice costs. */
 @Component({
   selector: 'slant-cells-sheet',
-  imports: [ChoiceRow, DesignChoice, DesignField, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, ResonantFields, SheetNotes, TargetPhaseChoice, ViewTitle],
+  imports: [AssignmentFields, ChoiceRow, DesignField, HowNote, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, ResonantFields, SheetNotes, TargetPhaseChoice, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './cells-sheet.html',
   styleUrl: '../fields/sheet.scss',
@@ -70,7 +69,6 @@ export class CellsSheet {
     const barred = this.state.design().illumination.kind === 'guided-wave' ? 'edition' : 'resonant';
     return KIND_OPTIONS.filter(({ value }) => value !== barred || value === this.cells().kind);
   });
-  protected readonly ruleOptions = RULE_OPTIONS;
   protected readonly inlineColumns = INLINE_COLUMNS;
   protected readonly levelOptions = [
     { value: 'continuous', label: 'Continuous' },
@@ -83,6 +81,7 @@ export class CellsSheet {
   /** A library edition is wanted, and none has been chosen from the table yet. */
   protected readonly wantsEdition = signal(false);
   protected readonly canEdit = this.state.canEdit;
+  protected readonly assignmentHow = HOW_LAWS_COMPUTED.assignment;
   protected readonly cells = computed(() => this.state.design().cells);
   protected readonly levels = computed(() => {
     const cells = this.cells();
@@ -142,7 +141,7 @@ export class CellsSheet {
     if (cells.kind === 'resonant') return `resonant, ${cells.states === null ? 'continuous tuning' : `${cells.states} states`}`;
     const edition = this.edition();
     const name = edition ? `edition ${edition.number ?? 'unpublished'} of ${edition.familyName}` : 'an edition of the library';
-    return `${name}, ${cells.rule === 'nearest-phase' ? 'nearest phase' : 'least complex error'}`;
+    return `${name}, ${ruleText(cells.rule)}`;
   }
 
   protected chooseKind(kind: string): void {

@@ -1,5 +1,6 @@
 import { degFromRad } from '../../../../shared/units/angles';
 import { numberText } from '../../ui/plots/plot-text';
+import { ruleText } from '../cells/rule-options';
 import type { LivePrediction } from '../live-prediction-data';
 import type { EditionInUse } from '../workspace-state';
 
@@ -16,7 +17,7 @@ export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInU
     case 'resonant':
       return `${count}, resonant, ${RESONANT_RULES[of.cells.rule]}, ${of.cells.states === null ? 'continuous' : `${of.cells.states} states`}`;
     case 'edition': {
-      const rule = of.cells.rule === 'nearest-phase' ? 'nearest phase' : 'least complex error';
+      const rule = ruleText(of.cells.rule);
       return edition ? `${count}, edition ${edition.number ?? 'not published'} of ${edition.familyName}, ${rule}` : `${count}, ${rule}`;
     }
   }
