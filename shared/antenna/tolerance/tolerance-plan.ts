@@ -6,8 +6,8 @@ import { latticeGrid } from '../panel-lattice';
 import { siPanel } from '../si-design';
 import type { ToleranceChunk } from './tolerance-part';
 
-/** Trials of each contributor alone: enough to rank them, few enough that twelve of them cost no more than the run itself. */
-export const MOST_RANKING_TRIALS = 100;
+/** Trials of each contributor alone: enough to rank them, few enough that all of them cost little more than a usual run itself. */
+export const MOST_RANKING_TRIALS = 60;
 /** Trials whose cuts are kept for the envelope. */
 export const MOST_ENVELOPE_TRIALS = 1000;
 
