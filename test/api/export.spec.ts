@@ -13,7 +13,7 @@ import { STARTING_DESIGN } from '../../shared/model/starting-design';
 import { Api, STRANGER } from '../support/api';
 import type { ApiClient } from '../support/api-client';
 import { bodyOf, draw, freeze, newPanel } from '../support/panels';
-import { expectNotAllowed, expectNotFound } from '../support/problems';
+import { expectInvalid, expectNotAllowed, expectNotFound } from '../support/problems';
 import { onEdition, publishedEdition } from '../support/published-edition';
 
 const run = promisify(execFile);
@@ -182,6 +182,11 @@ describe('export', () => {
     const before = (await designer.get(`/api/revisions/${id}/export`)).bytes;
     await draw(designer, panel.id, { ...STARTING_DESIGN, referencePhaseDeg: 10 });
     expect((await designer.get(`/api/revisions/${id}/export`)).bytes.equals(before)).toBe(true);
+  });
+
+  it.each(['export', 'export/preview'])('refuses what is no id of a revision: %s', async (what) => {
+    expectInvalid(await designer.get(`/api/revisions/7/${what}`), [{ pointer: 'id', detail: 'must be an id' }]);
+    expectInvalid(await designer.get(`/api/revisions/${revision.id}x/${what}`), [{ pointer: 'id', detail: 'must be an id' }]);
   });
 
   it('goes to nobody outside the team, and not to a fabricator', async () => {

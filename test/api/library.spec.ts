@@ -94,6 +94,28 @@ describe('cell library', () => {
     expect(findings).toEqual([expect.objectContaining({ verdict: 'pass', file: again.name, detail: expect.stringContaining('over 41 responses') })]);
   });
 
+  it('names every fault of a mapping at once, and unknown fields too', async () => {
+    const mapping = { repeatFiles: [''], timeConvention: 'exp(jwt)', corrections: [{ file: 'a.s1p', thetaDeg: 91 }], repeats: true };
+    const answer = await inspect(uploadForm(cellFilesOf(FOUR), { inspection: { mapping } }));
+    expectInvalid(answer, [
+      { pointer: '#/inspection/mapping/repeatFiles/0', detail: 'must have at least 1 characters' },
+      { pointer: '#/inspection/mapping/corrections/0/thetaDeg', detail: 'must be at most 90; got 91' },
+      { pointer: '#/inspection/mapping/timeConvention', detail: 'must be one of exp(+jwt), exp(-jwt); got "exp(jwt)"' },
+      { pointer: '#/inspection/mapping/repeats', detail: 'is not a known field' },
+    ]);
+  });
+
+  it('refuses a publication without a note, and searches that are none', async () => {
+    const edition = await accepted();
+    expectInvalid(await lab.post(`/api/library/editions/${edition.id}/publication`, { note: '  ' }), [{ pointer: '#/note', detail: 'must have at least 1 characters' }]);
+    expectInvalid(await lab.post('/api/library/editions/7/publication', {}), [{ pointer: 'id', detail: 'must be an id' }, { pointer: '#/note', detail: 'is missing' }]);
+    expectInvalid(await designer.get('/api/library/families?frequencyGHz=high&thetaDeg=91&colour=red'), [
+      { pointer: 'frequencyGHz', detail: 'must be a finite number; got NaN' },
+      { pointer: 'thetaDeg', detail: 'must be at most 90; got 91' },
+      { pointer: 'colour', detail: 'is not a known field' },
+    ]);
+  });
+
   it('names the file and the line of what it cannot read', async () => {
     const broken = { name: 'cell_L2.00.s1p', bytes: Buffer.from('# GHz S RI R 50\n24 0.1 0.2\n25 0.1 nan\n') };
     const answer = await inspect(uploadForm([broken], {}));
