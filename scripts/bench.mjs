@@ -11,6 +11,7 @@
  */
 import { readdirSync } from 'node:fs';
 import { createRequire } from 'node:module';
+import { availableParallelism, loadavg } from 'node:os';
 import { join } from 'node:path';
 import { Reference, findReference, interleaved, latencies, percentiles } from './bench-measure.mjs';
 import { BenchProduct } from './bench-product.mjs';
@@ -26,13 +27,18 @@ const ms = (value) => `${value < 10 ? value.toFixed(3) : value.toFixed(1)} ms`;
 
 const verdict = (isMet, text) => ({ isMet, text: `${isMet ? 'met    ' : 'NOT MET'}  ${text}` });
 
+const residentMb = () => process.memoryUsage.rss() / 2 ** 20;
+
 async function againstReference(row, reference) {
+  const before = residentMb();
   const { work, setup, call } = row.prepare(load);
+  work();
+  const memory = row.showsMemory ? `, ${Math.max(0, residentMb() - before).toFixed(0)} MB` : '';
   if (reference !== null) await reference.prepare(setup, call);
   const { ownMs, referenceMs } = await interleaved(work, reference, row);
-  if (referenceMs === null) return { isMet: null, text: `no reference here; ${ms(ownMs)}` };
+  if (referenceMs === null) return { isMet: null, text: `no reference here; ${ms(ownMs)}${memory}` };
   const ratio = ownMs / referenceMs;
-  const measured = `${ratio.toFixed(2)} of ${row.against} (${ms(ownMs)} to ${ms(referenceMs)})`;
+  const measured = `${ratio.toFixed(2)} of ${row.against} (${ms(ownMs)} to ${ms(referenceMs)}${memory})`;
   if (row.goal.ratio === null) return { isMet: null, text: `         ${measured}` };
   return verdict(ratio <= row.goal.ratio, `${measured}; goal ${row.goal.ratio}`);
 }
@@ -94,6 +100,7 @@ await runScript(async () => {
   const rows = await loadRows(process.argv.slice(2));
   const found = findReference();
   console.log(found === null ? 'numpy and scipy are not installed: times alone, no ratios (Debian: python3-scipy).' : `Against ${found.versions} of ${found.python}, one thread each.`);
+  console.log(`Load of the machine before: ${loadavg()[0].toFixed(1)} on ${availableParallelism()} cores. Where others work, only ratios say much.`);
   const reference = found === null ? null : new Reference(found.python);
   let unmet = 0;
   try {

@@ -34,12 +34,12 @@ async function previews(product, side, count) {
   return times;
 }
 
-/** Runs in the page: milliseconds from the next key to the first frame after a figure of the strip has changed. */
-function paintedAfterKey() {
+/** Runs in the page: from now on `benchPaint` promises the milliseconds from the next arrow key to the first frame with another figure in the strip. */
+function watchPaint() {
   const figures = () => [...document.querySelectorAll('button .value b')].map((element) => element.textContent).join(' ');
   const before = figures();
-  return new Promise((resolve, reject) => {
-    setTimeout(() => reject(new Error('No figure of the strip has changed for a minute.')), 60_000);
+  window.benchPaint = new Promise((resolve, reject) => {
+    setTimeout(() => reject(new Error(`No figure of the strip has changed for a minute: ${before}`)), 60_000);
     let pressed = null;
     document.addEventListener('keydown', ({ key }) => key.startsWith('Arrow') && (pressed ??= performance.now()), { capture: true });
     const watch = new MutationObserver(() => {
@@ -64,10 +64,10 @@ async function paints(product, count) {
     await page.getByLabel('Beam θ').focus();
     const times = [];
     for (let i = -5; i < count; i++) {
-      const painted = page.evaluate(paintedAfterKey);
+      await page.evaluate(watchPaint);
       // A whole degree, to and fro, so that some figure changes in the digits that are shown.
       await page.keyboard.press(i % 20 < 10 ? 'Shift+ArrowUp' : 'Shift+ArrowDown');
-      const ms = await painted;
+      const ms = await page.evaluate(() => window.benchPaint);
       if (i >= 0) times.push(ms);
       await page.waitForTimeout(150);
     }
