@@ -16,8 +16,8 @@ const small: DesignDocument = {
   panel: { ...STARTING_DESIGN.panel, outline: { kind: 'rectangle', widthMm: 20, heightMm: 20 } },
 };
 const band = (frequencyCount: number): object => ({ kind: 'band', parameters: { frequencyCount } });
-/** About fifty frequencies go into a chunk of so small a panel. */
-const THREE_CHUNKS = band(101);
+/** Some thirty frequencies go into a chunk of so small a panel. */
+const THREE_CHUNKS = band(95);
 
 const start = async (client: ApiClient, panelId: string, request: object): Promise<RunDetail> => bodyOf<RunDetail>(await client.post(`/api/panels/${panelId}/runs`, request), 202);
 

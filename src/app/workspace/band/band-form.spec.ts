@@ -1,5 +1,5 @@
 import { STARTING_DESIGN } from '../../../../shared/model/starting-design';
-import { FIRST_FORM, bandParametersOf, formFault } from './band-form';
+import { FIRST_FORM, bandParametersOf, formFault, formOf } from './band-form';
 
 const bare = { ...STARTING_DESIGN, requirement: { ...STARTING_DESIGN.requirement, bandGHz: undefined } };
 const banded = { ...STARTING_DESIGN, requirement: { ...STARTING_DESIGN.requirement, bandGHz: [27, 29] as [number, number] } };
@@ -8,6 +8,12 @@ describe('band form', () => {
   it('leaves the band to the requirement, so that equal questions have equal words', () => {
     expect(bandParametersOf(FIRST_FORM, banded)).toEqual({ frequencyCount: 21, spatialPart: true });
     expect(bandParametersOf({ ...FIRST_FORM, fromGHz: 26 }, banded)).toMatchObject({ bandGHz: [26, 29] });
+  });
+
+  it('reads back what it asked', () => {
+    const form = { ...FIRST_FORM, fromGHz: 26, toGHz: 30, spatialPart: false, lowerOffsetMm: -2, upperOffsetMm: 2 };
+    expect(formOf(bandParametersOf(form, banded))).toEqual(form);
+    expect(formOf(bandParametersOf(FIRST_FORM, banded))).toEqual(FIRST_FORM);
   });
 
   it('asks for a band where there is none, and for one that rises', () => {

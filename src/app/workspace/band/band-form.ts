@@ -24,6 +24,18 @@ export function bandOf(form: BandForm, design: DesignDocument): { readonly fromG
   return fromGHz === undefined || toGHz === undefined ? null : { fromGHz, toGHz };
 }
 
+/** The form that asks what a run was asked. Phase centres that are not the two edges stand in no box. */
+export function formOf({ bandGHz, frequencyCount, spatialPart, phaseCentre }: BandParameters): BandForm {
+  return {
+    fromGHz: bandGHz?.[0] ?? null,
+    toGHz: bandGHz?.[1] ?? null,
+    frequencyCount,
+    spatialPart: spatialPart === true,
+    lowerOffsetMm: phaseCentre?.[0][1] ?? null,
+    upperOffsetMm: phaseCentre?.[phaseCentre.length - 1][1] ?? null,
+  };
+}
+
 /** Why this cannot be started, in words for the button; null when it can. */
 export function formFault(form: BandForm, design: DesignDocument): string | null {
   const band = bandOf(form, design);

@@ -11,8 +11,8 @@ describe('rows of a band', () => {
 
   it('say what is not reached and how wide the band is at least', () => {
     expect(bandwidthRows(SAMPLE_BAND)).toEqual([
-      { name: '1 dB', from: '27.333', to: '28.435', width: '1.102 (3.9 %)', reason: null },
-      { name: '3 dB', from: 'not reached', to: 'not reached', width: '> 2.000', reason: 'not reached within the band: the gain falls that far on neither side' },
+      { name: '1\u00a0dB', from: '27.333', to: '28.435', width: '1.102 (3.9 %)', reason: null },
+      { name: '3\u00a0dB', from: 'not reached', to: 'not reached', width: '> 2.000', reason: 'not reached within the band: the gain falls that far on neither side' },
     ]);
   });
 

@@ -44,7 +44,7 @@ export interface BandwidthRow {
 
 export function bandwidthRows({ bandwidths }: BandResult): readonly BandwidthRow[] {
   return bandwidths.map((bandwidth) => ({
-    name: `${numberText(bandwidth.dropDb, 0)} dB`,
+    name: `${numberText(bandwidth.dropDb, 0)}\u00a0dB`,
     from: edgeText(bandwidth.lowerGHz),
     to: edgeText(bandwidth.upperGHz),
     width: widthText(bandwidth),

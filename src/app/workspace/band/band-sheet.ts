@@ -18,7 +18,7 @@ import { sourceText } from '../runs/run-text';
 import { SheetHeader } from '../sheet-header';
 import { sheetNumber } from '../sheets';
 import { WORKSPACE_STATE } from '../workspace-state';
-import { FEWEST_FREQUENCIES, FIRST_FORM, MOST_FREQUENCIES, bandOf, bandParametersOf, formFault } from './band-form';
+import { FEWEST_FREQUENCIES, FIRST_FORM, MOST_FREQUENCIES, bandOf, bandParametersOf, formFault, formOf } from './band-form';
 import type { BandForm } from './band-form';
 import type { OtherBand } from './band-figures';
 import { BandOutcome } from './band-outcome';
@@ -106,6 +106,11 @@ export class BandSheet {
     effect(() => {
       const run = this.desk.shown()?.id ?? null;
       if (run !== null) untracked(() => this.link.set({ run }));
+    });
+    effect(() => {
+      const answer = this.desk.shown()?.answer;
+      // What somebody has typed stays; untouched boxes show what the result was asked.
+      if (answer?.kind === 'band') untracked(() => this.form.update((form) => (form === FIRST_FORM ? formOf(answer.parameters) : form)));
     });
   }
 

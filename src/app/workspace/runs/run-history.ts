@@ -22,6 +22,8 @@ import { sourceText, tookText } from './run-text';
     .reason {
       display: block;
       max-width: 44ch;
+      font-family: var(--font-text);
+      letter-spacing: normal;
       white-space: normal;
       color: var(--muted);
       font-size: var(--size-label);
