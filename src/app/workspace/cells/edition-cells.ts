@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal } from '@angular/core';
 import { CheckField } from '../../ui/check-field';
+import { CopyTable } from '../../ui/copy-table';
 import { editValue } from '../design-field-edit';
 import { figureText } from '../strip-figures';
 import { WORKSPACE_STATE } from '../workspace-state';
@@ -10,7 +11,7 @@ const ROWS_AT_ONCE = 8;
 /** The cells of the edition in use: how often each stands on the panel, and which are not to be used. */
 @Component({
   selector: 'slant-edition-cells',
-  imports: [CheckField],
+  imports: [CheckField, CopyTable],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './edition-cells.html',
   styleUrls: ['../fields/sheet.scss'],

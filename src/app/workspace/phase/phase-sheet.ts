@@ -3,6 +3,7 @@ import { prepareEdition } from '../../../../shared/antenna/prepare-edition';
 import { wrapDeg } from '../../../../shared/units/angles';
 import { CheckField } from '../../ui/check-field';
 import { ChoiceTabs } from '../../ui/choice-tabs';
+import { CopyTable } from '../../ui/copy-table';
 import { EmptyState } from '../../ui/empty-state';
 import { ColourKey } from '../../ui/plots/colour-key';
 import { Histogram } from '../../ui/plots/histogram';
@@ -43,7 +44,7 @@ const WORST_SHOWN = 6;
 /** Target phase, cells and errors of the whole panel, and everything about one chosen cell. */
 @Component({
   selector: 'slant-phase-sheet',
-  imports: [CellDetail, CheckField, ChoiceTabs, ColourKey, EmptyState, Histogram, LinePlot, PanelMap, PlotTools, SheetNotes, ViewTitle],
+  imports: [CellDetail, CheckField, ChoiceTabs, ColourKey, CopyTable, EmptyState, Histogram, LinePlot, PanelMap, PlotTools, SheetNotes, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './phase-sheet.html',
   styleUrl: './phase-sheet.scss',
