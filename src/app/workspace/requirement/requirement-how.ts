@@ -37,7 +37,7 @@ export const REQUIREMENT_HOW: Readonly<Record<RequirementFigure, HowComputed>> =
       'local limit of ICNIRP above 6 GHz: 55 f^−0.177 and 275 f^−0.177 W/m², f in GHz',
     ],
     meaning: 'The highest power density of the main beam at each distance, and the distance from which it stays at or below each published limit. P is the power after the loss, times the share of time.',
-    conventions: 'For a round aperture 4ηP/A is 16ηP/(πD²). For other outlines the true area stands in the densities and the largest dimension in the ranges, which tells distances too long rather than too short.',
+    conventions: 'For a round aperture 4ηP/A is 16ηP/(πD²). For other outlines the true area stands in the densities and the largest dimension in the ranges, which tells distances too long rather than too short. Local levels are means over 4 cm², above 30 GHz also over 1 cm² at twice the value; brief exposures have limits of their own (both from memory).',
     validity: 'An estimate of the main beam, not a survey. Not for panels that focus: for those the density at the focus is summed from the cells. Spillover, the specular direction and the space behind the horn are not in it.',
     source: 'FCC OET Bulletin 65, edition 97-01, 1997, eq. 11 to 18 (partly from memory); 47 CFR 1.1310; ICNIRP, Health Phys. 118(5), 2020 (whole-body levels from memory); checks rf-01 to rf-04',
   },

@@ -35,7 +35,7 @@ const FIRST_BAND_SHARE = 0.02;
   imports: [BeamsTable, ChoiceTabs, DesignChoice, DesignField, ExposureSection, MaskSection, RemarkList, SheetNotes, SizingSection, TransmissionSection, VerdictTable, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './requirement-sheet.html',
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', './requirement-sheet.scss'],
 })
 export class RequirementSheet {
   private readonly state = inject(WORKSPACE_STATE);
