@@ -42,7 +42,7 @@ export function patternLobes(pattern: RadiationPattern, beams: readonly Directio
   };
   climbed.forEach(addTop);
   peaks.forEach((peak) => addTop(refinePeak(pattern, peak.u, peak.v)));
-  shouldersWorthAClimb(pattern, shoulders, tops).forEach(({ u, v }) => {
+  shouldersWorthAClimb(pattern, shoulders.filter(besideBeams(pattern, climbed)), tops).forEach(({ u, v }) => {
     const top = refinePeak(pattern, u, v);
     // A climb counts where it ends on a top, not where it gives up on a ridge.
     if (top.lastStep < 1e-3 * apart) addTop(top);
@@ -51,6 +51,16 @@ export function patternLobes(pattern: RadiationPattern, beams: readonly Directio
   const ofBeams = beams.map((beam, i) => nearestTop(tops, beam) ?? climbed[i]);
   const others = tops.filter((top) => !ofBeams.some((own) => samePlace(own, top, apart)));
   return { highest: highestOf(tops, ofBeams) ?? climbed[0], ofBeams, others, searched };
+}
+
+/** No other top stands nearer to that of a beam than this many lambda / side: the first null of a uniform panel is 1 away, its first lobe 1.43. */
+const BEAM_REACH = 1.25;
+
+/** The flank of a beam bends like a shoulder at many samples; they would take the place of lobes parted from it by a shallow saddle. */
+function besideBeams({ wavenumber, spectrum: { grid } }: RadiationPattern, beams: readonly PatternPeak[]): (sample: SampledPeak) => boolean {
+  const perU = (wavenumber * grid.columnCount * grid.stepXM) / (2 * Math.PI);
+  const perV = (wavenumber * grid.rowCount * grid.stepYM) / (2 * Math.PI);
+  return ({ u, v }) => beams.every((top) => Math.hypot((top.u - u) * perU, (top.v - v) * perV) > BEAM_REACH);
 }
 
 /** Those that may stand beside a top higher than the ones that will be listed. */

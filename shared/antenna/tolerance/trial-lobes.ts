@@ -14,13 +14,13 @@ export interface TrialLobes {
 
 /** Sampled maxima looked at beyond those of the beams, and shoulders of others. */
 const CANDIDATES = 6;
-const SHOULDERS = 4;
+const SHOULDERS = 12;
 /** Power of a shoulder relative to the top beside it: at least about this. */
 const SHOULDER_SHARE = 0.7;
 /** Estimates within this share of the best are climbed to. */
 const RIVAL_SHARE = 0.85;
 /** No other top stands nearer to that of a beam than about this many lambda / side. */
-const BEAM_REACH = 1.1;
+const BEAM_REACH = 1.25;
 
 /**
  * The beams and the one highest lobe, at a fraction of the cost of listing lobes in order: tops are estimated by a parabola
