@@ -33,20 +33,19 @@ export class RunQueueRepository {
 
   constructor(
     private readonly transactions: TransactionRunner,
-    options: { readonly maintenanceSeconds: number; readonly onError: (error: Error) => void },
+    private readonly options: { readonly maintenanceSeconds: number; readonly onError: (error: Error) => void },
   ) {
-    const db: Database = { executeSql: (text, values) => transactions.read((transaction) => execute(transaction, text, values)) };
-    this.boss = new PgBoss({ db, migrate: false, schedule: false, supervise: true, maintenanceIntervalSeconds: options.maintenanceSeconds, archiveCompletedAfterSeconds: 3600, deleteAfterDays: 2 });
-    this.boss.on('error', options.onError);
+    this.boss = this.newBoss();
   }
 
-  /** Begins to look after messages whose takers fell silent. For workers; a server only sends. */
-  async start(): Promise<void> {
-    await this.boss.start();
-  }
-
-  async stop(): Promise<void> {
-    await this.boss.stop({ graceful: false, close: false });
+  /**
+   * Begins to look after messages whose takers fell silent, until the returned function is called. For workers; a server
+   * only sends. Each time with an instance of its own: one that was stopped never looks again.
+   */
+  async supervise(): Promise<() => Promise<void>> {
+    const keeper = this.newBoss();
+    await keeper.start();
+    return () => keeper.stop({ graceful: false, close: false });
   }
 
   /** Sent once the transaction is committed, and never if it is not. */
@@ -78,6 +77,14 @@ export class RunQueueRepository {
   /** Gives a message back, for another to take at once. */
   async giveBack({ id }: RunJob, reason: string): Promise<void> {
     await this.transactions.run((transaction) => this.boss.fail(QUEUE, id, { reason }, { db: inTransaction(transaction) }));
+  }
+
+  private newBoss(): PgBoss {
+    const { maintenanceSeconds, onError } = this.options;
+    const db: Database = { executeSql: (text, values) => this.transactions.read((transaction) => execute(transaction, text, values)) };
+    const boss = new PgBoss({ db, migrate: false, schedule: false, supervise: true, maintenanceIntervalSeconds: maintenanceSeconds, archiveCompletedAfterSeconds: 3600, deleteAfterDays: 2 });
+    boss.on('error', onError);
+    return boss;
   }
 }
 

@@ -41,12 +41,13 @@ export class RunWorkerService {
   private readonly timers: NodeJS.Timeout[] = [];
   private readonly stopping = new AbortController();
   private loops: Promise<void>[] = [];
+  private endSupervision: () => Promise<void> = async () => undefined;
 
   constructor(private readonly parts: RunWorkerParts) {}
 
   async start(): Promise<void> {
     const { queue, roster, threadCount } = this.parts;
-    await queue.start();
+    this.endSupervision = await queue.supervise();
     await roster.see(threadCount);
     this.every(HEARTBEAT_MS, async () => {
       await roster.see(threadCount);
@@ -58,14 +59,14 @@ export class RunWorkerService {
 
   /** Takes nothing more, finishes what it has, and gives back what takes too long. */
   async stop(): Promise<void> {
-    const { queue, roster, runner } = this.parts;
+    const { roster, runner } = this.parts;
     this.stopping.abort();
     const late = setTimeout(() => this.held.forEach(({ ending }) => ending.abort()), FINISH_MS);
     await Promise.all(this.loops);
     clearTimeout(late);
     this.timers.forEach((timer) => clearInterval(timer));
     await roster.leave();
-    await queue.stop();
+    await this.endSupervision();
     await runner.close();
   }
 

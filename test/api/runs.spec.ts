@@ -186,10 +186,10 @@ describe('runs', () => {
     await api.query('DELETE FROM result');
     const stranger = await api.signedIn(STRANGER);
     const [mine, theirs] = [await newPanel(designer, small), await newPanel(stranger, small)];
-    const worker = await startWorker(api, new PacedRunner(400));
     const ids: string[] = [];
-    for (let i = 0; i < 20; i++) ids.push((await start(designer, mine.id, band(100 + i))).id);
+    for (let i = 0; i < 20; i++) ids.push((await start(designer, mine.id, band(3 + i))).id);
     expectProblem(await designer.post(`/api/panels/${mine.id}/runs`, band(200)), problemOf('too-many', 429, 'Your team has 20 runs waiting or under way already. Try again in 10 s.'));
+    const worker = await startWorker(api, new PacedRunner(400));
     const asked = Date.now();
     const run = await runThat(stranger, (await start(stranger, theirs.id, band(4))).id, ({ startedAt }) => startedAt !== null);
     expect(Date.now() - asked).toBeLessThan(5000);
