@@ -28,7 +28,7 @@ export function maskFacts(largestDimensionM: number, wavenumberRadPerM: number, 
 /** The envelope of a mask for one panel at one frequency, or why it has none. */
 export function maskEnvelope(mask: Mask, facts: MaskFacts): MaskEnvelope | NoFigure {
   if (mask.kind === 'custom') return { segments: customSegments(mask.points), rule: EVERY_DIRECTION };
-  if (mask.kind === 'formula') return { segments: formulaSegments(mask.segments), rule: EVERY_DIRECTION };
+  if (mask.kind === 'formula') return formulaEnvelope(mask);
   const published = publishedMask(mask.id);
   if (!published) return noFigure('mask-unknown', unknownMaskText(mask.id));
   const segments = published.segments(facts);
@@ -48,13 +48,15 @@ function customSegments(points: readonly (readonly [number, number])[]): readonl
   return [{ fromDeg: angles[0], toDeg: 180, levelDb: (offAxisDeg) => linearThrough(angles, levels, offAxisDeg), cornersDeg: angles }];
 }
 
-/** Formulas that `maskFaults` accepts; one that cannot be read would be a fault of the design, so it is thrown. */
-function formulaSegments(segments: Extract<Mask, { kind: 'formula' }>['segments']): readonly MaskSegment[] {
-  return segments.map(({ fromDeg, toDeg, expression }) => {
+/** A draft may hold a formula that cannot be read: it is not predicted, and nothing is drawn of its mask. */
+function formulaEnvelope({ segments }: Extract<Mask, { kind: 'formula' }>): MaskEnvelope | NoFigure {
+  const read: MaskSegment[] = [];
+  for (const { fromDeg, toDeg, expression } of segments) {
     const formula = maskFormula(expression);
-    if (formula.kind === 'fault') throw new RangeError(`"${expression}": ${formula.detail}`);
-    return { fromDeg, toDeg, levelDb: formula.levelDb };
-  });
+    if (formula.kind === 'fault') return noFigure('mask-formula', `the formula "${expression}" cannot be read: ${formula.detail}`);
+    read.push({ fromDeg, toDeg, levelDb: formula.levelDb });
+  }
+  return { segments: read, rule: EVERY_DIRECTION };
 }
 
 /** Level at an angle off the wanted beam; null where the mask is undefined. */

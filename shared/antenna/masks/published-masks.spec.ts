@@ -45,6 +45,11 @@ describe('published envelopes', () => {
     );
   });
 
+  it('stand beside formulas, of which one that cannot be read is no envelope', () => {
+    const made = maskEnvelope({ kind: 'formula', segments: [{ fromDeg: 1, toDeg: 9, expression: '3 +' }] }, facts(60, 12));
+    expect(made).toEqual({ kind: 'mask-formula', reason: 'the formula "3 +" cannot be read: the formula ends too early, at character 4' });
+  });
+
   it('step up at 7 degrees in 25.209, where the text is not monotonic', () => {
     const fcc = envelope('fcc-25-209-a1', facts(60, 6));
     expect([maskLevelDb(fcc, 7), maskLevelDb(fcc, 7.001)]).toEqual([expect.closeTo(7.87255, 4), 8]);
