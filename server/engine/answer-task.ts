@@ -35,10 +35,10 @@ export function createTaskAnswerer(): TaskAnswerer {
 const isStopped = (task: PredictionTask): boolean => Atomics.load(task.stop, 0) !== 0;
 
 function answer(task: PredictionTask, edition: PreparedEdition | undefined): PredictionOutcome {
-  const { design, frequencyGHz, cells, cuts, uvSize, uvShift } = task;
+  const { design, frequencyGHz, harmonic, cells, cuts, uvSize, uvShift } = task;
   if (isStopped(task)) return { kind: 'stopped' };
   const placed = placeCells(design, edition);
   if (isStopped(task)) return { kind: 'stopped' };
   const include = { cells, cuts: cuts !== undefined && cuts.length > 0 ? cuts : undefined, uv: uvSize === undefined ? undefined : { size: uvSize, shift: uvShift } };
-  return { kind: 'predicted', prediction: predictPlaced(placed, { frequencyGHz, include }) };
+  return { kind: 'predicted', prediction: predictPlaced(placed, { frequencyGHz, harmonic, include }) };
 }

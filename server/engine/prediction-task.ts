@@ -18,6 +18,8 @@ export interface PredictionQuestion {
   readonly edition: EngineEdition | null;
   /** The design frequency when absent. */
   readonly frequencyGHz?: number;
+  /** Of time-modulated cells; the steered one when absent. */
+  readonly harmonic?: number;
   readonly cells?: boolean;
   readonly cuts?: readonly CutRequest[];
   /** Samples per side of the u-v map; no map when absent. */

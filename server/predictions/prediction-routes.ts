@@ -14,10 +14,11 @@ const DEFAULT_CUTS: readonly CutRequest[] = [
   { plane: 'across', angleDeg: [-90, 90, 0.1] },
 ];
 
-function wishOf({ design, include = [], cuts, frequencyGHz, uvSize }: PredictionRequest): PredictionWish {
+function wishOf({ design, include = [], cuts, frequencyGHz, harmonic, uvSize }: PredictionRequest): PredictionWish {
   return {
     design,
     frequencyGHz,
+    harmonic,
     cells: include.includes('cells'),
     cuts: include.includes('cuts') ? (cuts ?? DEFAULT_CUTS) : undefined,
     uvSize: include.includes('uv') ? (uvSize ?? DEFAULT_UV_SIZE) : undefined,

@@ -68,6 +68,8 @@ function statesOf(placed: ChoiceSite, position: number, edition?: PreparedEditio
     return tableStates(cells.cells.map((cell) => radFromDeg(cell.phaseDeg)), cells.cells.map((cell) => cell.magnitude));
   }
   if (cells.kind === 'resonant') return resonantStates(cells.states ?? 0);
+  // A delay is continuous: there is nothing to choose from.
+  if (cells.kind === 'modulated') return tableStates([], []);
   const count = cells.levels ?? 0;
   return tableStates(Array.from({ length: count }, (_, i) => (2 * Math.PI * i) / count), new Array<number>(count).fill(1));
 }

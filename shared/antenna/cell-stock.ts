@@ -4,6 +4,7 @@ import { editionStock } from './edition-stock';
 import { resonantStock } from './guided-wave/resonant-stock';
 import { idealStock } from './ideal-stock';
 import type { CellIllumination } from './illumination';
+import { modulatedStock } from './modulation/modulated-stock';
 import { inlineStock } from './inline-stock';
 import type { PreparedEdition } from './prepare-edition';
 import type { SiDesign } from './si-design';
@@ -36,6 +37,8 @@ export interface CellStock {
   assign(targetRad: Float64Array): CellAssignment;
   /** What the placed cells do at another frequency. */
   respond(assignment: CellAssignment, frequencyHz: number): CellResponses;
+  /** What the placed cells do at a harmonic of their switching, where they are switched in time. */
+  harmonic?(assignment: CellAssignment, order: number): CellResponses;
   /** The reference phase that gives the most field, and so gain, at the wanted beam; the smallest of equal ones. */
   searchReferenceRad(query: ReferenceQuery): number;
   /** Remarks on what the cells' data cover, for the cells placed and the frequency of use. */
@@ -60,6 +63,7 @@ const stocks: { readonly [Kind in Cells['kind']]: StockMaker<Kind> } = {
   inline: inlineStock,
   edition: editionStock,
   resonant: resonantStock,
+  modulated: modulatedStock,
 };
 
 export function cellStock(cells: Cells, site: StockSite): CellStock {

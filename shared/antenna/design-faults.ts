@@ -1,6 +1,7 @@
 import type { DesignDocument, Outline } from '../model/design-document';
 import { cellCountFault } from './cell-count';
 import { InvalidDesign, type DesignFault } from './invalid-design';
+import { modulationFaults } from './modulation/modulation-faults';
 import { maskFaults } from './masks/mask-faults';
 import { polygonFault } from './polygon-fault';
 import { synthesisFaults } from './synthesis/synthesis-faults';
@@ -18,7 +19,7 @@ export function checkDesign(design: DesignDocument): void {
 /** Faults that no single field shows, of a document whose fields are each valid. */
 export function designFaults(design: DesignDocument): DesignFault[] {
   const shape = shapeFaults(design);
-  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design), ...bandFitFaults(design)];
+  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design), ...bandFitFaults(design), ...modulationFaults(design)];
 }
 
 /** A band fit needs more than the design frequency, and reckons with one response per cell. */

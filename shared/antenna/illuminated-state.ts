@@ -32,17 +32,20 @@ export interface IlluminatedState {
   /** Gain less directivity. */
   readonly gainOffsetDb: Figure;
   readonly litCount: number;
+  /** The harmonic asked for, of time-modulated cells. */
+  readonly harmonic?: number;
   /** Present where horn and mount are described. */
   readonly blockage?: BlockageFigures;
   /** Present where the vector model is in use; `pattern` is then its co-polar part. */
   readonly vector?: VectorState;
 }
 
-export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): IlluminatedState {
+/** `harmonic` is that of time-modulated cells, the steered one when absent; others have none. */
+export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number, harmonic?: number): IlluminatedState {
   const { si, lattice, light, assignment, stock } = placed;
   const frequencyHz = frequencyGHz === undefined ? si.designFrequencyHz : frequencyGHz * 1e9;
   const wavenumber = wavenumberRadPerM(frequencyHz);
-  const responses = stock.respond(assignment, frequencyHz);
+  const responses = harmonic !== undefined && stock.harmonic ? stock.harmonic(assignment, harmonic) : stock.respond(assignment, frequencyHz);
   const targetRad = targetInUse(placed, responses, frequencyHz);
   const losses = apertureLosses(light, responses, phaseErrorsRad(responses.phaseRad, targetRad));
   if (placed.vector) return vectorLit({ placed, vector: placed.vector, frequencyHz, wavenumber, responses, targetRad, losses });
@@ -62,6 +65,7 @@ export function illuminatedState(placed: PlacedDesign, frequencyGHz?: number): I
     ...spillover,
     gainOffsetDb: placed.design.cells.kind === 'resonant' ? capturedDb : sumFigures(capturedDb, cellLossDb, blockage?.powerDb ?? 0),
     ...(blockage ? { blockage } : {}),
+    ...(harmonic === undefined ? {} : { harmonic }),
     litCount: litCells(light.amplitude),
   };
 }

@@ -19,6 +19,8 @@ export interface PredictionOptions {
   readonly edition?: PreparedEdition;
   /** Where to predict; the design frequency when absent. The cells stay those chosen at the design frequency. */
   readonly frequencyGHz?: number;
+  /** The harmonic of time-modulated cells to look at; the steered one when absent. */
+  readonly harmonic?: number;
   readonly include: {
     readonly cells?: boolean;
     readonly cuts?: readonly CutRequest[];
@@ -48,8 +50,8 @@ export function predictDesign(design: DesignDocument, options: PredictionOptions
 }
 
 /** The same from placed cells on: for many frequencies of one design, place its cells once. */
-export function predictPlaced(placed: PlacedDesign, { frequencyGHz, include }: PlacedPredictionOptions): Prediction {
-  const state = illuminatedState(placed, frequencyGHz);
+export function predictPlaced(placed: PlacedDesign, { frequencyGHz, harmonic, include }: PlacedPredictionOptions): Prediction {
+  const state = illuminatedState(placed, frequencyGHz, harmonic);
   const { figures, gratingLobeCount, maxIncidence } = designFigures(state);
   const { design, si } = placed;
   const gainOffsetDb = isNumber(state.gainOffsetDb) ? state.gainOffsetDb : 0;

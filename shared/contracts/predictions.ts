@@ -25,6 +25,8 @@ export const predictionRequest = z.strictObject({
   include: z.array(z.enum(['cells', 'cuts', 'uv'])).max(3).optional(),
   cuts: z.array(cutRequest).max(8).optional(),
   frequencyGHz: z.number().min(1).max(1000).optional(),
+  /** The harmonic of time-modulated cells to look at; the steered one when absent. */
+  harmonic: z.number().int().min(-50).max(50).optional(),
   /** Samples per side of the u-v map. */
   uvSize: z.number().int().min(16).max(1024).optional(),
 });

@@ -171,6 +171,16 @@ export const cells = z.discriminatedUnion('kind', [
     /** States evenly spaced round the circle; null for a continuous tuning. */
     states: z.number().int().min(2).max(4096).nullable(),
   }),
+  /** Cells that run through a sequence of states in every period, each with its own delay. */
+  z.strictObject({
+    kind: z.literal('modulated'),
+    states: z.array(z.strictObject({ phaseDeg: z.number().min(-36_000).max(36_000), magnitude: z.number().min(0).max(1) })).min(2).max(64),
+    /** Where the states change, in parts of the period: 0, rising, 1; even parts when absent. */
+    edges: z.array(z.number().min(0).max(1)).min(3).max(65).optional(),
+    modulationMHz: z.number().gt(0).max(10_000),
+    /** The harmonic that the delays steer. */
+    harmonic: z.number().int().min(-50).max(50),
+  }),
 ]);
 
 export const prediction = z.strictObject({

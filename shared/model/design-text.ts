@@ -61,6 +61,7 @@ const BY_KIND: Readonly<Record<string, (fields: Fields) => string>> = {
   vortex: (fields) => `vortex of order ${fields['order']}`,
   ideal: (fields) => (fields['levels'] === null ? 'ideal, continuous' : `ideal, ${fields['levels']} levels`),
   edition: (fields) => `edition ${fields['editionId']}, ${fields['rule']}`,
+  modulated: (fields) => `modulated, ${lengthOf(fields['states'])} states, harmonic ${fields['harmonic']}`,
   resonant: (fields) => `resonant, ${fields['rule']}${fields['states'] === null ? '' : `, ${fields['states']} states`}`,
   inline: (fields) => `what-if table of ${lengthOf(fields['cells'])} cells`,
 };

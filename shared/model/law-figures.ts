@@ -96,7 +96,20 @@ export const assignmentFigures = z.strictObject({
   neighbours: z.strictObject({ pairs: z.number().int(), violations: z.number().int(), largestMm: z.number() }).optional(),
 });
 
+/** How time-modulated cells spread the power over harmonics. */
+export const modulationFigures = z.strictObject({
+  /** The one that all other figures are of. */
+  harmonic: z.number().int(),
+  offsetMHz: z.number(),
+  /** |a_m|^2 of that one. */
+  shownShare: z.number(),
+  harmonics: z.array(z.strictObject({ order: z.number().int(), share: z.number() })),
+  /** Sum of |a_m|^2 over all harmonics: what the states re-radiate on the average over the period. */
+  wholePower: z.number(),
+});
+
 export const lawFigures = {
+  modulation: modulationFigures.optional(),
   assignment: assignmentFigures.optional(),
   blockage: blockageFigures.optional(),
   specular: specularFigures.optional(),
@@ -113,5 +126,6 @@ export type DiffuseFigures = z.infer<typeof diffuseFigures>;
 export type BlockageFigures = z.infer<typeof blockageFigures>;
 export type SpecularFigures = z.infer<typeof specularFigures>;
 export type AssignmentFigures = z.infer<typeof assignmentFigures>;
+export type ModulationFigures = z.infer<typeof modulationFigures>;
 export type GuidedWaveFigures = z.infer<typeof guidedWaveFigures>;
 export type VortexFigures = z.infer<typeof vortexFigures>;

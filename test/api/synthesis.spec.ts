@@ -72,6 +72,16 @@ describe('predicting target phases of every kind', () => {
     expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/cells/rule']]);
   });
 
+  it('answers each harmonic of time-modulated cells, and refuses one that is not there', async () => {
+    const cells = { kind: 'modulated', states: [{ phaseDeg: 0, magnitude: 1 }, { phaseDeg: 180, magnitude: 1 }], modulationMHz: 1, harmonic: 1 } as const;
+    const design = { ...STARTING_DESIGN, cells };
+    const { figures } = bodyOf<PredictionReply>(await designer.post('/api/predictions', { design, harmonic: 3 }), 200);
+    expect(figures.modulation).toMatchObject({ harmonic: 3, offsetMHz: 3, shownShare: expect.closeTo((2 / (3 * Math.PI)) ** 2, 9) as number });
+    const answer = await designer.post('/api/predictions', { design: { ...design, cells: { ...cells, harmonic: 2 } } });
+    const { errors } = answer.json as { errors: { pointer: string }[] };
+    expect([answer.status, errors.map(({ pointer }) => pointer)]).toEqual([422, ['#/design/cells/harmonic']]);
+  });
+
   it('refuses a vortex of half an order by its pointer', async () => {
     const answer = await designer.post('/api/predictions', { design: { ...STARTING_DESIGN, synthesis: { kind: 'vortex', order: 0.5 } } });
     const { errors } = answer.json as { errors: { pointer: string }[] };

@@ -7,19 +7,22 @@ import { meanResponse } from '../feed/specular-part';
 import { noFigure } from '../no-figure';
 import { guidedWaveFigures } from '../guided-wave/guided-wave-figures';
 import { diffuseFigures } from './diffuse-figures';
+import { modulationFigures } from '../modulation/modulation-figures';
 import { focusFigures } from './focus-figures';
 import { vortexFigures } from './vortex-figures';
 
 /** Figures that only this target phase or this way of lighting has. */
-export function lawFigures(state: IlluminatedState): Pick<Figures, 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave' | 'blockage' | 'specular' | 'assignment'> {
+export function lawFigures(state: IlluminatedState): Pick<Figures, 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave' | 'blockage' | 'specular' | 'assignment' | 'modulation'> {
   if (state.pattern.radiatedPower <= 0) return {};
   const { illumination } = state.placed.si;
+  const { cells } = state.placed.design;
   const assignment = assignmentFigures(state.placed);
   return {
     ...synthesisFigures(state),
     ...(illumination.kind === 'guided-wave' ? { guidedWave: guidedWaveFigures(state, illumination) } : { specular: specularFigures(state) }),
     ...(state.blockage ? { blockage: state.blockage } : {}),
     ...(assignment ? { assignment } : {}),
+    ...(cells.kind === 'modulated' ? { modulation: modulationFigures(cells, state.harmonic ?? cells.harmonic) } : {}),
   };
 }
 

@@ -1,7 +1,7 @@
 import type { HowComputed } from './how-computed';
 
 /** Figures of one target phase or one way of lighting, each with how it is computed. */
-export type LawFigureId = 'assignment' | 'blockage' | 'specular' | 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
+export type LawFigureId = 'modulation' | 'assignment' | 'blockage' | 'specular' | 'focus' | 'vortex' | 'projections' | 'diffuse' | 'guidedWave';
 
 const EDGES = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction';
 
@@ -21,6 +21,14 @@ export const HOW_LAWS_COMPUTED: Readonly<Record<LawFigureId, HowComputed>> = {
     conventions: 'φ(f) is the target phase of the same law at f, each cell at its own angle of incidence. Fewer different cells: those nearest to N even phases, of all turns the one with the least squared error',
     validity: 'A local choice: another start could end lower. The step to a neighbour is that of the first parameter along rows and columns; steps are counted because the data hold for endless lattices of equal cells.',
     source: 'Least squares, by definition; checked on its own properties, no published check',
+  },
+  modulation: {
+    title: 'Time-modulated cells',
+    formula: ['Γ(t) = Σ a_m exp(j2πmt/T)', 'a_m = Σ Γ_l w_l sinc(m w_l) exp(−j2πm t_l), w_l and t_l width and middle of part l', 'cell n: a_m exp(−j2πm δₙ);  Σ |a_m|² = Σ w_l |Γ_l|²'],
+    meaning: 'All cells run through the same states, cell n later by δₙ of the period, so that the steered harmonic has its target phase. Harmonic m of the same delays leaves at m over the steered order times the wavenumber. What goes into other harmonics stands as cell loss of the one shown.',
+    conventions: 'Time exp(+jωt); harmonic m lies m times the modulation frequency above the carrier; sinc x = sin πx / πx',
+    validity: 'Modulation slow against the carrier: k is that of the carrier for every harmonic. States switch at once, and the delays are continuous.',
+    source: 'Fourier series, by definition; checks tm-01 to tm-04',
   },
   blockage: {
     title: 'Blockage by horn and mount',

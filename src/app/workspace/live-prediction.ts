@@ -22,6 +22,8 @@ export interface PredictionAsk {
   readonly design: DesignDocument;
   readonly cuts: readonly CutRequest[];
   readonly uvSize: number;
+  /** Of time-modulated cells; null for the steered one. */
+  readonly harmonic?: number | null;
 }
 
 export type LiveOutcome =
@@ -41,12 +43,13 @@ const BEAM_CUTS: readonly CutRequest[] = [
 ];
 
 /** The request for a design: the cuts along and across its beam first, then the wanted ones. */
-export function requestOf({ design, cuts, uvSize }: PredictionAsk): PredictionRequest {
+export function requestOf({ design, cuts, uvSize, harmonic }: PredictionAsk): PredictionRequest {
   return {
     design,
     include: uvSize > 0 ? ['cells', 'cuts', 'uv'] : ['cells', 'cuts'],
     cuts: [...BEAM_CUTS, ...cuts].slice(0, CUT_LIMIT),
     ...(uvSize > 0 ? { uvSize } : {}),
+    ...(typeof harmonic === 'number' && design.cells.kind === 'modulated' ? { harmonic } : {}),
   };
 }
 

@@ -108,6 +108,7 @@ function cellsJudgement(facts: PanelFacts): Judgement {
   const remark = remarkOf(facts, ['/cells', '/referencePhaseDeg']);
   if (remark.word !== 'meets') return remark;
   if (facts.design.cells.kind === 'ideal') return { word: 'in-work', reason: 'Ideal cells cannot be etched: choose an edition of the library' };
+  if (facts.design.cells.kind === 'modulated') return { word: 'in-work', reason: 'A switching sequence is a model: nothing can be etched from it yet' };
   if (facts.design.cells.kind === 'resonant') return { word: 'in-work', reason: 'Resonant cells are a model of a tuning: nothing can be etched from them yet' };
   if (facts.design.cells.kind === 'inline') return { word: 'in-work', reason: 'A what-if table cannot be etched: choose an edition of the library' };
   return remark;

@@ -44,6 +44,8 @@ export interface WorkspaceState {
   requestCuts(cuts: readonly CutRequest[]): void;
   /** Asks for a u-v map with so many samples per side; 0 asks for none. */
   requestUv(size: number): void;
+  /** Asks for a harmonic of time-modulated cells; null for the steered one. */
+  requestHarmonic?(order: number | null): void;
 }
 
 export const WORKSPACE_STATE = new InjectionToken<WorkspaceState>('workspace state');

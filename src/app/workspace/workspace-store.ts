@@ -28,6 +28,7 @@ export class WorkspaceStore implements WorkspaceState {
   /** Compared by content: a sheet names its cuts anew with every step of the beam, and each change here is a prediction. */
   private readonly cutsAsked = signal<readonly CutRequest[]>([], { equal: (a, b) => JSON.stringify(a) === JSON.stringify(b) });
   private readonly uvSizeAsked = signal(0);
+  private readonly harmonicAsked = signal<number | null>(null);
   private readonly predictionNow = signal<LivePrediction | null>(null);
   private readonly failureNow = signal<{ readonly problem: Problem; readonly of: DesignDocument } | null>(null);
   private readonly parentNow = signal<LivePrediction | null>(null);
@@ -96,6 +97,10 @@ export class WorkspaceStore implements WorkspaceState {
     this.cutsAsked.set(cuts);
   }
 
+  requestHarmonic(order: number | null): void {
+    this.harmonicAsked.set(order);
+  }
+
   requestUv(size: number): void {
     this.uvSizeAsked.set(size);
   }
@@ -113,7 +118,7 @@ export class WorkspaceStore implements WorkspaceState {
 
   private followDraft(): void {
     const ask = computed((): PredictionAsk | null =>
-      this.panel() ? { design: this.design(), cuts: this.cutsAsked(), uvSize: this.uvSizeAsked() } : null,
+      this.panel() ? { design: this.design(), cuts: this.cutsAsked(), uvSize: this.uvSizeAsked(), harmonic: this.harmonicAsked() } : null,
     );
     this.outcomesOf(ask, 'draft').subscribe((outcome) => {
       if (outcome.kind === 'failed') this.failureNow.set(outcome);

@@ -1,8 +1,12 @@
 import { harmonicAmplitude, equalEdges, sequencePower, type SwitchingSequence } from '../../../shared/antenna/modulation/switching-sequence';
+import { predictDesign } from '../../../shared/antenna/predict-design';
+import type { DesignDocument } from '../../../shared/model/design-document';
 import { degFromRad, radFromDeg } from '../../../shared/units/angles';
 import { deembeddedReflection, planeShiftRad, waveguideSimulator } from '../../../shared/waves/measuring-cell';
 import { expectWithin } from '../expect-within';
 import { numberIn, numbersIn, toleranceOf, type CheckTable, type PublishedCheck } from '../published-check';
+import { numberOf } from '../test-arrays';
+import { FREQUENCY_OF_100_MM_GHZ, testDesign } from '../test-designs';
 
 /** The amplitudes of the harmonics of one cell, and that no power is lost between them. */
 function compareSequence(check: PublishedCheck): void {
@@ -50,4 +54,20 @@ export const measuringCellChecks: CheckTable = {
   'tm-01': compareSequence,
   'tm-02': compareSequence,
   'tm-03': compareSequence,
+  'tm-04': (check) => {
+    const { inputs, expected } = check;
+    const period = numberIn(inputs, 'period_lambda');
+    const delay = numberIn(inputs, 'delay_fraction_per_cell');
+    const states = (inputs['states_mag_deg'] as number[][]).map(([magnitude, phaseDeg]) => ({ magnitude, phaseDeg }));
+    // The first harmonic is wanted where a delay of that much from cell to cell sends it: u = delay lambda / d.
+    const base = testDesign({ frequencyGHz: FREQUENCY_OF_100_MM_GHZ, periodMm: 100 * period, columns: numberIn(inputs, 'cells'), rows: 1, beams: [{ thetaDeg: degFromRad(Math.asin(delay / period)), phiDeg: 0 }], radiateExponent: 0 });
+    const design: DesignDocument = { ...base, cells: { kind: 'modulated', states, modulationMHz: 0.001, harmonic: 1 } };
+    for (const row of expected['rows'] as Record<string, number>[]) {
+      const { figures } = predictDesign(design, { harmonic: row['harmonic'], include: {} });
+      const u = Math.sin(radFromDeg(numberOf(figures.peakThetaDeg))) * Math.cos(radFromDeg(numberOf(figures.peakPhiDeg)));
+      expectWithin({ quantity: `u of harmonic ${row['harmonic']}`, unit: '', got: u, expected: row['beam_u'], tolerance: toleranceOf(check, 'abs') });
+      // All cells have the same strength, so what the peak loses against cells of 1 is the loss of the cells.
+      expectWithin({ quantity: `level of harmonic ${row['harmonic']}`, unit: 'dB', got: numberOf(figures.cellLossDb), expected: row['level_dB'], tolerance: toleranceOf(check, 'dB') });
+    }
+  },
 };

@@ -22,6 +22,7 @@ import { cellCosts } from './cell-costs';
 import { EditionCells } from './edition-cells';
 import { EditionChooser } from './edition-chooser';
 import { editionCurve } from './edition-curve';
+import { ModulatedFields } from './modulated-fields';
 import { cellUse, phaseCoverage } from './phase-coverage';
 import { ResonantFields } from './resonant-fields';
 import { ruleText } from './rule-options';
@@ -32,6 +33,7 @@ const KIND_OPTIONS = [
   { value: 'edition', label: 'Library edition' },
   { value: 'inline', label: 'What-if table' },
   { value: 'resonant', label: 'Resonant' },
+  { value: 'modulated', label: 'Time-modulated' },
 ] as const;
 const INLINE_COLUMNS: readonly DesignColumn[] = [
   { key: 'phaseDeg', label: 'Phase', dimension: 'angle', unit: '°' },
@@ -47,13 +49,14 @@ const FIRST_CELLS: Readonly<Record<Cells['kind'], Cells | null>> = {
   ideal: { kind: 'ideal', levels: null },
   inline: FIRST_TABLE,
   resonant: { kind: 'resonant', rule: 'projection', states: null },
+  modulated: { kind: 'modulated', states: [0, 90, 180, 270].map((phaseDeg) => ({ phaseDeg, magnitude: 1 })), modulationMHz: 1, harmonic: 1 },
   edition: null,
 };
 
 /** Which cells stand on the panel: ideal ones, an edition of the library, or a what-if table; and what the choice costs. */
 @Component({
   selector: 'slant-cells-sheet',
-  imports: [AssignmentFields, ChoiceRow, DesignField, HowNote, DesignTable, EditionCells, EditionChooser, LinePlot, RemarkList, ResonantFields, SheetNotes, TargetPhaseChoice, ViewTitle],
+  imports: [AssignmentFields, ChoiceRow, DesignField, HowNote, DesignTable, EditionCells, EditionChooser, LinePlot, ModulatedFields, RemarkList, ResonantFields, SheetNotes, TargetPhaseChoice, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './cells-sheet.html',
   styleUrl: '../fields/sheet.scss',
@@ -138,6 +141,7 @@ export class CellsSheet {
     const cells = this.cells();
     if (cells.kind === 'ideal') return cells.levels === null ? 'ideal, continuous phase' : `ideal, ${cells.levels} levels ${figureText(360 / cells.levels, 2)}° apart`;
     if (cells.kind === 'inline') return `what-if table of ${cells.cells.length} cells`;
+    if (cells.kind === 'modulated') return `${cells.states.length} states switched in time, harmonic ${cells.harmonic} steered`;
     if (cells.kind === 'resonant') return `resonant, ${cells.states === null ? 'continuous tuning' : `${cells.states} states`}`;
     const edition = this.edition();
     const name = edition ? `edition ${edition.number ?? 'unpublished'} of ${edition.familyName}` : 'an edition of the library';

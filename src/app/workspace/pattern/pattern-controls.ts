@@ -9,6 +9,7 @@ import { DesignField } from '../fields/design-field';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { AxesFigure } from './axes-figure';
 import type { CutChoice } from './beam-cut';
+import { HarmonicChooser } from './harmonic-chooser';
 import { DEEPEST_DB, SHALLOWEST_DB } from './pattern-link';
 import type { PatternLink, PatternShow } from './pattern-link';
 import { ViewNumber } from './view-number';
@@ -22,7 +23,7 @@ const CUTS: readonly { readonly id: CutChoice; readonly label: string }[] = [
 /** The narrow column beside the pattern: steering, which cut, which levels, what is shown, and the axes. */
 @Component({
   selector: 'slant-pattern-controls',
-  imports: [AxesFigure, CheckField, ChoiceTabs, DesignField, ViewNumber, ViewTitle],
+  imports: [AxesFigure, CheckField, ChoiceTabs, DesignField, HarmonicChooser, ViewNumber, ViewTitle],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './pattern-controls.html',
   styleUrl: './pattern-controls.scss',
@@ -56,6 +57,7 @@ export class PatternControls {
     return `${numberText(k * Math.sin(radFromDeg(this.wanted().thetaDeg)), 2)} rad/m`;
   });
   protected readonly parentNumber = computed(() => this.state.panel()?.latestRevision?.number ?? null);
+  protected readonly isModulated = computed(() => this.state.design().cells.kind === 'modulated');
   protected readonly hasCross = computed(() => this.state.design().prediction.model === 'vector');
   protected readonly hasMask = computed(() => this.state.design().requirement.mask?.kind === 'custom');
 

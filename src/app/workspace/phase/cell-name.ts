@@ -12,6 +12,7 @@ export function cellName(design: DesignDocument, edition: EditionInUse | null, c
   const { cells } = design;
   if (cells.kind === 'ideal') return cells.levels === null ? 'continuous phase' : `level ${cellIndex + 1} of ${cells.levels}`;
   if (cells.kind === 'inline') return `entry ${cellIndex + 1}`;
+  if (cells.kind === 'modulated') return 'delayed sequence';
   if (cells.kind === 'resonant') return cells.states === null ? 'continuous tuning' : `state ${cellIndex + 1} of ${cells.states}`;
   if (cellIndex < 0) return 'no cell';
   const own = editionOf(design, edition);

@@ -30,6 +30,7 @@ export function libraryCurve(source: CurveSource): LibraryCurve | null {
   const { cells } = source.prediction.of;
   if (cells.kind === 'edition') return editionCurve(source);
   if (cells.kind === 'inline') return tableCurve(source, cells.cells.map(({ phaseDeg }) => phaseDeg), 'Table of cells');
+  if (cells.kind === 'modulated') return null;
   if (cells.kind === 'resonant') {
     const { states } = cells;
     return states === null ? null : tableCurve(source, Array.from({ length: states }, (_, k) => degFromRad(coupledField((2 * Math.PI * k) / states, { magnitude: 0, phaseRad: 0 }).phaseRad)), 'States of a resonant cell');

@@ -14,6 +14,8 @@ export function phaseSubtitle({ cells, of }: LivePrediction, edition: EditionInU
       return `${count}, ideal phase, ${of.cells.levels === null ? 'continuous' : `${of.cells.levels} levels`}`;
     case 'inline':
       return `${count}, what-if table of ${of.cells.cells.length}, nearest phase`;
+    case 'modulated':
+      return `${count}, ${of.cells.states.length} states switched in time, harmonic ${of.cells.harmonic}`;
     case 'resonant':
       return `${count}, resonant, ${RESONANT_RULES[of.cells.rule]}, ${of.cells.states === null ? 'continuous' : `${of.cells.states} states`}`;
     case 'edition': {

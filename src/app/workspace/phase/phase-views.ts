@@ -71,6 +71,7 @@ function roundLimit(largest: number, most: number): number {
 
 function cellLayer({ prediction, edition }: PhaseViewSource): PhaseLayer {
   const { cells, of } = prediction;
+  if (of.cells.kind === 'modulated') return { kind: 'none', reason: 'All cells run through the same states, each with its own delay.' };
   if (of.cells.kind === 'resonant' && of.cells.states === null) return { kind: 'none', reason: 'A continuous tuning has no states to tell apart.' };
   if (of.cells.kind === 'ideal' && of.cells.levels === null) return { kind: 'none', reason: 'A continuous ideal phase has no cells to tell apart. Choose cells on the Cells sheet.' };
   const own = editionOf(of, edition);
