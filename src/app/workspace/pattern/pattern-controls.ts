@@ -42,7 +42,7 @@ export class PatternControls {
   ];
   protected readonly fields = [
     { id: 'co', label: 'Co-polar' },
-    { id: 'cross', label: 'Cross-polar' },
+    { id: 'cross', label: 'Cross' },
   ];
   protected readonly beams = computed(() => this.state.design().requirement.beams);
   protected readonly beamTabs = computed(() => this.beams().map((_, i) => ({ id: String(i), label: String(i + 1) })));

@@ -11,8 +11,8 @@ export function patternSubtitle({ requirement, prediction }: DesignDocument): st
 function crossPolarNote(prediction: LivePrediction | null): string {
   const vector = prediction?.head.figures.vector;
   if (!vector) return 'Cross-polar: not evaluated, the scalar model has no cross-polar part. The vector model is chosen on the Illumination sheet.';
-  const balance = typeof vector.radiatedOverLeavingDb === 'number' ? ` The far field carries ${signedDb(vector.radiatedOverLeavingDb)} dB of the power that leaves the cells.` : '';
-  return `Cuts, lobes and beamwidths are of the co-polar field; circular and cross-polar parts by the definitions under "How computed".${balance}`;
+  const balance = typeof vector.radiatedOverLeavingDb === 'number' ? ` Power of the far field against what leaves the cells: ${signedDb(vector.radiatedOverLeavingDb)} dB.` : '';
+  return `Cuts, lobes and beamwidths are of the co-polar field; the definitions of both stand under “How computed”.${balance}`;
 }
 
 function signedDb(value: number): string {
