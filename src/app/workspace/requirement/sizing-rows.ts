@@ -1,14 +1,30 @@
 import type { SizingAdvice } from '../../../../shared/antenna/sizing/size-panel';
 import { sizedDesign } from '../../../../shared/antenna/sizing/sized-design';
+import { designFaults } from '../../../../shared/antenna/design-faults';
+import { designDocument } from '../../../../shared/model/design-document';
 import type { DesignDocument } from '../../../../shared/model/design-document';
 import { degFromRad } from '../../../../shared/units/angles';
 import { powerRatioToDb } from '../../../../shared/units/decibels';
+import { fieldLabel } from '../../../../shared/model/design-labels';
 import { designPartText } from '../../../../shared/model/design-text';
 import { figureText } from '../strip-figures';
 
 export interface SizingRow {
   readonly name: string;
   readonly value: string;
+}
+
+/** Why a proposal cannot be taken; null where it can. */
+export function proposalObstacle(proposal: DesignDocument): string | null {
+  const parsed = designDocument.safeParse(proposal);
+  if (!parsed.success) return `${nameOf(parsed.error.issues[0].path.map(String).join('/'))} would lie outside its range`;
+  const [fault] = designFaults(proposal);
+  return fault === undefined ? null : `${nameOf(fault.pointer.replace(/^#\//, ''))} ${fault.detail}`;
+}
+
+/** The panel as a whole has no field of its own. */
+function nameOf(path: string): string {
+  return path === 'panel' ? 'the panel' : fieldLabel(`/${path}`).label.toLowerCase();
 }
 
 /** The advice as it would stand in the design. */

@@ -22,6 +22,16 @@ describe('SizingSection', () => {
     expect(workspace.design()).toBe(before);
   });
 
+  it('says why a proposal cannot be used, and does not offer it', async () => {
+    const { workspace, enter, text, element } = await sheetRig(SizingSection);
+    const before = workspace.design();
+    await enter('Gain wanted', '70');
+    expect(text()).toMatch(/Cannot be used: .*\d+.*\./);
+    const button = [...element.querySelectorAll('button')].find((one) => one.textContent?.trim() === 'Use these');
+    expect(button?.disabled).toBe(true);
+    expect(workspace.design()).toBe(before);
+  });
+
   it('refuses a taper that is none', async () => {
     const { enter, text } = await sheetRig(SizingSection);
     await enter('Edge taper', '2');

@@ -5,7 +5,7 @@ import { ViewNumber } from '../pattern/view-number';
 import { ViewTitle } from '../../ui/view-title';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { HowNote } from './how-note';
-import { sizingRows } from './sizing-rows';
+import { proposalObstacle, sizingRows } from './sizing-rows';
 
 /** The optimum of a flat panel lies between -11.5 and -11.0 dB for usual focal ratios. */
 const FIRST_TAPER_DB = -11;
@@ -37,7 +37,10 @@ const FALLEN_BACK_GAIN_DBI = 30;
       <p class="hint">The allowance is for losses, rounding and tolerances of the cells. What the panel then does is for the prediction to say.</p>
       <slant-how-note figure="sizing" />
       @if (canEdit()) {
-        <div class="actions"><button type="button" class="button" (click)="use()">Use these</button></div>
+        @if (obstacle(); as reason) {
+          <p class="hint" role="status">Cannot be used: {{ reason }}.</p>
+        }
+        <div class="actions"><button type="button" class="button" [disabled]="obstacle() !== null" (click)="use()">Use these</button></div>
       }
     </section>
   `,
@@ -57,10 +60,14 @@ export class SizingSection {
   );
   protected readonly facts = computed(() => sizingRows(this.advice(), this.state.design()));
 
+  private readonly proposal = computed(() => sizedDesign(this.state.design(), this.advice()));
+  /** Why the proposal would be no design: too many cells, too large a panel, cells that another illumination needs. */
+  protected readonly obstacle = computed(() => proposalObstacle(this.proposal()));
+
   protected use(): void {
-    const advice = this.advice();
+    const proposal = this.proposal();
     this.pending.dropBelow('/panel');
     this.pending.dropBelow('/illumination');
-    this.state.change('Use sizing advice', (design) => sizedDesign(design, advice));
+    this.state.change('Use sizing advice', () => proposal);
   }
 }
