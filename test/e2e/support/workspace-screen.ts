@@ -21,12 +21,6 @@ export class WorkspaceScreen {
     return this.page.getByRole('navigation', { name: 'Sheets of the panel' }).getByRole('link', { name: new RegExp(`^\\d+\\s*${title}`) });
   }
 
-  /** Every sheet that the rail offers. */
-  async sheetTitles(): Promise<string[]> {
-    const names = await this.page.getByRole('navigation', { name: 'Sheets of the panel' }).locator('a > span:nth-of-type(2)').allInnerTexts();
-    return names.map((name) => name.trim());
-  }
-
   /** The key that opens a sheet, as the rail names it. */
   async keyOf(title: string): Promise<string> {
     return (await this.sheet(title).locator('.number').innerText()).trim();
