@@ -7,6 +7,13 @@ export const NO_RAYS: DesignFault = {
   detail: 'a guided wave meets its cells at no angle, so the vector model has no plane of incidence; choose the scalar one',
 };
 
-export function vectorFaults({ prediction, illumination }: DesignDocument): DesignFault[] {
-  return prediction.model === 'vector' && illumination.kind === 'guided-wave' ? [NO_RAYS] : [];
+/** Harmonics are those of one complex sequence to a cell. */
+const NO_HARMONICS: DesignFault = {
+  pointer: '#/prediction/model',
+  detail: 'time-modulated cells have a harmonic for one response, not for two polarisations; choose the scalar model',
+};
+
+export function vectorFaults({ prediction, illumination, cells }: DesignDocument): DesignFault[] {
+  if (prediction.model !== 'vector') return [];
+  return [...(illumination.kind === 'guided-wave' ? [NO_RAYS] : []), ...(cells.kind === 'modulated' ? [NO_HARMONICS] : [])];
 }

@@ -96,6 +96,11 @@ describe('a prediction by the vector model', () => {
     expect(() => placeCells(exampleDesign({ prediction: VECTOR, illumination: guided }))).toThrow(/plane of incidence/);
   });
 
+  it('refuses time-modulated cells, whose harmonics are of one response', () => {
+    const cells: DesignDocument['cells'] = { kind: 'modulated', states: [{ phaseDeg: 0, magnitude: 1 }, { phaseDeg: 180, magnitude: 1 }], modulationMHz: 1, harmonic: 1 };
+    expect(() => placeCells(exampleDesign({ prediction: VECTOR, cells }))).toThrow(/harmonic for one response/);
+  });
+
   it('says what the description of the cells leaves out', () => {
     const messages = (design: DesignDocument, of = edition): string[] =>
       predictDesign(design, { include: {}, edition: of }).warnings.filter(({ code }) => code === 'cross-terms').map(({ message }) => message);

@@ -1,6 +1,6 @@
 import type { FamilySummary } from '../../../../shared/contracts/library';
 import { replacedAt } from '../../../../shared/model/design-pointer';
-import { STARTING_DESIGN } from '../../../../shared/model/starting-design';
+import { NEW_PANEL_DESIGN, STARTING_DESIGN } from '../../../../shared/model/starting-design';
 import { LibraryClient } from '../../api/library-client';
 import { sheetRig } from '../fields/sheet-rig';
 import { CellsSheet } from './cells-sheet';
@@ -102,5 +102,12 @@ describe('CellsSheet', () => {
   it('says what to do when the library is empty', async () => {
     const { text } = await rig(STARTING_DESIGN, []);
     expect(text()).toContain('The library holds no published edition yet.');
+  });
+
+  it('goes over to the scalar model with time-modulated cells, which the vector one cannot take', async () => {
+    const { workspace, choose } = await rig(NEW_PANEL_DESIGN);
+    await choose('Time-modulated');
+    expect(workspace.design().cells.kind).toBe('modulated');
+    expect(workspace.design().prediction.model).toBe('scalar');
   });
 });

@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
 import { derivedValues } from '../../../../shared/antenna/derived-values';
 import { prepareEdition } from '../../../../shared/antenna/prepare-edition';
-import type { Cells } from '../../../../shared/model/design-document';
+import type { Cells, DesignDocument } from '../../../../shared/model/design-document';
 import { LinePlot } from '../../ui/plots/line-plot';
 import { ViewTitle } from '../../ui/view-title';
 import { editValue } from '../design-field-edit';
@@ -43,6 +43,12 @@ const FIRST_TABLE: Cells = {
   kind: 'inline',
   cells: [0, 90, 180, 270].map((phaseDeg) => ({ phaseDeg, magnitude: 1 })),
 };
+
+/** Harmonics are those of one response to a cell, so time-modulated cells take the scalar model. */
+function withCells(design: DesignDocument, cells: Cells): DesignDocument {
+  const { prediction } = design;
+  return cells.kind === 'modulated' && prediction.model === 'vector' ? { ...design, cells, prediction: { ...prediction, model: 'scalar' } } : { ...design, cells };
+}
 
 /** What each kind starts from; an edition is chosen from the table. */
 const FIRST_CELLS: Readonly<Record<Cells['kind'], Cells | null>> = {
@@ -154,7 +160,7 @@ export class CellsSheet {
     if (!option || option.value === this.cells().kind) return;
     this.left.set(this.cells().kind, this.cells());
     const next = this.left.get(option.value) ?? FIRST_CELLS[option.value];
-    if (next) this.put('/cells', next, `Cells: ${option.label}`);
+    if (next) this.putCells(next, `Cells: ${option.label}`);
     else this.wantsEdition.set(true);
   }
 
@@ -174,6 +180,13 @@ export class CellsSheet {
     const found = this.state.prediction()?.head.figures.referencePhaseDeg ?? 0;
     // Giving the phase that the search found keeps the result.
     this.put('/referencePhaseDeg', kind === 'search' ? 'search' : found, kind === 'search' ? 'Search reference phase' : 'Give reference phase');
+  }
+
+  private putCells(cells: Cells, name: string): void {
+    const edit = editValue(this.state.design(), '', withCells(this.state.design(), cells));
+    if (edit.kind !== 'changed') return;
+    this.pending.dropBelow('/cells');
+    this.state.change(name, () => edit.design);
   }
 
   private put(pointer: string, value: unknown, name: string): void {

@@ -22,6 +22,11 @@ describe('budgetTable', () => {
     expect(table.sum.value).toBe((figures.gainAtBeamDbi as number).toFixed(3));
   });
 
+  it('says where blockage counts when the horn throws a shadow', () => {
+    const table = budgetTable({ ...figures, blockage: { cells: 3, atBeamDb: -0.1, powerDb: -0.05 } });
+    expect(table && 'items' in table && table.items.at(-1)?.name).toBe('Blockage: within cell loss, taper');
+  });
+
   it('gives the reason where there is no budget, and nothing in the scalar model', () => {
     const vector = { ...(figures.vector as NonNullable<Figures['vector']>), budget: { kind: 'nothing-radiated', reason: 'nothing goes there' } };
     expect(budgetTable({ ...figures, vector })).toEqual({ reason: 'nothing goes there' });

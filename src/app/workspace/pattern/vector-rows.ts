@@ -31,13 +31,14 @@ export interface BudgetTable {
 }
 
 /** The budget of the gain at the beam, or the reason why there is none; null in the scalar model. */
-export function budgetTable({ vector }: Figures): BudgetTable | { readonly reason: string } | null {
+export function budgetTable({ vector, blockage }: Figures): BudgetTable | { readonly reason: string } | null {
   if (!vector) return null;
   const { budget } = vector;
   if ('reason' in budget) return { reason: String(budget.reason) };
   const known = budget as GainBudgetFigures;
   return {
-    items: ITEMS.map(([item, name]) => ({ name, value: signed(known[item], item === 'areaDbi'), reason: null })),
+    // The null field of shadowed cells leaves nothing, so it counts where leaving power and amplitudes do.
+    items: ITEMS.map(([item, name]) => ({ name: item === 'blockageDb' && blockage ? 'Blockage: within cell loss, taper' : name, value: signed(known[item], item === 'areaDbi'), reason: null })),
     sum: { name: 'Gain at the beam', value: numberText(known.gainAtBeamDbi, DIGITS), reason: null },
   };
 }
