@@ -47,7 +47,7 @@ describe('a run over the band', () => {
     const gain = page.getByRole('row', { name: /^Gain ≥ 25\.00 dBi/ });
     await eventually(async () => expect(await gain.innerText()).toMatch(/\t2[78]\.\d{3}\t|\t29\.000\t/));
     const table = page.getByRole('group', { name: 'Figures at every frequency' });
-    expect(await table.getByRole('row').count()).toBe(10);
+    await eventually(async () => expect(await table.getByRole('row').count()).toBe(10));
     // The same question again is answered at once, from what is known.
     await page.getByRole('button', { name: 'Start run' }).click();
     await page.getByText('known already').waitFor();
@@ -63,8 +63,10 @@ describe('a run over the band', () => {
     await start('401');
     const bar = page.getByRole('progressbar', { name: 'Progress of the run' });
     await bar.waitFor();
-    await eventually(async () => expect(Number(await bar.getAttribute('aria-valuenow'))).toBeGreaterThan(0));
-    expect(await bar.getAttribute('aria-valuetext')).toMatch(/^computing: \d+ of \d+ parts done/);
+    await eventually(async () => {
+      expect(Number(await bar.getAttribute('aria-valuenow'))).toBeGreaterThan(0);
+      expect(await bar.getAttribute('aria-valuetext')).toMatch(/^computing: \d+ of \d+ parts done/);
+    });
     await page.getByRole('button', { name: 'Cancel run' }).click();
     await bar.waitFor({ state: 'detached' });
     await page.getByRole('group', { name: 'Earlier runs' }).getByRole('cell', { name: 'cancelled' }).waitFor();

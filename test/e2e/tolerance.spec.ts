@@ -39,7 +39,7 @@ describe('a tolerance run', () => {
     await trials.press('Enter');
     await page.getByRole('button', { name: 'Start run' }).click();
     await page.getByText(/^\d+ of 40 panels meet every line judged, /).waitFor();
-    expect(await page.getByRole('group', { name: 'Yield per line of the requirement' }).getByRole('row').count()).toBe(4);
+    await eventually(async () => expect(await page.getByRole('group', { name: 'Yield per line of the requirement' }).getByRole('row').count()).toBe(4));
     await page.getByRole('img', { name: /^Contributors by what they do: .*only the cells of an edition have a geometry/ }).waitFor();
     await page.getByRole('application', { name: /^Envelope of the cut along the beam/ }).waitFor();
     expect(await seriousAccessFaults(page)).toEqual([]);
