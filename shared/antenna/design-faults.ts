@@ -19,7 +19,18 @@ export function checkDesign(design: DesignDocument): void {
 /** Faults that no single field shows, of a document whose fields are each valid. */
 export function designFaults(design: DesignDocument): DesignFault[] {
   const shape = shapeFaults(design);
-  return [...requirementFaults(design), ...shape, ...(shape.length === 0 ? [...countFaults(design), ...synthesisFaults(design)] : []), ...sourceFaults(design), ...vectorFaults(design), ...bandFitFaults(design), ...modulationFaults(design)];
+  const isShapeSound = shape.length === 0;
+  return [
+    ...requirementFaults(design),
+    ...shape,
+    ...(isShapeSound ? countFaults(design) : []),
+    ...sourceFaults(design),
+    ...synthesisFaults(design, isShapeSound),
+    ...cellFaults(design),
+    ...vectorFaults(design),
+    ...bandFitFaults(design),
+    ...modulationFaults(design),
+  ];
 }
 
 /** A band fit needs more than the design frequency, and reckons with one response per cell. */
@@ -75,7 +86,7 @@ function guidedWaveFaults(illumination: DesignDocument['illumination'], cells: D
   return [];
 }
 
-function sourceFaults({ illumination, cells }: DesignDocument): DesignFault[] {
+function sourceFaults({ illumination }: DesignDocument): DesignFault[] {
   const faults: DesignFault[] = [];
   if (illumination.kind === 'horn') {
     const { positionMm, aimMm } = illumination;
@@ -86,7 +97,11 @@ function sourceFaults({ illumination, cells }: DesignDocument): DesignFault[] {
       faults.push({ pointer: '#/illumination/aimMm', detail: 'the horn must be aimed at a point other than its own position' });
     }
   }
-  faults.push(...guidedWaveFaults(illumination, cells));
+  return faults;
+}
+
+function cellFaults({ illumination, cells }: DesignDocument): DesignFault[] {
+  const faults = guidedWaveFaults(illumination, cells);
   if (cells.kind === 'inline' && cells.cells.every((cell) => cell.magnitude === 0)) {
     faults.push({ pointer: '#/cells/cells', detail: 'at least one cell must have a magnitude above 0' });
   }

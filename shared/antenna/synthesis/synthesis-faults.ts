@@ -6,12 +6,12 @@ import { siPanel } from '../si-design';
 /** More blocks than this take longer to search than a person waits. */
 const MOST_BLOCKS = 1024;
 
-/** Faults between the fields of a target phase, on a panel whose shape holds together. */
-export function synthesisFaults({ synthesis, panel }: DesignDocument): DesignFault[] {
+/** Faults between the fields of a target phase; blocks of cells are counted only on a panel whose shape is sound. */
+export function synthesisFaults({ synthesis, panel }: DesignDocument, isShapeSound: boolean): DesignFault[] {
   if (synthesis.kind === 'focus' && synthesis.pointMm[2] <= 0) {
     return [{ pointer: '#/synthesis/pointMm/2', detail: `the focus must lie in front of the panel, z > 0; got z = ${synthesis.pointMm[2]} mm` }];
   }
-  if (synthesis.kind === 'diffuse') return blockFaults(synthesis, panel);
+  if (synthesis.kind === 'diffuse') return isShapeSound ? blockFaults(synthesis, panel) : [];
   return synthesis.kind === 'projections' ? goalFaults(synthesis.goal) : [];
 }
 
