@@ -58,6 +58,19 @@ describe('command palette', () => {
     expect(element().querySelector('dialog')?.open).toBe(false);
   });
 
+  it('opens again though the event of its last closing comes late, and follows a closing by the browser', async () => {
+    const dialog = element().querySelector('dialog');
+    await press(field(), 'Enter');
+    document.dispatchEvent(new KeyboardEvent('keydown', { key: 'k', ctrlKey: true }));
+    dialog?.dispatchEvent(new Event('close'));
+    await fixture.whenStable();
+    expect(dialog?.open).toBe(true);
+    dialog?.close();
+    dialog?.dispatchEvent(new Event('close'));
+    await fixture.whenStable();
+    expect(TestBed.inject(CommandRegistry).isOpen()).toBe(false);
+  });
+
   it('says so when nothing is found, and Enter then does nothing', async () => {
     await type('nothing like it');
     expect(options()).toEqual([]);

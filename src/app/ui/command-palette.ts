@@ -14,6 +14,8 @@ import type { Command } from './command-registry';
 export class CommandPalette {
   private readonly registry = inject(CommandRegistry);
   private readonly dialog = viewChild.required<ElementRef<HTMLDialogElement>>('dialog');
+  /** Closings by us whose event has not come yet. */
+  private announcedClosings = 0;
   protected readonly typed = signal('');
   protected readonly at = signal(0);
   protected readonly found = computed(() => findCommands(this.registry.commands(), this.typed()));
@@ -26,6 +28,7 @@ export class CommandPalette {
         this.at.set(0);
         dialog.showModal();
       } else if (!this.registry.isOpen() && dialog.open) {
+        this.announcedClosings += 1;
         dialog.close();
       }
     });
@@ -65,8 +68,9 @@ export class CommandPalette {
     this.registry.isOpen.set(false);
   }
 
-  /** The event comes a moment after the closing; by then the palette may have been opened again. */
+  /** Follows a closing by the browser, as by Escape. The event of ours comes late: by then opening may be wanted again. */
   protected followClosing(): void {
-    if (!this.dialog().nativeElement.open) this.close();
+    if (this.announcedClosings > 0) this.announcedClosings -= 1;
+    else this.close();
   }
 }
