@@ -13,7 +13,7 @@ export interface HowComputed {
 
 const ARRAY_SOURCE = 'C. A. Balanis, Antenna Theory, 4th ed., 2016, ch. 2 and 6 (from memory, equation numbers not checked)';
 const GEOMETRY = 'Panel in z = 0, +z outward; θ from +z, φ from +x towards +y; time exp(+jωt), wave exp(−jk·r)';
-const ARRAY_LIMITS = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction, no blockage by the horn and its mount';
+const ARRAY_LIMITS = 'Array theory: no coupling beyond what the cell data hold, no edge diffraction; blockage by the horn and its mount only where their radius is given';
 
 export const HOW_COMPUTED: Readonly<Record<StripFigureId, HowComputed>> = {
   gain: {

@@ -20,11 +20,20 @@ function signedDb(value: number): string {
   return value > 0 && text !== '0.00' ? `+${text}` : text;
 }
 
+/** What the pattern holds of horn and mount in the way of the beam; null where no horn stands before the panel. */
+export function blockageNote({ illumination, panel }: DesignDocument): string | null {
+  if (illumination.kind !== 'horn') return null;
+  if (panel.operation === 'transmit') return 'The horn stands behind the panel and blocks nothing.';
+  if (illumination.blockageRadiusMm === undefined) return 'Blockage by the horn is not included; the Illumination sheet takes the radius of horn and mount.';
+  return `Blockage is included: a disc of radius ${numberText(illumination.blockageRadiusMm, 1)} mm for horn and mount shades cells along the first beam; what horn and mount scatter is not.`;
+}
+
 /** Assumptions and cautions of the pattern, as drawing notes. */
-export function patternNotes(prediction: LivePrediction | null): readonly string[] {
+export function patternNotes(design: DesignDocument, prediction: LivePrediction | null): readonly string[] {
   const mask = prediction?.head.figures.maskMargin;
+  const blockage = blockageNote(design);
   const notes = [
-    'A prediction is array theory, not a measurement. Blockage by the horn is not included.',
+    `A prediction is array theory, not a measurement.${blockage ? ` ${blockage}` : ''}`,
     crossPolarNote(prediction),
     'A range test is a transmission: confirm authorisation for frequency, power, place and dates.',
   ];

@@ -132,7 +132,7 @@ export class PatternSheet {
     const figures = this.prediction()?.head.figures;
     return figures?.vector ? figures : null;
   });
-  protected readonly notes = computed(() => patternNotes(this.prediction()));
+  protected readonly notes = computed(() => patternNotes(this.drawnDesign(), this.prediction()));
   protected readonly cutHeading = computed(() => this.headingOf(this.cutTitle()));
   protected readonly uvHeading = computed(() => this.headingOf(this.mapField() === 'cross' ? 'Cross-polar gain over the hemisphere' : 'Gain over the hemisphere'));
   protected readonly polarHeading = computed(() => this.headingOf(`${this.cutTitle()}, polar form`));

@@ -17,7 +17,7 @@ export const REQUIREMENT_HOW: Readonly<Record<RequirementFigure, HowComputed>> =
     formula: ['EIRP = 10 log P − L + G'],
     meaning: 'Transmitter power less the loss to the horn plus the predicted gain in the first wanted beam.',
     conventions: 'dBW, power in W; the share of time is not in it',
-    validity: 'As far as the predicted gain: no blockage by the mount, no mismatch beyond the loss that was entered.',
+    validity: 'As far as the predicted gain: blockage by the mount only where its radius is given, no mismatch beyond the loss that was entered.',
     source: 'IEEE Std 145 (terms, from memory); check transmission-figures.spec.ts',
   },
   'eirp-density': {
