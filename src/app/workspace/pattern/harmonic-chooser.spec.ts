@@ -17,7 +17,7 @@ describe('HarmonicChooser', () => {
     const modulation = { harmonic: 1, offsetMHz: 1, shownShare: 0.4053, harmonics: [{ order: 0, share: 0 }, { order: 1, share: 0.4053 }], wholePower: 1 };
     workspace.prediction.set({ head: { ...SAMPLE_HEAD, figures: { ...SAMPLE_FIGURES, modulation } }, cells: {} as PredictedCells, cuts: [], uv: null, of: design });
     await fixture.whenStable();
-    expect(text()).toContain('harmonic 1, steered, −3.92 dB');
+    expect(text()).toContain('1 steered, −3.92 dB');
     expect(text()).toContain('carrier, none');
     expect(text()).toContain('1.000 MHz off the carrier, with 40.5 %');
     expect(element.querySelector('select')?.value).toBe('1');

@@ -29,6 +29,7 @@ const OFFERED = 7;
   styles: `
     :host {
       display: grid;
+      grid-template-columns: minmax(0, 1fr);
       gap: var(--s2);
       min-width: 0;
     }
@@ -37,8 +38,10 @@ const OFFERED = 7;
       color: inherit;
       background: var(--raised);
       border: 1px solid var(--rule);
-      padding: var(--s1) var(--s2);
+      padding: var(--s1) 2px;
+      width: 100%;
       min-width: 0;
+      text-overflow: ellipsis;
     }
   `,
 })
@@ -59,7 +62,7 @@ export class HarmonicChooser {
     return (orders.includes(steered) ? orders : [...orders, steered]).map((order) => {
       const share = shares.get(order);
       const level = share === undefined ? '' : share < 1e-12 ? ', none' : `, ${figureText(10 * Math.log10(share), 2)} dB`;
-      return { order, label: `${order === 0 ? 'carrier' : `harmonic ${figureText(order, 0)}`}${order === steered ? ', steered' : ''}${level}` };
+      return { order, label: `${order === 0 ? 'carrier' : figureText(order, 0)}${order === steered ? ' steered' : ''}${level}` };
     });
   });
   protected readonly summary = computed(() => {
