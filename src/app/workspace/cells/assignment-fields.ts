@@ -46,7 +46,7 @@ const LIST = '/cells/fitFrequenciesGHz';
     </p>
     <slant-remark-list [pointers]="['/cells/rule', '/cells/fitFrequenciesGHz']" />
   `,
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
 })
 export class AssignmentFields {
   private readonly state = inject(WORKSPACE_STATE);

@@ -39,7 +39,7 @@ const PARTS = [
     <p class="hint">Each cell starts its sequence later by what gives the steered harmonic its wanted phase. The other harmonics go elsewhere: the Pattern sheet shows them one by one.</p>
     <slant-remark-list [pointers]="['/cells/edges', '/cells/harmonic']" />
   `,
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
 })
 export class ModulatedFields {
   private readonly state = inject(WORKSPACE_STATE);

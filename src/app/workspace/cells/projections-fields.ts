@@ -32,7 +32,7 @@ export function firstGoal(kind: PatternGoal['kind']): PatternGoal {
   imports: [ChoiceRow, DesignField, DesignTable, RemarkList],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './projections-fields.html',
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
 })
 export class ProjectionsFields {
   private readonly state = inject(WORKSPACE_STATE);

@@ -37,7 +37,7 @@ const TUNINGS = [
     }
     <p class="hint">{{ average() }}</p>
   `,
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
 })
 export class ResonantFields {
   private readonly state = inject(WORKSPACE_STATE);

@@ -38,7 +38,7 @@ const LAUNCH_OPTIONS = [
       Field exp(−(α + jkn)s) along its way, from a point also over √ρ. The index is the same at every frequency. The leaked share 1 − exp(−2αL) counts in the gain as the spillover of a horn does; there is no angle of incidence.
     </p>
   `,
-  styleUrls: ['../fields/sheet.scss', './illumination-sheet.scss'],
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss', './illumination-sheet.scss'],
 })
 export class GuidedWaveFields {
   private readonly state = inject(WORKSPACE_STATE);
