@@ -19,11 +19,14 @@ const seconds = (since) => `${((Date.now() - since) / 1000).toFixed(1)} s`.padSt
 
 /** Everything that must end with the test run, newest first. */
 const endings = [];
-let current = null;
+const running = new Set();
 let asked = null;
 
-/** The program that runs now, for the signal that may end it. */
-const remember = (child) => (current = child);
+/** The programs that run now, for the signal that may end them. */
+function remember(child) {
+  running.add(child);
+  child.once('exit', () => running.delete(child));
+}
 
 function readArguments(words) {
   const names = stages.map((stage) => stage.name);
@@ -119,7 +122,7 @@ async function main() {
 for (const signal of ['SIGINT', 'SIGTERM']) {
   process.on(signal, () => {
     asked = signal;
-    current?.kill('SIGTERM');
+    for (const child of running) child.kill('SIGTERM');
   });
 }
 
