@@ -1,6 +1,7 @@
 import { wrapRad } from '../units/angles';
 import { coPolarResponse, entryPhaseRad, type IncidenceWeights, type PolarResponse } from './cell-response';
 import type { EditionAtFrequency } from './edition-at-frequency';
+import type { PositionStates } from './position-states';
 import type { CellRule } from './reference-search';
 
 /** Errors nearer than this are equal, so that rounding does not decide a tie; the smallest index then stands. */
@@ -50,6 +51,25 @@ export function editionChooser(at: EditionAtFrequency, rule: CellRule): CellChoo
     return best;
   };
 }
+
+/** The same choice among the states of position n that are reckoned already: the place of the best in the list, -1 where there is none. */
+export function chooseListed(states: PositionStates, n: number, rule: CellRule, targetRad: number): number {
+  const errorOf = rule === 'nearest-phase' ? phaseErrorAt : complexErrorAt;
+  let best = -1;
+  let least = Infinity;
+  for (let i = states.offset[n]; i < states.offset[n + 1]; i++) {
+    const error = errorOf(states, i, targetRad);
+    if (best >= 0 && error >= least - SAME_ERROR && (error > least + SAME_ERROR || states.index[i] > states.index[best])) continue;
+    best = i;
+    least = Math.min(error, least);
+  }
+  return best;
+}
+
+const phaseErrorAt = (states: PositionStates, i: number, targetRad: number): number => Math.abs(wrapRad(states.phaseRad[i] - targetRad));
+
+const complexErrorAt = (states: PositionStates, i: number, targetRad: number): number =>
+  complexError({ magnitude: states.magnitude[i], phaseRad: states.phaseRad[i] }, targetRad);
 
 /** Size of the wrapped phase error. */
 export function phaseError(response: PolarResponse, targetRad: number): number {

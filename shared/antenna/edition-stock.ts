@@ -4,15 +4,16 @@ import { levelSubset } from './assignment/level-subset';
 import { candidateBins } from './candidate-bins';
 import { coPolarResponse, incidenceWeigher, type PolarResponse } from './cell-response';
 import type { CellAssignment, CellResponses, CellStock, ReferenceQuery, StockSite } from './cell-stock';
-import { editionChooser, type CellChooser } from './edition-choice';
+import { chooseListed, editionChooser, type CellChooser } from './edition-choice';
 import { crossResponseWarning } from './cross-response-warning';
 import { editionWarnings } from './edition-warnings';
 import { permittedNodes, type PermittedNodes } from './excluded-nodes';
 import { regionFilter, type RegionFilter } from './excluded-regions';
 import { InvalidDesign, type DesignFault } from './invalid-design';
 import { nearestPhaseTable } from './nearest-phase-table';
+import { MOST_KEPT_STATES, copyStates, keptPositionStates, listPositionStates, type PositionStates } from './position-states';
 import type { PreparedEdition } from './prepare-edition';
-import { searchStateReferenceRad, type CellRule, type CellStates } from './reference-search';
+import { newCellStates, searchStateReferenceRad, type CellRule, type CellStates } from './reference-search';
 import type { SiDesign } from './si-design';
 
 type EditionCells = Extract<Cells, { kind: 'edition' }>;
@@ -33,10 +34,11 @@ export interface EditionSite extends StockSite {
 /** Cells of a published edition, each at its own angle of incidence and with the illumination's polarisation. */
 export function editionStock(cells: EditionCells, site: StockSite): CellStock {
   const own = editionSite(cells, site);
+  const states = statesOfSteering(own);
   return {
-    assign: (targetRad) => (own.rule === 'band-fit' ? assignOverBand(own, targetRad) : assignCells(own, targetRad)),
+    assign: (targetRad) => (own.rule === 'band-fit' ? assignOverBand(own, targetRad) : states ? assignListed(states(), own.rule, targetRad) : assignCells(own, targetRad)),
     respond: (assignment, frequencyHz) => (frequencyHz === own.designFrequencyHz ? assignment : respondAt(own, assignment, frequencyHz)),
-    searchReferenceRad: (query) => (own.rule === 'band-fit' ? bandReferenceRad(bandSite(own, query.targetRad)) : searchReferenceRad(own, query)),
+    searchReferenceRad: (query) => (own.rule === 'band-fit' ? bandReferenceRad(bandSite(own, query.targetRad)) : searchReferenceRad(own, query, states?.())),
     warnings: (assignment, frequencyHz) => [...editionWarnings(own, assignment, frequencyHz), ...crossResponseWarning(own, assignment, frequencyHz)],
   };
 }
@@ -89,7 +91,7 @@ function assignCells(site: EditionSite, targetRad: Float64Array): CellAssignment
   const { light, edition, rule, permitted: { at } } = site;
   const weigh = incidenceWeigher(edition, site.si.illumination.polarisation);
   const candidatesAt = candidateLister(site, targetRad.length);
-  const choose = edition.sineSquaredNodes.length === 1 && at.nodeCount === 1 && at.entryCount === 1 && rule === 'nearest-phase' ? tableChooser(site) : editionChooser(at, rule);
+  const choose = answersAlike(site) && rule === 'nearest-phase' ? tableChooser(site) : editionChooser(at, rule);
   const assignment: CellAssignment = emptyAssignment(targetRad.length);
   const response: PolarResponse = { magnitude: 0, phaseRad: 0 };
   for (let n = 0; n < targetRad.length; n++) {
@@ -187,9 +189,39 @@ function assignOverBand(site: EditionSite, targetRad: Float64Array): CellAssignm
   return made;
 }
 
-function searchReferenceRad(site: EditionSite, query: ReferenceQuery): number {
+function searchReferenceRad(site: EditionSite, query: ReferenceQuery, listed: PositionStates | undefined): number {
   const capacity = site.edition.edition.cells.length;
-  return searchStateReferenceRad({ query, rule: site.rule, capacity, statesAt: stateFiller(site, site.permitted.at) });
+  const statesAt = listed ? (n: number, states: CellStates): void => copyStates(listed, n, states) : stateFiller(site, site.permitted.at);
+  return searchStateReferenceRad({ query, rule: site.rule, capacity, statesAt });
+}
+
+/**
+ * Lists what the cells answer at every position, once for all beams; nothing for panels too large to keep it and for
+ * editions whose cells answer alike at every angle, which a sorted table serves as well.
+ */
+function statesOfSteering(site: EditionSite): (() => PositionStates) | undefined {
+  const { edition, light, si, designFrequencyHz, allowed, permitted } = site;
+  const positionCount = light.incidenceRad.length;
+  const capacity = allowed.length;
+  if (positionCount * capacity > MOST_KEPT_STATES || answersAlike(site)) return undefined;
+  const list = (): PositionStates => listPositionStates({ positionCount, capacity, statesAt: stateFiller(site, permitted.at) }, newCellStates(capacity));
+  const key = JSON.stringify([si.panel, si.illumination, designFrequencyHz, [...allowed]]);
+  return () => keptPositionStates(edition, key, list);
+}
+
+/** One response per cell, whatever the angle. */
+const answersAlike = ({ edition, permitted: { at } }: EditionSite): boolean => edition.sineSquaredNodes.length === 1 && at.nodeCount === 1 && at.entryCount === 1;
+
+function assignListed(states: PositionStates, rule: CellRule, targetRad: Float64Array): CellAssignment {
+  const assignment = emptyAssignment(targetRad.length);
+  for (let n = 0; n < targetRad.length; n++) {
+    const best = chooseListed(states, n, rule, targetRad[n]);
+    assignment.cellIndex[n] = best < 0 ? -1 : states.index[best];
+    if (best < 0) continue;
+    assignment.magnitude[n] = states.magnitude[best];
+    assignment.phaseRad[n] = states.phaseRad[best];
+  }
+  return assignment;
 }
 
 /** Fills in the responses of all allowed cells at a position. */
