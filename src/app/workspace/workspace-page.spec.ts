@@ -91,6 +91,7 @@ describe('WorkspacePage', () => {
     expect(element.querySelector('slant-title-block')?.textContent).toContain('Draft, no revision yet');
     expect(text()).toContain('Saved 14:02:31 UTC');
     expect(text()).toContain('a sheet');
+    expect(element.querySelector('footer.foot')?.textContent).toContain(`of ${SHEETS.length}`);
   });
 
   it('opens sheets by their numbers, but not while somebody types', async () => {

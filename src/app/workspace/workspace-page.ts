@@ -65,6 +65,7 @@ export class WorkspacePage {
   protected readonly pending = inject(PendingEntries);
   protected readonly head = inject(SheetHeader).head;
 
+  protected readonly sheetCount = SHEETS.length;
   protected readonly railOpen = signal(false);
   protected readonly shortcuts = WORKSPACE_SHORTCUTS;
   protected readonly person = computed(() => this.session.current()?.person.name ?? '');
