@@ -40,6 +40,13 @@ describe('requirementLines', () => {
     expect(line).toMatchObject({ word: 'not-evaluated', value: '–', margin: null, reason: 'the scalar prediction has no cross-polar field' });
   });
 
+  it('tells a discrimination that is rounding alone as a bound', () => {
+    const verdict = { line: 'cross-polar' as const, sense: 'at-least' as const, limit: 25, unit: 'dB', value: 200, margin: 175, verdict: 'meets' as const };
+    const lineOf = (value: number) => requirementLines({ ...requirement, minCrossPolarDiscriminationDb: 25 }, { verdicts: [{ ...verdict, value, margin: value - 25 }], stale: false })[3];
+    expect(lineOf(200)).toMatchObject({ word: 'meets', value: '> 100.00 dB', margin: '> +75.00' });
+    expect(lineOf(31.5)).toMatchObject({ value: '31.50 dB', margin: '+6.50' });
+  });
+
   it('waits for the first prediction', () => {
     expect(words(requirementLines(requirement, { verdicts: null, stale: false }))['gain']).toBe('waiting');
   });

@@ -23,7 +23,10 @@ export interface VerdictSource {
   readonly stale: boolean;
 }
 
-type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; isSet(requirement: Requirement): boolean; isShown?(requirement: Requirement): boolean };
+type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; readonly most?: number; isSet(requirement: Requirement): boolean; isShown?(requirement: Requirement): boolean };
+
+/** Above this the cross-polar field vanishes by symmetry and the number is that of rounding. */
+const BY_SYMMETRY_DB = 100;
 
 const SHAPES: readonly LineShape[] = [
   {
@@ -58,8 +61,7 @@ const SHAPES: readonly LineShape[] = [
     name: 'Cross-polar discrimination',
     sign: '≥',
     field: { pointer: '/requirement/minCrossPolarDiscriminationDb', dimension: 'level', unit: 'dB' },
-    digits: 2,
-    unit: 'dB',
+    ...{ digits: 2, unit: 'dB', most: BY_SYMMETRY_DB },
     isSet: ({ minCrossPolarDiscriminationDb }) => minCrossPolarDiscriminationDb !== undefined,
   },
   { line: 'mask', name: 'Mask margin', sign: '≥', field: null, digits: 2, unit: 'dB', isSet: ({ mask }) => mask !== undefined },
@@ -99,16 +101,18 @@ const SHAPES: readonly LineShape[] = [
 
 /** The lines in their fixed order, those of mask, link and receiver where there is one; a line without a limit is never shown as met. */
 export function requirementLines(requirement: Requirement, { verdicts, stale }: VerdictSource): readonly RequirementLine[] {
-  return SHAPES.filter(({ isShown }) => isShown?.(requirement) ?? true).map(({ line, name, sign, field, digits, unit, isSet }) => {
+  return SHAPES.filter(({ isShown }) => isShown?.(requirement) ?? true).map(({ line, name, sign, field, digits, unit, most = Infinity, isSet }) => {
     const shape = { line, name, sign, field };
     if (!isSet(requirement)) return { ...shape, word: 'no-limit', value: '–', margin: null, reason: null };
     const verdict = verdicts?.find((candidate) => candidate.line === line);
     if (!verdict) return { ...shape, word: 'waiting', value: '–', margin: null, reason: 'No prediction yet' };
+    const beyond = typeof verdict.value === 'number' && verdict.value > most ? verdict.value - most : 0;
+    const over = beyond > 0 ? '> ' : '';
     return {
       ...shape,
       word: stale ? 'stale' : verdict.verdict,
-      value: typeof verdict.value === 'number' ? `${figureText(verdict.value, digits)} ${unit}` : '–',
-      margin: typeof verdict.margin === 'number' ? signedText(verdict.margin, digits) : null,
+      value: typeof verdict.value === 'number' ? `${over}${figureText(verdict.value - beyond, digits)} ${unit}` : '–',
+      margin: typeof verdict.margin === 'number' ? `${over}${signedText(verdict.margin - beyond, digits)}` : null,
       reason: verdict.reason ?? (typeof verdict.value === 'number' ? null : verdict.value.reason),
     };
   });
