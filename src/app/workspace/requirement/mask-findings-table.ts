@@ -38,7 +38,7 @@ import { findingsText, violationRows } from './mask-findings';
       </div>
     }
   `,
-  styleUrl: '../fields/sheet.scss',
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
 })
 export class MaskFindingsTable {
   readonly margin = input.required<Figures['maskMargin']>();

@@ -35,7 +35,7 @@ export function sizingRows(advice: SizingAdvice, design: DesignDocument): readon
     { name: 'Outline', value: String(designPartText(panel.outline)) },
     { name: 'Lattice', value: String(designPartText(panel.lattice)) },
     { name: 'Period limited by', value: `${advice.periodLimitedBy} of ${figureText(degFromRad(advice.periodLimitedBy === 'scan' ? advice.steepestScanRad : advice.largestIncidenceRad), 1)}°` },
-    { name: 'Horn at', value: horn ? `${designPartText(horn.positionMm)} mm` : '–' },
+    { name: 'Horn at', value: horn ? `${horn.positionMm.map((mm) => String(mm).replace('-', '−')).join(', ')} mm` : '–' },
     { name: 'Horn exponent q', value: horn ? String(horn.exponentE) : '–' },
     { name: 'Spillover and taper', value: `${figureText(powerRatioToDb(advice.illuminationEfficiency), 2)} dB` },
   ];

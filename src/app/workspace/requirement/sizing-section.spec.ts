@@ -10,6 +10,11 @@ describe('SizingSection', () => {
     expect(/Outline(rectangle [\d.]+ × [\d.]+ mm)/.exec(text())?.[1]).not.toBe(before);
   });
 
+  it('writes the place of the horn with true minus signs', async () => {
+    const { text } = await sheetRig(SizingSection);
+    expect(text()).toMatch(/Horn at−[\d.]+, 0, \d+(?:\.\d+)? mm/);
+  });
+
   it('puts outline, period and horn into the design as one step that can be undone', async () => {
     const { workspace, press } = await sheetRig(SizingSection);
     const before = workspace.design();
