@@ -15,6 +15,7 @@ import { figureText } from '../strip-figures';
 import { WORKSPACE_STATE } from '../workspace-state';
 import { GuidedWaveFields } from './guided-wave-fields';
 import { designOfIllumination } from './illumination-choices';
+import { illuminationNotes } from './illumination-notes';
 import { geometryFacts, illuminationSubtitle, predictedFacts } from './illumination-facts';
 import { amplitudeLayer, cellPlaces, incidenceLayer, incidentPhaseLayer } from './illumination-layers';
 import { IlluminationSketch } from './illumination-sketch';
@@ -65,6 +66,7 @@ export class IlluminationSheet {
     if (kind === 'guided-wave') return [HOW_LAWS_COMPUTED.guidedWave];
     return kind === 'horn' ? [HOW_LAWS_COMPUTED.blockage, HOW_LAWS_COMPUTED.specular] : [HOW_LAWS_COMPUTED.specular];
   });
+  protected readonly notes = computed(() => illuminationNotes(this.design()));
   protected readonly describe = (cell: number): string => {
     const maps = this.maps();
     if (!maps) return '';

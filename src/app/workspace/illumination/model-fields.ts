@@ -27,7 +27,7 @@ const CELL_FACTORS = [
   imports: [ChoiceRow, DesignField, RemarkList],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './model-fields.html',
-  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
+  styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss', './illumination-sheet.scss'],
 })
 export class ModelFields {
   private readonly state = inject(WORKSPACE_STATE);
