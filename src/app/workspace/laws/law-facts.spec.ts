@@ -53,7 +53,7 @@ describe('projections and boards', () => {
 
   it('tell the peak of a board, its bound and how it was found', () => {
     const diffuse = { peakDb: -9.1, peakThetaDeg: 21.4, peakPhiDeg: 45, boundDb: -12.04, boundBy: 'parseval' as const, boardPeakDb: -9.05, samples: 64, method: 'exhaustive' as const, equals: 64 };
-    expect(lawFacts({ ...SAMPLE_FIGURES, diffuse }).map(({ value }) => value)).toEqual(['−9.10 dB at θ 21.4°, φ 45.0°', '−12.04 dB', '−9.05 dB', 'every board tried, 64 reach it']);
+    expect(lawFacts({ ...SAMPLE_FIGURES, diffuse }).map(({ value }) => value)).toEqual(['−9.10 dB at θ 21.4°, φ 45.0°', '−12.04 dB', '−9.05 dB', 'every board tried, 64 with this peak']);
   });
 });
 

@@ -35,7 +35,7 @@ function diffuseFacts(board: Figures['diffuse']): readonly LawFact[] {
     { name: 'Peak against a metal plate', value: `${shown(board.peakDb, 2, ' dB')} at θ ${figureText(board.peakThetaDeg, 1)}°, φ ${figureText(board.peakPhiDeg, 1)}°` },
     { name: board.boundBy === 'parseval' ? 'No board lies below (Parseval)' : 'No board lies below (energy of the hemisphere)', value: shown(board.boundDb, 2, ' dB') },
     { name: `Peak in the search, ${board.samples} × ${board.samples} samples`, value: shown(board.boardPeakDb, 2, ' dB') },
-    { name: 'Search', value: board.method === 'exhaustive' ? `every board tried, ${figureText(board.equals, 0)} reach it` : `descent from six seeded boards, ${figureText(board.equals, 0)} of which reach it` },
+    { name: 'Search', value: board.method === 'exhaustive' ? `every board tried, ${figureText(board.equals, 0)} with this peak` : `descent from six seeded boards, ${figureText(board.equals, 0)} with this peak` },
   ];
 }
 

@@ -32,6 +32,7 @@ import { axialFigure, costFigure, lawFacts } from './law-facts';
     }
   `,
   styleUrl: '../fields/sheet.scss',
+  styles: 'section { margin-top: var(--s5); }',
 })
 export class LawOutcome {
   private readonly state = inject(WORKSPACE_STATE);
