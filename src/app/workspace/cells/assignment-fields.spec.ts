@@ -26,7 +26,7 @@ describe('AssignmentFields', () => {
   it('limits the number of different cells and the step to a neighbour, and lets both go', async () => {
     const { workspace, enter } = await sheetRig(AssignmentFields, design);
     await enter('Different cells, at most', '8');
-    await enter('Step to a neighbour, at most', '200 um');
+    await enter('Neighbour step, at most', '200 um');
     expect(workspace.design().cells).toMatchObject({ levels: 8, neighbourStepMm: 0.2 });
     await enter('Different cells, at most', '');
     expect(workspace.design().cells).not.toHaveProperty('levels');

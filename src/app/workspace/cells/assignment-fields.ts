@@ -38,7 +38,7 @@ const LIST = '/cells/fitFrequenciesGHz';
     }
     <div class="fields">
       <slant-design-field pointer="/cells/levels" label="Different cells, at most" dimension="number" [whole]="true" [optional]="true" [stepSize]="1" />
-      <slant-design-field pointer="/cells/neighbourStepMm" label="Step to a neighbour, at most" dimension="length" unit="mm" [optional]="true" />
+      <slant-design-field pointer="/cells/neighbourStepMm" label="Neighbour step, at most" dimension="length" unit="mm" [optional]="true" />
     </div>
     <p class="hint">
       Nearest phase takes the cell whose phase comes nearest; least complex error counts its loss as well; band fit counts both over all its frequencies, with a common phase of the panel free at each, which costs nothing. Fewer

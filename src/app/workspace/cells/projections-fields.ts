@@ -33,6 +33,7 @@ export function firstGoal(kind: PatternGoal['kind']): PatternGoal {
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './projections-fields.html',
   styleUrls: ['../fields/sheet.scss', '../fields/field-rows.scss'],
+  styles: '@media (max-width: 640px) { .sector { grid-template-columns: 1fr 1fr; } }',
 })
 export class ProjectionsFields {
   private readonly state = inject(WORKSPACE_STATE);
