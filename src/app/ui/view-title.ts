@@ -39,6 +39,17 @@ import { ChangeDetectionStrategy, Component, input } from '@angular/core';
       text-overflow: ellipsis;
       white-space: nowrap;
     }
+    /* On a phone what does not fit goes on below at the right, so that neither title nor unit is cut. */
+    @media (max-width: 640px) {
+      :host {
+        flex-wrap: wrap;
+        justify-content: flex-end;
+        gap: 0 8px;
+      }
+      .unit {
+        white-space: normal;
+      }
+    }
   `,
   changeDetection: ChangeDetectionStrategy.OnPush,
 })
