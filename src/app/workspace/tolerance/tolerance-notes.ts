@@ -4,7 +4,7 @@ import type { ToleranceResult } from '../../../../shared/model/tolerance-run';
 export const SHEET_NOTES = [
   'Array theory under assumed spreads, not a measurement. At the design frequency; contributors vary independently.',
   'The trials take the scalar model; where the design asks for the vector model, they take what each cell sends into the first beam and start from the gain of that model.',
-  'Spreads marked "common practice" have no source: put in what your board shop and your mount hold.',
+  'Spreads marked “common practice” have no source: put in what your board shop and your mount hold.',
 ] as const;
 
 /** What is to be said of the result of one run. */
