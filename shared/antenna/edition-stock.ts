@@ -200,13 +200,18 @@ function searchReferenceRad(site: EditionSite, query: ReferenceQuery, listed: Po
  * editions whose cells answer alike at every angle, which a sorted table serves as well.
  */
 function statesOfSteering(site: EditionSite): (() => PositionStates) | undefined {
-  const { edition, light, si, designFrequencyHz, allowed, permitted } = site;
+  const { edition, light, allowed, permitted } = site;
   const positionCount = light.incidenceRad.length;
   const capacity = allowed.length;
   if (positionCount * capacity > MOST_KEPT_STATES || answersAlike(site)) return undefined;
   const list = (): PositionStates => listPositionStates({ positionCount, capacity, statesAt: stateFiller(site, permitted.at) }, newCellStates(capacity));
-  const key = JSON.stringify([si.panel, si.illumination, designFrequencyHz, [...allowed]]);
-  return () => keptPositionStates(edition, key, list);
+  const key = steeringKey(site);
+  return () => keptPositionStates(edition, key, light, list);
+}
+
+/** Names all that the answers of the cells depend on, next to the edition and the angles. */
+export function steeringKey({ si, designFrequencyHz, allowed }: EditionSite): string {
+  return [si.illumination.polarisation, designFrequencyHz, ...allowed].join(' ');
 }
 
 /** One response per cell, whatever the angle. */

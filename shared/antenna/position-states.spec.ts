@@ -62,13 +62,18 @@ describe('states kept while the beam is steered', () => {
   it('lists a panel once, and forgets the one not asked for the longest of three', () => {
     const edition = prepareEdition(exampleEdition());
     const lists: string[] = [];
-    const ask = (key: string): PositionStates =>
-      keptPositionStates(edition, key, () => {
+    const light = { incidenceRad: Float64Array.of(0.1, 0.2), azimuthRad: Float64Array.of(1, 2) };
+    const ask = (key: string, lit = light): PositionStates =>
+      keptPositionStates(edition, key, lit, () => {
         lists.push(key);
         return listed;
       });
     for (const key of ['a', 'b', 'a', 'c', 'a', 'b']) ask(key);
     expect(lists).toEqual(['a', 'b', 'c', 'b']);
+    ask('b', { ...light, incidenceRad: Float64Array.of(0.1, 0.2) });
+    ask('b', { ...light, incidenceRad: Float64Array.of(0.1, 0.3) });
+    ask('b', { incidenceRad: Float64Array.of(0.1), azimuthRad: Float64Array.of(1) });
+    expect(lists).toEqual(['a', 'b', 'c', 'b', 'b', 'b']);
   });
 
   it('places after any other beam, panel or horn what a fresh edition places', () => {

@@ -1,10 +1,8 @@
-import type { PreparedEdition } from './prepare-edition';
+import { editionKeeper } from './kept-by-edition';
 import type { CellStates } from './reference-search';
 
 /** More states than this are not kept: 12 MB for each panel. */
 export const MOST_KEPT_STATES = 600_000;
-/** A designer steers one panel, seldom beside another. */
-const PANELS_KEPT = 2;
 
 /** What every cell allowed at each position answers there: everything about the choice that the wanted beam does not change. */
 export interface PositionStates {
@@ -50,21 +48,4 @@ export function copyStates(from: PositionStates, n: number, to: CellStates): voi
   }
 }
 
-const kept = new WeakMap<PreparedEdition, Map<string, PositionStates>>();
-
-/**
- * The states of a panel, from those kept where the same edition was asked for the same `key`: panel, illumination,
- * frequency and cells allowed. While only the beam moves, nothing of it is reckoned twice.
- */
-export function keptPositionStates(edition: PreparedEdition, key: string, list: () => PositionStates): PositionStates {
-  const known = kept.get(edition) ?? new Map<string, PositionStates>();
-  kept.set(edition, known);
-  const found = known.get(key) ?? list();
-  known.delete(key);
-  known.set(key, found);
-  for (const oldest of known.keys()) {
-    if (known.size <= PANELS_KEPT) break;
-    known.delete(oldest);
-  }
-  return found;
-}
+export const keptPositionStates = editionKeeper<PositionStates>();

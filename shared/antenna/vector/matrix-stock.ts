@@ -3,7 +3,7 @@ import type { Warning } from '../../model/figures';
 import { wrapRad } from '../../units/angles';
 import type { CellAssignment, CellResponses } from '../cell-stock';
 import { complexError } from '../edition-choice';
-import { allowedLister, editionSite, type EditionSite } from '../edition-stock';
+import { allowedLister, editionSite, steeringKey, type EditionSite } from '../edition-stock';
 import { editionWarnings } from '../edition-warnings';
 import { permittedNodes } from '../excluded-nodes';
 import { regionFilter } from '../excluded-regions';
@@ -11,6 +11,7 @@ import { searchStateReferenceRad } from '../reference-search';
 import { arrivingXY, newCoPolarWeights, type CoPolarWeights, type MatrixAxes } from './co-polar-weights';
 import { crossTermsGiven } from './cross-terms';
 import { allNodes, matrixSampler, newMatrixSample, type MatrixSample, type ThetaRule } from './matrix-response';
+import { MOST_KEPT_MATRICES, keptPositionMatrices, listPositionMatrices, readMatrix, type PositionMatrices } from './position-matrices';
 import { waveWeights } from './reradiation';
 import { newVectorWaves, type VectorWaves } from './vector-light';
 import type { VectorSite, VectorStock } from './vector-stock';
@@ -68,6 +69,8 @@ interface PositionSampler {
 function positionSampler(site: MatrixSite, frequencyHz: number): PositionSampler {
   const { light, edition, thetaRule, designFrequencyHz } = site;
   if (frequencyHz === designFrequencyHz) {
+    const listed = matricesOfSteering(site);
+    if (listed) return listedSampler(listed);
     const sampler = matrixSampler(edition, site.permitted, thetaRule);
     return { at: (n) => sampler.setAngle(light.incidenceRad[n], light.azimuthRad[n]), sample: sampler.sample };
   }
@@ -84,6 +87,26 @@ function positionSampler(site: MatrixSite, frequencyHz: number): PositionSampler
     },
     sample: (cell, out) => (barred[cell] ? given : permitted).sample(cell, out),
   };
+}
+
+function listedSampler(listed: PositionMatrices): PositionSampler {
+  let position = 0;
+  return {
+    at: (n) => {
+      position = n;
+    },
+    sample: (cell, out) => readMatrix(listed, position, cell, out),
+  };
+}
+
+/** The responses at every position, reckoned once for all beams; nothing for panels too large to keep them. */
+function matricesOfSteering(site: MatrixSite): PositionMatrices | undefined {
+  const { light, edition, permitted, thetaRule, allowed } = site;
+  if (light.incidenceRad.length * allowed.length > MOST_KEPT_MATRICES) return undefined;
+  const cellCount = edition.edition.cells.length;
+  return keptPositionMatrices(edition, `${thetaRule} ${steeringKey(site)}`, light, () =>
+    listPositionMatrices({ sampler: matrixSampler(edition, permitted, thetaRule), incidenceRad: light.incidenceRad, azimuthRad: light.azimuthRad, allowed, cellCount }, newMatrixSample()),
+  );
 }
 
 /** What a cell sends into the beam from a position, at a frequency. */
