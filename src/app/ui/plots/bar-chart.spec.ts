@@ -31,6 +31,17 @@ describe('BarChart', () => {
     expect(element.textContent).toContain('no horn');
   });
 
+  it('keeps a reason on the roomier side of zero, and what does not fit in words alone', async () => {
+    const reason = 'only the cells of an edition have a geometry that an etch could change';
+    fixture.componentRef.setInput('bars', [{ name: 'Bow', value: -0.4, text: '−0.40 dB' }, { name: 'Etch', value: null, text: reason }]);
+    await fixture.whenStable();
+    const shown = [...element.querySelectorAll('text.end:not(.words)')].at(-1);
+    expect(shown?.textContent).toMatch(/^only the cells of an edition have .*…$/);
+    // Zero stands 8 px from the right edge of 400 px.
+    expect(Number(shown?.getAttribute('x'))).toBeCloseTo(387, 6);
+    expect(element.querySelector('svg')?.getAttribute('aria-label')).toContain(reason);
+  });
+
   it('gives its values as a table', () => {
     expect(fixture.componentInstance.exportTable().columns).toEqual([
       { head: 'name', values: ['Bow', 'Etch', 'Feed'] },

@@ -20,6 +20,8 @@ const ROW_PX = 20;
 const MARGIN = { top: 4, bottom: 32, right: 8 };
 const LETTER_PX = 6.2;
 const VALUE_ROOM = 76;
+/** Of the mono face in which values and reasons stand. */
+const FIGURE_LETTER_PX = 6.7;
 
 /** Named bars from a common zero, one below the other, with their values at their ends. */
 @Component({
@@ -54,11 +56,21 @@ export class BarChart implements ExportablePlot {
     this.bars().map(({ name, value, text }, i) => {
       const y = MARGIN.top + i * ROW_PX;
       const [end, zero] = [axisPx(this.x(), value ?? 0), this.zeroPx()];
-      const leftward = (value ?? 0) < 0;
-      return { name, text, missing: value === null, x: Math.min(end, zero), width: Math.max(value === null ? 0 : 1, Math.abs(end - zero)), y: y + 4, baseline: y + 14, textX: leftward ? end - 5 : end + 5, leftward };
+      if (value === null) return { name, missing: true, x: zero, width: 0, y: y + 4, baseline: y + 14, ...this.reasonBeside(text) };
+      const leftward = value < 0;
+      return { name, text, missing: false, x: Math.min(end, zero), width: Math.max(1, Math.abs(end - zero)), y: y + 4, baseline: y + 14, textX: leftward ? end - 5 : end + 5, leftward };
     }),
   );
   protected readonly summary = computed(() => `${this.label()}: ${this.bars().map(({ name, text }) => `${name} ${text}`).join('; ')}`);
+
+  /** A reason stands where a bar would, on the roomier side of zero; what finds no room there is in the summary and the table. */
+  private reasonBeside(reason: string): { readonly text: string; readonly textX: number; readonly leftward: boolean } {
+    const zero = this.zeroPx();
+    const [left, right] = [zero - this.nameRoom(), this.width() - zero];
+    const letters = Math.floor((Math.max(left, right) - 10) / FIGURE_LETTER_PX);
+    const text = reason.length <= letters ? reason : `${reason.slice(0, Math.max(0, letters - 1)).trimEnd()}…`;
+    return left > right ? { text, textX: zero - 5, leftward: true } : { text, textX: zero + 5, leftward: false };
+  }
 
   async exportPicture(): Promise<PlotPicture> {
     const drawing = this.drawing().nativeElement;
