@@ -16,14 +16,14 @@ import type { YieldRow } from './tolerance-rows';
             <th scope="col">P5</th>
             <th scope="col">P50</th>
             <th scope="col">P95</th>
-            <th scope="col">Panels that meet it</th>
-            <th scope="col">95 % interval</th>
+            <th scope="col" class="narrow">Panels that meet it</th>
+            <th scope="col" class="narrow">95 % interval</th>
           </tr>
         </thead>
         <tbody>
           @for (row of rows(); track row.name) {
             <tr>
-              <td class="text plain">{{ row.name }}</td>
+              <td class="text name">{{ row.name }}</td>
               <td class="plain">{{ row.limit }}</td>
               <td class="plain">{{ row.nominal }}</td>
               @if (row.reason; as reason) {
@@ -32,8 +32,8 @@ import type { YieldRow } from './tolerance-rows';
                 <td class="plain">{{ row.p5 }}</td>
                 <td class="plain">{{ row.p50 }}</td>
                 <td class="plain">{{ row.p95 }}</td>
-                <td class="plain">{{ row.share }}</td>
-                <td class="plain" [class.pass]="row.word === 'high'" [class.fail]="row.word === 'low'">{{ row.interval }}</td>
+                <td class="narrow">{{ row.share }}</td>
+                <td class="narrow" [class.pass]="row.word === 'high'" [class.fail]="row.word === 'low'">{{ row.interval }}</td>
               }
             </tr>
           } @empty {
@@ -53,6 +53,14 @@ import type { YieldRow } from './tolerance-rows';
     }
     .plain {
       white-space: nowrap;
+    }
+    /* Rather two lines than an interval out of sight. */
+    .name,
+    .narrow {
+      white-space: normal;
+    }
+    .name {
+      min-width: 88px;
     }
     .why {
       font-size: var(--size-label);
