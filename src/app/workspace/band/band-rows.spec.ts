@@ -9,6 +9,11 @@ describe('rows of a band', () => {
     ]);
   });
 
+  it('tell a discrimination that is rounding alone as a bound', () => {
+    const line = { ...SAMPLE_BAND.lines[1], value: 200, margin: 175 };
+    expect(lineRows({ ...SAMPLE_BAND, lines: [line, { ...line, value: 30, margin: 5 }] }).map(({ value, margin }) => [value, margin])).toEqual([['> 100.00', '> +75.00'], ['30.00', '+5.00']]);
+  });
+
   it('say what is not reached and how wide the band is at least', () => {
     expect(bandwidthRows(SAMPLE_BAND)).toEqual([
       { name: '1\u00a0dB', from: '27.333', to: '28.435', width: '1.102 (3.9 %)', reason: null },

@@ -2,6 +2,7 @@ import type { BandLine, BandPoint, BandResult, Extreme, GainBandwidth } from '..
 import type { Figure, VerdictWord } from '../../../../shared/model/figures';
 import type { PlotTable } from '../../ui/plots/plot-export';
 import { numberText, signedNumberText } from '../../ui/plots/plot-text';
+import { BY_SYMMETRY_DB } from '../by-symmetry';
 import { lineName } from '../sheet-states';
 
 /** A line of the requirement over the whole band. */
@@ -21,12 +22,20 @@ export function lineRows({ lines }: BandResult): readonly BandLineRow[] {
     line: line.line,
     name: capital(lineName(line.line)),
     limit: `${line.sense === 'at-least' ? '≥' : '≤'} ${numberText(line.limit, 2)} ${line.unit}`,
-    value: typeof line.value === 'number' ? numberText(line.value, digitsOf(line)) : '–',
-    margin: typeof line.margin === 'number' ? signedNumberText(line.margin, digitsOf(line)) : '–',
+    ...valueTexts(line),
     at: gigahertz(line.frequencyGHz),
     word: line.verdict,
     reason: line.reason ?? null,
   }));
+}
+
+function valueTexts(line: BandLine): Pick<BandLineRow, 'value' | 'margin'> {
+  const beyond = line.line === 'cross-polar' && typeof line.value === 'number' ? Math.max(0, line.value - BY_SYMMETRY_DB) : 0;
+  const over = beyond > 0 ? '> ' : '';
+  return {
+    value: typeof line.value === 'number' ? `${over}${numberText(line.value - beyond, digitsOf(line))}` : '–',
+    margin: typeof line.margin === 'number' ? `${over}${signedNumberText(line.margin - beyond, digitsOf(line))}` : '–',
+  };
 }
 
 const digitsOf = ({ unit }: BandLine): number => (unit === '°' ? 3 : 2);

@@ -1,6 +1,7 @@
 import type { Figure, Figures } from '../../../../shared/model/figures';
 import type { GainBudgetFigures } from '../../../../shared/model/vector-figures';
 import { numberText } from '../../ui/plots/plot-text';
+import { BY_SYMMETRY_DB } from '../by-symmetry';
 
 /** One line of a small table. */
 export interface VectorRow {
@@ -61,9 +62,6 @@ export function crossPolarRows({ vector }: Figures): readonly VectorRow[] {
     ...(isLinear ? [] : [row('Axial ratio at the beam', axialRatioDb)]),
   ];
 }
-
-/** Above this the cross-polar field vanishes by symmetry and the number is that of rounding. */
-const BY_SYMMETRY_DB = 100;
 
 function row(name: string, figure: Figure): VectorRow {
   if (typeof figure !== 'number') return { name, value: '–', reason: figure.reason };

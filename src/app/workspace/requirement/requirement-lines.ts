@@ -1,6 +1,7 @@
 import type { Requirement } from '../../../../shared/model/design-document';
 import type { Verdict } from '../../../../shared/model/figures';
 import type { QuantityDimension } from '../../../../shared/units/quantity';
+import { BY_SYMMETRY_DB } from '../by-symmetry';
 import { figureText, signedText } from '../strip-figures';
 
 /** A line of the requirement with its limit field and what the prediction says of it. */
@@ -24,9 +25,6 @@ export interface VerdictSource {
 }
 
 type LineShape = Pick<RequirementLine, 'line' | 'name' | 'sign' | 'field'> & { readonly digits: number; readonly unit: string; readonly most?: number; isSet(requirement: Requirement): boolean; isShown?(requirement: Requirement): boolean };
-
-/** Above this the cross-polar field vanishes by symmetry and the number is that of rounding. */
-const BY_SYMMETRY_DB = 100;
 
 const SHAPES: readonly LineShape[] = [
   {
