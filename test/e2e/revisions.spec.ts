@@ -101,6 +101,23 @@ describe('revisions of a panel', () => {
     expect(problems).toEqual([]);
   });
 
+  it('are steered to, frozen and compared on a phone in the dark', async () => {
+    const panel = await newPanel();
+    const { page, problems } = await stage.pageOf('designer', { size: 'phone', theme: 'dark' });
+    const phone = new WorkspaceScreen(page);
+    await phone.open(panel.id, 'pattern');
+    await phone.freeze(1, firstMessage);
+    await page.getByLabel('Beam θ').fill('22');
+    await page.getByLabel('Beam θ').press('Enter');
+    await phone.settled(async () => (await phone.marker(/^\s*1\s*peak/)).angleDeg, (angle) => Math.abs(angle - 22) < 0.25);
+    await phone.freeze(2, secondMessage);
+    await page.goto(`/panels/${panel.id}/revisions`);
+    await page.getByRole('row').filter({ hasText: secondMessage }).getByRole('link', { name: 'Compare revision 2 with its parent' }).click();
+    await page.getByText('Parameters that differ').waitFor();
+    await page.locator('slant-compared-cuts .main-svg').first().waitFor();
+    expect(problems).toEqual([]);
+  });
+
   it('are frozen and compared by the keyboard alone', async () => {
     const { page, problems } = designer;
     const { panel, first } = await frozenTwice();
