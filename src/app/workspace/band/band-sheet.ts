@@ -10,10 +10,10 @@ import { EntryBox } from '../fields/entry-box';
 import type { RefusedEntry } from '../fields/entry-box';
 import { fieldText } from '../fields/field-text';
 import { SheetNotes } from '../fields/sheet-notes';
-import { queryLink } from '../query-link';
 import { RunDesk } from '../runs/run-desk';
-import { RunHistory } from '../runs/run-history';
-import { RunProgressBar } from '../runs/run-progress-bar';
+import { RunRecords } from '../runs/run-records';
+import { RunSheet } from '../runs/run-sheet';
+import { RunStarter } from '../runs/run-starter';
 import { sourceText } from '../runs/run-text';
 import { SheetHeader } from '../sheet-header';
 import { sheetNumber } from '../sheets';
@@ -34,30 +34,21 @@ const NOTES = [
 /** The panel over its band: a run of its own, because every frequency is a prediction. */
 @Component({
   selector: 'slant-band-sheet',
-  imports: [BandOutcome, CheckField, ChoiceTabs, EmptyState, EntryBox, RunHistory, RunProgressBar, SheetNotes, ViewTitle],
-  providers: [RunDesk],
+  imports: [BandOutcome, CheckField, ChoiceTabs, EmptyState, EntryBox, RunRecords, RunStarter, SheetNotes, ViewTitle],
+  providers: [RunDesk, RunSheet],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './band-sheet.html',
-  styleUrls: ['../fields/sheet.scss', './band-sheet.scss'],
+  styleUrls: ['../fields/sheet.scss', './band-sheet.scss', '../runs/run-result.scss'],
 })
 export class BandSheet {
   private readonly state = inject(WORKSPACE_STATE);
   protected readonly desk = inject(RunDesk);
-  protected readonly link = queryLink<{ readonly run: string | null }>(
-    (query) => ({ run: query.get('run') }),
-    ({ run }) => ({ run }),
-  );
+  protected readonly runs = inject(RunSheet);
   protected readonly form = signal<BandForm>(FIRST_FORM);
   protected readonly refused = signal<Partial<Record<NumberField, RefusedEntry>>>({});
-  /** "draft" or the id of the latest revision. */
-  protected readonly subject = signal('draft');
   protected readonly notes = NOTES;
   protected readonly design = this.state.design;
   protected readonly hasHorn = computed(() => this.design().illumination.kind === 'horn');
-  protected readonly subjects = computed(() => {
-    const latest = this.state.panel()?.latestRevision;
-    return [{ id: 'draft', label: 'Draft' }, ...(latest ? [{ id: latest.id, label: `Revision ${latest.number}` }] : [])];
-  });
   protected readonly placeholders = computed(() => {
     const band = this.design().requirement.bandGHz;
     return { fromGHz: band ? String(band[0]) : '', toGHz: band ? String(band[1]) : '' };
@@ -76,20 +67,6 @@ export class BandSheet {
     if (other === null || other.id === this.desk.shown()?.id || other.answer.kind !== 'band' || other.answer.result === null) return null;
     return { label: sourceText(other), result: other.answer.result };
   });
-  protected readonly staleText = computed(() => {
-    const shown = this.desk.shown();
-    return shown !== null && this.desk.stale() ? `Inputs changed: this is ${sourceText(shown)}, not the draft as it stands.` : null;
-  });
-  protected readonly draftHash = computed(() => this.state.panel()?.draftHash ?? null);
-  protected readonly heading = computed(() => {
-    const [panel, shown] = [this.state.panel(), this.desk.shown()];
-    return {
-      subject: panel ? `${panel.project.name}, ${panel.name}` : '',
-      state: shown ? (shown.source.kind === 'revision' ? `Revision ${shown.source.number}` : `Draft, save ${shown.source.version}`) : '',
-      hash: shown?.contentHash ?? '',
-      date: (shown?.finishedAt ?? new Date().toISOString()).slice(0, 10),
-    };
-  });
 
   constructor() {
     const header = inject(SheetHeader);
@@ -98,15 +75,7 @@ export class BandSheet {
       const subtitle = band ? `${band.fromGHz} to ${band.toGHz} GHz, designed at ${this.design().requirement.designFrequencyGHz} GHz` : 'no band yet';
       header.show({ number: sheetNumber('band'), title: 'Band', subtitle });
     });
-    const panelId = computed(() => this.state.panel()?.id ?? null);
-    effect(() => {
-      const id = panelId();
-      if (id !== null) untracked(() => void this.desk.open(id, 'band', this.link().run));
-    });
-    effect(() => {
-      const run = this.desk.shown()?.id ?? null;
-      if (run !== null) untracked(() => this.link.set({ run }));
-    });
+    this.runs.follow('band');
     effect(() => {
       const answer = this.desk.shown()?.answer;
       // What somebody has typed stays; untouched boxes show what the result was asked.
@@ -139,9 +108,7 @@ export class BandSheet {
   }
 
   protected async start(): Promise<void> {
-    if (this.whyNot() !== null) return;
-    const subject = this.subject();
-    await this.desk.start({ kind: 'band', ...(subject === 'draft' ? {} : { revisionId: subject }), parameters: bandParametersOf(this.form(), this.design()) });
+    await this.desk.start({ kind: 'band', ...this.runs.source(), parameters: bandParametersOf(this.form(), this.design()) });
   }
 
   private accept(part: Partial<BandForm>, field: NumberField): void {
