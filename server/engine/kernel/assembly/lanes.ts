@@ -24,6 +24,12 @@ export function productIm<T>(a: v128, b: v128, c: v128, s: v128): v128 {
   return v128.add<T>(v128.mul<T>(a, s), v128.mul<T>(b, c));
 }
 
+/** Stores the product of a + jb and c + js, its two parts at their two places. */
+export function storeProduct<T>(re: usize, im: usize, a: v128, b: v128, c: v128, s: v128): void {
+  v128.store(re, productRe<T>(a, b, c, s));
+  v128.store(im, productIm<T>(a, b, c, s));
+}
+
 /** |a + jb|^2. */
 export function powerOf<T>(a: v128, b: v128): v128 {
   return v128.add<T>(v128.mul<T>(a, a), v128.mul<T>(b, b));

@@ -1,4 +1,4 @@
-import { productIm, productRe } from './lanes';
+import { storeProduct } from './lanes';
 import { columnTransform, lineTransform } from './line-transform';
 import { PlaneJob } from './plane-job';
 
@@ -16,8 +16,7 @@ function turnLine<T>(re: usize, im: usize, turns: usize, bytes: usize): void {
   // Lines shorter than a vector are padded to one.
   for (let l: usize = 0; l < bytes; l += 16) {
     const a = v128.load(re + l), b = v128.load(im + l), c = v128.load(turns + l), s = v128.load(turns + bytes + l);
-    v128.store(re + l, productRe<T>(a, b, c, s));
-    v128.store(im + l, productIm<T>(a, b, c, s));
+    storeProduct<T>(re + l, im + l, a, b, c, s);
   }
 }
 
@@ -45,8 +44,7 @@ function turnedColumns<T>(job: PlaneJob, column: usize, out: usize): void {
     const c = v128.load_splat<T>(turn), s = v128.load_splat<T>(turn + sines);
     for (let l: usize = 0; l < block; l += 16) {
       const a = v128.load(re + l), b = v128.load(im + l);
-      v128.store(toRe + l, productRe<T>(a, b, c, s));
-      v128.store(toIm + l, productIm<T>(a, b, c, s));
+      storeProduct<T>(toRe + l, toIm + l, a, b, c, s);
     }
     re += block;
     im += block;

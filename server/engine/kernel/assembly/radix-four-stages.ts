@@ -1,4 +1,4 @@
-import { add, productIm, productRe, sub } from './lanes';
+import { add, productIm, productRe, storeProduct, sub } from './lanes';
 
 /*
  * Stockham's self-sorting transform, radix four (C. Van Loan, Computational Frameworks for the Fast Fourier Transform,
@@ -34,12 +34,9 @@ function quarterFilled<T>(xRe: usize, xIm: usize, apart: usize, filled: i32, yRe
       const a = v128.load(xRe + q), b = v128.load(xIm + q), re = yRe + q, im = yIm + q;
       v128.store(re, a);
       v128.store(im, b);
-      v128.store(re + stride, productRe<T>(a, b, c1, s1));
-      v128.store(im + stride, productIm<T>(a, b, c1, s1));
-      v128.store(re + 2 * stride, productRe<T>(a, b, c2, s2));
-      v128.store(im + 2 * stride, productIm<T>(a, b, c2, s2));
-      v128.store(re + 3 * stride, productRe<T>(a, b, c3, s3));
-      v128.store(im + 3 * stride, productIm<T>(a, b, c3, s3));
+      storeProduct<T>(re + stride, im + stride, a, b, c1, s1);
+      storeProduct<T>(re + 2 * stride, im + 2 * stride, a, b, c2, s2);
+      storeProduct<T>(re + 3 * stride, im + 3 * stride, a, b, c3, s3);
     }
     xRe += apart;
     xIm += apart;
@@ -72,16 +69,13 @@ function halfFilled<T>(xRe: usize, xIm: usize, apart: usize, filled: i32, yRe: u
       v128.store(re, add<T>(aRe, bRe));
       v128.store(im, add<T>(aIm, bIm));
       let u = sub<T>(aRe, bIm), v = add<T>(aIm, bRe);
-      v128.store(re + stride, productRe<T>(u, v, c1, s1));
-      v128.store(im + stride, productIm<T>(u, v, c1, s1));
+      storeProduct<T>(re + stride, im + stride, u, v, c1, s1);
       u = sub<T>(aRe, bRe);
       v = sub<T>(aIm, bIm);
-      v128.store(re + 2 * stride, productRe<T>(u, v, c2, s2));
-      v128.store(im + 2 * stride, productIm<T>(u, v, c2, s2));
+      storeProduct<T>(re + 2 * stride, im + 2 * stride, u, v, c2, s2);
       u = add<T>(aRe, bIm);
       v = sub<T>(aIm, bRe);
-      v128.store(re + 3 * stride, productRe<T>(u, v, c3, s3));
-      v128.store(im + 3 * stride, productIm<T>(u, v, c3, s3));
+      storeProduct<T>(re + 3 * stride, im + 3 * stride, u, v, c3, s3);
     }
     xRe += apart;
     xIm += apart;
@@ -107,16 +101,13 @@ function fullStage<T>(xRe: usize, xIm: usize, apart: usize, yRe: usize, yIm: usi
       v128.store(re, add<T>(sumAcRe, sumBdRe));
       v128.store(im, add<T>(sumAcIm, sumBdIm));
       let u = sub<T>(difAcRe, difBdIm), v = add<T>(difAcIm, difBdRe);
-      v128.store(re + stride, productRe<T>(u, v, c1, s1));
-      v128.store(im + stride, productIm<T>(u, v, c1, s1));
+      storeProduct<T>(re + stride, im + stride, u, v, c1, s1);
       u = sub<T>(sumAcRe, sumBdRe);
       v = sub<T>(sumAcIm, sumBdIm);
-      v128.store(re + 2 * stride, productRe<T>(u, v, c2, s2));
-      v128.store(im + 2 * stride, productIm<T>(u, v, c2, s2));
+      storeProduct<T>(re + 2 * stride, im + 2 * stride, u, v, c2, s2);
       u = add<T>(difAcRe, difBdIm);
       v = sub<T>(difAcIm, difBdRe);
-      v128.store(re + 3 * stride, productRe<T>(u, v, c3, s3));
-      v128.store(im + 3 * stride, productIm<T>(u, v, c3, s3));
+      storeProduct<T>(re + 3 * stride, im + 3 * stride, u, v, c3, s3);
     }
     xRe += apart;
     xIm += apart;
