@@ -4,7 +4,7 @@ import { runRequest } from '../../shared/contracts/runs';
 import { runTypeOf } from './run-types';
 import type { RunQuestion } from './run-type';
 
-const question = { design: SAMPLE_TOLERANCE_DESIGN, parameters: SAMPLE_TOLERANCE_PARAMETERS } as unknown as RunQuestion<'band'>;
+const question: RunQuestion<'tolerance'> = { design: SAMPLE_TOLERANCE_DESIGN, parameters: SAMPLE_TOLERANCE_PARAMETERS };
 const type = runTypeOf('tolerance');
 
 describe('the tolerance run', () => {
@@ -23,8 +23,7 @@ describe('the tolerance run', () => {
   });
 
   it('names what cannot be varied before anything is stored', () => {
-    const { parameters } = question as unknown as { parameters: typeof SAMPLE_TOLERANCE_PARAMETERS };
-    const still = { ...question, parameters: { ...parameters, contributors: [{ id: 'bow', spread: 0, distribution: 'normal' }] } } as unknown as RunQuestion<'band'>;
+    const still: RunQuestion<'tolerance'> = { ...question, parameters: { ...SAMPLE_TOLERANCE_PARAMETERS, contributors: [{ id: 'bow', spread: 0, distribution: 'normal' }] } };
     expect(type.faults(still)).toEqual([{ pointer: '#/parameters/contributors', detail: 'give at least one contributor a spread above 0' }]);
   });
 });

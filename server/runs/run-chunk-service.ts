@@ -1,10 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import type { Ground } from '../database/ground';
 import type { Transaction } from '../database/transaction-runner';
-import type { RunQuestion } from '../engine/run-type';
 import { runTypeOf } from '../engine/run-types';
 import type { ResultService } from '../predictions/result-service';
-import type { RunKind } from '../../shared/contracts/runs';
 import { packPart, unpackPart } from './chunk-body';
 import { RunChunkRepository } from './run-chunk-repository';
 import type { RunDispatchService } from './run-dispatch-service';
@@ -131,7 +129,6 @@ export class RunChunkService {
       if (part === null) throw new Error(`chunk ${number} of run ${run.id} has no part though all are done`);
       return unpackPart(part);
     });
-    const question = { design: run.design, parameters: run.parameters } as unknown as RunQuestion<RunKind>;
-    return runTypeOf(run.kind).merge(question, parts);
+    return runTypeOf(run.kind).merge({ design: run.design, parameters: run.parameters }, parts);
   }
 }

@@ -1,5 +1,5 @@
 import { Column, Entity, Index, PrimaryColumn } from 'typeorm';
-import type { RunKind, RunState } from '../../shared/contracts/runs';
+import type { RunKind, RunParameters, RunState } from '../../shared/contracts/runs';
 import type { DesignDocument } from '../../shared/model/design-document';
 
 /** A computation longer than a request: what is asked of which design, and how far it has come. */
@@ -25,7 +25,7 @@ export class Run {
   kind!: RunKind;
 
   @Column('jsonb')
-  parameters!: object;
+  parameters!: RunParameters<RunKind>;
 
   /** What is computed: a draft may change meanwhile. */
   @Column('jsonb')

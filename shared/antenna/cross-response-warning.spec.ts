@@ -35,7 +35,7 @@ describe('crossResponseWarning', () => {
 
   it('looks no further than the angle that covers the steepest incidence', () => {
     // The example is lit up to about 56 degrees, so 60 is read; a horn far away stays below 30.
-    expect(warningOf(turning(0.3, 60))).toBeDefined();
+    expect(warningOf(turning(0.3, 60))?.numbers['thetaDeg']).toBeCloseTo(60, 9);
     const far = { ...design, illumination: { kind: 'horn' as const, positionMm: [0, 0, 900] as [number, number, number], aimMm: [0, 0, 0] as [number, number, number], exponentE: 20, exponentH: 20, polarisation: 'x' as const } };
     const { warnings } = predictDesign(far, { edition: prepareEdition(turning(0.3, 45)), include: {} });
     expect(warnings.some(({ code }) => code === 'cross-response')).toBe(false);

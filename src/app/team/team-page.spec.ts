@@ -82,7 +82,7 @@ describe('team page', () => {
     call.flush(member(2, 'Nora New', ['reviewer'], true));
     await settled();
     await read([people[0], member(2, 'Nora New', ['reviewer'], true)], []);
-    expect(named('Enable Nora New')).toBeTruthy();
+    expect(named('Enable Nora New').tagName).toBe('BUTTON');
   });
 
   it('invites by e-mail with the roles that are ticked, and shows a refusal of the address beside it', async () => {
