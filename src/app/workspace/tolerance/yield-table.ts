@@ -33,7 +33,7 @@ import type { YieldRow } from './tolerance-rows';
                 <td class="plain">{{ row.p50 }}</td>
                 <td class="plain">{{ row.p95 }}</td>
                 <td class="narrow">{{ row.share }}</td>
-                <td class="narrow" [class.pass]="row.word === 'high'" [class.fail]="row.word === 'low'">{{ row.interval }}</td>
+                <td class="interval" [class.pass]="row.word === 'high'" [class.fail]="row.word === 'low'">{{ row.interval }}</td>
               }
             </tr>
           } @empty {
@@ -44,6 +44,11 @@ import type { YieldRow } from './tolerance-rows';
     </div>
   `,
   styles: `
+    .interval {
+      white-space: normal;
+      min-width: 9ch;
+      text-wrap: balance;
+    }
     :host {
       display: grid;
       min-width: 0;
