@@ -32,7 +32,7 @@ export const CONTRIBUTORS: Readonly<Record<ContributorId, ContributorFacts>> = {
     about: 'All patches are larger or smaller by the same.',
   },
   permittivity: {
-    label: 'Permittivity', unit: '', needs: 'geometry', extent: 'panel', channel: 4, spread: 0.02, distribution: 'uniform', source: 'ε_r ± 0.02, usual on data sheets of laminates near 2.2; from memory',
+    label: 'Permittivity', unit: '', needs: 'geometry', extent: 'panel', channel: 4, spread: 0.02, distribution: 'uniform', source: '± 0.02, usual on data sheets of laminates near 2.2; from memory',
     about: 'Relative permittivity of the whole substrate. Estimate: sheet of patches on a grounded slab.',
   },
   thickness: {
